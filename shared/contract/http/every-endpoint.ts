@@ -1,0 +1,17 @@
+import { alarmEndpoints } from './alarms.ts';
+import { changeEndpoints } from './changes.ts';
+import { deviceEndpoints } from './devices.ts';
+import type { Endpoint } from './endpoint.ts';
+import { healthEndpoints } from './health.ts';
+import { pumpEndpoints } from './pumps.ts';
+import { sessionEndpoints } from './session.ts';
+
+/** The whole HTTP surface, for the interface description and for tests that walk it. */
+export const EVERY_ENDPOINT: readonly Endpoint[] = [
+  ...Object.values(healthEndpoints),
+  ...Object.values(sessionEndpoints),
+  ...Object.values(pumpEndpoints),
+  ...Object.values(alarmEndpoints),
+  ...Object.values(deviceEndpoints),
+  ...Object.values(changeEndpoints),
+];
