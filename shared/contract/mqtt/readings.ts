@@ -28,7 +28,15 @@ export type DecodedReadings =
   | RefusedMessage;
 
 const SOURCES: Readonly<Record<Source, true>> = {
-  off: true, prime: true, input: true, keypad: true, timed: true, freeze: true, program: true, fault: true, stop: true,
+  off: true,
+  prime: true,
+  input: true,
+  keypad: true,
+  timed: true,
+  freeze: true,
+  program: true,
+  fault: true,
+  stop: true,
 };
 
 function isSource(value: unknown): value is Source {
@@ -82,7 +90,11 @@ function readElements(elements: readonly unknown[], limits: ReadingLimits, singl
 
 /** A reading whose required fields `findFault` has passed. */
 type RequiredFields = JsonObject & {
-  readonly t: number; readonly rpm: number; readonly in: number; readonly act: number; readonly w: number;
+  readonly t: number;
+  readonly rpm: number;
+  readonly in: number;
+  readonly act: number;
+  readonly w: number;
 };
 
 function findFault(fields: JsonObject, last: number, limits: ReadingLimits): ReadingRefusal | undefined {

@@ -5,11 +5,28 @@ export type MessageRefusal = (typeof MESSAGE_REFUSALS)[number];
 /** Why one reading is refused: the first fault found, by the wire's own field names. */
 export const READING_REFUSALS = [
   'reading-not-an-object',
-  't-missing', 't-not-an-integer', 't-out-of-range', 't-not-increasing', 'ahead', 'too-old',
-  'rpm-missing', 'rpm-not-a-number', 'rpm-negative', 'rpm-out-of-range',
-  'in-missing', 'in-not-an-integer', 'in-out-of-range', 'in-beyond-model',
-  'act-missing', 'act-not-an-integer', 'act-out-of-range', 'act-beyond-model',
-  'w-missing', 'w-not-a-number', 'w-negative', 'w-out-of-range',
+  't-missing',
+  't-not-an-integer',
+  't-out-of-range',
+  't-not-increasing',
+  'ahead',
+  'too-old',
+  'rpm-missing',
+  'rpm-not-a-number',
+  'rpm-negative',
+  'rpm-out-of-range',
+  'in-missing',
+  'in-not-an-integer',
+  'in-out-of-range',
+  'in-beyond-model',
+  'act-missing',
+  'act-not-an-integer',
+  'act-out-of-range',
+  'act-beyond-model',
+  'w-missing',
+  'w-not-a-number',
+  'w-negative',
+  'w-out-of-range',
 ] as const;
 export type ReadingRefusal = (typeof READING_REFUSALS)[number];
 

@@ -2,7 +2,14 @@ import type { DeviceStatus } from '#shared/domain/fold/pump-event.ts';
 import { isJsonObject, type JsonObject, parseJsonText, shortText } from './json-text.ts';
 
 /** Why a whole status message is refused, by the wire's own field names. */
-export type StatusRefusal = 'not-json' | 'not-an-object' | 'state-unknown' | 'conn-invalid' | 'boot-invalid' | 'up-invalid' | 'fw-invalid';
+export type StatusRefusal =
+  | 'not-json'
+  | 'not-an-object'
+  | 'state-unknown'
+  | 'conn-invalid'
+  | 'boot-invalid'
+  | 'up-invalid'
+  | 'fw-invalid';
 
 export type DecodedStatus =
   | { readonly kind: 'status'; readonly status: DeviceStatus }
