@@ -1,0 +1,154 @@
+import { spawn } from 'node:child_process';
+import {
+  appendFileSync,
+  closeSync,
+  existsSync,
+  mkdirSync,
+  openSync,
+  readFileSync,
+  renameSync,
+  rmSync,
+  writeFileSync,
+} from 'node:fs';
+import { dirname, join } from 'node:path';
+import { giveTo } from './account.mjs';
+import { findProcess, findWorkingFolder, isStillRunning, sendSignal, waitUntil } from './process-table.mjs';
+import { runCommand } from './run-command.mjs';
+import { refusal } from './say.mjs';
+
+/**
+ * One PostgreSQL of our own: a folder, the programs that run it and the account they run as.
+ *
+ * @typedef {object} Cluster
+ * @property {string} programs folder of postgres, initdb and psql
+ * @property {string} folder the data folder; its parent must exist and belong to the account
+ * @property {string} socketFolder where its Unix socket lies; '' for none
+ * @property {string} logFile
+ * @property {import('./account.mjs').Account | undefined} account
+ */
+
+/** @param {string} folder @returns {number | undefined} the major version that made a data folder */
+export function findDataMajor(folder) {
+  const file = join(folder, 'PG_VERSION');
+  return existsSync(file) ? Number.parseInt(readFileSync(file, 'utf8'), 10) : undefined;
+}
+
+/**
+ * Makes the data folder, all of it or nothing: it is built beside its place and moved there when complete, so that an
+ * interrupted first start leaves nothing that looks like a database.
+ *
+ * @param {Cluster} cluster
+ * @param {{ superuserPassword: string, settings: readonly string[] }} options settings: lines of postgresql.conf
+ */
+export async function createCluster({ programs, folder, account }, { superuserPassword, settings }) {
+  const [building, passwordFile] = [`${folder}.new`, `${folder}.password`];
+  rmSync(building, { recursive: true, force: true });
+  rmSync(passwordFile, { force: true });
+  writeFileSync(passwordFile, superuserPassword, { mode: 0o600 });
+  giveTo(account, passwordFile);
+  const method = 'scram-sha-256';
+  const { code, stdout, stderr } = await runCommand(
+    join(programs, 'initdb'),
+    [
+      '-D',
+      building,
+      '-U',
+      'postgres',
+      `--pwfile=${passwordFile}`,
+      `--auth-local=${method}`,
+      `--auth-host=${method}`,
+    ].concat(['--encoding=UTF8', '--locale=C.UTF-8', '--no-instructions']),
+    { account, cwd: dirname(folder), env: { ...process.env, LC_ALL: 'C.UTF-8' } },
+  );
+  rmSync(passwordFile, { force: true });
+  if (code !== 0) throw refusal(`PostgreSQL could not make its data folder ${folder}:\n${stdout}${stderr}`.trim());
+  appendFileSync(join(building, 'postgresql.conf'), `\n# Millrace\n${settings.join('\n')}\n`);
+  renameSync(building, folder);
+}
+
+/**
+ * The server that runs on a data folder now, found through its own lock file; undefined when there is none. A lock
+ * file left by a crash names a process that is gone, or a stranger that works in another folder.
+ *
+ * @param {string} folder
+ * @returns {{ pid: number, started: string, port: number, isReady: boolean } | undefined}
+ */
+export function findRunningServer(folder) {
+  const file = join(folder, 'postmaster.pid');
+  if (!existsSync(file)) return undefined;
+  // Lines: pid, data folder, start, port, socket folder, listen address, shared memory, status (miscadmin.h).
+  const lines = readFileSync(file, 'utf8').split('\n');
+  const identity = findProcess(Number(lines[0]));
+  if (!identity || findWorkingFolder(identity.pid) !== folder) return undefined;
+  return { ...identity, port: Number(lines[3]), isReady: lines[7]?.trim() === 'ready' };
+}
+
+/**
+ * Starts PostgreSQL on 127.0.0.1 and waits until it takes connections. It survives us: whoever starts next finds it
+ * through its lock file.
+ *
+ * @param {Cluster} cluster
+ * @param {{ port: number, withinMs?: number }} options
+ */
+export async function startCluster(cluster, { port, withinMs = 120_000 }) {
+  const { programs, folder, socketFolder, logFile, account } = cluster;
+  if (!findRunningServer(folder)) rmSync(join(folder, 'postmaster.pid'), { force: true });
+  if (socketFolder) {
+    mkdirSync(socketFolder, { recursive: true, mode: 0o700 });
+    giveTo(account, socketFolder);
+  }
+  const log = openSync(logFile, 'a', 0o600);
+  const settings = { listen_addresses: '127.0.0.1', port, unix_socket_directories: socketFolder };
+  const server = spawn(
+    join(programs, 'postgres'),
+    ['-D', folder, ...Object.entries(settings).flatMap(([name, value]) => ['-c', `${name}=${value}`])],
+    {
+      cwd: '/',
+      detached: true,
+      stdio: ['ignore', log, log],
+      ...(account ? { uid: account.uid, gid: account.gid } : {}),
+    },
+  );
+  closeSync(log);
+  let hasEnded = false;
+  server
+    .on('error', () => {
+      hasEnded = true;
+    })
+    .on('exit', () => {
+      hasEnded = true;
+    });
+  server.unref();
+  await waitUntil(() => hasEnded || findRunningServer(folder)?.isReady === true, withinMs);
+  if (findRunningServer(folder)?.isReady) return;
+  if (!hasEnded && server.pid) sendSignal(server.pid, 'SIGQUIT');
+  throw refusal(`PostgreSQL did not start. Its last words (${logFile}):\n${lastLines(logFile, 8)}`);
+}
+
+/**
+ * Stops the server of a data folder and does not return before it is gone: first sessions are ended and everything is
+ * written, then, when that takes too long, at once (the next start recovers), then by force.
+ *
+ * @param {string} folder
+ * @param {{ graceMs?: number }} [options]
+ */
+export async function stopCluster(folder, { graceMs = 30_000 } = {}) {
+  const server = findRunningServer(folder);
+  if (!server) return;
+  const isGone = () => !isStillRunning(server);
+  for (const [signal, ms] of /** @type {const} */ ([
+    ['SIGINT', graceMs],
+    ['SIGQUIT', 10_000],
+    ['SIGKILL', 5_000],
+  ])) {
+    sendSignal(server.pid, signal);
+    if (await waitUntil(isGone, ms)) return;
+  }
+  throw refusal(`PostgreSQL (process ${server.pid}) does not stop. Type: kill -9 ${server.pid}`);
+}
+
+/** @param {string} file @param {number} count */
+export function lastLines(file, count) {
+  if (!existsSync(file)) return '(nothing)';
+  return readFileSync(file, 'utf8').trimEnd().split('\n').slice(-count).join('\n');
+}
