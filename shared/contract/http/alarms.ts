@@ -6,7 +6,10 @@ import { defineEndpoint, EVERYONE, STAFF } from './endpoint.ts';
 /** ISA-18.2 states. `normal` = returned and acknowledged: history. */
 export const ALARM_STATES = ['unacknowledged', 'acknowledged', 'returned', 'latched', 'normal'] as const;
 
-export const Evidence = z.record(z.string(), z.union([z.number(), z.string(), z.boolean(), z.null(), z.array(z.union([z.number(), z.string()]))]));
+export const Evidence = z.record(
+  z.string(),
+  z.union([z.number(), z.string(), z.boolean(), z.null(), z.array(z.union([z.number(), z.string()]))]),
+);
 
 export const Alarm = z.object({
   id: Id,
@@ -51,9 +54,19 @@ export const AlarmTransition = z.object({
   cause: z.string(),
 });
 
-export const AlarmMail = z.object({ to: z.string(), subject: z.string(), queuedAt: Instant, sentAt: Instant.nullable(), attempts: z.number().int() });
+export const AlarmMail = z.object({
+  to: z.string(),
+  subject: z.string(),
+  queuedAt: Instant,
+  sentAt: Instant.nullable(),
+  attempts: z.number().int(),
+});
 
-export const AlarmDetail = Alarm.extend({ transitions: z.array(AlarmTransition), mails: z.array(AlarmMail), serverNow: Instant });
+export const AlarmDetail = Alarm.extend({
+  transitions: z.array(AlarmTransition),
+  mails: z.array(AlarmMail),
+  serverNow: Instant,
+});
 export type AlarmDetail = z.infer<typeof AlarmDetail>;
 
 export const AlarmsQuery = z.object({
@@ -71,7 +84,12 @@ export type AlarmsQuery = z.infer<typeof AlarmsQuery>;
 
 export const AlarmPage = pageOf(Alarm).extend({
   /** Open alarms and notes the person may see, whatever the filter. */
-  totals: z.object({ urgent: z.number().int(), soon: z.number().int(), note: z.number().int(), unacknowledged: z.number().int() }),
+  totals: z.object({
+    urgent: z.number().int(),
+    soon: z.number().int(),
+    note: z.number().int(),
+    unacknowledged: z.number().int(),
+  }),
   serverNow: Instant,
 });
 export type AlarmPage = z.infer<typeof AlarmPage>;
@@ -81,8 +99,38 @@ export const AcknowledgeAlarm = z.object({ note: z.string().trim().max(500).opti
 const AlarmParams = z.object({ alarmId: Id });
 
 export const alarmEndpoints = {
-  list: defineEndpoint({ method: 'GET', path: '/api/alarms', summary: 'Alarms by state and priority', roles: EVERYONE, query: AlarmsQuery, response: AlarmPage }),
-  read: defineEndpoint({ method: 'GET', path: '/api/alarms/:alarmId', summary: 'One alarm with its transitions', roles: EVERYONE, params: AlarmParams, response: AlarmDetail }),
-  acknowledge: defineEndpoint({ method: 'POST', path: '/api/alarms/:alarmId/acknowledgement', summary: 'Acknowledge an alarm; repeating it changes nothing', roles: STAFF, params: AlarmParams, body: AcknowledgeAlarm, response: Alarm, idempotent: true }),
-  withdrawAcknowledgement: defineEndpoint({ method: 'DELETE', path: '/api/alarms/:alarmId/acknowledgement', summary: 'Undo one\'s own acknowledgement within five minutes', roles: STAFF, params: AlarmParams, response: Alarm }),
+  list: defineEndpoint({
+    method: 'GET',
+    path: '/api/alarms',
+    summary: 'Alarms by state and priority',
+    roles: EVERYONE,
+    query: AlarmsQuery,
+    response: AlarmPage,
+  }),
+  read: defineEndpoint({
+    method: 'GET',
+    path: '/api/alarms/:alarmId',
+    summary: 'One alarm with its transitions',
+    roles: EVERYONE,
+    params: AlarmParams,
+    response: AlarmDetail,
+  }),
+  acknowledge: defineEndpoint({
+    method: 'POST',
+    path: '/api/alarms/:alarmId/acknowledgement',
+    summary: 'Acknowledge an alarm; repeating it changes nothing',
+    roles: STAFF,
+    params: AlarmParams,
+    body: AcknowledgeAlarm,
+    response: Alarm,
+    idempotent: true,
+  }),
+  withdrawAcknowledgement: defineEndpoint({
+    method: 'DELETE',
+    path: '/api/alarms/:alarmId/acknowledgement',
+    summary: "Undo one's own acknowledgement within five minutes",
+    roles: STAFF,
+    params: AlarmParams,
+    response: Alarm,
+  }),
 };

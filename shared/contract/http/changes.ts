@@ -23,5 +23,12 @@ export const Changes = z.object({
 export type Changes = z.infer<typeof Changes>;
 
 export const changeEndpoints = {
-  list: defineEndpoint({ method: 'GET', path: '/api/changes', summary: 'What changed since a cursor, after a break of the live connection', roles: EVERYONE, query: z.object({ since: ChangeCursor }), response: Changes }),
+  list: defineEndpoint({
+    method: 'GET',
+    path: '/api/changes',
+    summary: 'What changed since a cursor, after a break of the live connection',
+    roles: EVERYONE,
+    query: z.object({ since: ChangeCursor }),
+    response: Changes,
+  }),
 };

@@ -19,5 +19,11 @@ export const Health = z.object({
 export type Health = z.infer<typeof Health>;
 
 export const healthEndpoints = {
-  read: defineEndpoint({ method: 'GET', path: '/api/health', summary: 'Whether the watch runs', roles: 'public', response: Health }),
+  read: defineEndpoint({
+    method: 'GET',
+    path: '/api/health',
+    summary: 'Whether the watch runs',
+    roles: 'public',
+    response: Health,
+  }),
 };

@@ -1,5 +1,11 @@
 import { z } from 'zod';
-import { EQUIPMENT_KINDS, INPUT_DUTIES, INPUT_KINDS, INTERLOCKS, PAD_STATES } from '#shared/domain/control/pump-context.ts';
+import {
+  EQUIPMENT_KINDS,
+  INPUT_DUTIES,
+  INPUT_KINDS,
+  INTERLOCKS,
+  PAD_STATES,
+} from '#shared/domain/control/pump-context.ts';
 import { SOURCES } from '#shared/domain/readings/reading.ts';
 
 const Rpm = z.number().min(0).max(4000);
@@ -10,7 +16,16 @@ export const PadStateName = z.enum(PAD_STATES);
 /** Commissioned settings of a motor: the domain's MotorSettings, field for field. */
 export const MotorSettingsShape = z.object({
   inputs: z.array(Rpm.nullable()).max(8),
-  program: z.array(z.object({ days: Days, fromMinute: z.number().int().min(0).max(1439), toMinute: z.number().int().min(1).max(1440), rpm: Rpm })).max(32),
+  program: z
+    .array(
+      z.object({
+        days: Days,
+        fromMinute: z.number().int().min(0).max(1439),
+        toMinute: z.number().int().min(1).max(1440),
+        rpm: Rpm,
+      }),
+    )
+    .max(32),
   prime: z.object({ rpm: Rpm, seconds: z.number().int().min(1).max(3600) }).nullable(),
   timed: z.object({ rpm: Rpm, minutes: z.number().int().min(1).max(1440) }).nullable(),
   freeze: z.object({ celsius: z.number().min(-10).max(20), rpm: Rpm }).nullable(),
@@ -30,7 +45,16 @@ export const MotorTraitsShape = z.object({
 export const WiredInputShape = z.object({
   number: z.number().int().min(1).max(8),
   kind: z.enum(INPUT_KINDS),
-  windows: z.array(z.object({ days: Days, onMinute: z.number().int().min(0).max(1439), offMinute: z.number().int().min(0).max(1440), opensEarlyMinutes: z.number().min(0).max(120) })).max(16),
+  windows: z
+    .array(
+      z.object({
+        days: Days,
+        onMinute: z.number().int().min(0).max(1439),
+        offMinute: z.number().int().min(0).max(1440),
+        opensEarlyMinutes: z.number().min(0).max(120),
+      }),
+    )
+    .max(16),
   drives: z.enum(INPUT_DUTIES).optional(),
   circuit: z.enum(['motor', 'own']).optional(),
   clockType: z.enum(['synchronous', 'spring-carry-over', 'battery-carry-over', 'electronic']).optional(),

@@ -2,7 +2,13 @@ import { z } from 'zod';
 import { DETECTORS, PRIORITIES } from '#shared/domain/detectors/detector.ts';
 import { Id, Instant, InstantParam, listParam, pageOf, pageQuery } from '../primitives.ts';
 import { defineEndpoint, EVERYONE } from './endpoint.ts';
-import { EquipmentShape, MotorSettingsShape, MotorTraitsShape, PadStateName, WiredInputShape } from './pump-settings.ts';
+import {
+  EquipmentShape,
+  MotorSettingsShape,
+  MotorTraitsShape,
+  PadStateName,
+  WiredInputShape,
+} from './pump-settings.ts';
 import { PlannedRun, Run, RunSourceName } from './runs.ts';
 
 /** The pump this instant, from its last reading. `at` is device time. */
@@ -97,14 +103,20 @@ export type FleetPage = z.infer<typeof FleetPage>;
 /** A window of time, half-open, at most 35 days. */
 export const WindowQuery = z
   .object({ from: InstantParam, until: InstantParam })
-  .refine(({ from, until }) => until > from && until - from <= 35 * 86_400_000, { message: 'until must lie after from, by at most 35 days', path: ['until'] });
+  .refine(({ from, until }) => until > from && until - from <= 35 * 86_400_000, {
+    message: 'until must lie after from, by at most 35 days',
+    path: ['until'],
+  });
 
 export const Strip = z.object({ pumpId: Id, runs: z.array(Run), planned: z.array(PlannedRun) });
 export type Strip = z.infer<typeof Strip>;
 
 export const StripsQuery = z
   .object({ pumps: listParam(Id, 100), from: InstantParam, until: InstantParam })
-  .refine(({ from, until }) => until > from && until - from <= 8 * 86_400_000, { message: 'until must lie after from, by at most 8 days', path: ['until'] });
+  .refine(({ from, until }) => until > from && until - from <= 8 * 86_400_000, {
+    message: 'until must lie after from, by at most 8 days',
+    path: ['until'],
+  });
 
 /** Columns of equal length for a chart: `t` in ms; null is a gap. Bucketed to at most `width` with the extremes kept. */
 export const ReadingSeries = z.object({
@@ -130,9 +142,20 @@ export const PumpDetail = PumpRow.extend({
   poolGallons: z.number().nullable(),
   turnoversPerDay: z.number().nullable(),
   technicianName: z.string().nullable(),
-  motor: z.object({ model: z.string(), serial: z.string(), frame: z.string(), totalHorsepower: z.number(), serviceFactor: z.number(), installedAt: Instant.nullable() }).nullable(),
+  motor: z
+    .object({
+      model: z.string(),
+      serial: z.string(),
+      frame: z.string(),
+      totalHorsepower: z.number(),
+      serviceFactor: z.number(),
+      installedAt: Instant.nullable(),
+    })
+    .nullable(),
   wetEndModel: z.string().nullable(),
-  device: z.object({ serial: z.string(), firmware: z.string().nullable(), state: z.enum(['online', 'lost', 'never']) }).nullable(),
+  device: z
+    .object({ serial: z.string(), firmware: z.string().nullable(), state: z.enum(['online', 'lost', 'never']) })
+    .nullable(),
   nominalVolts: z.number().nullable(),
   /** Learnt facts a person may want to see beside the chart. */
   learning: z.boolean(),
@@ -145,17 +168,55 @@ export type PumpDetail = z.infer<typeof PumpDetail>;
 const PumpParams = z.object({ pumpId: Id });
 
 export const pumpEndpoints = {
-  list: defineEndpoint({ method: 'GET', path: '/api/pumps', summary: 'Fleet rows, worst first unless asked otherwise', roles: EVERYONE, query: FleetQuery, response: FleetPage }),
-  strips: defineEndpoint({ method: 'GET', path: '/api/strips', summary: 'Runs of several pumps in one window', roles: EVERYONE, query: StripsQuery, response: z.object({ strips: z.array(Strip), serverNow: Instant }) }),
-  read: defineEndpoint({ method: 'GET', path: '/api/pumps/:pumpId', summary: 'One pump', roles: EVERYONE, params: PumpParams, response: PumpDetail }),
-  runs: defineEndpoint({ method: 'GET', path: '/api/pumps/:pumpId/runs', summary: 'Runs of a pump in a window, and those planned ahead of now', roles: EVERYONE, params: PumpParams, query: WindowQuery, response: z.object({ runs: z.array(Run), planned: z.array(PlannedRun) }) }),
+  list: defineEndpoint({
+    method: 'GET',
+    path: '/api/pumps',
+    summary: 'Fleet rows, worst first unless asked otherwise',
+    roles: EVERYONE,
+    query: FleetQuery,
+    response: FleetPage,
+  }),
+  strips: defineEndpoint({
+    method: 'GET',
+    path: '/api/strips',
+    summary: 'Runs of several pumps in one window',
+    roles: EVERYONE,
+    query: StripsQuery,
+    response: z.object({ strips: z.array(Strip), serverNow: Instant }),
+  }),
+  read: defineEndpoint({
+    method: 'GET',
+    path: '/api/pumps/:pumpId',
+    summary: 'One pump',
+    roles: EVERYONE,
+    params: PumpParams,
+    response: PumpDetail,
+  }),
+  runs: defineEndpoint({
+    method: 'GET',
+    path: '/api/pumps/:pumpId/runs',
+    summary: 'Runs of a pump in a window, and those planned ahead of now',
+    roles: EVERYONE,
+    params: PumpParams,
+    query: WindowQuery,
+    response: z.object({ runs: z.array(Run), planned: z.array(PlannedRun) }),
+  }),
   readings: defineEndpoint({
     method: 'GET',
     path: '/api/pumps/:pumpId/readings',
     summary: 'Readings of a pump in a window as chart columns',
     roles: EVERYONE,
     params: PumpParams,
-    query: z.object({ from: InstantParam, until: InstantParam, width: z.coerce.number().int().min(10).max(4000).default(1000) }).refine(({ from, until }) => until > from && until - from <= 35 * 86_400_000, { message: 'until must lie after from, by at most 35 days', path: ['until'] }),
+    query: z
+      .object({
+        from: InstantParam,
+        until: InstantParam,
+        width: z.coerce.number().int().min(10).max(4000).default(1000),
+      })
+      .refine(({ from, until }) => until > from && until - from <= 35 * 86_400_000, {
+        message: 'until must lie after from, by at most 35 days',
+        path: ['until'],
+      }),
     response: ReadingSeries,
   }),
 };

@@ -10,7 +10,10 @@ export const Preferences = z.object({
 export type Preferences = z.infer<typeof Preferences>;
 
 export const CreateSession = z.object({
-  email: z.email().max(254).transform((text) => text.toLowerCase()),
+  email: z
+    .email()
+    .max(254)
+    .transform((text) => text.toLowerCase()),
   password: z.string().min(1).max(200),
 });
 export type CreateSession = z.infer<typeof CreateSession>;
@@ -32,9 +35,43 @@ export const UpdatePreferences = z.object({
 });
 
 export const sessionEndpoints = {
-  create: defineEndpoint({ method: 'POST', path: '/api/session', summary: 'Sign in', roles: 'public', status: 201, body: CreateSession, response: Session }),
-  renew: defineEndpoint({ method: 'POST', path: '/api/session/renewal', summary: 'Renew the session from its refresh cookie', roles: 'public', response: Session }),
-  read: defineEndpoint({ method: 'GET', path: '/api/session', summary: 'Who is signed in', roles: EVERYONE, response: Session }),
-  remove: defineEndpoint({ method: 'DELETE', path: '/api/session', summary: 'Sign out', roles: 'public', status: 204, response: z.undefined() }),
-  updatePreferences: defineEndpoint({ method: 'PATCH', path: '/api/session/preferences', summary: 'Change one\'s own preferences', roles: EVERYONE, body: UpdatePreferences, response: Session }),
+  create: defineEndpoint({
+    method: 'POST',
+    path: '/api/session',
+    summary: 'Sign in',
+    roles: 'public',
+    status: 201,
+    body: CreateSession,
+    response: Session,
+  }),
+  renew: defineEndpoint({
+    method: 'POST',
+    path: '/api/session/renewal',
+    summary: 'Renew the session from its refresh cookie',
+    roles: 'public',
+    response: Session,
+  }),
+  read: defineEndpoint({
+    method: 'GET',
+    path: '/api/session',
+    summary: 'Who is signed in',
+    roles: EVERYONE,
+    response: Session,
+  }),
+  remove: defineEndpoint({
+    method: 'DELETE',
+    path: '/api/session',
+    summary: 'Sign out',
+    roles: 'public',
+    status: 204,
+    response: z.undefined(),
+  }),
+  updatePreferences: defineEndpoint({
+    method: 'PATCH',
+    path: '/api/session/preferences',
+    summary: "Change one's own preferences",
+    roles: EVERYONE,
+    body: UpdatePreferences,
+    response: Session,
+  }),
 };

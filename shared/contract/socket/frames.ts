@@ -14,7 +14,13 @@ export const LIVE_PATH = '/api/live';
 export const ServerFrame = z.discriminatedUnion('type', [
   z.object({ type: z.literal('hello'), serverNow: Instant, cursor: ChangeCursor }),
   z.object({ type: z.literal('heartbeat'), serverNow: Instant, cursor: ChangeCursor }),
-  z.object({ type: z.literal('news'), cursor: ChangeCursor, pumps: z.array(PumpLive), runs: z.array(z.object({ pumpId: Id, run: Run })), alarms: z.array(Alarm) }),
+  z.object({
+    type: z.literal('news'),
+    cursor: ChangeCursor,
+    pumps: z.array(PumpLive),
+    runs: z.array(z.object({ pumpId: Id, run: Run })),
+    alarms: z.array(Alarm),
+  }),
   z.object({ type: z.literal('resync'), reason: z.enum(['slow', 'too-much', 'restart']) }),
 ]);
 export type ServerFrame = z.infer<typeof ServerFrame>;

@@ -1,6 +1,16 @@
 import type { MotorSettings, MotorTraits } from './motor-settings.ts';
 
-export const PAD_STATES = ['open', 'reduced', 'winterized', 'opening', 'new-plaster', 'drained', 'repair', 'hold', 'vacant'] as const;
+export const PAD_STATES = [
+  'open',
+  'reduced',
+  'winterized',
+  'opening',
+  'new-plaster',
+  'drained',
+  'repair',
+  'hold',
+  'vacant',
+] as const;
 export type PadState = (typeof PAD_STATES)[number];
 
 export const INPUT_KINDS = ['clock', 'twist-timer', 'toggle', 'solar-controller', 'heater-call', 'remote'] as const;
@@ -57,7 +67,9 @@ export type PumpContext = {
   readonly traits: MotorTraits;
   readonly inputs: readonly WiredInput[];
   readonly equipment: readonly Equipment[];
-  readonly wetEnd?: { readonly referenceRpm: number; readonly points: readonly WetEndPoint[]; readonly standbyWatts: number } | undefined;
+  readonly wetEnd?:
+    | { readonly referenceRpm: number; readonly points: readonly WetEndPoint[]; readonly standbyWatts: number }
+    | undefined;
   /** System curve, ft per gpm². */
   readonly systemK?: number | undefined;
   readonly poolGallons?: number | undefined;

@@ -1,9 +1,31 @@
 /** Every detector's stable slug. */
 export const DETECTORS = [
-  'wrong-speed', 'input-disagreement', 'missing-input', 'stuck-input', 'chattering-input', 'failed-prime', 'slow-prime',
-  'loss-of-prime', 'low-load', 'high-load', 'stopped', 'unexpected-run', 'clock-shift', 'motor-clock', 'fed-through-clock',
-  'keypad-hold', 'settings-changed', 'energized-without-flow', 'too-little-water', 'freezing', 'supply-voltage',
-  'drive-fault', 'drive-hot', 'silent', 'clock-skew', 'costly-program',
+  'wrong-speed',
+  'input-disagreement',
+  'missing-input',
+  'stuck-input',
+  'chattering-input',
+  'failed-prime',
+  'slow-prime',
+  'loss-of-prime',
+  'low-load',
+  'high-load',
+  'stopped',
+  'unexpected-run',
+  'clock-shift',
+  'motor-clock',
+  'fed-through-clock',
+  'keypad-hold',
+  'settings-changed',
+  'energized-without-flow',
+  'too-little-water',
+  'freezing',
+  'supply-voltage',
+  'drive-fault',
+  'drive-hot',
+  'silent',
+  'clock-skew',
+  'costly-program',
 ] as const;
 export type Detector = (typeof DETECTORS)[number];
 
@@ -22,6 +44,24 @@ export type Evidence = Readonly<Record<string, number | string | boolean | null 
  * silence). `cause` is a slug of the detector's table, or `unknown` where the readings cannot tell.
  */
 export type AlarmSignal =
-  | { readonly type: 'raised'; readonly detector: Detector; readonly alarmClass: AlarmClass; readonly priority: Priority; readonly from: number; readonly at: number; readonly cause: string; readonly evidence: Evidence }
-  | { readonly type: 'changed'; readonly detector: Detector; readonly alarmClass: AlarmClass; readonly priority: Priority; readonly from: number; readonly at: number; readonly cause: string; readonly evidence: Evidence }
+  | {
+      readonly type: 'raised';
+      readonly detector: Detector;
+      readonly alarmClass: AlarmClass;
+      readonly priority: Priority;
+      readonly from: number;
+      readonly at: number;
+      readonly cause: string;
+      readonly evidence: Evidence;
+    }
+  | {
+      readonly type: 'changed';
+      readonly detector: Detector;
+      readonly alarmClass: AlarmClass;
+      readonly priority: Priority;
+      readonly from: number;
+      readonly at: number;
+      readonly cause: string;
+      readonly evidence: Evidence;
+    }
   | { readonly type: 'cleared'; readonly detector: Detector; readonly at: number; readonly evidence: Evidence };

@@ -1,6 +1,6 @@
+import type { Because, RunSource } from '../control/decision.ts';
 import type { AlarmSignal } from '../detectors/detector.ts';
 import type { Run } from '../runs/run.ts';
-import type { Because, RunSource } from '../control/decision.ts';
 
 /**
  * What one call of the fold produced. `runs` holds every run that opened, changed or closed, each in its last state

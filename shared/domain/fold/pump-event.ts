@@ -1,10 +1,16 @@
-import type { PadState } from '../control/pump-context.ts';
 import type { MotorSettings } from '../control/motor-settings.ts';
+import type { PadState } from '../control/pump-context.ts';
 import type { Reading } from '../readings/reading.ts';
 
 /** What a device says of itself; see the wire contract, status. */
 export type DeviceStatus =
-  | { readonly state: 'online'; readonly connection: string; readonly boot: string; readonly upSeconds: number; readonly firmware: string }
+  | {
+      readonly state: 'online';
+      readonly connection: string;
+      readonly boot: string;
+      readonly upSeconds: number;
+      readonly firmware: string;
+    }
   | { readonly state: 'lost'; readonly connection: string };
 
 /**
