@@ -1,0 +1,91 @@
+import { sql } from 'drizzle-orm';
+import {
+  boolean,
+  foreignKey,
+  index,
+  integer,
+  jsonb,
+  pgPolicy,
+  pgTable,
+  text,
+  unique,
+  uniqueIndex,
+  uuid,
+} from 'drizzle-orm/pg-core';
+import type { AlarmClass, Detector, Evidence, Priority } from '#shared/domain/detectors/detector.ts';
+import { companyId, id, instant, xid8 } from './columns.ts';
+import { pads } from './pads.ts';
+import { appReads, machineWorks, millraceApp, ofVisiblePumpSince, staffOnly } from './policies.ts';
+import { pumps } from './pumps.ts';
+import { users } from './users.ts';
+
+export type AlarmState = 'unacknowledged' | 'acknowledged' | 'returned' | 'latched' | 'normal';
+
+/** What a detector raised (ISA-18.2). At most one open a pump and detector; `normal` = returned and acknowledged: history. */
+export const alarms = pgTable(
+  'alarms',
+  {
+    id: id(),
+    companyId: companyId(),
+    pumpId: uuid('pump_id').notNull(),
+    padId: uuid('pad_id').notNull(),
+    detector: text().$type<Detector>().notNull(),
+    alarmClass: text('alarm_class').$type<AlarmClass>().notNull(),
+    priority: text().$type<Priority>().notNull(),
+    state: text().$type<AlarmState>().notNull(),
+    cause: text().notNull(),
+    evidence: jsonb().$type<Evidence>().notNull(),
+    /** When the condition began. */
+    fromAt: instant('from_at').notNull(),
+    /** When the rule spoke. */
+    raisedAt: instant('raised_at').notNull(),
+    returnedAt: instant('returned_at'),
+    acknowledgedAt: instant('acknowledged_at'),
+    acknowledgedBy: uuid('acknowledged_by'),
+    acknowledgementNote: text('acknowledgement_note'),
+    escalatedAt: instant('escalated_at'),
+    shelvedUntil: instant('shelved_until'),
+    shelvedBy: uuid('shelved_by'),
+    shelvedReason: text('shelved_reason'),
+    suppressed: boolean().notNull().default(false),
+    outOfService: boolean('out_of_service').notNull().default(false),
+    latched: boolean().notNull().default(false),
+    count: integer().notNull().default(1),
+    /** The state machine's own record, opaque here. */
+    record: jsonb().$type<unknown>().notNull(),
+    /** Grows with every change: the base of its ETag. */
+    version: integer().notNull().default(1),
+    changedIn: xid8('changed_in').notNull().default(sql`pg_current_xact_id()`),
+  },
+  (table) => [
+    foreignKey({
+      name: 'alarms_pump_fkey',
+      columns: [table.companyId, table.pumpId],
+      foreignColumns: [pumps.companyId, pumps.id],
+    }),
+    foreignKey({
+      name: 'alarms_pad_fkey',
+      columns: [table.companyId, table.padId],
+      foreignColumns: [pads.companyId, pads.id],
+    }),
+    foreignKey({
+      name: 'alarms_acknowledged_by_fkey',
+      columns: [table.companyId, table.acknowledgedBy],
+      foreignColumns: [users.companyId, users.id],
+    }),
+    foreignKey({
+      name: 'alarms_shelved_by_fkey',
+      columns: [table.companyId, table.shelvedBy],
+      foreignColumns: [users.companyId, users.id],
+    }),
+    unique('alarms_company_id_id_key').on(table.companyId, table.id),
+    unique('alarms_pump_detector_from_key').on(table.pumpId, table.detector, table.fromAt),
+    uniqueIndex('alarms_open_key').on(table.pumpId, table.detector).where(sql`state <> 'normal'`),
+    index('alarms_open_index').on(table.companyId, table.priority).where(sql`state <> 'normal'`),
+    index('alarms_raised_index').on(table.companyId, table.raisedAt),
+    index('alarms_changed_index').on(table.companyId, table.changedIn),
+    appReads('alarms', ofVisiblePumpSince('from_at')),
+    pgPolicy('alarms_app_updates', { for: 'update', to: millraceApp, using: staffOnly, withCheck: staffOnly }),
+    machineWorks('alarms'),
+  ],
+);
