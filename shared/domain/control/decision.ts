@@ -1,11 +1,11 @@
 import type { RunSource, Source } from '../readings/reading.ts';
 
-/** Why a motor runs the way it does: data for a sentence, in the order in which it was decided. */
+/** Why a motor runs the way it does: data for a sentence. `endsAt` in ms; `next` is the source that asked for the start. */
 export type Because =
   | { readonly kind: 'input'; readonly input: number; readonly others: readonly number[] }
   | { readonly kind: 'program'; readonly entry: number; readonly fromMinute: number; readonly toMinute: number }
-  | { readonly kind: 'prime'; readonly remainingSeconds: number; readonly next: Source }
-  | { readonly kind: 'timed'; readonly remainingSeconds: number | undefined }
+  | { readonly kind: 'prime'; readonly endsAt: number; readonly next: Source }
+  | { readonly kind: 'timed'; readonly endsAt: number }
   | { readonly kind: 'keypad' | 'stop' | 'freeze' | 'off' }
   | { readonly kind: 'fault'; readonly code: string | undefined }
   | { readonly kind: 'unknown' | 'no-data' };

@@ -1,0 +1,151 @@
+import type { Reading } from '../readings/reading.ts';
+import { MINUTE_MS } from '../time/local-time.ts';
+import { offsetSpanAt } from '../time/zone-offset.ts';
+import type { ControlAnswer } from './control-answer.ts';
+import { type ControlState, freshControlState, parseControlState } from './control-state.ts';
+import { createJudgement } from './judge-situation.ts';
+import { followMotorClock, motorClockOffset } from './motor-clock-offset.ts';
+import type { PumpContext } from './pump-context.ts';
+import { STANDSTILL_RPM } from './speed-tolerance.ts';
+import { freezeMayTurn, keypadMoved } from './track-claims.ts';
+
+/** The ramp is over when rpm moved under 20 between two readings, or after 30 s. */
+const RAMP_STEP_RPM = 20;
+const RAMP_MS = 30_000;
+/** Two readings of one event can come together; only readings this far apart say that the speed settled, ms. */
+const SETTLED_APART_MS = 1000;
+/** More intervals than this without a reading are a gap. */
+export const GAP_INTERVALS = 3;
+
+/** Control of one pump: takes readings one by one, in order of time, and answers what the motor should be doing. */
+export type Control = {
+  /** Takes the next reading in; answers the same object every time. A reading not after the last changes nothing. */
+  push(reading: Reading): ControlAnswer;
+  /** The answer after the last reading; undefined before the first. */
+  answer(): ControlAnswer | undefined;
+  /** Whether the last reading lies within so many minutes of a program edge, by the motor's clock. */
+  nearProgramEdge(minutes: number): boolean;
+  /** What was learnt of the motor's clock, minutes ahead of wall time; it counts where the motor says nothing itself. */
+  setMotorClockOffset(minutes: number | undefined): void;
+  /** The state as plain JSON, for `createControl` to go on from. */
+  save(): ControlState;
+};
+
+/**
+ * Control that keeps what one pump's answer rests on: start and prime, keypad, timed run, freeze hour and the motor
+ * clock's offset. It works the answer out anew only when something that matters changes. `saved` is what `save`
+ * gave, also under changed settings; what cannot be read back starts afresh.
+ *
+ * @example const control = createControl(context); control.push(reading).due.rpm // 1700
+ */
+export function createControl(context: PumpContext, saved?: unknown): Control {
+  const state = parseControlState(saved) ?? freshControlState();
+  const judgement = createJudgement(context, state);
+  const gapMs = GAP_INTERVALS * context.intervalSeconds * 1000;
+  const { freeze } = context.settings;
+  const answer = liveAnswer(state, judgement);
+
+  function clockMoved(reading: Reading): boolean {
+    if (reading.motorClockMinute === undefined) return false;
+    const zoneOffset = offsetSpanAt(context.zone, reading.at)?.offsetMinutes ?? 0;
+    return followMotorClock(state, reading.motorClockMinute, reading.at, zoneOffset);
+  }
+
+  function mattersToAnswer(reading: Reading, standing: boolean): boolean {
+    return (
+      reading.at >= judgement.validUntil ||
+      reading.closedInputs !== state.closedInputs ||
+      (reading.reportedSource ?? null) !== state.reported ||
+      (reading.fault ?? null) !== state.fault ||
+      standing !== state.standing ||
+      state.assumedSince !== null ||
+      keypadMoved(state, reading) ||
+      freezeMayTurn(state, reading, freeze)
+    );
+  }
+
+  function push(reading: Reading): ControlAnswer {
+    if (state.seen && reading.at <= state.at) return answer;
+    const standing = reading.rpm <= STANDSTILL_RPM;
+    const gap = !state.seen || reading.at - state.at > gapMs;
+    if (clockMoved(reading) || gap || mattersToAnswer(reading, standing)) judgement.renew({ reading, standing, gap });
+    if (!state.rampOver) state.rampOver = hasSettled(state, reading, gap);
+    state.seen = true;
+    state.at = reading.at;
+    state.rpm = reading.rpm;
+    return answer;
+  }
+
+  return {
+    push,
+    answer: () => (state.seen ? answer : undefined),
+    nearProgramEdge(minutes) {
+      const near = minutes * MINUTE_MS;
+      const { programEdgeBefore, programEdgeAfter } = answer;
+      const before = programEdgeBefore !== undefined && state.at - programEdgeBefore <= near;
+      return before || (programEdgeAfter !== undefined && programEdgeAfter - state.at <= near);
+    },
+    setMotorClockOffset(minutes) {
+      state.learntOffset = minutes !== undefined && Number.isFinite(minutes) ? minutes : null;
+      judgement.expire();
+    },
+    save: () => ({ ...state }),
+  };
+}
+
+function hasSettled(state: ControlState, reading: Reading, gap: boolean): boolean {
+  if (reading.at - state.changedAt >= RAMP_MS) return true;
+  if (gap || state.at < state.changedAt || reading.at - state.at < SETTLED_APART_MS) return false;
+  return Math.abs(reading.rpm - state.rpm) < RAMP_STEP_RPM;
+}
+
+/** A view of the state: nothing is copied until someone looks. */
+function liveAnswer(state: ControlState, judgement: ReturnType<typeof createJudgement>): ControlAnswer {
+  return {
+    get at() {
+      return state.at;
+    },
+    get rpm() {
+      return state.rpm;
+    },
+    get standing() {
+      return state.standing;
+    },
+    get rampOver() {
+      return state.rampOver;
+    },
+    get decision() {
+      return judgement.decision;
+    },
+    get due() {
+      return judgement.due;
+    },
+    get winningInput() {
+      return judgement.winner;
+    },
+    get offExpected() {
+      return Math.abs(state.rpm - judgement.due.rpm) > judgement.toleranceRpm;
+    },
+    get sinceStartSeconds() {
+      return state.startedAt === null ? undefined : (state.at - state.startedAt) / 1000;
+    },
+    get sinceChangeSeconds() {
+      return (state.at - state.changedAt) / 1000;
+    },
+    get primeEndsAt() {
+      return judgement.primeEndsAt;
+    },
+    get programEdgeBefore() {
+      return judgement.edgeBefore;
+    },
+    get programEdgeAfter() {
+      return judgement.edgeAfter;
+    },
+    get motorClockOffsetMinutes() {
+      return motorClockOffset(state);
+    },
+    get motorClockKnown() {
+      return state.saidOffset !== null || state.learntOffset !== null;
+    },
+  };
+}

@@ -1,0 +1,35 @@
+import type { Reading, RunSource } from '../readings/reading.ts';
+import type { ControlAnswer } from './control-answer.ts';
+import type { MotorSettings } from './motor-settings.ts';
+import { fitsSpeed, STANDSTILL_RPM } from './speed-tolerance.ts';
+
+/**
+ * What a motor is judged to be doing at a settled speed (rpm): what commands it where the speed fits, else the source
+ * whose speed it is, `unknown` where it is nobody's. A standing motor is `off`, unless a believed keypad stop or
+ * fault holds it.
+ *
+ * @example judgeSource(1700, reading, answer, settings) // 'program', also while a closed input calls for more
+ */
+export function judgeSource(
+  rpm: number,
+  reading: Pick<Reading, 'closedInputs' | 'reportedSource'>,
+  { decision, due }: Pick<ControlAnswer, 'decision' | 'due'>,
+  settings: MotorSettings,
+): RunSource {
+  if (rpm <= STANDSTILL_RPM) return decision.source === 'stop' || decision.source === 'fault' ? decision.source : 'off';
+  if (decision.rpm > 0 && fitsSpeed(rpm, decision.rpm)) return decision.source;
+  if (due.rpm > 0 && fitsSpeed(rpm, due.rpm)) return due.source;
+  const { inputs, program, prime, timed, freeze } = settings;
+  const fitsInput = (closed: boolean): boolean =>
+    inputs.some(
+      (speed, index) =>
+        speed !== null && closed === ((reading.closedInputs & (1 << index)) !== 0) && fitsSpeed(rpm, speed),
+    );
+  if (fitsInput(true)) return 'input';
+  if (program.some((entry) => fitsSpeed(rpm, entry.rpm))) return 'program';
+  const said = reading.reportedSource;
+  if (said === 'prime' && prime !== null && fitsSpeed(rpm, prime.rpm)) return 'prime';
+  if (said === 'timed' && timed !== null && fitsSpeed(rpm, timed.rpm)) return 'timed';
+  if (said === 'freeze' && freeze !== null && fitsSpeed(rpm, freeze.rpm)) return 'freeze';
+  return fitsInput(false) ? 'input' : 'unknown';
+}

@@ -1,0 +1,46 @@
+import { clockDifference } from '../time/clock-time.ts';
+import { DAY_MS, MINUTE_MS } from '../time/local-time.ts';
+import type { ControlState } from './control-state.ts';
+
+/** A clock that shows whole minutes leaves this much doubt, minutes. */
+const DOUBT_MINUTES = 1.5;
+
+/** How far the motor's clock is ahead of wall time, minutes: as it says, else as learnt, else zero. */
+export function motorClockOffset(state: ControlState): number {
+  return state.saidOffset ?? state.learntOffset ?? 0;
+}
+
+/**
+ * Takes in what the motor's own clock shows (`minute`, 0 to 1439, whole) at an instant. Answers whether the offset
+ * changed. A new offset counts once two readings agree on it, at once when there was none or when the wall clock's
+ * own shift explains it (a motor knows no daylight saving).
+ */
+export function followMotorClock(state: ControlState, minute: number, at: number, zoneOffset: number): boolean {
+  const wallMs = at + zoneOffset * MINUTE_MS;
+  const wallMinute = (wallMs - Math.floor(wallMs / DAY_MS) * DAY_MS) / MINUTE_MS;
+  const held = motorClockOffset(state);
+  const doubt = clockDifference(minute - wallMinute + 0.5, held);
+  const heldFor = state.zoneOffset;
+  state.zoneOffset = zoneOffset;
+  if (Math.abs(doubt) <= 1) {
+    state.doubtedOffset = null;
+    if (state.saidOffset !== null) return false;
+    state.saidOffset = held;
+    return false;
+  }
+  if (!Number.isFinite(doubt)) return false;
+  const offset = Math.round(clockDifference(0, held - doubt));
+  const shifted = heldFor !== null && near(offset, held + heldFor - zoneOffset);
+  const agreed = state.doubtedOffset !== null && near(offset, state.doubtedOffset);
+  if (state.saidOffset !== null && !shifted && !agreed) {
+    state.doubtedOffset = offset;
+    return false;
+  }
+  state.saidOffset = offset;
+  state.doubtedOffset = null;
+  return true;
+}
+
+function near(left: number, right: number): boolean {
+  return Math.abs(clockDifference(left, right)) <= DOUBT_MINUTES;
+}
