@@ -8,11 +8,20 @@ import {
   readFileSync,
   renameSync,
   rmSync,
+  statSync,
   writeFileSync,
 } from 'node:fs';
 import { dirname, join } from 'node:path';
 import { giveTo } from './account.mjs';
-import { findProcess, findWorkingFolder, isStillRunning, sendSignal, waitUntil } from './process-table.mjs';
+import { lastWords } from './last-words.mjs';
+import {
+  findProcess,
+  findWorkingFolder,
+  isStillRunning,
+  listProcessesIn,
+  sendSignal,
+  waitUntil,
+} from './process-table.mjs';
 import { runCommand } from './run-command.mjs';
 import { refusal } from './say.mjs';
 
@@ -84,6 +93,20 @@ export function findRunningServer(folder) {
 }
 
 /**
+ * Takes away the lock file of a server that is gone. PostgreSQL does so itself unless the number in it belongs to
+ * somebody else by now, as after a restart of the machine. Never while a process of the old server still works in the
+ * folder: two servers on one folder destroy it.
+ *
+ * @param {string} folder
+ */
+async function removeStaleLock(folder) {
+  const isDeserted = await waitUntil(() => listProcessesIn(folder).length === 0, 10_000);
+  if (isDeserted) return rmSync(join(folder, 'postmaster.pid'), { force: true });
+  const pids = listProcessesIn(folder).join(' ');
+  throw refusal(`Processes of an earlier PostgreSQL still work in ${folder}. Type: kill ${pids}   and start again.`);
+}
+
+/**
  * Starts PostgreSQL on 127.0.0.1 and waits until it takes connections. It survives us: whoever starts next finds it
  * through its lock file.
  *
@@ -92,12 +115,13 @@ export function findRunningServer(folder) {
  */
 export async function startCluster(cluster, { port, withinMs = 120_000 }) {
   const { programs, folder, socketFolder, logFile, account } = cluster;
-  if (!findRunningServer(folder)) rmSync(join(folder, 'postmaster.pid'), { force: true });
+  await removeStaleLock(folder);
   if (socketFolder) {
     mkdirSync(socketFolder, { recursive: true, mode: 0o700 });
     giveTo(account, socketFolder);
   }
   const log = openSync(logFile, 'a', 0o600);
+  const logStart = statSync(logFile).size;
   const settings = { listen_addresses: '127.0.0.1', port, unix_socket_directories: socketFolder };
   const server = spawn(
     join(programs, 'postgres'),
@@ -122,33 +146,27 @@ export async function startCluster(cluster, { port, withinMs = 120_000 }) {
   await waitUntil(() => hasEnded || findRunningServer(folder)?.isReady === true, withinMs);
   if (findRunningServer(folder)?.isReady) return;
   if (!hasEnded && server.pid) sendSignal(server.pid, 'SIGQUIT');
-  throw refusal(`PostgreSQL did not start. Its last words (${logFile}):\n${lastLines(logFile, 8)}`);
+  throw refusal(`PostgreSQL did not start. Its last words (${logFile}):\n${lastWords(logFile, logStart, 8)}`);
 }
 
 /**
  * Stops the server of a data folder and does not return before it is gone: first sessions are ended and everything is
- * written, then, when that takes too long, at once (the next start recovers), then by force.
+ * written, then, when that takes too long or somebody is in a hurry, at once (the next start recovers), then by force.
  *
  * @param {string} folder
- * @param {{ graceMs?: number }} [options]
+ * @param {{ graceMs?: number, hurry?: AbortSignal }} [options]
  */
-export async function stopCluster(folder, { graceMs = 30_000 } = {}) {
+export async function stopCluster(folder, { graceMs = 30_000, hurry } = {}) {
   const server = findRunningServer(folder);
   if (!server) return;
   const isGone = () => !isStillRunning(server);
-  for (const [signal, ms] of /** @type {const} */ ([
-    ['SIGINT', graceMs],
-    ['SIGQUIT', 10_000],
-    ['SIGKILL', 5_000],
-  ])) {
+  sendSignal(server.pid, 'SIGINT');
+  await waitUntil(() => isGone() || hurry?.aborted === true, graceMs);
+  for (const signal of /** @type {const} */ (['SIGQUIT', 'SIGKILL'])) {
+    if (isGone()) return;
     sendSignal(server.pid, signal);
-    if (await waitUntil(isGone, ms)) return;
+    await waitUntil(isGone, 10_000);
   }
+  if (isGone()) return;
   throw refusal(`PostgreSQL (process ${server.pid}) does not stop. Type: kill -9 ${server.pid}`);
-}
-
-/** @param {string} file @param {number} count */
-export function lastLines(file, count) {
-  if (!existsSync(file)) return '(nothing)';
-  return readFileSync(file, 'utf8').trimEnd().split('\n').slice(-count).join('\n');
 }

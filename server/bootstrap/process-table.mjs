@@ -1,4 +1,4 @@
-import { readFileSync, readlinkSync } from 'node:fs';
+import { readdirSync, readFileSync, readlinkSync } from 'node:fs';
 
 /**
  * A process as the kernel knows it: its number alone is not enough, numbers are used again after a crash.
@@ -49,6 +49,12 @@ export function findWorkingFolder(pid) {
   } catch {
     return undefined;
   }
+}
+
+/** The processes that work in a folder, as far as we may see. @param {string} folder */
+export function listProcessesIn(folder) {
+  const pids = readdirSync('/proc').filter((name) => /^\d+$/.test(name));
+  return pids.map(Number).filter((pid) => findWorkingFolder(pid) === folder && findProcess(pid) !== undefined);
 }
 
 /**

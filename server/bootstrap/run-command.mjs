@@ -7,6 +7,8 @@ import { spawn } from 'node:child_process';
  * @property {string} [input] what the command reads on standard input; nothing when left out
  * @property {import('./account.mjs').Account | undefined} [account] who runs it; ourselves when left out
  * @property {(line: string) => void} [onLine] every line of output as it comes
+ * @property {boolean} [detached] in a session of its own, out of reach of Ctrl-C at the terminal
+ * @property {AbortSignal} [signal] ends the command (SIGTERM)
  *
  * @typedef {object} CommandResult
  * @property {number | null} code null when it could not start or a signal ended it
@@ -22,19 +24,17 @@ import { spawn } from 'node:child_process';
  * @param {CommandOptions} [options]
  * @returns {Promise<CommandResult>}
  */
-export function runCommand(command, args, options = {}) {
-  const { cwd, env = process.env, input, account, onLine } = options;
+export function runCommand(command, args, { input, account, onLine, ...options } = {}) {
   return new Promise((resolve) => {
     const child = spawn(command, args, {
-      cwd,
-      env,
+      ...options,
       stdio: [input === undefined ? 'ignore' : 'pipe', 'pipe', 'pipe'],
       ...(account ? { uid: account.uid, gid: account.gid } : {}),
     });
     const output = { stdout: '', stderr: '' };
-    for (const stream of /** @type {const} */ (['stdout', 'stderr'])) {
-      child[stream]?.setEncoding('utf8').on('data', (text) => {
-        output[stream] += text;
+    for (const name of /** @type {const} */ (['stdout', 'stderr'])) {
+      child[name]?.setEncoding('utf8').on('data', (text) => {
+        output[name] += text;
         for (const line of onLine ? text.split('\n').filter(Boolean) : []) onLine?.(line);
       });
     }

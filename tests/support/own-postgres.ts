@@ -11,6 +11,7 @@ import {
   startCluster,
   stopCluster,
 } from '#server/bootstrap/cluster.mjs';
+import { chooseSocketFolder } from '#server/bootstrap/data-folder.mjs';
 import { listPostgres } from '#server/bootstrap/find-postgres.mjs';
 import { isStillRunning, sendSignal, waitUntil } from '#server/bootstrap/process-table.mjs';
 import { findFreePort } from '#tests/support/free-port.ts';
@@ -41,20 +42,20 @@ export async function startOwnPostgres({ durable }: { durable: boolean }): Promi
   const [newest] = await listPostgres();
   if (!newest) throw new Error('No PostgreSQL 15 or later on this machine: npm test installs it.');
   const account = findDatabaseAccount();
-  const runFolder = mkdtempSync(join(tmpdir(), 'millrace-test-'));
+  const runFolder = mkdtempSync(join(process.env.MILLRACE_TEST_RUN ?? tmpdir(), 'postgres-'));
   giveTo(account, runFolder);
   chmodSync(runFolder, 0o700);
   const keeper = startKeeper(runFolder);
+  const port = await findFreePort();
   const cluster: Cluster = {
     programs: newest.folder,
     folder: join(runFolder, 'data'),
-    socketFolder: runFolder,
+    socketFolder: chooseSocketFolder(runFolder, port),
     logFile: join(runFolder, 'postgres.log'),
     account,
   };
   const settings = ['max_connections=200', 'shared_buffers=128MB', ...(durable ? [] : FORGETFUL)];
   await createCluster(cluster, { superuserPassword: PASSWORD, settings });
-  const port = await findFreePort();
   const start = () => startCluster(cluster, { port, withinMs: 60_000 });
   await start();
   return {

@@ -1,0 +1,86 @@
+import { say, wordsFor } from './say.mjs';
+
+/**
+ * What is going on has an end, and everything begun is ended in the opposite order.
+ *
+ * @typedef {object} Lifecycle
+ * @property {AbortSignal} stopping aborted once somebody wants everything to stop
+ * @property {AbortSignal} hurry aborted when they ask a second time
+ * @property {Promise<void>} stopped resolves when `stopping` is aborted
+ * @property {(text: string) => void} requestStop
+ * @property {() => void} leaveIfStopping throws `Stopping` between two steps
+ * @property {<T>(work: Promise<T>) => Promise<T>} orStopping the work's result, or `Stopping` thrown at once
+ * @property {(undo: () => unknown) => void} atEnd
+ * @property {() => Promise<void>} unwind
+ */
+
+/** Thrown to leave a start that is no longer wanted. It is not a fault. */
+export const STOPPING = Symbol('stopping');
+
+/**
+ * Follows Ctrl-C, TERM and HUP (the terminal is gone). The first asks for an end in order, the next one hurries.
+ *
+ * @param {import('node:events').EventEmitter} [signals] the process, or a stand-in
+ * @returns {Lifecycle}
+ */
+export function followSignals(signals = process) {
+  const [stop, hurry] = [new AbortController(), new AbortController()];
+  /** @type {(() => unknown)[]} */
+  const undos = [];
+  /** @type {Promise<void>} */
+  const stopped = new Promise((resolve) => stop.signal.addEventListener('abort', () => resolve()));
+  const leaveIfStopping = () => {
+    if (stop.signal.aborted) throw STOPPING;
+  };
+  /** @param {string} text */
+  const requestStop = (text) => {
+    if (stop.signal.aborted) {
+      if (!hurry.signal.aborted) say('Hurrying.');
+      return hurry.abort();
+    }
+    say(text);
+    stop.abort();
+  };
+  for (const name of ['SIGINT', 'SIGTERM', 'SIGHUP']) {
+    signals.on(name, () => requestStop(`\nStopping (${name}); once more to hurry.`));
+  }
+  return {
+    stopping: stop.signal,
+    hurry: hurry.signal,
+    stopped,
+    requestStop,
+    leaveIfStopping,
+    orStopping: (work) => Promise.race([work, stopped.then(() => Promise.reject(STOPPING))]),
+    atEnd: (undo) => undos.push(undo),
+    unwind: async () => {
+      for (let undo = undos.pop(); undo; undo = undos.pop()) {
+        // One that fails must not keep the others, PostgreSQL above all, from being stopped.
+        await Promise.resolve()
+          .then(undo)
+          .catch((error) => say(wordsFor(error)));
+      }
+    },
+  };
+}
+
+/**
+ * Runs a program to its end: what it began is always ended, what went wrong is said, and the exit code tells.
+ *
+ * @param {(life: Lifecycle) => Promise<number | void>} main what it returns is the exit code, 0 when nothing
+ */
+export async function runToTheEnd(main) {
+  // A terminal that is gone, or a reader that closed the pipe, is no reason to leave a database running.
+  for (const stream of [process.stdout, process.stderr]) stream.on('error', () => undefined);
+  const life = followSignals();
+  let code = 0;
+  try {
+    code = (await main(life)) ?? 0;
+  } catch (error) {
+    if (error !== STOPPING) {
+      process.stderr.write(`\n${wordsFor(error)}\n`);
+      code = 1;
+    }
+  }
+  await life.unwind();
+  process.exit(code);
+}
