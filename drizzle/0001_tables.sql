@@ -1,4 +1,4 @@
-CREATE SEQUENCE "public"."arrival_sequence" INCREMENT BY 1 MINVALUE 1 MAXVALUE 9223372036854775807 START WITH 1 CACHE 1;--> statement-breakpoint
+CREATE SEQUENCE "public"."arrival_sequence" INCREMENT BY 1024 MINVALUE 1 MAXVALUE 9223372036854775807 START WITH 1 CACHE 1;--> statement-breakpoint
 CREATE TABLE "alarm_transitions" (
 	"id" uuid PRIMARY KEY NOT NULL,
 	"company_id" uuid NOT NULL,
@@ -275,6 +275,7 @@ CREATE TABLE "pads" (
 	"company_id" uuid NOT NULL,
 	"name" text NOT NULL,
 	"street" text NOT NULL,
+	"town" text,
 	"area" text,
 	"zone" text NOT NULL,
 	"state" text DEFAULT 'open' NOT NULL,
@@ -282,6 +283,7 @@ CREATE TABLE "pads" (
 	"pool_gallons" real,
 	"turnovers_per_day" real,
 	"technician_id" uuid,
+	"stop_weekday" smallint,
 	"created_at" timestamp with time zone DEFAULT now() NOT NULL,
 	CONSTRAINT "pads_company_id_id_key" UNIQUE("company_id","id")
 );
@@ -409,6 +411,7 @@ CREATE TABLE "users" (
 	"company_id" uuid NOT NULL,
 	"email" text NOT NULL,
 	"name" text NOT NULL,
+	"phone" text,
 	"role" text NOT NULL,
 	"customer_id" uuid,
 	"password_hash" text NOT NULL,

@@ -95,7 +95,7 @@ GRANT SELECT (id, company_id, serial, secret_set_at, revoked_at, interval_second
   heard_at, refused, version, created_at) ON devices TO millrace_app;
 --> statement-breakpoint
 -- No password_hash.
-GRANT SELECT (id, company_id, email, name, role, customer_id, preferences, created_at, disabled_at) ON users TO millrace_app;
+GRANT SELECT (id, company_id, email, name, phone, role, customer_id, preferences, created_at, disabled_at) ON users TO millrace_app;
 --> statement-breakpoint
 GRANT UPDATE (preferences) ON users TO millrace_app;
 --> statement-breakpoint

@@ -1,5 +1,5 @@
 import { sql } from 'drizzle-orm';
-import { foreignKey, index, pgTable, real, text, unique, uuid } from 'drizzle-orm/pg-core';
+import { foreignKey, index, pgTable, real, smallint, text, unique, uuid } from 'drizzle-orm/pg-core';
 import type { PadState } from '#shared/domain/control/pump-context.ts';
 import { companyId, id, instant } from './columns.ts';
 import { companies } from './companies.ts';
@@ -14,6 +14,7 @@ export const pads = pgTable(
     companyId: companyId().references(() => companies.id),
     name: text().notNull(),
     street: text().notNull(),
+    town: text(),
     /** A neighbourhood: pads of one area share the utility's feeders. */
     area: text(),
     zone: text().notNull(),
@@ -22,6 +23,8 @@ export const pads = pgTable(
     poolGallons: real('pool_gallons'),
     turnoversPerDay: real('turnovers_per_day'),
     technicianId: uuid('technician_id'),
+    /** Weekday of the route's stop, 1 = Monday to 7; null = not on a route. */
+    stopWeekday: smallint('stop_weekday'),
     createdAt: instant('created_at').notNull().defaultNow(),
   },
   (table) => [

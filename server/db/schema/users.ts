@@ -15,6 +15,7 @@ export const users = pgTable(
     companyId: companyId().references(() => companies.id),
     email: text().notNull(),
     name: text().notNull(),
+    phone: text(),
     role: text().$type<Role>().notNull(),
     /** Whose pads a homeowner sees; null for staff. */
     customerId: uuid('customer_id'),
