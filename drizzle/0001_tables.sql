@@ -325,6 +325,7 @@ CREATE TABLE "pumps" (
 	"monitored" boolean DEFAULT true NOT NULL,
 	"wet_end_model_id" uuid,
 	"system_k" real,
+	"nominal_volts" real,
 	"settings" jsonb NOT NULL,
 	"settings_version" integer DEFAULT 1 NOT NULL,
 	"created_at" timestamp with time zone DEFAULT now() NOT NULL,

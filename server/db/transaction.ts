@@ -16,6 +16,9 @@ export type Sight = {
   readonly customerId: string | undefined;
 };
 
+/** Statements one by one, each its own transaction, through a pool of either role. */
+export const openDatabase = (pool: pg.Pool): Transaction => drizzle(pool);
+
 export type TransactionMode = 'read' | 'write';
 
 /**

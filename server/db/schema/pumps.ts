@@ -22,6 +22,8 @@ export const pumps = pgTable(
     wetEndModelId: uuid('wet_end_model_id'),
     /** System curve, ft per gpm². */
     systemK: real('system_k'),
+    /** Volts measured at start-up; null = the motor model's nameplate. */
+    nominalVolts: real('nominal_volts'),
     /** Commissioned settings of the motor. */
     settings: jsonb().$type<MotorSettings>().notNull(),
     settingsVersion: integer('settings_version').notNull().default(1),
