@@ -1,7 +1,10 @@
 import type { Reading, RunSource } from '../readings/reading.ts';
-import type { ControlAnswer } from './control-answer.ts';
+import type { Decision } from './decision.ts';
 import type { MotorSettings } from './motor-settings.ts';
 import { fitsSpeed, STANDSTILL_RPM } from './speed-tolerance.ts';
+
+/** What control answered, as far as judging needs it. */
+type Judged = Readonly<Record<'decision' | 'due', Pick<Decision, 'source' | 'rpm'>>>;
 
 /**
  * What a motor is judged to be doing at a settled speed (rpm): what commands it where the speed fits, else the source
@@ -13,7 +16,7 @@ import { fitsSpeed, STANDSTILL_RPM } from './speed-tolerance.ts';
 export function judgeSource(
   rpm: number,
   reading: Pick<Reading, 'closedInputs' | 'reportedSource'>,
-  { decision, due }: Pick<ControlAnswer, 'decision' | 'due'>,
+  { decision, due }: Judged,
   settings: MotorSettings,
 ): RunSource {
   if (rpm <= STANDSTILL_RPM) return decision.source === 'stop' || decision.source === 'fault' ? decision.source : 'off';
