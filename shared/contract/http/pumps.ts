@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { DETECTORS, PRIORITIES } from '#shared/domain/detectors/detector.ts';
 import { Id, Instant, InstantParam, listParam, pageOf, pageQuery } from '../primitives.ts';
+import { Evidence } from './alarms.ts';
 import { defineEndpoint, EVERYONE } from './endpoint.ts';
 import {
   EquipmentShape,
@@ -34,6 +35,8 @@ export const AlarmMark = z.object({
   id: Id,
   detector: z.enum(DETECTORS),
   cause: z.string(),
+  /** The alarm's evidence, for the numbers in its title. */
+  evidence: Evidence,
   priority: z.enum(PRIORITIES),
   acknowledged: z.boolean(),
   from: Instant,
