@@ -108,13 +108,10 @@ GRANT INSERT ON alarm_transitions, audit_entries TO millrace_app;
 GRANT DELETE ON outbox_mails TO millrace_app;
 --> statement-breakpoint
 
--- The machine role: the named list of tables for ingest, fold, jobs, credential and sign-in lookup.
-GRANT SELECT ON customers, pads, pad_ownerships, motor_models, wet_end_models, pumps, motors, motor_fittings,
+-- The machine role: the named list of tables for ingest, fold, jobs, credential and sign-in lookup. It commissions a
+-- whole company at once (the demo, imports) and removes nothing that was commissioned.
+GRANT SELECT, INSERT, UPDATE ON companies, users, devices, customers, pads, pad_ownerships, motor_models, wet_end_models, pumps, motors, motor_fittings,
   device_fittings, clocks, inputs, equipment TO millrace_machine;
---> statement-breakpoint
-GRANT SELECT, INSERT, UPDATE ON companies, users TO millrace_machine;
---> statement-breakpoint
-GRANT SELECT, UPDATE ON devices TO millrace_machine;
 --> statement-breakpoint
 GRANT SELECT, INSERT ON device_events, audit_entries, alarm_transitions TO millrace_machine;
 --> statement-breakpoint

@@ -2,7 +2,7 @@ import { sql } from 'drizzle-orm';
 import { foreignKey, index, jsonb, pgTable, real, text, unique, uuid } from 'drizzle-orm/pg-core';
 import { companyId, id } from './columns.ts';
 import { pads } from './pads.ts';
-import { commissionedByManagers, machineReads, staffOr } from './policies.ts';
+import { commissionedByManagers, machineWorks, staffOr } from './policies.ts';
 
 /** One pair of trippers: local minutes, `days` Monday to Sunday. */
 export type Trippers = { readonly days: readonly boolean[]; readonly onMinute: number; readonly offMinute: number };
@@ -30,6 +30,6 @@ export const clocks = pgTable(
     }),
     index('clocks_pad_index').on(table.padId),
     ...commissionedByManagers('clocks', staffOr(sql`pad_id in (select o.pad_id from pad_ownerships o)`)),
-    machineReads('clocks'),
+    machineWorks('clocks'),
   ],
 );

@@ -2,7 +2,7 @@ import { sql } from 'drizzle-orm';
 import { index, pgTable, text, unique } from 'drizzle-orm/pg-core';
 import { companyId, id, instant } from './columns.ts';
 import { companies } from './companies.ts';
-import { commissionedByManagers, machineReads, staffOr } from './policies.ts';
+import { commissionedByManagers, machineWorks, staffOr } from './policies.ts';
 
 /** Whom the company serves. */
 export const customers = pgTable(
@@ -19,6 +19,6 @@ export const customers = pgTable(
     unique('customers_company_id_id_key').on(table.companyId, table.id),
     index('customers_name_index').on(table.companyId, table.name),
     ...commissionedByManagers('customers', staffOr(sql`id = (select millrace_customer())`)),
-    machineReads('customers'),
+    machineWorks('customers'),
   ],
 );

@@ -2,7 +2,7 @@ import { sql } from 'drizzle-orm';
 import { check, foreignKey, pgTable, uuid } from 'drizzle-orm/pg-core';
 import { companyId, id, instant } from './columns.ts';
 import { devices } from './devices.ts';
-import { commissionedByManagers, machineReads, ofVisiblePump } from './policies.ts';
+import { commissionedByManagers, machineWorks, ofVisiblePump } from './policies.ts';
 import { pumps } from './pumps.ts';
 
 /** Which device reported which pump, half-open in time; one at a time on either side (exclusion constraints). */
@@ -29,6 +29,6 @@ export const deviceFittings = pgTable(
     }),
     check('device_fittings_order', sql`ends_at is null or ends_at > starts_at`),
     ...commissionedByManagers('device_fittings', ofVisiblePump),
-    machineReads('device_fittings'),
+    machineWorks('device_fittings'),
   ],
 );

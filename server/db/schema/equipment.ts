@@ -4,7 +4,7 @@ import type { EquipmentKind, Interlock } from '#shared/domain/control/pump-conte
 import { clocks } from './clocks.ts';
 import { companyId, id } from './columns.ts';
 import { pads } from './pads.ts';
-import { commissionedByManagers, machineReads, staffOr } from './policies.ts';
+import { commissionedByManagers, machineWorks, staffOr } from './policies.ts';
 import { pumps } from './pumps.ts';
 
 /** Heater, cell, feeder and the like, with what feeds it and the flow it needs. */
@@ -41,6 +41,6 @@ export const equipment = pgTable(
     }),
     index('equipment_pad_index').on(table.padId),
     ...commissionedByManagers('equipment', staffOr(sql`pad_id in (select o.pad_id from pad_ownerships o)`)),
-    machineReads('equipment'),
+    machineWorks('equipment'),
   ],
 );

@@ -3,7 +3,7 @@ import { check, foreignKey, pgTable, smallint, text, unique, uuid } from 'drizzl
 import type { InputDuty, InputKind } from '#shared/domain/control/pump-context.ts';
 import { clocks } from './clocks.ts';
 import { companyId, id } from './columns.ts';
-import { commissionedByManagers, machineReads, ofVisiblePump } from './policies.ts';
+import { commissionedByManagers, machineWorks, ofVisiblePump } from './policies.ts';
 import { pumps } from './pumps.ts';
 
 /** A wired speed input of a pump's motor, counted from 1. */
@@ -34,6 +34,6 @@ export const inputs = pgTable(
     }),
     check('inputs_number', sql`number between 1 and 8`),
     ...commissionedByManagers('inputs', ofVisiblePump),
-    machineReads('inputs'),
+    machineWorks('inputs'),
   ],
 );

@@ -2,7 +2,7 @@ import { sql } from 'drizzle-orm';
 import { check, foreignKey, pgTable, uuid } from 'drizzle-orm/pg-core';
 import { companyId, id, instant } from './columns.ts';
 import { motors } from './motors.ts';
-import { commissionedByManagers, machineReads, ofVisiblePump } from './policies.ts';
+import { commissionedByManagers, machineWorks, ofVisiblePump } from './policies.ts';
 import { pumps } from './pumps.ts';
 
 /** Which motor drove which pump, half-open in time; one at a time on either side (exclusion constraints). */
@@ -29,6 +29,6 @@ export const motorFittings = pgTable(
     }),
     check('motor_fittings_order', sql`ends_at is null or ends_at > starts_at`),
     ...commissionedByManagers('motor_fittings', ofVisiblePump),
-    machineReads('motor_fittings'),
+    machineWorks('motor_fittings'),
   ],
 );

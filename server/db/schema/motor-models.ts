@@ -2,7 +2,7 @@ import { integer, jsonb, pgTable, real, smallint, text, unique } from 'drizzle-o
 import type { MotorTraits } from '#shared/domain/control/motor-settings.ts';
 import { companyId, id } from './columns.ts';
 import { companies } from './companies.ts';
-import { commissionedByManagers, machineReads, ofCompanyOnly } from './policies.ts';
+import { commissionedByManagers, machineWorks, ofCompanyOnly } from './policies.ts';
 
 /** What every motor of one model shares. */
 export const motorModels = pgTable(
@@ -23,6 +23,6 @@ export const motorModels = pgTable(
   (table) => [
     unique('motor_models_company_id_id_key').on(table.companyId, table.id),
     ...commissionedByManagers('motor_models', ofCompanyOnly),
-    machineReads('motor_models'),
+    machineWorks('motor_models'),
   ],
 );

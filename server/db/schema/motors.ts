@@ -2,7 +2,7 @@ import { sql } from 'drizzle-orm';
 import { foreignKey, pgTable, text, unique, uuid } from 'drizzle-orm/pg-core';
 import { companyId, id, instant } from './columns.ts';
 import { motorModels } from './motor-models.ts';
-import { commissionedByManagers, machineReads, staffOr } from './policies.ts';
+import { commissionedByManagers, machineWorks, staffOr } from './policies.ts';
 
 /** One motor unit, whichever pump it drives. */
 export const motors = pgTable(
@@ -24,6 +24,6 @@ export const motors = pgTable(
       foreignColumns: [motorModels.companyId, motorModels.id],
     }),
     ...commissionedByManagers('motors', staffOr(sql`id in (select f.motor_id from motor_fittings f)`)),
-    machineReads('motors'),
+    machineWorks('motors'),
   ],
 );

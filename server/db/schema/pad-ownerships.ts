@@ -3,7 +3,7 @@ import { check, foreignKey, index, pgTable, uuid } from 'drizzle-orm/pg-core';
 import { companyId, id, instant } from './columns.ts';
 import { customers } from './customers.ts';
 import { pads } from './pads.ts';
-import { commissionedByManagers, machineReads, staffOr } from './policies.ts';
+import { commissionedByManagers, machineWorks, staffOr } from './policies.ts';
 
 /**
  * Whose pad it was, half-open in time; one owner at a time (an exclusion constraint). Every rule that lets a
@@ -38,6 +38,6 @@ export const padOwnerships = pgTable(
         sql`customer_id = (select millrace_customer()) and starts_at <= now() and (ends_at is null or ends_at > now())`,
       ),
     ),
-    machineReads('pad_ownerships'),
+    machineWorks('pad_ownerships'),
   ],
 );

@@ -3,7 +3,7 @@ import { foreignKey, index, pgTable, real, smallint, text, unique, uuid } from '
 import type { PadState } from '#shared/domain/control/pump-context.ts';
 import { companyId, id, instant } from './columns.ts';
 import { companies } from './companies.ts';
-import { commissionedByManagers, machineReads, staffOr } from './policies.ts';
+import { commissionedByManagers, machineWorks, staffOr } from './policies.ts';
 import { users } from './users.ts';
 
 /** An equipment pad: where the pumps of one pool stand. */
@@ -36,6 +36,6 @@ export const pads = pgTable(
     }),
     index('pads_technician_index').on(table.technicianId),
     ...commissionedByManagers('pads', staffOr(sql`id in (select o.pad_id from pad_ownerships o)`)),
-    machineReads('pads'),
+    machineWorks('pads'),
   ],
 );

@@ -51,8 +51,5 @@ export const commissionedByManagers = (table: string, using: SQL) => [
   ...appWrites(table, managersOnly),
 ];
 
-export const machineReads = (table: string) =>
-  pgPolicy(`${table}_machine_reads`, { for: 'select', to: millraceMachine, using: sql`true` });
-
 export const machineWorks = (table: string) =>
   pgPolicy(`${table}_machine_works`, { for: 'all', to: millraceMachine, using: sql`true`, withCheck: sql`true` });

@@ -3,7 +3,7 @@ import { boolean, foreignKey, index, integer, jsonb, pgTable, real, text, unique
 import type { MotorSettings } from '#shared/domain/control/motor-settings.ts';
 import { companyId, id, instant } from './columns.ts';
 import { pads } from './pads.ts';
-import { commissionedByManagers, machineReads, staffOr } from './policies.ts';
+import { commissionedByManagers, machineWorks, staffOr } from './policies.ts';
 import { wetEndModels } from './wet-end-models.ts';
 
 /** A pump of a pad: a wet end with whatever motor and device are fitted to it now. */
@@ -46,6 +46,6 @@ export const pumps = pgTable(
     // Rules ask for all numbers of a company; this index answers without the wide rows.
     index('pumps_company_numbers_index').on(table.companyId, table.number, table.padId, table.id),
     ...commissionedByManagers('pumps', staffOr(sql`pad_id in (select o.pad_id from pad_ownerships o)`)),
-    machineReads('pumps'),
+    machineWorks('pumps'),
   ],
 );

@@ -2,7 +2,7 @@ import { jsonb, pgTable, real, text, unique } from 'drizzle-orm/pg-core';
 import type { WetEndPoint } from '#shared/domain/control/pump-context.ts';
 import { companyId, id } from './columns.ts';
 import { companies } from './companies.ts';
-import { commissionedByManagers, machineReads, ofCompanyOnly } from './policies.ts';
+import { commissionedByManagers, machineWorks, ofCompanyOnly } from './policies.ts';
 
 /** A wet end's curve: flow, head and watts at one speed. */
 export const wetEndModels = pgTable(
@@ -18,6 +18,6 @@ export const wetEndModels = pgTable(
   (table) => [
     unique('wet_end_models_company_id_id_key').on(table.companyId, table.id),
     ...commissionedByManagers('wet_end_models', ofCompanyOnly),
-    machineReads('wet_end_models'),
+    machineWorks('wet_end_models'),
   ],
 );
