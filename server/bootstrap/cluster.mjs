@@ -70,6 +70,7 @@ export async function createCluster({ programs, folder, account }, { superuserPa
     { account, cwd: dirname(folder), env: { ...process.env, LC_ALL: 'C.UTF-8' } },
   );
   rmSync(passwordFile, { force: true });
+  if (code !== 0) rmSync(building, { recursive: true, force: true });
   if (code !== 0) throw refusal(`PostgreSQL could not make its data folder ${folder}:\n${stdout}${stderr}`.trim());
   appendFileSync(join(building, 'postgresql.conf'), `\n# Millrace\n${settings.join('\n')}\n`);
   renameSync(building, folder);
@@ -93,17 +94,21 @@ export function findRunningServer(folder) {
 }
 
 /**
- * Takes away the lock file of a server that is gone. PostgreSQL does so itself unless the number in it belongs to
- * somebody else by now, as after a restart of the machine. Never while a process of the old server still works in the
- * folder: two servers on one folder destroy it.
+ * Takes away the lock files of a server that is gone, its folder's and its socket's. PostgreSQL does so itself unless
+ * the number in them belongs to somebody else by now, as after a restart of the machine, or to a corpse that nobody
+ * collects, as in a container. Never while a process of the old server still works in the folder: two servers on one
+ * folder destroy it.
  *
  * @param {string} folder
+ * @param {string} socket its path, '' for none
  */
-async function removeStaleLock(folder) {
-  const isDeserted = await waitUntil(() => listProcessesIn(folder).length === 0, 10_000);
-  if (isDeserted) return rmSync(join(folder, 'postmaster.pid'), { force: true });
-  const pids = listProcessesIn(folder).join(' ');
-  throw refusal(`Processes of an earlier PostgreSQL still work in ${folder}. Type: kill ${pids}   and start again.`);
+async function removeStaleLocks(folder, socket) {
+  if (!(await waitUntil(() => listProcessesIn(folder).length === 0, 10_000))) {
+    const pids = listProcessesIn(folder).join(' ');
+    throw refusal(`Processes of an earlier PostgreSQL still work in ${folder}. Type: kill ${pids}   and start again.`);
+  }
+  const files = [join(folder, 'postmaster.pid'), ...(socket ? [socket, `${socket}.lock`] : [])];
+  for (const file of files) rmSync(file, { force: true });
 }
 
 /**
@@ -115,7 +120,7 @@ async function removeStaleLock(folder) {
  */
 export async function startCluster(cluster, { port, withinMs = 120_000 }) {
   const { programs, folder, socketFolder, logFile, account } = cluster;
-  await removeStaleLock(folder);
+  await removeStaleLocks(folder, socketFolder && join(socketFolder, `.s.PGSQL.${port}`));
   if (socketFolder) {
     mkdirSync(socketFolder, { recursive: true, mode: 0o700 });
     giveTo(account, socketFolder);

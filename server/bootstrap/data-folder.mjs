@@ -70,11 +70,11 @@ export function findDatabaseFolder(dataFolder) {
  *
  * @param {string} dataFolder
  * @param {import('./account.mjs').Account | undefined} account
- * @param {string} [elsewhere] parent of the folders that lie outside
+ * @param {{ elsewhere?: string, isReachable?: boolean }} [machine] elsewhere: parent of the folders that lie outside
  */
-export async function openDatabaseFolder(dataFolder, account, elsewhere = '/var/lib/millrace') {
+export async function openDatabaseFolder(dataFolder, account, machine = {}) {
+  const { elsewhere = '/var/lib/millrace', isReachable = await canReach(account, dataFolder) } = machine;
   const known = findDatabaseFolder(dataFolder);
-  const isReachable = await canReach(account, dataFolder);
   const folder = known ?? join(isReachable ? dataFolder : join(elsewhere, shortNameOf(dataFolder)), 'postgres');
   const isInside = folder === join(dataFolder, 'postgres');
   if (isInside && !isReachable) {

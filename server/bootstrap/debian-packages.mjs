@@ -45,11 +45,12 @@ export async function findInstaller() {
  * of the lists that fails is no reason to stop: they may be good enough.
  *
  * @param {readonly string[]} packages
+ * @param {string} [folder] where pg_createcluster(1) looks
  */
-export function installScript(packages) {
+export function installScript(packages, folder = '/etc/postgresql-common/createcluster.d') {
   return `set -e
 export DEBIAN_FRONTEND=noninteractive
-folder=/etc/postgresql-common/createcluster.d
+folder=${folder}
 mkdir -p $folder
 trap 'rm -f $folder/millrace.conf' EXIT
 echo 'create_main_cluster = false' > $folder/millrace.conf
