@@ -45,7 +45,7 @@ export function asMachine<T>(
 
 const setLocal = ({ companyId, userId, role, customerId }: Sight) =>
   Object.entries({ company: companyId, user: userId, role, customer: customerId ?? '' })
-    .map(([name, value]) => `set local millrace.${name} = ${pg.escapeLiteral(value)}`)
+    .map(([name, value]) => `set local millrace."${name}" = ${pg.escapeLiteral(value)}`)
     .join('; ');
 
 async function inTransaction<T>(
