@@ -21,6 +21,8 @@ const project = (name: string, include: string[], more: object = {}): Project =>
 
 export default defineConfig({
   plugins: [react(), tailwindcss()],
+  // The script before the first paint and the mark: files that the page names itself.
+  publicDir: 'src/static',
   build: {
     outDir: 'dist',
     target: 'es2023',

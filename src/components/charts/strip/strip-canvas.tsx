@@ -1,0 +1,58 @@
+import { useEffect, useMemo, useRef } from 'react';
+import { useStore } from '#src/hooks/use-store.ts';
+import { createStore } from '#src/lib/store.ts';
+import { themeStore } from '#src/lib/theme.ts';
+import { readStripColours } from './strip-colours.ts';
+import { placeLabels } from './strip-labels.ts';
+import { STRIP_METRICS, type StripSize } from './strip-metrics.ts';
+import { paintStrip, type StripPicture } from './strip-paint.ts';
+import type { StripRun } from './strip-run.ts';
+import { listRules } from './strip-ticks.ts';
+import { layoutStrip, type StripInput } from './strip-view.ts';
+
+export type StripCanvasProps = StripInput & {
+  readonly size: StripSize;
+  readonly width: number;
+  /** Zone of the ruled lines: the wall's is the company's, a single pad's its own. */
+  readonly zone: string;
+  readonly labelOf?: ((run: StripRun) => string | undefined) | undefined;
+};
+
+/** A canvas drawn before its font has come must be drawn again. */
+const fontStore = createStore(false);
+if (typeof document !== 'undefined')
+  void document.fonts.load('600 13px "JetBrains Mono"').then(() => fontStore.set(true));
+
+const LABEL_PIXELS = 6.9;
+
+/** The strip itself: one canvas, sharp at any density, in the theme's ink. It says nothing by itself: see Strip. */
+export function StripCanvas(props: StripCanvasProps) {
+  const { size, width, zone, labelOf, runs, planned, window, now, tone, topRpm } = props;
+  const canvas = useRef<HTMLCanvasElement>(null);
+  const theme = useStore(themeStore);
+  const fonts = useStore(fontStore);
+  const metrics = STRIP_METRICS[size];
+  const rules = useMemo(() => listRules(window, zone, width), [window, zone, width]);
+  const picture = useMemo((): StripPicture => {
+    const layout = layoutStrip({ runs, planned, window, now, tone, topRpm }, width, metrics);
+    const labels =
+      metrics.labelled && labelOf !== undefined
+        ? placeLabels(layout.blocks, labelOf, (text) => text.length * LABEL_PIXELS, width)
+        : [];
+    return { layout, rules, labels, metrics, width };
+  }, [runs, planned, window, now, tone, topRpm, width, metrics, labelOf, rules]);
+
+  // biome-ignore lint/correctness/useExhaustiveDependencies: `fonts` is no input of the drawing, its arrival is a reason to draw again.
+  useEffect(() => {
+    const element = canvas.current;
+    const context = element?.getContext('2d');
+    if (element === null || context === null || context === undefined || width === 0) return;
+    const density = globalThis.devicePixelRatio;
+    element.width = Math.round(width * density);
+    element.height = Math.round(metrics.height * density);
+    context.setTransform(density, 0, 0, density, 0, 0);
+    paintStrip(context, readStripColours(theme), density, picture);
+  }, [picture, theme, fonts, width, metrics]);
+
+  return <canvas ref={canvas} className="block w-full" style={{ height: metrics.height }} />;
+}

@@ -1,0 +1,86 @@
+import type { Priority } from '#shared/domain/detectors/detector.ts';
+import type { StripMetrics } from './strip-metrics.ts';
+import { STANDSTILL_RPM, type StripPlan, type StripRun, type StripWindow } from './strip-run.ts';
+import { createStripScale, type StripScale } from './strip-scale.ts';
+import { type Texture, textureOf } from './strip-texture.ts';
+
+/** One run on the paper, in CSS pixels. `tone` only where it is off its expected speed. */
+export type StripBlock = {
+  readonly run: StripRun;
+  readonly x: number;
+  readonly width: number;
+  readonly y: number;
+  readonly height: number;
+  readonly texture: Texture;
+  readonly input: number;
+  readonly tone: Priority | undefined;
+  /** Where the expected speed is dashed above, when the run is off it. */
+  readonly expectedY: number | undefined;
+};
+
+export type StripOutline = { readonly x: number; readonly width: number; readonly y: number; readonly height: number };
+
+export type StripLayout = {
+  readonly blocks: readonly StripBlock[];
+  readonly planned: readonly StripOutline[];
+  readonly nowX: number | undefined;
+};
+
+export type StripInput = {
+  readonly runs: readonly StripRun[];
+  readonly planned: readonly StripPlan[];
+  readonly window: StripWindow;
+  readonly now: number;
+  /** Colour of what is off the expected speed: the priority of the pump's alarm. */
+  readonly tone: Priority;
+  readonly topRpm: number;
+};
+
+/** A prime of two minutes is half a pixel on a day's row and must still be seen. */
+const NARROWEST = 1.5;
+
+const isMarked = ({ flags }: StripRun) => flags.includes('off-expected') || flags.includes('unprimed');
+
+function layoutBlock(run: StripRun, input: StripInput, scale: StripScale, metrics: StripMetrics): StripBlock {
+  const { window, now } = input;
+  const from = Math.max(run.from, window.from);
+  const until = Math.min(run.to ?? Math.max(now, run.from), window.until);
+  const texture = textureOf(run);
+  const x = scale.x(from);
+  const y = texture === 'gap' ? metrics.top - 4 : scale.y(run.meanRpm < STANDSTILL_RPM ? 0 : run.meanRpm);
+  const off = run.flags.includes('off-expected') && run.expectedRpm >= STANDSTILL_RPM;
+  return {
+    run,
+    x,
+    width: Math.max(scale.x(until) - x, NARROWEST),
+    y,
+    height: metrics.base - y,
+    texture,
+    input: run.activeInput,
+    tone: isMarked(run) ? input.tone : undefined,
+    expectedY: off ? scale.y(run.expectedRpm) : undefined,
+  };
+}
+
+const overlaps = (from: number, to: number, window: StripWindow) => from < window.until && to > window.from;
+
+/** Everything a strip draws, as plain numbers: the same for canvas, tests and print. */
+export function layoutStrip(input: StripInput, width: number, metrics: StripMetrics): StripLayout {
+  const { window, now } = input;
+  const scale = createStripScale(window, width, metrics, input.topRpm);
+  const shown = input.runs.filter(({ from, to }) => overlaps(from, to ?? Math.max(now, from + 1), window));
+  const ahead = input.planned.filter(({ from, to, rpm }) => rpm > 0 && overlaps(Math.max(from, now), to, window));
+  return {
+    blocks: shown.map((run) => layoutBlock(run, input, scale, metrics)),
+    planned: ahead.map(({ from, to, rpm }) => {
+      const x = scale.x(Math.max(from, now, window.from));
+      return {
+        x,
+        width: scale.x(Math.min(to, window.until)) - x,
+        y: scale.y(rpm),
+        height: metrics.base - scale.y(rpm),
+      };
+    }),
+    nowX: now >= window.from && now < window.until ? scale.x(now) : undefined,
+  };
+}

@@ -1,0 +1,36 @@
+import { infiniteQueryOptions, keepPreviousData, queryOptions } from '@tanstack/react-query';
+import { type AlarmsQuery, alarmEndpoints } from '#shared/contract/http/alarms.ts';
+import { call } from '#src/lib/api/api-client.ts';
+
+/** What a list of alarms is narrowed to; every part is in the page's address. */
+export type AlarmFilter = Partial<Omit<AlarmsQuery, 'cursor' | 'limit'>>;
+
+const KEY = 'alarms';
+
+export const alarmQueries = {
+  all: () => [KEY] as const,
+  lists: () => [KEY, 'list'] as const,
+  list: (filter: AlarmFilter) =>
+    infiniteQueryOptions({
+      queryKey: [KEY, 'list', filter] as const,
+      queryFn: ({ signal, pageParam }) =>
+        call(alarmEndpoints.list, {
+          query: pageParam === undefined ? filter : { ...filter, cursor: pageParam },
+          signal,
+        }),
+      initialPageParam: undefined as string | undefined,
+      getNextPageParam: (last) => last.nextCursor ?? undefined,
+      placeholderData: keepPreviousData,
+    }),
+  /** Counts of everything open, whatever a list is narrowed to. */
+  totals: () =>
+    queryOptions({
+      queryKey: [KEY, 'totals'] as const,
+      queryFn: ({ signal }) => call(alarmEndpoints.list, { query: { show: 'open', limit: 1 }, signal }),
+    }),
+  detail: (alarmId: string) =>
+    queryOptions({
+      queryKey: [KEY, 'detail', alarmId] as const,
+      queryFn: ({ signal }) => call(alarmEndpoints.read, { params: { alarmId }, signal }),
+    }),
+};

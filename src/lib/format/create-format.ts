@@ -1,0 +1,44 @@
+import type { Preferences } from '#shared/contract/http/session.ts';
+import { localTime } from '#shared/domain/time/local-time.ts';
+import { formatNumber, formatQuantity } from '#shared/units/format-quantity.ts';
+import type { Quantity } from '#shared/units/quantity-formats.data.ts';
+import { formatSpan } from './format-span.ts';
+import { formatDay, formatMinuteOfDay, formatTime, formatZoneName, isTwelveHour } from './format-time.ts';
+
+export type FormatOptions = { readonly locale: string; readonly preferences: Pick<Preferences, 'units' | 'clock'> };
+
+/** How one person reads figures: every screen asks this and none formats by itself. */
+export type Format = ReturnType<typeof createFormat>;
+
+/** @example createFormat({ locale: 'en-US', preferences: { units: 'us', clock: 'locale' } }).rpm(1400) // '1,400 rpm' */
+export function createFormat({ locale, preferences: { units, clock } }: FormatOptions) {
+  const style = { locale, clock };
+  const number = (value: number, digits = 0) => formatNumber(value, digits, locale);
+  const quantity = (value: number | null | undefined, kind: Quantity) =>
+    formatQuantity(value, kind, { system: units, locale });
+  const time = (at: number, zone: string) => formatTime(at, zone, style);
+  const day = (at: number, zone: string) => formatDay(at, zone, locale);
+  const isSameDay = (left: number, right: number, zone: string) =>
+    localTime(zone, left)?.epochDay === localTime(zone, right)?.epochDay;
+  return {
+    locale,
+    units,
+    twelveHour: isTwelveHour(locale, clock),
+    number,
+    /** Any quantity with its unit, kept in rpm, W, Wh, gpm, gallons, feet, psi or °C. */
+    quantity,
+    rpm: (value: number) => quantity(value, 'speed'),
+    watts: (value: number) => quantity(value, 'power'),
+    time,
+    timeWithSeconds: (at: number, zone: string) => formatTime(at, zone, { ...style, seconds: true }),
+    minuteOfDay: (minute: number) => formatMinuteOfDay(minute, style),
+    day,
+    dayWithYear: (at: number, zone: string) => formatDay(at, zone, locale, true),
+    /** The time alone when it lies in today, else with its day. */
+    moment: (at: number, zone: string, now: number) =>
+      isSameDay(at, now, zone) ? time(at, zone) : `${day(at, zone)}, ${time(at, zone)}`,
+    isSameDay,
+    span: formatSpan,
+    zoneName: (at: number, zone: string) => formatZoneName(at, zone, locale),
+  };
+}

@@ -1,0 +1,1 @@
+export const ALARM_MESSAGES = {} as const;

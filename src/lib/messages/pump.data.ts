@@ -1,0 +1,1 @@
+export const PUMP_MESSAGES = {} as const;

@@ -1,0 +1,20 @@
+/** Every address of the client. A query's `undefined` parts are left out. */
+const withQuery = (path: string, query: Readonly<Record<string, string | undefined>>): string => {
+  const search = new URLSearchParams();
+  for (const [name, value] of Object.entries(query)) if (value !== undefined) search.set(name, value);
+  const text = search.toString();
+  return text === '' ? path : `${path}?${text}`;
+};
+
+export const paths = {
+  first: () => '/',
+  /** `to` = where to go after signing in. */
+  signIn: (to?: string) => withQuery('/sign-in', { to: to === '/' ? undefined : to }),
+  fleet: (query: Readonly<Record<string, string | undefined>> = {}) => withQuery('/fleet', query),
+  pump: (pumpId: string, query: { readonly day?: string | undefined } = {}) =>
+    withQuery(`/pumps/${encodeURIComponent(pumpId)}`, query),
+  alarms: (query: Readonly<Record<string, string | undefined>> = {}) => withQuery('/alarms', query),
+  alarm: (alarmId: string) => `/alarms/${encodeURIComponent(alarmId)}`,
+  myPump: (pumpId?: string) => withQuery('/my-pump', { pump: pumpId }),
+  profile: () => '/profile',
+} as const;
