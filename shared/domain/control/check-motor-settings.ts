@@ -1,0 +1,92 @@
+import { checkNumber, type NumberFault, type NumberRule } from '../refusal/check-number.ts';
+import type { Refusal } from '../refusal/refusal.ts';
+import type { MotorSettings, MotorTraits, ProgramEntry } from './motor-settings.ts';
+
+export type SettingsFault = NumberFault | 'input-beyond-model' | 'not-seven-days' | 'no-length' | 'least-over-most';
+
+/** No motor in the trade is set beyond this, rpm (the wire's own bound). */
+const HIGHEST_RPM = 4000;
+
+/**
+ * Everything that is wrong with what a motor is to be set to, all at once; empty where it can be used. Speeds must
+ * lie within the motor's own least and highest, an input needs a terminal on the model (named `inputs[0]` for input
+ * 1), and a program entry seven days and a length.
+ *
+ * @example checkMotorSettings({ ...settings, inputs: [2850, 2400, null, 1800] }, DEFAULT_TRAITS)
+ * // [{ reason: 'input-beyond-model', field: 'inputs[3]', allowed: 'no speed: the model has inputs 1 to 3' }]
+ */
+export function checkMotorSettings(settings: MotorSettings, traits: MotorTraits): Refusal<SettingsFault>[] {
+  const limits = checkLimits(settings);
+  // Against limits that are wrong themselves every speed would be wrong too.
+  const speed = (field: string): NumberRule =>
+    limits.length > 0
+      ? { field, unit: 'rpm', least: 1, most: HIGHEST_RPM }
+      : { field, unit: 'rpm', least: settings.minRpm, most: settings.maxRpm };
+  const { prime, timed, freeze } = settings;
+  return [
+    ...limits,
+    ...settings.inputs.flatMap((rpm, index) => checkInput(rpm, index, traits, speed(`inputs[${index}]`))),
+    ...settings.program.flatMap((entry, index) => checkProgramEntry(entry, `program[${index}]`, speed)),
+    ...(prime === null ? [] : checkPart('prime', prime.rpm, speed, prime.seconds, 'seconds', 3600, 's')),
+    ...(timed === null ? [] : checkPart('timed', timed.rpm, speed, timed.minutes, 'minutes', 1440, 'min')),
+    ...(freeze === null ? [] : checkNumber(freeze.rpm, speed('freeze.rpm'))),
+    ...(freeze === null
+      ? []
+      : checkNumber(freeze.celsius, { field: 'freeze.celsius', unit: '°C', least: -40, most: 40 })),
+  ];
+}
+
+function checkLimits({ minRpm, maxRpm }: MotorSettings): Refusal<SettingsFault>[] {
+  const bounds = { unit: 'rpm', least: 1, most: HIGHEST_RPM };
+  const faults = [
+    ...checkNumber(minRpm, { ...bounds, field: 'minRpm' }),
+    ...checkNumber(maxRpm, { ...bounds, field: 'maxRpm' }),
+  ];
+  if (faults.length > 0 || minRpm < maxRpm) return faults;
+  return [{ reason: 'least-over-most', field: 'minRpm', allowed: 'a speed below maxRpm' }];
+}
+
+function checkInput(
+  rpm: number | null,
+  index: number,
+  traits: MotorTraits,
+  rule: NumberRule,
+): Refusal<SettingsFault>[] {
+  if (rpm === null) return [];
+  if (index < traits.inputCount) return checkNumber(rpm, rule);
+  const allowed =
+    traits.inputCount === 0 ? 'the model has no inputs' : `the model has inputs 1 to ${traits.inputCount}`;
+  return [{ reason: 'input-beyond-model', field: rule.field, allowed: `no speed: ${allowed}` }];
+}
+
+function checkProgramEntry(
+  { days, fromMinute, toMinute, rpm }: ProgramEntry,
+  field: string,
+  speed: (field: string) => NumberRule,
+): Refusal<SettingsFault>[] {
+  const faults: Refusal<SettingsFault>[] = [
+    ...checkNumber(fromMinute, { field: `${field}.fromMinute`, unit: 'min', least: 0, most: 1439, whole: true }),
+    ...checkNumber(toMinute, { field: `${field}.toMinute`, unit: 'min', least: 1, most: 1440, whole: true }),
+    ...checkNumber(rpm, speed(`${field}.rpm`)),
+  ];
+  if (days.length !== 7)
+    faults.push({ reason: 'not-seven-days', field: `${field}.days`, allowed: 'seven flags, Monday first' });
+  if (fromMinute === toMinute)
+    faults.push({ reason: 'no-length', field: `${field}.toMinute`, allowed: 'another time than fromMinute' });
+  return faults;
+}
+
+function checkPart(
+  part: string,
+  rpm: number,
+  speed: (field: string) => NumberRule,
+  length: number,
+  lengthName: string,
+  longest: number,
+  unit: string,
+): Refusal<SettingsFault>[] {
+  return [
+    ...checkNumber(rpm, speed(`${part}.rpm`)),
+    ...checkNumber(length, { field: `${part}.${lengthName}`, unit, least: 1, most: longest }),
+  ];
+}
