@@ -1,0 +1,144 @@
+import type { PumpEvent } from '../fold/pump-event.ts';
+import { CAUSE_CHAIN, CONSEQUENCES, WAITS_FOR } from './cause-chain.data.ts';
+import { ON_SITE_MUTES, PAD_STATE_MUTES } from './context-mutes.data.ts';
+import type { DetectorFactory } from './define-detector.ts';
+import type { AlarmSignal, Detector, Evidence } from './detector.ts';
+import { detectorFailure } from './detector-failure.ts';
+import type { DetectorParameters } from './detector-parameters.ts';
+import type { Facts } from './facts.ts';
+import { ABNORMAL, type Judgement, NORMAL } from './judgement.ts';
+import { isInitial, isRecord, type Json, restoreState } from './plain-state.ts';
+import { clearSignal, findChange, nowOf, raiseSignal, type Speaker } from './speaker.ts';
+import { advance, CLEAR, RAISE, rest, restingStanding, STANDS } from './standing.ts';
+
+/** The detectors of one pump, in the order of the cause chain. */
+export type DetectorBank = {
+  /** Judges the event that the facts describe and adds what is said to `signals`; throws a DetectorFailure. */
+  readonly judge: (facts: Facts, signals: AlarmSignal[]) => void;
+  readonly stands: (detector: Detector) => boolean;
+  readonly save: () => Json;
+};
+
+type Slot = Speaker & { readonly explainedBy: readonly Slot[]; readonly waitsFor: readonly Slot[] };
+
+/** An alarm that stands is looked at again this often. */
+const LOOK_AGAIN_MS = 60_000;
+
+/**
+ * Holds the given detectors for one pump, with what was saved of them.
+ *
+ * @example const bank = createDetectorBank(DETECTOR_RULES, resolveParameters(), undefined);
+ */
+export function createDetectorBank(
+  factories: readonly DetectorFactory[],
+  parameters: DetectorParameters,
+  saved: unknown,
+): DetectorBank {
+  const slots = createSlots(factories, parameters, isRecord(saved) ? saved : {});
+  const byName = new Map<Detector, Slot>(slots.map((slot) => [slot.instance.detector, slot]));
+  const byKind = new Map<PumpEvent['kind'], readonly Slot[]>();
+  const heardBy = (kind: PumpEvent['kind']): readonly Slot[] => {
+    const known = byKind.get(kind);
+    if (known !== undefined) return known;
+    const heard = slots.filter((slot) => slot.instance.hears.includes(kind));
+    byKind.set(kind, heard);
+    return heard;
+  };
+  return {
+    judge: (facts, signals) => {
+      let current: Slot | undefined;
+      try {
+        for (const slot of heardBy(facts.kind)) {
+          current = slot;
+          const judgement = slot.instance.judge(facts);
+          const { onset, raisedAt } = slot.standing;
+          if (judgement !== ABNORMAL && onset === 0 && raisedAt === 0) continue;
+          settle(slot, judgement, facts, signals);
+        }
+      } catch (error) {
+        throw current === undefined ? error : detectorFailure(current.instance.detector, error);
+      }
+    },
+    stands: (detector) => (byName.get(detector)?.standing.raisedAt ?? 0) !== 0,
+    save: () => saveSlots(slots),
+  };
+}
+
+function createSlots(
+  factories: readonly DetectorFactory[],
+  parameters: DetectorParameters,
+  saved: Readonly<Record<string, unknown>>,
+): Slot[] {
+  const made = new Map<Detector, Slot>();
+  for (const factory of factories) {
+    const name = factory(parameters, undefined).detector;
+    const entry = isRecord(saved[name]) ? saved[name] : {};
+    const standing = restoreState(restingStanding(), entry.standing);
+    made.set(name, { instance: factory(parameters, entry.state), standing, explainedBy: [], waitsFor: [] });
+  }
+  const find = (detector: Detector): Slot[] => {
+    const slot = made.get(detector);
+    return slot === undefined ? [] : [slot];
+  };
+  const ordered = CAUSE_CHAIN.flatMap(find);
+  return ordered.map((slot) => {
+    const name = slot.instance.detector;
+    const explainers = CAUSE_CHAIN.filter((detector) => CONSEQUENCES[detector]?.includes(name));
+    const linked = Object.assign(slot, {
+      explainedBy: explainers.flatMap(find),
+      waitsFor: (WAITS_FOR[name] ?? []).flatMap(find),
+    });
+    return linked;
+  });
+}
+
+function saveSlots(slots: readonly Slot[]): Json {
+  const saved: { [key: string]: Json } = {};
+  for (const { instance, standing } of slots) {
+    const state = instance.save();
+    const resting = isInitial(restingStanding(), standing);
+    if (state === undefined && resting) continue;
+    saved[instance.detector] = {
+      ...(state === undefined ? {} : { state }),
+      ...(resting ? {} : { standing: { ...standing } }),
+    };
+  }
+  return saved;
+}
+
+/** What hushes a detector whatever it finds, as evidence; undefined where nothing does. */
+function hushedBy(slot: Slot, facts: Facts): Evidence | undefined {
+  const explainer = slot.explainedBy.find((other) => other.standing.raisedAt !== 0);
+  if (explainer !== undefined) return { consequenceOf: explainer.instance.detector };
+  return PAD_STATE_MUTES[facts.padState].includes(slot.instance.detector) ? { padState: facts.padState } : undefined;
+}
+
+function settle(slot: Slot, judgement: Judgement, facts: Facts, signals: AlarmSignal[]): void {
+  const { standing, instance } = slot;
+  const hushed = hushedBy(slot, facts);
+  const visited = facts.onSite && standing.raisedAt === 0 && ON_SITE_MUTES.includes(instance.detector);
+  if (hushed !== undefined && standing.raisedAt !== 0) signals.push(clearSignal(slot, facts, hushed));
+  if (hushed !== undefined || visited) rest(standing);
+  else move(slot, judgement, facts, signals);
+}
+
+function move(slot: Slot, judgement: Judgement, facts: Facts, signals: AlarmSignal[]): void {
+  const { standing, instance } = slot;
+  const now = nowOf(slot, facts);
+  const delayMs = instance.delayMs(facts);
+  if (facts.gap && standing.raisedAt === 0 && now - standing.judgedAt > delayMs) rest(standing);
+  const step = advance(standing, judgement, now, delayMs, instance.offDelayMs(facts));
+  if (step === CLEAR) {
+    signals.push(clearSignal(slot, facts, judgement === NORMAL ? {} : { notJudgedAnyMore: true }));
+    rest(standing);
+  } else if (step === RAISE && slot.waitsFor.every((other) => other.standing.onset === 0)) {
+    signals.push(raiseSignal(slot, facts));
+  } else if (step === STANDS && now - standing.saidAt >= LOOK_AGAIN_MS && looksAgain(slot, judgement)) {
+    const changed = findChange(slot, facts);
+    if (changed !== undefined) signals.push(changed);
+  }
+}
+
+function looksAgain({ instance }: Slot, judgement: Judgement): boolean {
+  return judgement === ABNORMAL || (judgement === NORMAL && instance.looksAgainOnReturn);
+}

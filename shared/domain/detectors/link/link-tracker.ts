@@ -1,0 +1,125 @@
+import type { PumpContext } from '../../control/pump-context.ts';
+import type { PumpEvent } from '../../fold/pump-event.ts';
+import { copyJson, type Json, restoreState } from '../plain-state.ts';
+import type { LinkFacts, Outage } from './link-facts.ts';
+
+type LinkState = {
+  lastWordAt: number;
+  listeningSince: number;
+  heardSince: number;
+  connection: string;
+  connectionId: string;
+  boot: string;
+  bootedAt: number;
+  resumedAt: number;
+  /** A new boot since the last reading. */
+  bootPending: boolean;
+  outages: Json[];
+};
+
+const restingLink = (): LinkState => ({
+  lastWordAt: 0,
+  listeningSince: 0,
+  heardSince: 0,
+  connection: 'unknown',
+  connectionId: '',
+  boot: '',
+  bootedAt: 0,
+  resumedAt: 0,
+  bootPending: false,
+  outages: [],
+});
+
+const KEPT_OUTAGES = 8;
+const LEAST_SILENCE_MS = 120_000;
+
+/** No word for longer than this is silence: three intervals, at least two minutes. */
+export function silenceLimitMs({ intervalSeconds }: PumpContext): number {
+  return Math.max(3 * intervalSeconds * 1000, LEAST_SILENCE_MS);
+}
+
+/** Follows words, connections, boots and outages of one device. */
+export type LinkTracker = {
+  readonly facts: LinkFacts;
+  readonly hear: (event: PumpEvent) => void;
+  /** A reading that is folded, after `hear`: `previousAt` is the device time of the one before it, 0 = none. */
+  readonly read: (at: number, previousAt: number, gap: boolean) => void;
+  readonly save: () => Json;
+};
+
+/**
+ * A tracker that goes on from what was saved.
+ *
+ * @example createLinkTracker(context, undefined).facts.connection // 'unknown'
+ */
+export function createLinkTracker(context: PumpContext, saved: unknown): LinkTracker {
+  const state = restoreState(restingLink(), saved);
+  const facts: LinkFacts = {
+    lastWordAt: 0,
+    listeningSince: 0,
+    heardSince: 0,
+    connection: 'unknown',
+    reportsBoots: false,
+    bootedAt: 0,
+    resumedAt: 0,
+    outages: state.outages.flatMap(parseOutage),
+    outageEnded: false,
+  };
+  const limitMs = silenceLimitMs(context);
+  publish(facts, state);
+  return {
+    facts,
+    hear: (event) => {
+      if (event.kind === 'listening') state.listeningSince = event.receivedAt;
+      if (event.kind === 'reading' || event.kind === 'status' || event.kind === 'settings') {
+        if (event.receivedAt - state.lastWordAt > limitMs) state.heardSince = event.receivedAt;
+        if (!(event.kind === 'status' && event.status.state === 'lost'))
+          state.lastWordAt = Math.max(state.lastWordAt, event.receivedAt);
+      }
+      if (event.kind === 'status') hearStatus(state, event);
+      publish(facts, state);
+    },
+    read: (at, previousAt, gap) => {
+      facts.outageEnded = previousAt !== 0 && (gap || state.bootPending);
+      if (facts.outageEnded) {
+        const outage: Outage = { from: previousAt, to: at, booted: state.bootPending };
+        facts.outages = [...facts.outages, outage].slice(-KEPT_OUTAGES);
+        state.outages = facts.outages.map(({ from, to, booted }) => [from, to, booted]);
+      }
+      state.bootPending = false;
+    },
+    save: () => copyJson(state),
+  };
+}
+
+function hearStatus(state: LinkState, { status, receivedAt }: PumpEvent & { kind: 'status' }): void {
+  if (status.state === 'lost') {
+    // A take-over publishes the old will late.
+    if (state.connectionId === '' || status.connection === state.connectionId) state.connection = 'lost';
+    return;
+  }
+  const known = state.boot !== '';
+  if (known && status.boot !== state.boot) {
+    state.bootedAt = receivedAt;
+    state.bootPending = true;
+  } else if (known) state.resumedAt = receivedAt;
+  state.boot = status.boot;
+  state.connection = 'online';
+  state.connectionId = status.connection;
+}
+
+function publish(facts: LinkFacts, state: LinkState): void {
+  facts.lastWordAt = state.lastWordAt;
+  facts.listeningSince = state.listeningSince;
+  facts.heardSince = state.heardSince;
+  facts.connection = state.connection === 'online' || state.connection === 'lost' ? state.connection : 'unknown';
+  facts.reportsBoots = state.boot !== '';
+  facts.bootedAt = state.bootedAt;
+  facts.resumedAt = state.resumedAt;
+}
+
+function parseOutage(value: Json): Outage[] {
+  if (!Array.isArray(value)) return [];
+  const [from, to, booted]: readonly Json[] = value;
+  return typeof from === 'number' && typeof to === 'number' ? [{ from, to, booted: booted === true }] : [];
+}

@@ -1,0 +1,56 @@
+/** What the load tracker remembers between readings: times ms, 0 = not. Plain JSON. */
+export type LoadState = {
+  running: boolean;
+  startedAt: number;
+  startSeen: boolean;
+  /** When the prime of this start is over. */
+  primeEndsAt: number;
+  stoppedAt: number;
+  stoodSeconds: number;
+  /** Smoothing at one speed. */
+  smoothRpm: number;
+  smoothWatts: number;
+  variance: number;
+  samples: number;
+  smoothSince: number;
+  loadedSince: number;
+  unloadedSince: number;
+  primedOnce: boolean;
+  caught: boolean;
+  /** 0 no, 1 yes, 2 not judged. */
+  primed: number;
+  primeSeconds: number;
+  failedTries: number;
+  firstTryAt: number;
+  /** The stretch being learnt, not yet part of a band. */
+  learningRpm: number;
+  learningSeconds: number;
+  learningDay: number;
+  learning: { [bin: number]: number };
+};
+
+export const restingLoad = (): LoadState => ({
+  running: false,
+  startedAt: 0,
+  startSeen: false,
+  primeEndsAt: 0,
+  stoppedAt: 0,
+  stoodSeconds: 0,
+  smoothRpm: 0,
+  smoothWatts: 0,
+  variance: 0,
+  samples: 0,
+  smoothSince: 0,
+  loadedSince: 0,
+  unloadedSince: 0,
+  primedOnce: false,
+  caught: false,
+  primed: 2,
+  primeSeconds: 0,
+  failedTries: 0,
+  firstTryAt: 0,
+  learningRpm: 0,
+  learningSeconds: 0,
+  learningDay: 0,
+  learning: {},
+});

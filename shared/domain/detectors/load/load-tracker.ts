@@ -1,0 +1,127 @@
+import type { ControlAnswer } from '../../control/control-answer.ts';
+import type { PumpContext } from '../../control/pump-context.ts';
+import { STANDSTILL_RPM } from '../../control/speed-tolerance.ts';
+import type { Reading } from '../../readings/reading.ts';
+import { copyJson, isRecord, type Json, restoreState } from '../plain-state.ts';
+import { discardLearning, keepLearning, learnReading } from './learn-load.ts';
+import { createLearnedBands } from './learned-bands.ts';
+import type { LoadFacts } from './load-facts.ts';
+import { restingLoad } from './load-state.ts';
+import { createPrimeTeacher } from './prime-teacher.ts';
+import { HALFWAY_SHARE, type PrimedWatts, primedWattsAt, ROUGH_SHARE } from './primed-watts.ts';
+import { forgetSmoothing, raggednessOf, smoothWatts } from './smooth-watts.ts';
+import { endTry, judgeLoad, startTry, type TryLimits } from './track-prime.ts';
+
+/** Follows one pump's load: starts, tries to prime, loaded or not, and what the watts of each speed usually are. */
+export type LoadTracker = {
+  readonly facts: LoadFacts;
+  readonly read: (reading: Reading, control: ControlAnswer, elapsedMs: number, gap: boolean) => void;
+  /** Forgets the stretch being learnt: an alarm says that it was not usual. */
+  readonly discard: () => void;
+  readonly learntVersion: () => number;
+  readonly saveHot: () => Json;
+  readonly saveLearnt: () => Json;
+};
+
+/**
+ * A tracker that goes on from what was saved; what cannot be read back is learnt again.
+ *
+ * @example createLoadTracker(context, limits, undefined, undefined).facts.basis // 'none'
+ */
+export function createLoadTracker(context: PumpContext, limits: TryLimits, hot: unknown, learnt: unknown): LoadTracker {
+  const state = restoreState(restingLoad(), hot);
+  const saved = isRecord(learnt) ? learnt : {};
+  const bands = createLearnedBands(saved.bands);
+  const teacher = createPrimeTeacher(saved.prime);
+  const facts = restingFacts((rpm) => primedWattsAt(rpm, bands, teacher.usual(), context).watts);
+  let version = 0;
+  let estimate: PrimedWatts = { watts: 0, basis: 'none' };
+  let estimateRpm = -1;
+  const bump = (): void => {
+    version += 1;
+    estimateRpm = -1;
+  };
+
+  function estimateAt(rpm: number): void {
+    if (Math.abs(rpm - estimateRpm) <= 0.01 * rpm) return;
+    estimate = primedWattsAt(rpm, bands, teacher.usual(), context);
+    estimateRpm = rpm;
+    const band = estimate.basis === 'band' ? bands.find(rpm) : undefined;
+    facts.usualRaggedness = band === undefined || band.median <= 0 ? 0 : (1.4826 * band.mad) / band.median;
+  }
+
+  function run(reading: Reading, control: ControlAnswer, elapsedMs: number, gap: boolean): void {
+    if (!state.running || gap) {
+      startTry(state, reading.at, !state.running && !gap && state.stoppedAt !== 0);
+      state.primeEndsAt = reading.at + (context.settings.prime?.seconds ?? 0) * 1000;
+    }
+    if (control.primeEndsAt !== undefined) state.primeEndsAt = control.primeEndsAt;
+    smoothWatts(state, reading.at, reading.rpm, reading.watts, elapsedMs);
+    estimateAt(reading.rpm);
+    facts.basis = estimate.basis;
+    facts.primedWatts = estimate.watts;
+    facts.unloadedBelow = estimate.basis === 'band' || estimate.basis === 'prime' ? HALFWAY_SHARE : ROUGH_SHARE;
+    facts.ratio = estimate.basis === 'none' ? Number.NaN : state.smoothWatts / estimate.watts;
+    if (control.rampOver && judgeLoad(state, reading.at, facts.ratio, facts.unloadedBelow) && state.startSeen) bump();
+    if (teacher.follow(reading, control, state)) bump();
+    if (learnReading(state, bands, reading, control, elapsedMs, facts)) bump();
+  }
+
+  return {
+    facts,
+    read: (reading, control, elapsedMs, gap) => {
+      if (gap) forgetSmoothing(state);
+      if (reading.rpm > STANDSTILL_RPM) run(reading, control, elapsedMs, gap);
+      else {
+        if (state.running && keepLearning(state, bands)) bump();
+        endTry(state, reading.at, context.settings.prime?.seconds ?? 0, limits, facts.basis !== 'none');
+        facts.ratio = Number.NaN;
+      }
+      publish(facts, state);
+    },
+    discard: () => discardLearning(state),
+    learntVersion: () => version,
+    saveHot: () => copyJson(state),
+    saveLearnt: () => ({ bands: bands.save(), prime: teacher.save() }),
+  };
+}
+
+function publish(facts: LoadFacts, state: ReturnType<typeof restingLoad>): void {
+  facts.running = state.running;
+  facts.startedAt = state.startedAt;
+  facts.startSeen = state.startSeen;
+  facts.primeEndsAt = state.primeEndsAt;
+  facts.watts = state.smoothWatts;
+  facts.primedOnce = state.primedOnce;
+  facts.primed = state.primed === 2 ? undefined : state.primed === 1;
+  facts.primeSeconds = state.primeSeconds;
+  facts.failedTries = state.failedTries;
+  facts.firstTryAt = state.firstTryAt;
+  facts.raggedness = raggednessOf(state);
+  facts.stoodSeconds = state.stoodSeconds;
+  facts.caught = state.caught;
+}
+
+function restingFacts(wattsAt: LoadFacts['wattsAt']): LoadFacts {
+  return {
+    running: false,
+    startedAt: 0,
+    startSeen: false,
+    primeEndsAt: 0,
+    watts: 0,
+    primedWatts: 0,
+    basis: 'none',
+    ratio: Number.NaN,
+    unloadedBelow: ROUGH_SHARE,
+    primedOnce: false,
+    primed: undefined,
+    primeSeconds: 0,
+    failedTries: 0,
+    firstTryAt: 0,
+    raggedness: 0,
+    usualRaggedness: 0,
+    stoodSeconds: 0,
+    caught: false,
+    wattsAt,
+  };
+}

@@ -1,0 +1,80 @@
+import type { LoadState } from './load-state.ts';
+import { forgetSmoothing } from './smooth-watts.ts';
+
+/** Between these, s, a try counts once it lasted its prime time. */
+export type TryLimits = { readonly shortestTrySeconds: number; readonly longestTrySeconds: number };
+
+/** Load, or its lack, counts once it lasted this long, ms. */
+const SETTLED_MS = 20_000;
+/** Load that lasted less than this after a start was no prime, ms. */
+const CAUGHT_MS = 60_000;
+/** A failed try is forgotten when no start follows within a day. */
+const TRY_MEMORY_MS = 86_400_000;
+
+/** A start from standstill (`seen`), or the first reading of a pump that was already turning. */
+export function startTry(state: LoadState, at: number, seen: boolean): void {
+  state.stoodSeconds = seen && state.stoppedAt !== 0 ? (at - state.stoppedAt) / 1000 : 0;
+  if (state.firstTryAt !== 0 && at - state.firstTryAt > TRY_MEMORY_MS) forgetTries(state);
+  state.running = true;
+  state.startedAt = at;
+  state.startSeen = seen;
+  state.loadedSince = 0;
+  state.unloadedSince = 0;
+  state.primedOnce = false;
+  state.caught = false;
+  state.primed = 2;
+  state.primeSeconds = 0;
+  forgetSmoothing(state);
+}
+
+/** The shaft stands. A try that was judged and never carried load counts as failed. */
+export function endTry(state: LoadState, at: number, primeSeconds: number, limits: TryLimits, judged: boolean): void {
+  if (!state.running) {
+    if (state.stoppedAt === 0) state.stoppedAt = at;
+    return;
+  }
+  const { shortestTrySeconds, longestTrySeconds } = limits;
+  const enough = Math.min(longestTrySeconds, Math.max(shortestTrySeconds, primeSeconds)) * 1000;
+  if (judged && !state.primedOnce && state.unloadedSince !== 0 && at - state.startedAt >= enough) {
+    state.failedTries += 1;
+    if (state.firstTryAt === 0) state.firstTryAt = state.startedAt;
+  }
+  state.running = false;
+  state.stoppedAt = at;
+  state.primed = 2;
+  state.loadedSince = 0;
+  state.unloadedSince = 0;
+}
+
+/** Judges one reading after the ramp; answers whether this start has just been seen to prime. */
+export function judgeLoad(state: LoadState, at: number, ratio: number, unloadedBelow: number): boolean {
+  if (!(ratio >= 0)) {
+    state.primed = 2;
+    return false;
+  }
+  if (ratio < unloadedBelow) {
+    // Load that came for a moment and went is no prime.
+    if (state.loadedSince !== 0 && at - state.loadedSince < CAUGHT_MS) {
+      state.caught = true;
+      state.primedOnce = false;
+    }
+    state.loadedSince = 0;
+    if (state.unloadedSince === 0) state.unloadedSince = at;
+    if (at - state.unloadedSince >= SETTLED_MS) state.primed = 0;
+    return false;
+  }
+  state.unloadedSince = 0;
+  if (state.loadedSince === 0) state.loadedSince = at;
+  if (at - state.loadedSince < SETTLED_MS) return false;
+  state.primed = 1;
+  if (state.primedOnce) return false;
+  state.primedOnce = true;
+  state.primeSeconds = Math.max(0, (state.loadedSince - state.startedAt) / 1000);
+  forgetTries(state);
+  return true;
+}
+
+function forgetTries(state: LoadState): void {
+  state.failedTries = 0;
+  state.firstTryAt = 0;
+}

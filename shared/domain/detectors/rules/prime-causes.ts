@@ -1,0 +1,51 @@
+import type { Facts } from '../facts.ts';
+import { modelWatts } from '../load/primed-watts.ts';
+
+/** One cause of a pump that does not prime, with what speaks for it. */
+export type PrimeCause = { readonly cause: string; readonly weight: number; readonly because: string };
+
+/** Below this share of primed watts the wet end moves air; above it, water that goes nowhere (common practice). */
+const AIR_SHARE = 0.47;
+/** Ragged watts, as standard deviation over mean. */
+const RAGGED_SHARE = 0.12;
+/** A wet end that stood this long may have drained. */
+const LONG_STAND_SECONDS = 6 * 3600;
+/** Near the model's own watts at no flow. */
+const SHUT_OFF_SHARE = 0.1;
+
+/**
+ * The causes of a failed prime, the likeliest first, by what the watts look like. The order among equals is how often
+ * each is found (common practice): the readings cannot tell an open lid from a drip at a union.
+ *
+ * @example rankPrimeCauses(facts)[0]?.cause // 'air-leak'
+ */
+export function rankPrimeCauses(facts: Facts): readonly PrimeCause[] {
+  const { load } = facts;
+  const share = Number.isFinite(load.ratio) ? load.ratio : 0;
+  const air = share < AIR_SHARE;
+  const ragged = load.raggedness > RAGGED_SHARE;
+  const causes: readonly PrimeCause[] = [
+    {
+      cause: 'water-low',
+      weight: load.caught ? 5 : ragged ? 2 : 1,
+      because: load.caught ? 'caught load and lost it again' : 'watts of air',
+    },
+    { cause: 'air-leak', weight: air ? 3 : ragged ? 2 : 0, because: ragged ? 'ragged watts' : 'watts of air' },
+    {
+      cause: 'drained-back',
+      weight: air && load.stoodSeconds >= LONG_STAND_SECONDS ? 1.5 : 0.5,
+      because: 'stood for long before the start',
+    },
+    { cause: 'valve-shut', weight: !air && isNearShutOff(facts) ? 4 : 0, because: 'steady watts of no flow' },
+    { cause: 'blocked', weight: air ? 0.5 : 3, because: 'some load, far too little' },
+  ];
+  return causes.filter(({ weight }) => weight > 0).sort((left, right) => right.weight - left.weight);
+}
+
+function isNearShutOff({ load, reading, context }: Facts): boolean {
+  const { wetEnd } = context;
+  if (wetEnd === undefined) return false;
+  const shut = wetEnd.points.filter(({ gpm }) => gpm === 0);
+  const atNoFlow = modelWatts(reading.rpm, { ...context, wetEnd: { ...wetEnd, points: shut } })?.watts;
+  return atNoFlow !== undefined && Math.abs(load.watts / atNoFlow - 1) <= SHUT_OFF_SHARE;
+}

@@ -1,0 +1,86 @@
+import { fitsSpeed } from '../../control/speed-tolerance.ts';
+import { inputSpeed } from '../../control/winning-input.ts';
+import { clockDifference } from '../../time/clock-time.ts';
+import { defineDetector, type Finding, type Spoken } from '../define-detector.ts';
+import type { RuleParameters } from '../detector-parameters.ts';
+import type { Facts } from '../facts.ts';
+import { ABNORMAL, type Judgement, NORMAL, UNJUDGED } from '../judgement.ts';
+
+/** Minutes by which the last start on the program missed the nearest entry's beginning; null = none seen. */
+type State = { startMissedBy: number | null; wasStanding: boolean };
+
+function judge(state: State, facts: Facts): Judgement {
+  const { control, reading, stands } = facts;
+  if (state.wasStanding && !control.standing && !facts.gap && reading.closedInputs === 0) noteStart(state, facts);
+  state.wasStanding = control.standing;
+  if (control.standing) return NORMAL;
+  const nothingExpected = facts.padState === 'winterized' || facts.padState === 'drained';
+  if (!nothingExpected && control.due.rpm > 0) return stands('unexpected-run') ? UNJUDGED : NORMAL;
+  if (obeysOpenInput(facts) || (stands('settings-changed') && facts.fitsReported())) return UNJUDGED;
+  return ABNORMAL;
+}
+
+/** It says that it obeys an input which is open, and runs that speed: a wrong speed, whatever else is due. */
+export function obeysOpenInput({ reading, context }: Pick<Facts, 'reading' | 'context'>): boolean {
+  const { activeInput, closedInputs, rpm } = reading;
+  if (activeInput === 0 || (closedInputs & (1 << (activeInput - 1))) !== 0) return false;
+  const speed = inputSpeed(context.settings.inputs, activeInput);
+  return speed > 0 && fitsSpeed(rpm, speed);
+}
+
+function noteStart(state: State, { context, localMinute }: Facts): void {
+  let nearest: number | null = null;
+  for (const entry of context.settings.program) {
+    const missed = clockDifference(entry.fromMinute, localMinute);
+    if (nearest === null || Math.abs(missed) < Math.abs(nearest)) nearest = missed;
+  }
+  state.startMissedBy = nearest;
+}
+
+function describe(
+  state: State,
+  facts: Facts,
+  parameters: RuleParameters<'unexpected-run'>,
+  { onset }: Spoken,
+): Finding {
+  const { reading, now, control } = facts;
+  return {
+    cause: causeOf(state, facts, parameters),
+    evidence: {
+      measuredRpm: reading.rpm,
+      watts: reading.watts,
+      minutes: Math.round((now - onset) / 60_000),
+      saysSource: reading.reportedSource ?? null,
+      motorClockOffsetMinutes: control.motorClockKnown ? Math.round(control.motorClockOffsetMinutes) : null,
+      startMissedByMinutes: state.startMissedBy === null ? null : Math.round(state.startMissedBy),
+    },
+  };
+}
+
+/**
+ * A program run outside its hours has a changed program or a wrong clock behind it. A speed no entry has means the
+ * program; with the clock known, so does any other; else the last start tells: late or early by the clock's error.
+ */
+function causeOf(
+  state: State,
+  { context, reading, control }: Facts,
+  parameters: RuleParameters<'unexpected-run'>,
+): string {
+  const says = reading.reportedSource;
+  if (says !== undefined && says !== 'program') return 'unknown';
+  const known = context.settings.program.some((entry) => fitsSpeed(reading.rpm, entry.rpm));
+  if (!known) return says === 'program' ? 'program-changed' : 'unknown';
+  if (control.motorClockKnown) return 'program-changed';
+  if (state.startMissedBy === null) return 'unknown';
+  return Math.abs(state.startMissedBy) <= parameters.sameClockMinutes ? 'program-changed' : 'motor-clock';
+}
+
+export const unexpectedRun = defineDetector<'unexpected-run', State>({
+  detector: 'unexpected-run',
+  hears: ['reading'],
+  initial: () => ({ startMissedBy: null, wasStanding: false }),
+  judge,
+  delaySeconds: (_, { reportsSource }, parameters) =>
+    reportsSource ? parameters.delaySeconds : parameters.withoutSourceSeconds,
+  describe,
+});

@@ -1,0 +1,89 @@
+import { speedTolerance } from '../../control/speed-tolerance.ts';
+import { inputSpeed, listClosedInputs } from '../../control/winning-input.ts';
+import { defineDetector, type Finding } from '../define-detector.ts';
+import type { RuleParameters } from '../detector-parameters.ts';
+import type { Facts } from '../facts.ts';
+import { ABNORMAL, type Judgement, NORMAL, UNJUDGED } from '../judgement.ts';
+import { obeysOpenInput } from './unexpected-run.ts';
+import { followedInput, wrongSpeedCause } from './wrong-speed-cause.ts';
+
+/** Off the expected speed, and in which situation: only the same situation can show that it is cured. */
+type State = { off: boolean; situation: number };
+
+const OF_PROGRAM = 50;
+const OF_OTHERS = 51;
+const OF_OPEN_INPUT = 100;
+
+function judge(state: State, facts: Facts, parameters: RuleParameters<'wrong-speed'>): Judgement {
+  const { control } = facts;
+  if (!control.rampOver || control.due.source === 'prime' || isNearUnknownEdge(facts, parameters)) return UNJUDGED;
+  const open = obeysOpenInput(facts) && control.winningInput === 0;
+  // Standing where a speed is due is `stopped`; running where none is due is `unexpected-run`.
+  const others = control.standing !== control.due.rpm <= 0 && !open;
+  const allowed = speedTolerance(control.due.rpm) * (state.off ? 1 - parameters.deadbandShare : 1);
+  const off = !others && Math.abs(control.rpm - control.due.rpm) > allowed;
+  if (!off || (facts.stands('settings-changed') && facts.fitsReported())) {
+    state.off = false;
+    return facts.stands('wrong-speed') && (others || !isSameSituation(state, facts)) ? UNJUDGED : NORMAL;
+  }
+  state.off = true;
+  if (!facts.stands('wrong-speed'))
+    state.situation = open ? OF_OPEN_INPUT + facts.reading.activeInput : situationOf(facts);
+  return ABNORMAL;
+}
+
+function situationOf({ control }: Facts): number {
+  if (control.winningInput !== 0) return control.winningInput;
+  return control.due.source === 'program' ? OF_PROGRAM : OF_OTHERS;
+}
+
+/** An alarm about an open input is tested whenever that input is open. */
+function isSameSituation({ situation }: State, facts: Facts): boolean {
+  if (situation > OF_OPEN_INPUT) return (facts.reading.closedInputs & (1 << (situation - OF_OPEN_INPUT - 1))) === 0;
+  return situation === situationOf(facts);
+}
+
+/** Around a program edge either speed is right until the motor's clock is known. */
+function isNearUnknownEdge({ control, now }: Facts, { programEdgeMinutes }: RuleParameters<'wrong-speed'>): boolean {
+  if (control.motorClockKnown || control.winningInput !== 0) return false;
+  const near = programEdgeMinutes * 60_000;
+  const { programEdgeBefore, programEdgeAfter } = control;
+  if (programEdgeBefore !== undefined && now - programEdgeBefore < near) return true;
+  return programEdgeAfter !== undefined && programEdgeAfter - now < near;
+}
+
+/** A pump that never says what commands it may be on manual or on a timed run while its inputs are open. */
+function delaySeconds(_: State, facts: Facts, parameters: RuleParameters<'wrong-speed'>): number {
+  const hidden = !facts.reportsSource && facts.control.winningInput === 0 && facts.reading.activeInput === 0;
+  return hidden ? parameters.withoutSourceSeconds : parameters.delaySeconds;
+}
+
+function describe(_: State, facts: Facts, parameters: RuleParameters<'wrong-speed'>): Finding {
+  const { reading, control, context } = facts;
+  const followed = followedInput(facts);
+  return {
+    cause: wrongSpeedCause(facts, parameters),
+    evidence: {
+      measuredRpm: reading.rpm,
+      expectedRpm: control.due.rpm,
+      expectedSource: control.due.source,
+      input: control.winningInput === 0 ? null : control.winningInput,
+      followedInput: followed === 0 ? null : followed,
+      followedRpm: followed === 0 ? null : inputSpeed(context.settings.inputs, followed),
+      activeInput: reading.activeInput,
+      closedInputs: listClosedInputs(reading.closedInputs),
+      watts: reading.watts,
+      volts: reading.volts ?? null,
+      driveCelsius: reading.driveCelsius ?? null,
+    },
+  };
+}
+
+export const wrongSpeed = defineDetector<'wrong-speed', State>({
+  detector: 'wrong-speed',
+  hears: ['reading'],
+  initial: () => ({ off: false, situation: 0 }),
+  judge,
+  delaySeconds,
+  describe,
+});

@@ -1,0 +1,89 @@
+import type { PumpContext } from '../control/pump-context.ts';
+import type { AlarmSignal } from '../detectors/detector.ts';
+import { type DetectorParameters, resolveParameters } from '../detectors/detector-parameters.ts';
+import type { Json } from '../detectors/plain-state.ts';
+import type { FoldOutput, PumpNow } from './fold-output.ts';
+import { foldReading } from './fold-reading.ts';
+import type { PumpEvent } from './pump-event.ts';
+import { pumpNow } from './pump-now.ts';
+import { createPumpParts, type PumpParts } from './pump-parts.ts';
+import type { SavedPumpFold } from './saved-pump-fold.ts';
+
+/** The fold of one pump: from events to runs and alarm signals. */
+export type PumpFold = {
+  /**
+   * Takes one event in, in order of arrival. A reading at or below `highWater` is refused, but counts as a word from
+   * the device. Throws a DetectorFailure where a rule fails; the fold is then good for nothing but being thrown away.
+   */
+  push(event: PumpEvent): void;
+  /** What came of the events since the last call. */
+  take(): FoldOutput;
+  /** The pump this instant; undefined before the first reading. */
+  now(): PumpNow | undefined;
+  /** Device time of the last reading folded, ms; undefined before the first. */
+  highWater(): number | undefined;
+  /** The state: `hot` small and ever changing, `learnt` seldom; `learntVersion` grows only when `learnt` changed. */
+  save(): { readonly hot: Json; readonly learnt: Json; readonly learntVersion: number };
+  /** The same state under new commissioned data, and new rule figures where given. This fold is not to be used on. */
+  withContext(context: PumpContext, parameters?: DetectorParameters): PumpFold;
+};
+
+/**
+ * The fold of one pump under its commissioned data, going on from what was saved. What of it cannot be read back
+ * starts afresh. `parameters` are the rules' figures, the defaults where left out.
+ *
+ * @example
+ * const fold = createPumpFold(context, saved);
+ * fold.push({ kind: 'reading', reading, receivedAt, single: true });
+ * fold.take().signals;
+ */
+export function createPumpFold(
+  context: PumpContext,
+  saved?: SavedPumpFold,
+  parameters: DetectorParameters = resolveParameters(),
+): PumpFold {
+  return foldOf(createPumpParts(context, parameters, saved), []);
+}
+
+function foldOf(parts: PumpParts, pending: AlarmSignal[]): PumpFold {
+  let signals = pending;
+  const { facts } = parts;
+  return {
+    push: (event) => {
+      const before = signals.length;
+      takeIn(parts, event);
+      parts.bank.judge(facts, signals);
+      // What an alarm speaks of is no part of what is usual.
+      for (let index = before; index < signals.length; index += 1)
+        if (signals[index]?.type === 'raised') parts.load.discard();
+    },
+    take: () => {
+      const output = { runs: parts.runs.take(), signals };
+      signals = [];
+      return output;
+    },
+    now: () => (parts.seen() ? pumpNow(facts) : undefined),
+    highWater: () => (parts.seen() ? facts.reading.at : undefined),
+    save: () => parts.save(),
+    withContext: (context, parameters = parts.parameters) =>
+      foldOf(createPumpParts(context, parameters, parts.save()), signals),
+  };
+}
+
+function takeIn(parts: PumpParts, event: PumpEvent): void {
+  const { facts, link, pad } = parts;
+  link.hear(event);
+  pad.hear(event);
+  facts.kind = event.kind;
+  facts.now = event.receivedAt;
+  facts.receivedAt = event.receivedAt;
+  facts.padState = pad.state();
+  facts.onSite = pad.onSite();
+  facts.onSiteEndedAt = pad.onSiteEndedAt();
+  if (event.kind === 'settings') parts.hearSettings(event.settings);
+  if (event.kind !== 'reading') return;
+  const late = parts.seen() && event.reading.at <= facts.reading.at;
+  // A late reading corrects history elsewhere; here it only says that the device is there.
+  if (late) facts.kind = 'time';
+  else foldReading(parts, event);
+}

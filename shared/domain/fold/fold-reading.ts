@@ -1,0 +1,41 @@
+import { silenceLimitMs } from '../detectors/link/link-tracker.ts';
+import { MINUTE_MS, wallTime } from '../time/local-time.ts';
+import { offsetSpanAt } from '../time/zone-offset.ts';
+import type { PumpEvent } from './pump-event.ts';
+import type { PumpParts } from './pump-parts.ts';
+
+/** Moves control, inputs, load, link and runs on by one reading, and the facts with them. */
+export function foldReading(parts: PumpParts, { reading, single }: PumpEvent & { kind: 'reading' }): void {
+  const { facts, control, inputs, load, link, runs } = parts;
+  const seen = parts.seen();
+  const previous = facts.reading;
+  const elapsedMs = seen ? reading.at - previous.at : 0;
+  const gap = elapsedMs > silenceLimitMs(facts.context);
+  facts.now = reading.at;
+  facts.reading = reading;
+  facts.single = single;
+  facts.elapsedMs = elapsedMs;
+  facts.gap = gap;
+  if (reading.reportedSource !== undefined) facts.reportsSource = true;
+  facts.control = control.push(reading);
+  inputs.read(reading.closedInputs, seen ? previous.closedInputs : undefined, gap);
+  load.read(reading, facts.control, gap ? 0 : elapsedMs, gap);
+  link.read(reading.at, seen ? previous.at : 0, gap);
+  tellLocalTime(parts, reading.at);
+  runs.push(reading, facts.control);
+  if (facts.load.primed === false) runs.flag('unprimed');
+}
+
+function tellLocalTime({ facts, zone }: PumpParts, at: number): void {
+  if (!(at >= zone.from && at < zone.to)) {
+    const span = offsetSpanAt(facts.context.zone, at);
+    zone.from = span?.from ?? at;
+    zone.to = span?.to ?? at;
+    zone.offsetMinutes = span?.offsetMinutes ?? 0;
+  }
+  const wall = wallTime(at + zone.offsetMinutes * MINUTE_MS);
+  facts.zoneOffsetMinutes = zone.offsetMinutes;
+  facts.localDay = wall.epochDay;
+  facts.localWeekday = wall.weekday;
+  facts.localMinute = wall.minute;
+}

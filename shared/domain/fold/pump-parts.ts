@@ -1,0 +1,130 @@
+import { type Control, createControl } from '../control/create-control.ts';
+import type { MotorSettings } from '../control/motor-settings.ts';
+import type { PumpContext } from '../control/pump-context.ts';
+import { createDetectorBank, type DetectorBank } from '../detectors/detector-bank.ts';
+import type { DetectorParameters } from '../detectors/detector-parameters.ts';
+import { DETECTOR_RULES } from '../detectors/detector-rules.ts';
+import type { Facts } from '../detectors/facts.ts';
+import { createInputTracker, type InputTracker } from '../detectors/inputs/input-tracker.ts';
+import { createLinkTracker, type LinkTracker } from '../detectors/link/link-tracker.ts';
+import { createLoadTracker, type LoadTracker } from '../detectors/load/load-tracker.ts';
+import { isRecord, type Json } from '../detectors/plain-state.ts';
+import { createReportedFit } from '../detectors/reported-fit.ts';
+import { createRunFold, type RunFold } from '../runs/create-run-fold.ts';
+import { createPadTracker, type PadTracker } from './pad-tracker.ts';
+import { restoreReading, saveReading } from './reading-memory.ts';
+import { CONTROL_BEFORE_READINGS, READING_BEFORE_READINGS } from './resting-facts.ts';
+import type { SavedPumpFold } from './saved-pump-fold.ts';
+import { restoreSettings, saveSettings } from './settings-memory.ts';
+
+/** Everything the fold of one pump is made of. */
+export type PumpParts = {
+  readonly parameters: DetectorParameters;
+  readonly facts: Facts;
+  readonly control: Control;
+  readonly inputs: InputTracker;
+  readonly load: LoadTracker;
+  readonly link: LinkTracker;
+  readonly pad: PadTracker;
+  readonly runs: RunFold;
+  readonly bank: DetectorBank;
+  /** The stretch of one zone offset that holds the last reading. */
+  readonly zone: { from: number; to: number; offsetMinutes: number };
+  /** There has been a reading. */
+  readonly seen: () => boolean;
+  readonly hearSettings: (settings: Partial<MotorSettings>) => void;
+  readonly save: () => { readonly hot: Json; readonly learnt: Json; readonly learntVersion: number };
+};
+
+/** Builds the parts under commissioned data from what was saved. */
+export function createPumpParts(
+  context: PumpContext,
+  parameters: DetectorParameters,
+  saved: SavedPumpFold | undefined,
+): PumpParts {
+  const hot = isRecord(saved?.hot) ? saved.hot : {};
+  const learnt = isRecord(saved?.learnt) ? saved.learnt : {};
+  const control = createControl(context, hot.control);
+  const inputs = createInputTracker(context);
+  const load = createLoadTracker(context, parameters['failed-prime'], hot.load, learnt.load);
+  const link = createLinkTracker(context, hot.link);
+  const pad = createPadTracker(context, hot.pad);
+  const runs = createRunFold(context, hot.runs);
+  const bank = createDetectorBank(DETECTOR_RULES, parameters, hot.detectors);
+  const before = restoreReading(hot.reading);
+  const facts: Facts = {
+    kind: 'time',
+    now: 0,
+    receivedAt: 0,
+    context,
+    reading: before ?? READING_BEFORE_READINGS,
+    single: false,
+    elapsedMs: 0,
+    gap: false,
+    reportsSource: hot.reportsSource === true,
+    control: control.answer() ?? CONTROL_BEFORE_READINGS,
+    inputs: inputs.facts,
+    load: load.facts,
+    link: link.facts,
+    localDay: 0,
+    localWeekday: 0,
+    localMinute: 0,
+    zoneOffsetMinutes: 0,
+    padState: pad.state(),
+    onSite: pad.onSite(),
+    onSiteEndedAt: pad.onSiteEndedAt(),
+    reportedSettings: restoreSettings(learnt.reported),
+    fitsReported: () => false,
+    stands: bank.stands,
+  };
+  facts.fitsReported = createReportedFit(facts);
+  const versionBefore = typeof learnt.version === 'number' ? learnt.version : 0;
+  let settingsHeard = 0;
+  let kept: { readonly version: number; readonly learnt: Json } | undefined;
+
+  function learntNow(): { readonly version: number; readonly learnt: Json } {
+    const version = versionBefore + load.learntVersion() + settingsHeard;
+    if (kept?.version !== version) {
+      kept = { version, learnt: { version, load: load.saveLearnt(), reported: saveSettings(facts.reportedSettings) } };
+    }
+    return kept;
+  }
+
+  return {
+    parameters,
+    facts,
+    control,
+    inputs,
+    load,
+    link,
+    pad,
+    runs,
+    bank,
+    zone: { from: 0, to: 0, offsetMinutes: 0 },
+    seen: () => facts.reading !== READING_BEFORE_READINGS,
+    hearSettings: (settings) => {
+      const before = JSON.stringify(facts.reportedSettings);
+      facts.reportedSettings = { ...facts.reportedSettings, ...settings };
+      if (JSON.stringify(facts.reportedSettings) !== before) settingsHeard += 1;
+    },
+    save: () => {
+      const { version, learnt: learntJson } = learntNow();
+      const hotJson: Json = {
+        ...(facts.reading === READING_BEFORE_READINGS ? {} : { reading: saveReading(facts.reading) }),
+        control: control.save(),
+        runs: parseSaved(runs.save()),
+        load: load.saveHot(),
+        link: link.save(),
+        pad: pad.save(),
+        detectors: bank.save(),
+        reportsSource: facts.reportsSource,
+      };
+      return { hot: hotJson, learnt: learntJson, learntVersion: version };
+    },
+  };
+}
+
+/** Runs hold optional fields, which JSON leaves out. */
+function parseSaved(state: object): Json {
+  return JSON.parse(JSON.stringify(state)) as Json;
+}

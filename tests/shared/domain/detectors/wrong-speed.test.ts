@@ -1,0 +1,79 @@
+import { describe, expect, it } from 'vitest';
+import { createPlayer, goodDay, HOUR, MINUTE, MONDAY } from './pump-player.ts';
+
+const NOON = { closedInputs: 1 };
+
+describe('wrong-speed', () => {
+  it('raises three minutes after a closed input is ignored, names it, and clears once it is obeyed', () => {
+    const player = createPlayer();
+    player.playUntil(0, 600, goodDay());
+    player.play(10 * MINUTE, { closedInputs: 1, activeInput: 0, rpm: 1700, reportedSource: 'program' });
+    const raised = player.raised('wrong-speed')[0]!;
+
+    expect(raised).toMatchObject({ cause: 'ignores-input', priority: 'soon', alarmClass: 'alarm' });
+    const onset = MONDAY + 600 * MINUTE;
+    expect(raised.at - onset).toBeGreaterThanOrEqual(3 * MINUTE);
+    expect(raised.at - onset).toBeLessThanOrEqual(3 * MINUTE + 60_000);
+    expect(raised).toHaveProperty('evidence.input', 1);
+
+    player.play(10 * MINUTE, NOON);
+    expect(player.standing('wrong-speed')).toBeUndefined();
+    expect(player.spoken()).toEqual(['wrong-speed']);
+  });
+
+  it.each([
+    ['follows-lower-input', { closedInputs: 3, activeInput: 2, rpm: 2400 }],
+    ['follows-lower-input', { closedInputs: 3, activeInput: 1, rpm: 2400 }],
+    ['ignores-input', { closedInputs: 1, activeInput: 0, rpm: 1700 }],
+    ['runs-input-open', { closedInputs: 0, activeInput: 1, rpm: 2850 }],
+    ['runs-input-open', { closedInputs: 0, activeInput: 0, rpm: 2850, reportedSource: 'program' as const }],
+    ['unknown-speed', { closedInputs: 1, activeInput: 1, rpm: 2600 }],
+    ['derating', { closedInputs: 1, activeInput: 1, rpm: 2600, driveCelsius: 94 }],
+    ['power-limit', { closedInputs: 1, activeInput: 1, rpm: 2600, load: 1.35 }],
+  ])('names %s', (cause, scene) => {
+    const player = createPlayer();
+    player.playUntil(0, 540, goodDay());
+    player.play(20 * MINUTE, scene);
+
+    expect(player.spoken()).toEqual(['wrong-speed']);
+    expect(player.standing('wrong-speed')?.cause).toBe(cause);
+  });
+
+  it('is not cured by a situation that cannot show it', () => {
+    const player = createPlayer();
+    player.playUntil(0, 600, goodDay());
+    player.play(HOUR, { closedInputs: 1, activeInput: 0, rpm: 1700, reportedSource: 'program' });
+    player.play(2 * HOUR, { closedInputs: 0 });
+    expect(player.standing('wrong-speed')?.cause).toBe('ignores-input');
+
+    player.play(10 * MINUTE, { closedInputs: 1 });
+    expect(player.standing('wrong-speed')).toBeUndefined();
+  });
+
+  it('stays silent through ramps, primes, the keypad and timed runs, and near a program edge', () => {
+    const player = createPlayer();
+    player.playUntil(0, 355, {});
+    player.playUntil(0, 368, { clockAhead: -8 });
+    player.playUntil(0, 600, {});
+    player.play(2 * HOUR, { rpm: 2200, reportedSource: 'keypad' });
+    player.play(45 * MINUTE, { rpm: 3200, reportedSource: 'timed' });
+    player.play(HOUR, goodDay());
+    player.playUntil(2, 0, goodDay());
+
+    expect(player.signals).toEqual([]);
+  });
+
+  it('waits longer where the pump never says what commands it', () => {
+    const player = createPlayer();
+    player.playUntil(0, 700, { reportedSource: undefined });
+    player.play(2 * HOUR, { reportedSource: undefined, rpm: 2200 });
+    player.play(2 * HOUR, { reportedSource: undefined });
+    expect(player.signals).toEqual([]);
+  });
+
+  it('stays silent under noise and at speeds within tolerance', () => {
+    const player = createPlayer();
+    player.playUntil(0, 700, (at) => ({ rpm: at % 20_000 === 0 && at > MONDAY + 361 * MINUTE ? 1735 : undefined }));
+    expect(player.spoken()).toEqual([]);
+  });
+});
