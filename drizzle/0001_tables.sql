@@ -161,7 +161,7 @@ CREATE TABLE "idempotency_keys" (
 	"key" text NOT NULL,
 	"request_hash" "bytea" NOT NULL,
 	"status" smallint,
-	"response" jsonb,
+	"sealed_answer" "bytea",
 	"created_at" timestamp with time zone DEFAULT now() NOT NULL,
 	CONSTRAINT "idempotency_keys_pkey" PRIMARY KEY("user_id","key")
 );
@@ -359,6 +359,7 @@ CREATE TABLE "refresh_tokens" (
 	"company_id" uuid NOT NULL,
 	"user_id" uuid NOT NULL,
 	"family_id" uuid NOT NULL,
+	"signed_in_at" timestamp with time zone NOT NULL,
 	"token_hash" "bytea" NOT NULL,
 	"issued_at" timestamp with time zone NOT NULL,
 	"used_at" timestamp with time zone,

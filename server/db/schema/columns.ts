@@ -15,5 +15,5 @@ export const xid8 = customType<{ data: string }>({ dataType: () => 'xid8' });
 /** A growing number that fits a JavaScript number for longer than any database will live. */
 export const sequenceNumber = (name: string) => bigint(name, { mode: 'number' });
 
-/** A keyed hash. */
-export const hash = customType<{ data: Buffer }>({ dataType: () => 'bytea' });
+/** Bytes: a keyed hash, a sealed text. */
+export const bytes = customType<{ data: Buffer }>({ dataType: () => 'bytea' });

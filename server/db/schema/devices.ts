@@ -1,17 +1,17 @@
 import { sql } from 'drizzle-orm';
 import { check, index, integer, pgTable, smallint, text, unique, uuid } from 'drizzle-orm/pg-core';
-import { companyId, hash, id, instant } from './columns.ts';
+import { bytes, companyId, id, instant } from './columns.ts';
 import { companies } from './companies.ts';
 import { commissionedByManagers, machineWorks, staffOr } from './policies.ts';
 
-/** A telemetry unit. Its secret is kept as a keyed hash, which the app role can write but not read. */
+/** A telemetry unit. Its secret is kept as a keyed bytes, which the app role can write but not read. */
 export const devices = pgTable(
   'devices',
   {
     id: id(),
     companyId: companyId().references(() => companies.id),
     serial: text().notNull(),
-    secretHash: hash('secret_hash'),
+    secretHash: bytes('secret_hash'),
     secretSetAt: instant('secret_set_at'),
     revokedAt: instant('revoked_at'),
     /** Provisioned reading interval. */

@@ -1,6 +1,6 @@
 import { sql } from 'drizzle-orm';
-import { index, jsonb, pgTable, primaryKey, smallint, text, uuid } from 'drizzle-orm/pg-core';
-import { companyId, hash, instant } from './columns.ts';
+import { index, pgTable, primaryKey, smallint, text, uuid } from 'drizzle-orm/pg-core';
+import { bytes, companyId, instant } from './columns.ts';
 import { appReads, appWrites, machineWorks } from './policies.ts';
 
 const own = sql`company_id = (select millrace_company()) and user_id = (select millrace_user())`;
@@ -13,9 +13,10 @@ export const idempotencyKeys = pgTable(
     userId: uuid('user_id').notNull(),
     key: text().notNull(),
     /** Hash of method, path and body: the same key with another request is refused. */
-    requestHash: hash('request_hash').notNull(),
+    requestHash: bytes('request_hash').notNull(),
     status: smallint(),
-    response: jsonb().$type<unknown>(),
+    /** The answer, encrypted: it may hold a secret that is shown once. */
+    sealedAnswer: bytes('sealed_answer'),
     createdAt: instant('created_at').notNull().defaultNow(),
   },
   (table) => [

@@ -1,5 +1,5 @@
 import { foreignKey, index, pgTable, unique, uuid } from 'drizzle-orm/pg-core';
-import { companyId, hash, id, instant } from './columns.ts';
+import { bytes, companyId, id, instant } from './columns.ts';
 import { machineWorks } from './policies.ts';
 import { users } from './users.ts';
 
@@ -11,7 +11,9 @@ export const refreshTokens = pgTable(
     companyId: companyId(),
     userId: uuid('user_id').notNull(),
     familyId: uuid('family_id').notNull(),
-    tokenHash: hash('token_hash').notNull(),
+    /** When the person signed in: no family outlives its longest time, however often it is renewed. */
+    signedInAt: instant('signed_in_at').notNull(),
+    tokenHash: bytes('token_hash').notNull(),
     issuedAt: instant('issued_at').notNull(),
     usedAt: instant('used_at'),
     expiresAt: instant('expires_at').notNull(),
