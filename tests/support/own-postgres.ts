@@ -13,7 +13,7 @@ import {
 } from '#server/bootstrap/cluster.mjs';
 import { chooseSocketFolder } from '#server/bootstrap/data-folder.mjs';
 import { listPostgres } from '#server/bootstrap/find-postgres.mjs';
-import { isStillRunning, sendSignal, waitUntil } from '#server/bootstrap/process-table.mjs';
+import { listProcessesIn, sendSignal, waitUntil } from '#server/bootstrap/process-table.mjs';
 import { findFreePort } from '#tests/support/free-port.ts';
 
 const PASSWORD = 'only-for-tests';
@@ -77,12 +77,12 @@ export async function startOwnPostgres({ durable }: { durable: boolean }): Promi
   };
 }
 
-/** The postmaster first, so that it cannot tidy up; its children notice the death of the postmaster and follow. */
+/** The postmaster first, so that it cannot tidy up, then everybody else who works in its folder. */
 async function killHard(dataFolder: string): Promise<void> {
   const server = findRunningServer(dataFolder);
-  if (!server) return;
-  sendSignal(server.pid, 'SIGKILL');
-  await waitUntil(() => !isStillRunning(server), 10_000);
+  if (server) sendSignal(server.pid, 'SIGKILL');
+  for (const pid of listProcessesIn(dataFolder)) sendSignal(pid, 'SIGKILL');
+  await waitUntil(() => listProcessesIn(dataFolder).length === 0, 10_000);
 }
 
 function startKeeper(runFolder: string): ChildProcess {
