@@ -3,6 +3,8 @@ import { isJsonObject, type JsonObject, parseJsonText, shortText } from './json-
 import type { OptionalReadingField, ReadingRefusal, RefusedMessage } from './refusal.ts';
 import { MAX_READINGS_PER_MESSAGE } from './wire-limits.ts';
 
+export type { Reading, Source };
+
 /** What the receiver knows and the message cannot: the motor's inputs and the span of time it still takes. */
 export type ReadingLimits = {
   /** Inputs of the motor model, 1 to 8; without it 8. */

@@ -1,6 +1,8 @@
 import type { DeviceStatus } from '#shared/domain/fold/pump-event.ts';
 import { isJsonObject, type JsonObject, parseJsonText, shortText } from './json-text.ts';
 
+export type { DeviceStatus };
+
 /** Why a whole status message is refused, by the wire's own field names. */
 export type StatusRefusal =
   | 'not-json'
