@@ -1,4 +1,4 @@
-import { checkNumber, type NumberFault, type NumberRule } from '../refusal/check-number.ts';
+import { checkNumber, checkNumbers, type NumberFault, type NumberRule } from '../refusal/check-number.ts';
 import type { Refusal } from '../refusal/refusal.ts';
 import type { MotorSettings, MotorTraits, ProgramEntry } from './motor-settings.ts';
 
@@ -6,6 +6,9 @@ export type SettingsFault = NumberFault | 'input-beyond-model' | 'not-seven-days
 
 /** No motor in the trade is set beyond this, rpm (the wire's own bound). */
 const HIGHEST_RPM = 4000;
+const PRIME_SECONDS: NumberRule = { field: 'prime.seconds', unit: 's', least: 1, most: 3600 };
+const TIMED_MINUTES: NumberRule = { field: 'timed.minutes', unit: 'min', least: 1, most: 1440 };
+const FREEZE_CELSIUS: NumberRule = { field: 'freeze.celsius', unit: '°C', least: -40, most: 40 };
 
 /**
  * Everything that is wrong with what a motor is to be set to, all at once; empty where it can be used. Speeds must
@@ -27,12 +30,11 @@ export function checkMotorSettings(settings: MotorSettings, traits: MotorTraits)
     ...limits,
     ...settings.inputs.flatMap((rpm, index) => checkInput(rpm, index, traits, speed(`inputs[${index}]`))),
     ...settings.program.flatMap((entry, index) => checkProgramEntry(entry, `program[${index}]`, speed)),
-    ...(prime === null ? [] : checkPart('prime', prime.rpm, speed, prime.seconds, 'seconds', 3600, 's')),
-    ...(timed === null ? [] : checkPart('timed', timed.rpm, speed, timed.minutes, 'minutes', 1440, 'min')),
-    ...(freeze === null ? [] : checkNumber(freeze.rpm, speed('freeze.rpm'))),
-    ...(freeze === null
-      ? []
-      : checkNumber(freeze.celsius, { field: 'freeze.celsius', unit: '°C', least: -40, most: 40 })),
+    ...checkNumbers([
+      ...(prime === null ? [] : pairs([prime.rpm, speed('prime.rpm')], [prime.seconds, PRIME_SECONDS])),
+      ...(timed === null ? [] : pairs([timed.rpm, speed('timed.rpm')], [timed.minutes, TIMED_MINUTES])),
+      ...(freeze === null ? [] : pairs([freeze.rpm, speed('freeze.rpm')], [freeze.celsius, FREEZE_CELSIUS])),
+    ]),
   ];
 }
 
@@ -76,17 +78,6 @@ function checkProgramEntry(
   return faults;
 }
 
-function checkPart(
-  part: string,
-  rpm: number,
-  speed: (field: string) => NumberRule,
-  length: number,
-  lengthName: string,
-  longest: number,
-  unit: string,
-): Refusal<SettingsFault>[] {
-  return [
-    ...checkNumber(rpm, speed(`${part}.rpm`)),
-    ...checkNumber(length, { field: `${part}.${lengthName}`, unit, least: 1, most: longest }),
-  ];
-}
+type Pair = readonly [number, NumberRule];
+
+const pairs = (first: Pair, second: Pair): Pair[] => [first, second];
