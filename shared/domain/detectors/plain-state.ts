@@ -59,7 +59,9 @@ export function isRecord(value: unknown): value is Readonly<Record<string, unkno
 
 function hasShape(value: Json, template: Json | undefined): boolean {
   if (Array.isArray(template)) return Array.isArray(value);
-  return typeof value === typeof template && (value === null) === (template === null) && !Array.isArray(value);
+  // Null marks a figure that is not known yet.
+  if (template === null) return value === null || typeof value === 'number';
+  return typeof value === typeof template && value !== null && !Array.isArray(value);
 }
 
 function isJson(value: unknown): value is Json {
