@@ -45,7 +45,7 @@ const CLAIMS: Record<Exclude<Source, 'prime'>, (known: Case) => Claim | undefine
   },
   program: (known) => programClaim(known),
   freeze: ({ settings: { freeze }, situation: { at, freezeSince }, timeline }) => {
-    if (freeze === null || freezeSince === undefined) return undefined;
+    if (freeze === null || freezeSince === undefined || at >= freezeSince + HOUR_MS) return undefined;
     const until = earliest(freezeSince + HOUR_MS, nextProgramStart(timeline, at));
     return { rpm: freeze.rpm, until, because: { kind: 'freeze' } };
   },
