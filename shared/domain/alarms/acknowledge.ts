@@ -1,0 +1,47 @@
+import { type AlarmRecord, type AlarmStep, makeStep, noStep } from './alarm-record.ts';
+
+/** How long a person may take back an acknowledgement of their own. */
+export const WITHDRAW_WITHIN_MS = 5 * 60_000;
+
+/**
+ * Marks an alarm as seen by a person. It never clears a condition: an active alarm stays, a returned one becomes
+ * history. Repeating it changes nothing.
+ *
+ * @example acknowledge(active, { by: 'user-1', at: 1000, note: null }).record.state // 'acknowledged'
+ */
+export function acknowledge(
+  record: AlarmRecord,
+  act: { readonly by: string; readonly at: number; readonly note: string | null },
+): AlarmStep {
+  if (record.state === 'acknowledged' || record.state === 'normal') return noStep(record);
+  const next: AlarmRecord = {
+    ...record,
+    state: record.active ? 'acknowledged' : 'normal',
+    acknowledgedAt: act.at,
+    acknowledgedBy: act.by,
+    acknowledgementNote: act.note,
+    recentReturns: [],
+  };
+  return makeStep(next, 'acknowledged', act.at, act.by, act.note);
+}
+
+/**
+ * Takes back one's own acknowledgement within five minutes; undefined where it cannot be taken back. The alarm waits
+ * again from the moment it first did, so that undoing never buys time.
+ */
+export function withdrawAcknowledgement(
+  record: AlarmRecord,
+  act: { readonly by: string; readonly at: number },
+): AlarmStep | undefined {
+  const { acknowledgedAt, acknowledgedBy } = record;
+  if (acknowledgedAt === null || acknowledgedBy !== act.by || act.at - acknowledgedAt > WITHDRAW_WITHIN_MS)
+    return undefined;
+  const next: AlarmRecord = {
+    ...record,
+    state: record.active ? 'unacknowledged' : 'returned',
+    acknowledgedAt: null,
+    acknowledgedBy: null,
+    acknowledgementNote: null,
+  };
+  return makeStep(next, 'acknowledgement-withdrawn', act.at, act.by);
+}
