@@ -4,7 +4,7 @@ import { bytes, companyId, id, instant } from './columns.ts';
 import { companies } from './companies.ts';
 import { commissionedByManagers, machineWorks, staffOr } from './policies.ts';
 
-/** A telemetry unit. Its secret is kept as a keyed bytes, which the app role can write but not read. */
+/** A telemetry unit. Its secret is kept as a keyed hash, which the app role can write but not read. */
 export const devices = pgTable(
   'devices',
   {
