@@ -1,0 +1,86 @@
+import { type SQL, sql } from 'drizzle-orm';
+import type { Transaction } from '#server/db/transaction.ts';
+import type { SortKeys } from '#server/http/page-cursor.ts';
+import type { AlarmPage, AlarmsQuery } from '#shared/contract/http/alarms.ts';
+import { alarmColumns, alarmFrom } from './alarm-columns-read-model.ts';
+import type { AlarmRow } from './alarm-row.ts';
+
+type Sort = AlarmsQuery['sort'];
+
+/** A row with the keys it was sorted by. */
+export type ListedAlarm = AlarmRow & { readonly keys: SortKeys };
+
+const priorityRank = sql`case a.priority when 'urgent' then 0 when 'soon' then 1 else 2 end`;
+const waitingRank = sql`case when a.state in ('unacknowledged', 'latched') then 0 when a.state = 'acknowledged' then 1 else 2 end`;
+const raisedMs = sql`(extract(epoch from a.raised_at) * 1000)::float8`;
+
+/** Every order is ascending in its keys, so that a place in the list is one row comparison. */
+const SORT_KEYS: Readonly<Record<Sort, readonly SQL[]>> = {
+  worst: [priorityRank, waitingRank, sql`-${raisedMs}`, sql`a.id::text`],
+  newest: [sql`-${raisedMs}`, sql`a.id::text`],
+  oldest: [raisedMs, sql`a.id::text`],
+  name: [sql`lower(pad.name)`, priorityRank, sql`a.id::text`],
+};
+
+export const SORT_SHAPES: Readonly<Record<Sort, readonly ('number' | 'string')[]>> = {
+  worst: ['number', 'number', 'number', 'string'],
+  newest: ['number', 'string'],
+  oldest: ['number', 'string'],
+  name: ['string', 'number', 'string'],
+};
+
+const SHOWN: Readonly<Record<AlarmsQuery['show'], SQL>> = {
+  open: sql`a.state <> 'normal'`,
+  unacknowledged: sql`a.state in ('unacknowledged', 'returned', 'latched')`,
+  shelved: sql`a.state <> 'normal' and a.shelved_until is not null`,
+  history: sql`a.state = 'normal'`,
+  all: sql`true`,
+};
+
+const like = (text: string) => `%${text.replaceAll(/[\\%_]/g, '\\$&')}%`;
+
+function conditions(query: AlarmsQuery): SQL {
+  const all = [SHOWN[query.show]];
+  if (query.alarmClass !== undefined) all.push(sql`a.alarm_class = ${query.alarmClass}`);
+  if (query.priority !== undefined) all.push(sql`a.priority = ${query.priority}`);
+  if (query.detector !== undefined) all.push(sql`a.detector = ${query.detector}`);
+  if (query.pumpId !== undefined) all.push(sql`a.pump_id = ${query.pumpId}`);
+  if (query.area !== undefined) all.push(sql`pad.area = ${query.area}`);
+  if (query.q !== undefined && query.q !== '') {
+    const pattern = like(query.q);
+    all.push(
+      sql`(pad.name ilike ${pattern} or p.name ilike ${pattern} or pad.street ilike ${pattern} or customer.name ilike ${pattern})`,
+    );
+  }
+  return sql.join(all, sql` and `);
+}
+
+/** One page of alarms and one row more, in the order asked for. */
+export async function listAlarmRows(
+  db: Transaction,
+  query: AlarmsQuery,
+  after: SortKeys | undefined,
+): Promise<ListedAlarm[]> {
+  const keys = sql.join([...SORT_KEYS[query.sort]], sql`, `);
+  const beyond =
+    after === undefined
+      ? sql``
+      : sql` and (${keys}) > (${sql.join(
+          after.map((key) => (typeof key === 'number' ? sql`${key}::float8` : sql`${key}::text`)),
+          sql`, `,
+        )})`;
+  const { rows } = await db.execute<ListedAlarm>(sql`
+    select ${alarmColumns}, json_build_array(${keys}) as keys from ${alarmFrom}
+    where ${conditions(query)}${beyond} order by ${keys} limit ${query.limit + 1}`);
+  return rows;
+}
+
+/** How many open alarms the person may see, by priority, and how many wait for an acknowledgement. */
+export async function countOpenAlarms(db: Transaction): Promise<AlarmPage['totals']> {
+  const { rows } = await db.execute<AlarmPage['totals']>(sql`
+    select count(*) filter (where priority = 'urgent')::int as urgent, count(*) filter (where priority = 'soon')::int as soon,
+      count(*) filter (where priority = 'note')::int as note,
+      count(*) filter (where alarm_class = 'alarm' and state in ('unacknowledged', 'returned', 'latched'))::int as unacknowledged
+    from alarms where state <> 'normal'`);
+  return rows[0] ?? { urgent: 0, soon: 0, note: 0, unacknowledged: 0 };
+}

@@ -1,0 +1,76 @@
+import { and, eq, ne, sql } from 'drizzle-orm';
+import type { Context } from '#server/context.ts';
+import { newId } from '#server/db/new-id.ts';
+import { alarmTransitions } from '#server/db/schema/alarm-transitions.ts';
+import { alarms } from '#server/db/schema/alarms.ts';
+import { notFound } from '#server/errors.ts';
+import type { AlarmRecord, AlarmStep } from '#shared/domain/alarms/alarm-record.ts';
+
+/** The column holds what the alarm state machine wrote, nothing else. */
+const parseRecord = (value: unknown): AlarmRecord => value as AlarmRecord;
+
+export type LockedAlarm = {
+  readonly id: string;
+  readonly pumpId: string;
+  readonly record: AlarmRecord;
+  readonly version: number;
+};
+
+/** An alarm of the person's company, locked until the end of the transaction: the fold waits, or we do. */
+export async function getAlarmForUpdate({ db, actor }: Context, alarmId: string): Promise<LockedAlarm> {
+  const [row] = await db
+    .select({ id: alarms.id, pumpId: alarms.pumpId, record: alarms.record, version: alarms.version })
+    .from(alarms)
+    .where(and(eq(alarms.companyId, actor.companyId), eq(alarms.id, alarmId)))
+    .for('update');
+  if (row === undefined) throw notFound('alarm');
+  return { ...row, record: parseRecord(row.record) };
+}
+
+const toDate = (at: number | null): Date | null => (at === null ? null : new Date(at));
+
+/** Stores what a person did to an alarm, with its transition, and rings for the open screens. */
+export async function saveStep(
+  { db, actor }: Context,
+  alarm: LockedAlarm,
+  { record, transition }: AlarmStep,
+): Promise<void> {
+  if (transition === undefined) return;
+  await db
+    .update(alarms)
+    .set({
+      state: record.state,
+      latched: record.state === 'latched',
+      acknowledgedAt: toDate(record.acknowledgedAt),
+      acknowledgedBy: record.acknowledgedBy,
+      acknowledgementNote: record.acknowledgementNote,
+      record,
+      version: alarm.version + 1,
+    })
+    .where(and(eq(alarms.companyId, actor.companyId), eq(alarms.id, alarm.id)));
+  await db.insert(alarmTransitions).values({
+    id: newId(),
+    companyId: actor.companyId,
+    alarmId: alarm.id,
+    at: new Date(transition.at),
+    kind: transition.kind,
+    byUserId: transition.by,
+    byName: actor.name,
+    note: transition.note,
+    priority: transition.priority,
+    cause: transition.cause,
+    evidence: transition.evidence,
+  });
+  await db.execute(sql`select pg_notify('millrace_live', '')`);
+}
+
+/** Whether another alarm of the same pump and detector is open: two at once cannot be. */
+export async function isOpenAgain({ db, actor }: Context, alarm: LockedAlarm): Promise<boolean> {
+  const { detector } = alarm.record;
+  const sameKey = and(
+    eq(alarms.companyId, actor.companyId),
+    eq(alarms.pumpId, alarm.pumpId),
+    eq(alarms.detector, detector),
+  );
+  return (await db.$count(alarms, and(sameKey, ne(alarms.id, alarm.id), ne(alarms.state, 'normal')))) > 0;
+}

@@ -1,0 +1,26 @@
+import type { Context } from '#server/context.ts';
+import { notFound } from '#server/errors.ts';
+import type { Alarm, AlarmDetail } from '#shared/contract/http/alarms.ts';
+import { findAlarmRow, listMails, listTransitions } from './alarm-detail-read-model.ts';
+import { presentAlarm } from './present-alarm.ts';
+
+/** One alarm as the person may read it. */
+export async function getAlarm({ db, actor }: Context, alarmId: string): Promise<Alarm> {
+  const row = await findAlarmRow(db, alarmId);
+  if (row === undefined) throw notFound('alarm');
+  return presentAlarm(row, actor);
+}
+
+/** One alarm with its life and the mails that told of it; a homeowner reads neither names nor notes of staff. */
+export async function readAlarm(context: Context, alarmId: string): Promise<AlarmDetail> {
+  const alarm = await getAlarm(context, alarmId);
+  const transitions = await listTransitions(context.db, alarmId);
+  const mails = await listMails(context.db, alarmId);
+  const isStaff = context.actor.role !== 'homeowner';
+  return {
+    ...alarm,
+    transitions: isStaff ? transitions : transitions.map((transition) => ({ ...transition, by: null, note: null })),
+    mails,
+    serverNow: context.now,
+  };
+}
