@@ -11,6 +11,8 @@ export type Actor = {
   readonly customerId: string | undefined;
   readonly name: string;
   readonly sessionId: string;
+  /** When their access token ends, ms. */
+  readonly accessUntil: number;
 };
 
 /** What every verb gets: who asks, a transaction in which they see only what is theirs, and the time. */
