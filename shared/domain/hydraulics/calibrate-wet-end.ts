@@ -1,7 +1,8 @@
+import { psiToFeetOfWater } from '#shared/units/pressure.ts';
 import { checkNumbers, type NumberFault } from '../refusal/check-number.ts';
 import { accepted, type Outcome, type Refusal, refused } from '../refusal/refusal.ts';
 import { flowFromHead } from './flow-from-head.ts';
-import { FEET_PER_PSI, type GaugePair, headFromGauges } from './head-from-gauges.ts';
+import { type GaugePair, headFromGauges } from './head-from-gauges.ts';
 import { type MeterError, meterSigmaWatts } from './meter-error.ts';
 import { scalePolynomial } from './polynomial.ts';
 import { headAt, speedRatio, type WetEndCurve, wattsAt, wattsPerGpmAt } from './wet-end-curve.ts';
@@ -36,7 +37,7 @@ export type CalibrationFault =
   | 'readings-contradict-curve';
 
 /** Gauges at a pad are read to about this; common practice. */
-const GAUGE_SIGMA_FEET = 1 * FEET_PER_PSI;
+const GAUGE_SIGMA_FEET = psiToFeetOfWater(1);
 /** With the filter gauge alone the suction side is a guess, in feet; common practice. */
 const SUCTION_GUESS = { feet: 6, sigmaFeet: 4 };
 const FLOW_METER_SHARE = 0.05;

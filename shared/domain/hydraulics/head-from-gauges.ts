@@ -1,6 +1,7 @@
-/** 1 psi of 20 °C water. Source: HI engineering data book conversions, 33.9596 ft and 14.6959 psi to the atmosphere. */
-export const FEET_PER_PSI = 33.9596 / 14.6959;
-/** 1 inch of mercury as feet of 20 °C water; the same source, 29.9213 inHg to the atmosphere. */
+import { psiToFeetOfWater } from '#shared/units/pressure.ts';
+
+/** 1 inch of mercury as feet of 20 °C water; 33.9596 ft and 29.9213 inHg to the atmosphere (HI
+ * engineering data). */
 export const FEET_PER_INCH_OF_MERCURY = 33.9596 / 29.9213;
 
 /**
@@ -11,7 +12,7 @@ export const FEET_PER_INCH_OF_MERCURY = 33.9596 / 29.9213;
  */
 export function feetFromPsi(psi: number, specificGravity = 1): number | undefined {
   if (!Number.isFinite(psi) || !Number.isFinite(specificGravity) || specificGravity <= 0) return undefined;
-  return (psi * FEET_PER_PSI) / specificGravity;
+  return psiToFeetOfWater(psi) / specificGravity;
 }
 
 /** Gauges at the pump's two ports. Vacuum as read, positive under the air's pressure; heights of the gauges in feet. */
@@ -31,6 +32,6 @@ export type GaugePair = {
 export function headFromGauges(gauges: GaugePair): number | undefined {
   const { dischargePsi, suctionInchesOfMercury, dischargeAboveSuctionFeet = 0 } = gauges;
   const feet =
-    dischargePsi * FEET_PER_PSI + suctionInchesOfMercury * FEET_PER_INCH_OF_MERCURY + dischargeAboveSuctionFeet;
+    psiToFeetOfWater(dischargePsi) + suctionInchesOfMercury * FEET_PER_INCH_OF_MERCURY + dischargeAboveSuctionFeet;
   return Number.isFinite(feet) && feet >= 0 ? feet : undefined;
 }

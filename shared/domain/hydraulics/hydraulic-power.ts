@@ -1,10 +1,10 @@
+import { horsepowerToWatts } from '#shared/units/power.ts';
+
 /**
  * US gallons a minute times feet of water, per horsepower. 3956 as in the US pool-pump test procedure (from memory);
  * handbooks also print 3960, 0.10 % apart. Millrace uses 3956 everywhere and mixes neither.
  */
 export const GPM_FEET_PER_HORSEPOWER = 3956;
-/** 1 kW = 1.341022 hp. Source: HI engineering data book, unit conversions. */
-export const WATTS_PER_HORSEPOWER = 745.6999;
 
 /**
  * Hydraulic power in horsepower from flow (gpm) and head (ft): Q·H·SG ÷ 3956. undefined unless all are finite and
@@ -22,7 +22,7 @@ export function hydraulicHorsepower(gpm: number, feet: number, specificGravity =
 /** Hydraulic power in watts; bad input as `hydraulicHorsepower`. @example hydraulicWatts(60, 29.52) // 333.9 */
 export function hydraulicWatts(gpm: number, feet: number, specificGravity = 1): number | undefined {
   const horsepower = hydraulicHorsepower(gpm, feet, specificGravity);
-  return horsepower === undefined ? undefined : horsepower * WATTS_PER_HORSEPOWER;
+  return horsepower === undefined ? undefined : horsepowerToWatts(horsepower);
 }
 
 /**

@@ -1,20 +1,17 @@
 import { describe, expect, it } from 'vitest';
 import { type CalibrationReading, calibrateWetEnd } from '#shared/domain/hydraulics/calibrate-wet-end.ts';
 import { estimateFlow } from '#shared/domain/hydraulics/estimate-flow.ts';
-import {
-  FEET_PER_INCH_OF_MERCURY,
-  FEET_PER_PSI,
-  feetFromPsi,
-  headFromGauges,
-} from '#shared/domain/hydraulics/head-from-gauges.ts';
+import { FEET_PER_INCH_OF_MERCURY, feetFromPsi, headFromGauges } from '#shared/domain/hydraulics/head-from-gauges.ts';
 import { METER_CHECKED } from '#shared/domain/hydraulics/meter-error.ts';
 import { headAt, wattsAt } from '#shared/domain/hydraulics/wet-end-curve.ts';
+import { psiToFeetOfWater } from '#shared/units/pressure.ts';
 import { fitOrFail, POOL_SHEET } from './sample-wet-ends.ts';
 
 const pool = fitOrFail(POOL_SHEET);
 /** The true pump draws 6 per cent more than its sheet. */
 const trueWatts = (gpm: number): number => 8 + 1.06 * ((wattsAt(pool, 3450, gpm) ?? 0) - 8);
-const psiAt = (gpm: number): number => ((headAt(pool, 3450, gpm) ?? 0) - 6 * FEET_PER_INCH_OF_MERCURY) / FEET_PER_PSI;
+const psiAt = (gpm: number): number =>
+  ((headAt(pool, 3450, gpm) ?? 0) - 6 * FEET_PER_INCH_OF_MERCURY) / psiToFeetOfWater(1);
 
 const faultOf = (reading: CalibrationReading): string => {
   const outcome = calibrateWetEnd(pool, reading, METER_CHECKED);
@@ -61,7 +58,7 @@ describe('calibration', () => {
   });
 
   it('uses the filter psi alone with a guess for the suction side, and is less sure of it', () => {
-    const psi = ((headAt(pool, 3450, 80) ?? 0) - 6) / FEET_PER_PSI;
+    const psi = ((headAt(pool, 3450, 80) ?? 0) - 6) / psiToFeetOfWater(1);
     const fromPsi = calibrateWetEnd(
       pool,
       { rpm: 3450, watts: trueWatts(80), measured: { kind: 'psi', psi } },

@@ -1,9 +1,9 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { estimateFlow } from '#shared/domain/hydraulics/estimate-flow.ts';
-import { WATTS_PER_HORSEPOWER } from '#shared/domain/hydraulics/hydraulic-power.ts';
 import { METER_AS_FITTED, METER_CHECKED } from '#shared/domain/hydraulics/meter-error.ts';
 import { wattsAt } from '#shared/domain/hydraulics/wet-end-curve.ts';
+import { horsepowerToWatts } from '#shared/units/power.ts';
 import { fitOrFail, HI_SHEET, POOL_SHEET } from './sample-wet-ends.ts';
 
 const pool = fitOrFail(POOL_SHEET);
@@ -44,11 +44,11 @@ describe('flow from watts', () => {
 
   it('cannot tell where the HI power table peaks and turns over (1000 to 1200 gpm, 46.5 to 48.2 hp)', () => {
     // Source: HI Data Tool, edb table-data/pc-data.csv.
-    const answer = estimateFlow(hi, { rpm: 1780, watts: 47 * WATTS_PER_HORSEPOWER }, METER_CHECKED);
+    const answer = estimateFlow(hi, { rpm: 1780, watts: horsepowerToWatts(47) }, METER_CHECKED);
 
     expect(answer.kind).toBe('cannot-tell');
     expect(['turning-over', 'flat-curve']).toContain(answer.kind === 'cannot-tell' && answer.because);
-    expect(estimateFlow(hi, { rpm: 1780, watts: 25 * WATTS_PER_HORSEPOWER }, METER_CHECKED).kind).toBe('estimate');
+    expect(estimateFlow(hi, { rpm: 1780, watts: horsepowerToWatts(25) }, METER_CHECKED).kind).toBe('estimate');
   });
 
   it('names a curve that turns over, where two flows give the same watts', () => {

@@ -1,7 +1,7 @@
 import { fitWetEnd } from '#shared/domain/hydraulics/fit-wet-end.ts';
-import { WATTS_PER_HORSEPOWER } from '#shared/domain/hydraulics/hydraulic-power.ts';
 import type { WetEndCurve } from '#shared/domain/hydraulics/wet-end-curve.ts';
 import type { WetEndSheet } from '#shared/domain/hydraulics/wet-end-sheet.ts';
+import { horsepowerToWatts } from '#shared/units/power.ts';
 
 /** An invented pool pump: head and watts on smooth curves, 3450 rpm. */
 export const POOL_SHEET: WetEndSheet = {
@@ -29,7 +29,7 @@ export const HI_TABLE = [
 export const HI_SHEET: WetEndSheet = {
   referenceRpm: 1780,
   standbyWatts: 0,
-  points: HI_TABLE.map(([gpm, feet, , horsepower]) => ({ gpm, feet, watts: horsepower * WATTS_PER_HORSEPOWER })),
+  points: HI_TABLE.map(([gpm, feet, , horsepower]) => ({ gpm, feet, watts: horsepowerToWatts(horsepower) })),
 };
 
 export function fitOrFail(sheet: WetEndSheet): WetEndCurve {
