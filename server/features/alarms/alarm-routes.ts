@@ -6,7 +6,7 @@ import { readAlarm } from './read-alarm.ts';
 import { withdrawAcknowledgement } from './withdraw-acknowledgement.ts';
 
 /** Alarms over HTTP. */
-export function mountAlarms(mount: Mount): void {
+export function mountAlarmRoutes(mount: Mount): void {
   mount.person(alarmEndpoints.list, (context, { query }) => listAlarms(context, query));
   mount.person(alarmEndpoints.read, (context, { params }) => readAlarm(context, params.alarmId));
   mount.person(alarmEndpoints.acknowledge, (context, { params, body, ifMatch }) =>

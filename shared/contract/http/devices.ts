@@ -31,6 +31,8 @@ export const CreateDevice = z.object({
   intervalSeconds: z.number().int().min(5).max(60).default(10),
 });
 
+export type CreateDevice = z.infer<typeof CreateDevice>;
+
 /** The secret is shown in this answer and never again. */
 export const DeviceWithSecret = Device.extend({ secret: z.string() });
 

@@ -1,0 +1,2 @@
+export { mountDeviceRoutes } from './device-routes.ts';
+export type { DeviceServices } from './device-services.ts';
