@@ -44,17 +44,14 @@ describe.each(DOCUMENTS)('$name', ({ name, mostLines }) => {
 
   it('names only paths that exist', () => {
     expect(pathsIn(text).filter((path) => !existsSync(join(TOP, path)))).toEqual([]);
-    expect(pathsIn(text).length).toBeGreaterThan(0);
   });
 
   it('names only scripts that exist', () => {
     expect(scriptsIn(text).filter((script) => !scripts.includes(script))).toEqual([]);
-    expect(scriptsIn(text).length).toBeGreaterThan(0);
   });
 
   it('names only variables that a program reads', () => {
     expect(variablesIn(text).filter((word) => !isKnownVariable(word))).toEqual([]);
-    expect(variablesIn(text).length).toBeGreaterThan(0);
   });
 });
 
@@ -66,6 +63,10 @@ describe('the two documents together', () => {
     const ports = ['PORT', 'MQTT_PORT', 'SMTP_PORT', 'PG_PORT', 'MAIL_PAGE_PORT'];
     const known = variablesIn(text).map((word) => word.split('=')[0]);
     expect([...new Set([...taken, ...ports])].filter((variable) => !known.includes(variable))).toEqual([]);
+  });
+
+  it('name paths', () => {
+    expect(pathsIn(text).length).toBeGreaterThan(10);
   });
 
   it('name every script', () => {

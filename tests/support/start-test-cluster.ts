@@ -2,9 +2,7 @@ import pg from 'pg';
 import type { TestProject } from 'vitest/node';
 import { migrateDatabase } from '#server/db/migrate.ts';
 import { type OwnPostgres, startOwnPostgres } from '#tests/support/own-postgres.ts';
-
-export const TEMPLATE = 'millrace_template';
-export const OWNER = { role: 'millrace_owner', password: 'owner-only-for-tests' };
+import { OWNER, TEMPLATE } from '#tests/support/test-owner.ts';
 
 declare module 'vitest' {
   // biome-ignore lint/style/useConsistentTypeDefinitions: only an interface can be widened from outside

@@ -1,6 +1,6 @@
 import pg from 'pg';
 import { inject } from 'vitest';
-import { OWNER, TEMPLATE } from '#tests/support/start-test-cluster.ts';
+import { OWNER, TEMPLATE } from '#tests/support/test-owner.ts';
 
 /** PostgreSQL's code for "that database is already there". */
 const DUPLICATE_DATABASE = '42P04';
