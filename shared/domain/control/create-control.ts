@@ -19,7 +19,7 @@ export const GAP_INTERVALS = 3;
 
 /** Control of one pump: takes readings one by one, in order of time, and answers what the motor should be doing. */
 export type Control = {
-  /** Takes the next reading in; answers the same object every time. A reading not after the last changes nothing. */
+  /** Takes the next reading in; answers the same object every time. One not after the last, or that is no number, changes nothing. */
   push(reading: Reading): ControlAnswer;
   /** The answer after the last reading; undefined before the first. */
   answer(): ControlAnswer | undefined;
@@ -65,7 +65,7 @@ export function createControl(context: PumpContext, saved?: unknown): Control {
   }
 
   function push(reading: Reading): ControlAnswer {
-    if (state.seen && reading.at <= state.at) return answer;
+    if (!Number.isFinite(reading.at + reading.rpm) || (state.seen && reading.at <= state.at)) return answer;
     const standing = reading.rpm <= STANDSTILL_RPM;
     const gap = !state.seen || reading.at - state.at > gapMs;
     if (clockMoved(reading) || gap || mattersToAnswer(reading, standing)) judgement.renew({ reading, standing, gap });

@@ -145,7 +145,7 @@ function primeOf({ context, state }: Known, reading: Reading, baseRpm: number): 
   if (prime === null) return undefined;
   const claimed = reading.reportedSource === 'prime';
   const fits = claimed || fitsSpeed(reading.rpm, prime.rpm);
-  if (!fits && (state.rampOver || fitsSpeed(reading.rpm, baseRpm))) state.assumedSince = null;
+  if (!claimed && (fitsSpeed(reading.rpm, baseRpm) || (!fits && state.rampOver))) state.assumedSince = null;
   const seen = state.standing ? (state.dueSince ?? (claimed ? reading.at : null)) : state.startedAt;
   const since = fits ? (state.assumedSince ?? seen) : seen;
   if (since === null) return undefined;

@@ -29,7 +29,8 @@ export function followMotorClock(state: ControlState, minute: number, at: number
     return false;
   }
   if (!Number.isFinite(doubt)) return false;
-  const offset = Math.round(clockDifference(0, held - doubt));
+  // Of the minute's width that the clock can be off by, the whole number: clocks are set, and shifted, by those.
+  const offset = Math.ceil(clockDifference(wallMinute, minute) - 1e-6) + 0;
   const shifted = heldFor !== null && near(offset, held + heldFor - zoneOffset);
   const agreed = state.doubtedOffset !== null && near(offset, state.doubtedOffset);
   if (state.saidOffset !== null && !shifted && !agreed) {

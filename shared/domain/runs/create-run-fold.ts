@@ -23,8 +23,8 @@ const SETTLED_AFTER_MS = 30_000;
 
 export type RunFold = {
   /**
-   * Takes the next reading in with control's answer to it and, where it is known, the flow (US gpm). A reading not
-   * after the last changes nothing.
+   * Takes the next reading in with control's answer to it and, where it is known, the flow (US gpm). One not after
+   * the last, or that is no number, changes nothing.
    */
   push(reading: Reading, control: ControlAnswer, gpm?: number | undefined): void;
   /** Marks the open run. */
@@ -88,7 +88,8 @@ export function createRunFold(context: PumpContext, saved?: unknown): RunFold {
   }
 
   function push(reading: Reading, control: ControlAnswer, gpm?: number | undefined): void {
-    if (!Number.isFinite(reading.rpm + reading.watts) || !(state.open === null || reading.at > state.at)) return;
+    if (!Number.isFinite(reading.at + reading.rpm + reading.watts) || !(state.open === null || reading.at > state.at))
+      return;
     if (state.open === null) state.open = openRun(reading.at, reading, control);
     else advance(state.open, reading, control, gpm);
     const { open } = state;
@@ -121,7 +122,7 @@ export function createRunFold(context: PumpContext, saved?: unknown): RunFold {
     },
     close(at) {
       const { open } = state;
-      if (open === null || !(at >= state.at)) return;
+      if (open === null || !Number.isFinite(at) || at < state.at) return;
       if (at - state.at > gapMs) return passGap(open, at);
       addInterval(state, state.departure ?? open, {
         at,
