@@ -5,14 +5,18 @@ export type SelectProps<Value extends string> = {
   readonly value: Value;
   readonly options: readonly { readonly value: Value; readonly label: string }[];
   readonly onChange: (value: Value) => void;
+  /** Its values say what it is: the label is for the ear alone. */
+  readonly quiet?: boolean;
 };
 
 /** One of many, with its label in front. */
-export function Select<Value extends string>({ label, value, options, onChange }: SelectProps<Value>) {
+export function Select<Value extends string>({ label, value, options, onChange, quiet = false }: SelectProps<Value>) {
   const id = useId();
   return (
     <span className="inline-flex min-h-8 items-center gap-2 text-ink-2">
-      <label htmlFor={id}>{label}</label>
+      <label htmlFor={id} className={quiet ? 'sr-only' : undefined}>
+        {label}
+      </label>
       <select
         id={id}
         value={value}

@@ -3,7 +3,9 @@ import { type AlarmsQuery, alarmEndpoints } from '#shared/contract/http/alarms.t
 import { call } from '#src/lib/api/api-client.ts';
 
 /** What a list of alarms is narrowed to; every part is in the page's address. */
-export type AlarmFilter = Partial<Omit<AlarmsQuery, 'cursor' | 'limit'>>;
+export type AlarmFilter = {
+  readonly [Part in Exclude<keyof AlarmsQuery, 'cursor' | 'limit'>]?: AlarmsQuery[Part] | undefined;
+};
 
 const KEY = 'alarms';
 

@@ -3,7 +3,9 @@ import { type FleetQuery, pumpEndpoints } from '#shared/contract/http/pumps.ts';
 import { call } from '#src/lib/api/api-client.ts';
 
 /** What the wall is narrowed to; every part is in the page's address. */
-export type FleetFilter = Partial<Omit<FleetQuery, 'cursor' | 'limit'>>;
+export type FleetFilter = {
+  readonly [Part in Exclude<keyof FleetQuery, 'cursor' | 'limit'>]?: FleetQuery[Part] | undefined;
+};
 
 const KEY = 'fleet';
 const TOTALS_EVERY_MS = 30_000;

@@ -2,6 +2,7 @@ import type { InfiniteData } from '@tanstack/react-query';
 import type { FleetPage, PumpLive, PumpRow } from '#shared/contract/http/pumps.ts';
 import type { LiveTable } from '#src/lib/live/live-table.ts';
 import { fleetQueries } from './fleet-queries.ts';
+import { orderNews } from './order-news.ts';
 
 export type FleetPages = InfiniteData<FleetPage, string | undefined>;
 
@@ -17,13 +18,14 @@ export function patchRows(data: FleetPages, news: ReadonlyMap<string, PumpLive>)
   return pages.every((page, index) => page === data.pages[index]) ? data : { ...data, pages };
 }
 
-/** News of pumps changes their rows at once. News of alarms changes counts and, perhaps, the order: see FleetWall. */
+/** News of pumps changes their rows at once. News of alarms changes counts and, perhaps, the order: see use-wall-rows. */
 export const fleetNews: LiveTable = {
   pumps: (client, pumps) => {
     const news = new Map(pumps.map((live) => [live.pumpId, live]));
     client.setQueriesData<FleetPages>({ queryKey: fleetQueries.lists() }, (data) => data && patchRows(data, news));
   },
   alarms: (client) => {
-    void client.invalidateQueries({ queryKey: [...fleetQueries.all(), 'totals'] });
+    void client.invalidateQueries({ queryKey: fleetQueries.totals({}).queryKey.slice(0, 2) });
+    orderNews.set(orderNews.get() + 1);
   },
 };

@@ -10,7 +10,7 @@ type ParamsOf<E extends Endpoint> = E extends { params: infer P extends z.ZodTyp
   ? { readonly params: z.output<P> & Record<string, string> }
   : { readonly params?: undefined };
 type QueryOf<E extends Endpoint> = E extends { query: infer Q extends z.ZodType }
-  ? { readonly query?: Partial<z.output<Q>> }
+  ? { readonly query?: { readonly [Name in keyof z.output<Q>]?: z.output<Q>[Name] | undefined } }
   : { readonly query?: undefined };
 type BodyOf<E extends Endpoint> = E extends { body: infer B extends z.ZodType }
   ? { readonly body: z.input<B> }

@@ -1,4 +1,4 @@
-import { useEffect, useMemo, useRef } from 'react';
+import { useLayoutEffect, useMemo, useRef } from 'react';
 import { useStore } from '#src/hooks/use-store.ts';
 import { createStore } from '#src/lib/store.ts';
 import { themeStore } from '#src/lib/theme.ts';
@@ -43,7 +43,8 @@ export function StripCanvas(props: StripCanvasProps) {
   }, [runs, planned, window, now, tone, topRpm, width, metrics, labelOf, rules]);
 
   // biome-ignore lint/correctness/useExhaustiveDependencies: `fonts` is no input of the drawing, its arrival is a reason to draw again.
-  useEffect(() => {
+  // Before the browser paints or prints: a page on its way to paper must not show last theme's ink.
+  useLayoutEffect(() => {
     const element = canvas.current;
     const context = element?.getContext('2d');
     if (element === null || context === null || context === undefined || width === 0) return;

@@ -33,3 +33,10 @@ export function runAt<Each extends Pick<StripRun, 'from' | 'to'>>(
 ): Each | undefined {
   return runs.find((run) => run.from <= at && at < (run.to ?? Math.max(now, run.from)));
 }
+
+/** The runs behind a strip on their way: `runs` is undefined until they have come. */
+export type StripState = {
+  readonly runs: readonly Run[] | undefined;
+  readonly planned: readonly PlannedRun[];
+  readonly failed: boolean;
+};

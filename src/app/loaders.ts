@@ -1,0 +1,43 @@
+import type { QueryClient } from '@tanstack/react-query';
+import { type LoaderFunctionArgs, redirect } from 'react-router-dom';
+import type { Session } from '#shared/contract/http/session.ts';
+import { parseFleetAddress } from '#src/features/fleet/fleet-address.ts';
+import { fleetQueries } from '#src/features/fleet/fleet-queries.ts';
+import { sessionQuery } from '#src/features/session/session-queries.ts';
+import { ApiError, isApiError } from '#src/lib/api/api-error.ts';
+import { paths } from '#src/lib/paths.ts';
+import { firstPage } from './shell/list-pages.ts';
+
+/** What a page needs before it shows: somebody signed in, in a role the page is for. Its data is only begun here. */
+export function createLoaders(client: QueryClient) {
+  const requireSession = async (request: Request): Promise<Session> => {
+    const { pathname, search } = new URL(request.url);
+    try {
+      return await client.ensureQueryData(sessionQuery());
+    } catch (error) {
+      if (isApiError(error, 'unauthenticated')) throw redirect(paths.signIn(pathname + search));
+      throw error;
+    }
+  };
+  const requireStaff = async (request: Request): Promise<void> => {
+    const { user } = await requireSession(request);
+    if (user.role === 'homeowner') throw new ApiError('forbidden', 'staff only');
+  };
+
+  return {
+    session: async ({ request }: LoaderFunctionArgs) => {
+      await requireSession(request);
+      return null;
+    },
+    first: async ({ request }: LoaderFunctionArgs) => {
+      const { user } = await requireSession(request);
+      return redirect(firstPage(user.role));
+    },
+    fleet: async ({ request }: LoaderFunctionArgs) => {
+      const { filter } = parseFleetAddress(new URL(request.url).searchParams);
+      void client.prefetchInfiniteQuery(fleetQueries.list(filter));
+      await requireStaff(request);
+      return null;
+    },
+  };
+}

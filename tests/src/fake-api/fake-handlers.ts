@@ -1,0 +1,234 @@
+import type { z } from 'zod';
+import { ERROR_STATUS, type ErrorCode } from '#shared/contract/errors.ts';
+import { type Alarm, alarmEndpoints } from '#shared/contract/http/alarms.ts';
+import { changeEndpoints } from '#shared/contract/http/changes.ts';
+import type { Endpoint } from '#shared/contract/http/endpoint.ts';
+import { type PumpDetail, type PumpRow, pumpEndpoints } from '#shared/contract/http/pumps.ts';
+import { sessionEndpoints } from '#shared/contract/http/session.ts';
+import { alarmTitle } from '#shared/domain/wording/alarm-words.ts';
+import { type FakePump, markOf } from './fake-fleet.ts';
+import { readingsOf } from './fake-readings.ts';
+import { broadcast, type FakeState, sessionOf, visiblePumps } from './fake-state.ts';
+
+type Input<E extends Endpoint> = {
+  readonly params: E extends { params: infer P extends z.ZodType } ? z.output<P> : Record<string, never>;
+  readonly query: E extends { query: infer Q extends z.ZodType } ? z.output<Q> : Record<string, never>;
+  readonly body: E extends { body: infer B extends z.ZodType } ? z.output<B> : undefined;
+};
+
+export class FakeRefusal extends Error {
+  readonly code: ErrorCode;
+  constructor(code: ErrorCode) {
+    super(`${ERROR_STATUS[code]} ${code}`);
+    this.code = code;
+  }
+}
+
+export type FakeHandler = { readonly endpoint: Endpoint; readonly answer: (state: FakeState, input: never) => unknown };
+
+/** Ties an answer to its endpoint: what does not fit the contract does not compile. */
+const handle = <E extends Endpoint>(
+  endpoint: E,
+  answer: (state: FakeState, input: Input<E>) => z.input<E['response']>,
+): FakeHandler => ({ endpoint, answer });
+
+const RANK = { urgent: 0, soon: 1, note: 2 } as const;
+
+const rowOf = ({ detail }: FakePump): PumpRow => detail;
+
+const findPump = (state: FakeState, pumpId: string): FakePump => {
+  const pump = visiblePumps(state).find(({ detail }) => detail.pumpId === pumpId);
+  if (pump === undefined) throw new FakeRefusal('not-found');
+  return pump;
+};
+
+const findAlarmed = (state: FakeState, alarmId: string) => {
+  const pump = state.pumps.find(({ alarm }) => alarm?.id === alarmId);
+  if (pump?.alarm === undefined) throw new FakeRefusal('not-found');
+  return { pump, alarm: pump.alarm };
+};
+
+const signIn = (state: FakeState, email: string, password: string) => {
+  const role = email.startsWith('manager')
+    ? 'manager'
+    : email.startsWith('tech')
+      ? 'technician'
+      : email.startsWith('home')
+        ? 'homeowner'
+        : undefined;
+  if (role === undefined || password !== 'millrace-demo') throw new FakeRefusal('unauthenticated');
+  state.role = role;
+  return sessionOf(state, role);
+};
+
+const requireSession = (state: FakeState) => {
+  if (state.role === undefined) throw new FakeRefusal('unauthenticated');
+  return sessionOf(state, state.role);
+};
+
+const FILTERS: Readonly<Record<string, (row: PumpRow) => boolean>> = {
+  running: ({ now }) => (now?.rpm ?? 0) > 40,
+  'on-input': ({ now }) => now?.source === 'input',
+  'prime-trouble': ({ alarm }) => alarm?.detector === 'failed-prime',
+  'off-expected': ({ alarm }) => alarm?.detector === 'wrong-speed' || alarm?.detector === 'stopped',
+  silent: ({ silentSince }) => silentSince !== null,
+  alarm: ({ alarm }) => alarm !== null,
+};
+
+const SORTS: Readonly<Record<string, (a: PumpRow, b: PumpRow) => number>> = {
+  worst: (a, b) => (a.alarm === null ? 3 : RANK[a.alarm.priority]) - (b.alarm === null ? 3 : RANK[b.alarm.priority]),
+  name: (a, b) => a.padName.localeCompare(b.padName),
+  rpm: (a, b) => (b.now?.rpm ?? -1) - (a.now?.rpm ?? -1),
+  watts: (a, b) => (b.now?.watts ?? -1) - (a.now?.watts ?? -1),
+  heard: (a, b) => (b.heardAt ?? 0) - (a.heardAt ?? 0),
+};
+
+function listPumps(state: FakeState, query: Input<typeof pumpEndpoints.list>['query']) {
+  const text = query.q?.toLowerCase() ?? '';
+  const kept = visiblePumps(state)
+    .map(rowOf)
+    .filter((row) => `${row.padName} ${row.customerName} ${row.serial}`.toLowerCase().includes(text))
+    .filter((row) => query.area === undefined || row.area === query.area);
+  const rows = kept
+    .filter((row) => query.filter === undefined || FILTERS[query.filter]?.(row) === true)
+    .filter((row) => query.priority === undefined || row.alarm?.priority === query.priority)
+    .sort(SORTS[query.sort]);
+  const start = Number(query.cursor ?? 0);
+  const count = (filter: (row: PumpRow) => boolean) => kept.filter(filter).length;
+  return {
+    items: rows.slice(start, start + query.limit),
+    nextCursor: start + query.limit < rows.length ? String(start + query.limit) : null,
+    totals: {
+      pumps: kept.length,
+      running: count(({ now }) => (now?.rpm ?? 0) > 40),
+      idle: count(({ now }) => now !== null && now.rpm < 40 && now.expectedRpm < 40),
+      urgent: count(({ alarm }) => alarm?.priority === 'urgent'),
+      soon: count(({ alarm }) => alarm?.priority === 'soon'),
+      note: count(({ alarm }) => alarm?.priority === 'note'),
+      silent: count(({ silentSince }) => silentSince !== null),
+    },
+    matching: rows.length,
+    areas: [...new Set(kept.flatMap(({ area }) => area ?? []))].sort(),
+    serverNow: state.now(),
+  };
+}
+
+const stripOf = (pump: FakePump, from: number, until: number, now: number) => ({
+  pumpId: pump.detail.pumpId,
+  runs: pump.runs.filter((run) => run.from < until && (run.to ?? now) > from),
+  planned: pump.planned.filter((run) => run.to > now && run.from < until).map(({ because: _, ...run }) => run),
+});
+
+function listAlarms(state: FakeState, query: Input<typeof alarmEndpoints.list>['query']) {
+  const open = visiblePumps(state).flatMap(({ alarm }) => alarm ?? []);
+  const shown: Readonly<Record<string, (alarm: Alarm) => boolean>> = {
+    open: ({ state: at }) => at !== 'normal',
+    unacknowledged: ({ acknowledgedAt }) => acknowledgedAt === null,
+    shelved: ({ shelvedUntil }) => shelvedUntil !== null,
+    history: ({ state: at }) => at === 'normal',
+    all: () => true,
+  };
+  const text = query.q?.toLowerCase() ?? '';
+  const items = open
+    .filter((alarm) => shown[query.show]?.(alarm) === true)
+    .filter((alarm) => query.alarmClass === undefined || alarm.alarmClass === query.alarmClass)
+    .filter((alarm) => query.priority === undefined || alarm.priority === query.priority)
+    .filter((alarm) => query.pumpId === undefined || alarm.pumpId === query.pumpId)
+    .filter((alarm) =>
+      `${alarm.padName} ${alarmTitle(alarm.detector, alarm.cause, alarm.evidence)}`.toLowerCase().includes(text),
+    )
+    .sort((a, b) => RANK[a.priority] - RANK[b.priority] || b.from - a.from);
+  const count = (keep: (alarm: Alarm) => boolean) => open.filter(keep).length;
+  return {
+    items: items.slice(0, query.limit),
+    nextCursor: null,
+    totals: {
+      urgent: count(({ priority }) => priority === 'urgent'),
+      soon: count(({ priority }) => priority === 'soon'),
+      note: count(({ priority }) => priority === 'note'),
+      unacknowledged: count(({ acknowledgedAt, alarmClass }) => acknowledgedAt === null && alarmClass === 'alarm'),
+    },
+    serverNow: state.now(),
+  };
+}
+
+/** Changes an alarm and tells every open page, as the real server does. */
+export function changeAlarm(state: FakeState, alarmId: string, change: Partial<Alarm>): Alarm {
+  const { pump, alarm } = findAlarmed(state, alarmId);
+  pump.alarm = { ...alarm, ...change, version: alarm.version + 1 };
+  pump.detail = { ...pump.detail, alarm: markOf(pump.alarm) };
+  state.cursor += 1;
+  const { pumpId, now, heardAt, silentSince } = pump.detail;
+  broadcast(state, {
+    type: 'news',
+    cursor: String(state.cursor),
+    pumps: [{ pumpId, now, heardAt, silentSince, alarm: pump.detail.alarm }],
+    runs: [],
+    alarms: [pump.alarm],
+  });
+  return pump.alarm;
+}
+
+export const FAKE_HANDLERS: readonly FakeHandler[] = [
+  handle(sessionEndpoints.create, (state, { body }) => signIn(state, body.email, body.password)),
+  handle(sessionEndpoints.renew, requireSession),
+  handle(sessionEndpoints.read, requireSession),
+  handle(sessionEndpoints.remove, (state) => {
+    state.role = undefined;
+    return undefined;
+  }),
+  handle(sessionEndpoints.updatePreferences, (state, { body }) => {
+    state.preferences = { ...state.preferences, ...(body as Partial<typeof state.preferences>) };
+    return requireSession(state);
+  }),
+  handle(pumpEndpoints.list, (state, { query }) => listPumps(state, query)),
+  handle(pumpEndpoints.strips, (state, { query }) => ({
+    strips: visiblePumps(state)
+      .filter(({ detail }) => query.pumps.includes(detail.pumpId))
+      .map((pump) => stripOf(pump, query.from, query.until, state.now())),
+    serverNow: state.now(),
+  })),
+  handle(pumpEndpoints.read, (state, { params }): PumpDetail => findPump(state, params.pumpId).detail),
+  handle(pumpEndpoints.runs, (state, { params, query }) => {
+    const { runs, planned } = stripOf(findPump(state, params.pumpId), query.from, query.until, state.now());
+    return { runs, planned };
+  }),
+  handle(pumpEndpoints.readings, (state, { params, query }) =>
+    readingsOf(findPump(state, params.pumpId).runs, query, state.now()),
+  ),
+  handle(alarmEndpoints.list, (state, { query }) => listAlarms(state, query)),
+  handle(alarmEndpoints.read, (state, { params }) => ({
+    ...findAlarmed(state, params.alarmId).alarm,
+    serverNow: state.now(),
+  })),
+  handle(alarmEndpoints.acknowledge, (state, { params, body }) =>
+    changeAlarm(state, params.alarmId, {
+      state: 'acknowledged',
+      acknowledgedAt: state.now(),
+      acknowledgedBy: requireSession(state).user.name,
+      acknowledgementNote: body.note ?? null,
+    }),
+  ),
+  handle(alarmEndpoints.withdrawAcknowledgement, (state, { params }) =>
+    changeAlarm(state, params.alarmId, {
+      state: 'unacknowledged',
+      acknowledgedAt: null,
+      acknowledgedBy: null,
+      acknowledgementNote: null,
+    }),
+  ),
+  handle(changeEndpoints.list, (state) => ({
+    cursor: String(state.cursor),
+    complete: true,
+    pumps: visiblePumps(state).map(({ detail: { pumpId, now, heardAt, silentSince, alarm } }) => ({
+      pumpId,
+      now,
+      heardAt,
+      silentSince,
+      alarm,
+    })),
+    runs: [],
+    alarms: visiblePumps(state).flatMap(({ alarm }) => alarm ?? []),
+    serverNow: state.now(),
+  })),
+];
