@@ -1,14 +1,14 @@
-import { createReadStream, createWriteStream } from 'node:fs';
+import { createReadStream, createWriteStream, type ReadStream } from 'node:fs';
 import { readFile } from 'node:fs/promises';
-import { createInterface } from 'node:readline';
 import type { Writable } from 'node:stream';
 import { finished } from 'node:stream/promises';
 import { parseArgs } from 'node:util';
 import { readPadFile } from '#shared/contract/backtest/pad-file.ts';
 import type { PumpContext } from '#shared/domain/control/pump-context.ts';
 import type { AlarmLine } from './alarm-lines.ts';
-import { createBacktest } from './backtest.ts';
+import { type Backtest, createBacktest } from './backtest.ts';
 import { parseLine } from './parse-line.ts';
+import { readLines } from './read-lines.ts';
 
 const USAGE = 'npm run backtest -- --pads pads.json --readings readings.ndjson [--out alarms.ndjson]';
 
@@ -52,7 +52,7 @@ async function readPads(path: string): Promise<readonly PumpContext[]> {
   return file.pads;
 }
 
-async function openReadings(path: string): Promise<NodeJS.ReadableStream> {
+async function openReadings(path: string): Promise<ReadStream> {
   const stream = createReadStream(path, { highWaterMark: 1 << 20 });
   await new Promise<void>((resolve, reject) => {
     stream.once('open', () => resolve());
@@ -77,31 +77,34 @@ async function write(output: Writable, lines: readonly AlarmLine[]): Promise<voi
   }
 }
 
+function takeLine(backtest: Backtest, text: string, count: { lines: number; faults: number }): void {
+  count.lines += 1;
+  if (text.trim() === '') return;
+  const line = parseLine(text);
+  if (line.kind === 'event') {
+    backtest.take(line.serial, line.event);
+    return;
+  }
+  count.faults += 1;
+  if (count.faults <= NAMED_FAULTS) say(`line ${count.lines} skipped: ${line.reason}`);
+}
+
 async function run(): Promise<void> {
   const files = readArguments();
   const backtest = createBacktest(await readPads(files.pads));
   const readings = await openReadings(files.readings);
   const output = await openOutput(files.out);
-  let number = 0;
-  let faults = 0;
-  for await (const text of createInterface({ input: readings, crlfDelay: Number.POSITIVE_INFINITY })) {
-    number += 1;
-    if (text.trim() === '') continue;
-    const line = parseLine(text);
-    if (line.kind === 'event') {
-      backtest.take(line.serial, line.event);
-    } else {
-      faults += 1;
-      if (faults <= NAMED_FAULTS) say(`line ${number} skipped: ${line.reason}`);
-    }
-    if (number % 4096 === 0) await write(output, backtest.settled());
+  const count = { lines: 0, faults: 0 };
+  for await (const lines of readLines(readings)) {
+    for (const text of lines) takeLine(backtest, text, count);
+    await write(output, backtest.settled());
   }
   await write(output, backtest.end());
   if (output !== process.stdout) await finished(output.end());
-  summarise(number, faults, backtest.count());
+  summarise(count.lines, count.faults, backtest.count());
 }
 
-function summarise(lines: number, faults: number, count: ReturnType<ReturnType<typeof createBacktest>['count']>): void {
+function summarise(lines: number, faults: number, count: ReturnType<Backtest['count']>): void {
   for (const [serial, times] of count.unknownSerials) say(`${times} lines skipped: no pad has serial ${serial}`);
   say(`${lines} lines, ${count.readings} readings folded, ${count.late} late, ${faults} bad lines.`);
 }

@@ -9,7 +9,7 @@ const TELL_TIME_EVERY_MS = 30_000;
 /** How often a pad's outputs are gathered, in its own events: runs are of no interest here. */
 const TAKE_EVERY_EVENTS = 64;
 
-type Pad = { readonly serial: string; readonly fold: PumpFold; waiting: number };
+type Pad = { readonly serial: string; readonly fold: PumpFold; waiting: number; heardAt: number };
 
 export type BacktestCount = { readings: number; late: number; unknownSerials: Map<string, number> };
 
@@ -29,7 +29,7 @@ export type Backtest = {
  */
 export function createBacktest(contexts: readonly PumpContext[]): Backtest {
   const pads = new Map<string, Pad>(
-    contexts.map((context) => [context.pumpId, { serial: context.pumpId, fold: createPumpFold(context), waiting: 0 }]),
+    contexts.map((context) => [context.pumpId, { serial: context.pumpId, fold: createPumpFold(context), waiting: 0, heardAt: Number.NEGATIVE_INFINITY }]),
   );
   const lines = createAlarmLines();
   const count: BacktestCount = { readings: 0, late: 0, unknownSerials: new Map() };
@@ -43,7 +43,10 @@ export function createBacktest(contexts: readonly PumpContext[]): Backtest {
 
   const tellTime = (receivedAt: number): void => {
     for (const pad of pads.values()) {
-      pad.fold.push({ kind: toldAt === undefined ? 'listening' : 'time', receivedAt });
+      // A pad that has just spoken knows the time.
+      if (receivedAt - pad.heardAt >= TELL_TIME_EVERY_MS) {
+        pad.fold.push({ kind: toldAt === undefined ? 'listening' : 'time', receivedAt });
+      }
       gather(pad);
     }
     toldAt = receivedAt;
@@ -59,6 +62,7 @@ export function createBacktest(contexts: readonly PumpContext[]): Backtest {
       }
     }
     pad.fold.push(event);
+    pad.heardAt = event.receivedAt;
     pad.waiting += 1;
     if (pad.waiting >= TAKE_EVERY_EVENTS) gather(pad);
   };

@@ -1,3 +1,4 @@
+import { isJsonObject, type JsonObject } from '#shared/contract/mqtt/json-text.ts';
 import { readReadings } from '#shared/contract/mqtt/readings.ts';
 import { readSettings } from '#shared/contract/mqtt/settings.ts';
 import { readStatus } from '#shared/contract/mqtt/status.ts';
@@ -8,7 +9,7 @@ export type ParsedLine =
   | { readonly kind: 'event'; readonly serial: string; readonly event: PumpEvent }
   | { readonly kind: 'fault'; readonly reason: string };
 
-type Line = Readonly<Record<string, unknown>>;
+type Line = JsonObject;
 
 const fault = (reason: string): ParsedLine => ({ kind: 'fault', reason });
 
@@ -31,10 +32,9 @@ const parseJson = (text: string): unknown => {
  */
 export function parseLine(text: string): ParsedLine {
   const value = parseJson(text);
-  if (typeof value !== 'object' || value === null || Array.isArray(value)) return fault('wants a JSON object');
-  const line: Line = { ...value };
-  if (typeof line.s !== 'string') return fault('wants "s", the serial');
-  return line.t === undefined ? parseNews(line.s, line) : parseReading(line.s, line);
+  if (!isJsonObject(value)) return fault('wants a JSON object');
+  if (typeof value.s !== 'string') return fault('wants "s", the serial');
+  return value.t === undefined ? parseNews(value.s, value) : parseReading(value.s, value);
 }
 
 function parseReading(serial: string, line: Line): ParsedLine {
