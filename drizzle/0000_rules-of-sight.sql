@@ -1,3 +1,7 @@
+-- Names as people sort them: "Pad 4" before "Pad 12".
+CREATE COLLATION millrace_natural (provider = icu, locale = 'und-u-kn-true');
+--> statement-breakpoint
+
 -- Who asks: set for each transaction by the application (set_config(…, true)), empty for everyone else.
 -- STABLE and without parameters, so that a rule evaluates each once a statement.
 

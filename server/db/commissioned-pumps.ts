@@ -70,6 +70,18 @@ export type CommissionedRow = {
 /** A pump without a device is judged by the usual interval. */
 const USUAL_INTERVAL_SECONDS = 10;
 
+const inputsColumn = sql`
+  (select coalesce(jsonb_agg(jsonb_build_object('number', i.number, 'kind', i.kind, 'drives', i.drives,
+      'clock', case when c.id is not null then jsonb_build_object('type', c.type, 'circuit', c.circuit,
+        'trippers', c.trippers, 'opensEarlyMinutes', c.opens_early_minutes) end) order by i.number), '[]')
+    from inputs i left join clocks c on c.id = i.clock_id where i.pump_id = p.id) as inputs`;
+
+const equipmentColumn = sql`
+  (select coalesce(jsonb_agg(jsonb_build_object('kind', e.kind, 'input', e.input_number,
+      'minimumGpm', e.minimum_gpm, 'interlock', e.interlock) order by e.kind, e.id), '[]')
+    from equipment e where e.pad_id = p.pad_id
+      and (e.pump_id = p.id or e.pump_id is null and p.purpose = 'filter')) as equipment`;
+
 /** Columns of CommissionedRow, for a query that selects from `commissionedFrom`. */
 export const commissionedColumns = sql`
   p.id as "pumpId", p.number as "pumpNumber", p.company_id as "companyId", p.pad_id as "padId",
@@ -79,14 +91,7 @@ export const commissionedColumns = sql`
   case when wet.id is not null then jsonb_build_object('referenceRpm', wet.reference_rpm, 'points', wet.points,
     'standbyWatts', wet.standby_watts) end as "wetEnd",
   device.id as "deviceId", device.serial, device.interval_seconds as "intervalSeconds",
-  (select coalesce(jsonb_agg(jsonb_build_object('number', i.number, 'kind', i.kind, 'drives', i.drives,
-      'clock', case when c.id is not null then jsonb_build_object('type', c.type, 'circuit', c.circuit,
-        'trippers', c.trippers, 'opensEarlyMinutes', c.opens_early_minutes) end) order by i.number), '[]')
-    from inputs i left join clocks c on c.id = i.clock_id where i.pump_id = p.id) as inputs,
-  (select coalesce(jsonb_agg(jsonb_build_object('kind', e.kind, 'input', e.input_number,
-      'minimumGpm', e.minimum_gpm, 'interlock', e.interlock) order by e.kind, e.id), '[]')
-    from equipment e where e.pad_id = p.pad_id
-      and (e.pump_id = p.id or e.pump_id is null and p.purpose = 'filter')) as equipment`;
+  ${inputsColumn}, ${equipmentColumn}`;
 
 /** Pumps with their pad and with the motor and the device that are fitted now. */
 export const commissionedFrom = sql`

@@ -1,0 +1,3 @@
+export { findCursor } from './change-read-model.ts';
+export { mountChangeRoutes } from './change-routes.ts';
+export { listChanges } from './list-changes.ts';

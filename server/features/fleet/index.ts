@@ -1,0 +1,1 @@
+export { mountFleetRoutes } from './fleet-routes.ts';
