@@ -1,17 +1,37 @@
 import type { DetectorFactory } from './define-detector.ts';
+import { clockSkew } from './rules/clock-skew.ts';
+import { driveFault } from './rules/drive-fault.ts';
+import { driveHot } from './rules/drive-hot.ts';
+import { energizedWithoutFlow } from './rules/energized-without-flow.ts';
 import { failedPrime } from './rules/failed-prime.ts';
+import { freezing } from './rules/freezing.ts';
 import { inputDisagreement } from './rules/input-disagreement.ts';
+import { keypadHold } from './rules/keypad-hold.ts';
+import { lossOfPrime } from './rules/loss-of-prime.ts';
+import { settingsChanged } from './rules/settings-changed.ts';
 import { silent } from './rules/silent.ts';
+import { slowPrime } from './rules/slow-prime.ts';
 import { stopped } from './rules/stopped.ts';
+import { supplyVoltage } from './rules/supply-voltage.ts';
 import { unexpectedRun } from './rules/unexpected-run.ts';
 import { wrongSpeed } from './rules/wrong-speed.ts';
 
 /** Every rule that the fold of a pump judges; the cause chain sets their order. */
 export const DETECTOR_RULES: readonly DetectorFactory[] = [
-  silent,
-  stopped,
-  unexpectedRun,
+  clockSkew,
+  driveFault,
+  driveHot,
+  energizedWithoutFlow,
   failedPrime,
+  freezing,
   inputDisagreement,
+  keypadHold,
+  lossOfPrime,
+  settingsChanged,
+  silent,
+  slowPrime,
+  stopped,
+  supplyVoltage,
+  unexpectedRun,
   wrongSpeed,
 ];

@@ -3,6 +3,7 @@ import type { MotorSettings } from '../control/motor-settings.ts';
 import type { PadState, PumpContext } from '../control/pump-context.ts';
 import type { PumpEvent } from '../fold/pump-event.ts';
 import type { Reading } from '../readings/reading.ts';
+import type { SettingsKey } from './changed-settings.ts';
 import type { Detector } from './detector.ts';
 import type { InputFacts } from './inputs/input-facts.ts';
 import type { LinkFacts } from './link/link-facts.ts';
@@ -43,6 +44,8 @@ export type Facts = {
   onSiteEndedAt: number;
   /** What the motor says it is set to, as far as it has said. */
   reportedSettings: Partial<MotorSettings>;
+  /** In which of them it differs from what was commissioned. */
+  changedSettings: readonly SettingsKey[];
   /** Whether the reading's speed is due by what the motor says it is set to, where that differs. */
   fitsReported: () => boolean;
   /** Whether a detector's alarm stands. */

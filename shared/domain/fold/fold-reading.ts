@@ -1,6 +1,7 @@
 import { silenceLimitMs } from '../detectors/link/link-tracker.ts';
-import { MINUTE_MS, wallTime } from '../time/local-time.ts';
+import { DAY_MS, MINUTE_MS, weekdayOf } from '../time/local-time.ts';
 import { offsetSpanAt } from '../time/zone-offset.ts';
+import { copyAnswer } from './control-copy.ts';
 import type { PumpEvent } from './pump-event.ts';
 import type { PumpParts } from './pump-parts.ts';
 
@@ -17,7 +18,7 @@ export function foldReading(parts: PumpParts, { reading, single }: PumpEvent & {
   facts.elapsedMs = elapsedMs;
   facts.gap = gap;
   if (reading.reportedSource !== undefined) facts.reportsSource = true;
-  facts.control = control.push(reading);
+  copyAnswer(parts.answer, control.push(reading));
   inputs.read(reading.closedInputs, seen ? previous.closedInputs : undefined, gap);
   load.read(reading, facts.control, gap ? 0 : elapsedMs, gap);
   link.read(reading.at, seen ? previous.at : 0, gap);
@@ -33,9 +34,9 @@ function tellLocalTime({ facts, zone }: PumpParts, at: number): void {
     zone.to = span?.to ?? at;
     zone.offsetMinutes = span?.offsetMinutes ?? 0;
   }
-  const wall = wallTime(at + zone.offsetMinutes * MINUTE_MS);
+  const wallMs = at + zone.offsetMinutes * MINUTE_MS;
   facts.zoneOffsetMinutes = zone.offsetMinutes;
-  facts.localDay = wall.epochDay;
-  facts.localWeekday = wall.weekday;
-  facts.localMinute = wall.minute;
+  facts.localDay = Math.floor(wallMs / DAY_MS);
+  facts.localWeekday = weekdayOf(facts.localDay);
+  facts.localMinute = (wallMs - facts.localDay * DAY_MS) / MINUTE_MS;
 }

@@ -1,6 +1,7 @@
 import { type Control, createControl } from '../control/create-control.ts';
 import type { MotorSettings } from '../control/motor-settings.ts';
 import type { PumpContext } from '../control/pump-context.ts';
+import { listChangedSettings } from '../detectors/changed-settings.ts';
 import { createDetectorBank, type DetectorBank } from '../detectors/detector-bank.ts';
 import type { DetectorParameters } from '../detectors/detector-parameters.ts';
 import { DETECTOR_RULES } from '../detectors/detector-rules.ts';
@@ -11,6 +12,7 @@ import { createLoadTracker, type LoadTracker } from '../detectors/load/load-trac
 import { isRecord, type Json } from '../detectors/plain-state.ts';
 import { createReportedFit } from '../detectors/reported-fit.ts';
 import { createRunFold, type RunFold } from '../runs/create-run-fold.ts';
+import { type ControlCopy, copyAnswer } from './control-copy.ts';
 import { createPadTracker, type PadTracker } from './pad-tracker.ts';
 import { restoreReading, saveReading } from './reading-memory.ts';
 import { CONTROL_BEFORE_READINGS, READING_BEFORE_READINGS } from './resting-facts.ts';
@@ -21,6 +23,8 @@ import { restoreSettings, saveSettings } from './settings-memory.ts';
 export type PumpParts = {
   readonly parameters: DetectorParameters;
   readonly facts: Facts;
+  /** What the facts show as control's answer. */
+  readonly answer: ControlCopy;
   readonly control: Control;
   readonly inputs: InputTracker;
   readonly load: LoadTracker;
@@ -52,6 +56,9 @@ export function createPumpParts(
   const runs = createRunFold(context, hot.runs);
   const bank = createDetectorBank(DETECTOR_RULES, parameters, hot.detectors);
   const before = restoreReading(hot.reading);
+  const answer: ControlCopy = { ...CONTROL_BEFORE_READINGS };
+  const answered = control.answer();
+  if (answered !== undefined) copyAnswer(answer, answered);
   const facts: Facts = {
     kind: 'time',
     now: 0,
@@ -62,7 +69,7 @@ export function createPumpParts(
     elapsedMs: 0,
     gap: false,
     reportsSource: hot.reportsSource === true,
-    control: control.answer() ?? CONTROL_BEFORE_READINGS,
+    control: answer,
     inputs: inputs.facts,
     load: load.facts,
     link: link.facts,
@@ -74,10 +81,12 @@ export function createPumpParts(
     onSite: pad.onSite(),
     onSiteEndedAt: pad.onSiteEndedAt(),
     reportedSettings: restoreSettings(learnt.reported),
+    changedSettings: [],
     fitsReported: () => false,
     stands: bank.stands,
   };
   facts.fitsReported = createReportedFit(facts);
+  facts.changedSettings = listChangedSettings(facts.reportedSettings, context.settings);
   const versionBefore = typeof learnt.version === 'number' ? learnt.version : 0;
   let settingsHeard = 0;
   let kept: { readonly version: number; readonly learnt: Json } | undefined;
@@ -93,6 +102,7 @@ export function createPumpParts(
   return {
     parameters,
     facts,
+    answer,
     control,
     inputs,
     load,
@@ -105,6 +115,7 @@ export function createPumpParts(
     hearSettings: (settings) => {
       const before = JSON.stringify(facts.reportedSettings);
       facts.reportedSettings = { ...facts.reportedSettings, ...settings };
+      facts.changedSettings = listChangedSettings(facts.reportedSettings, context.settings);
       if (JSON.stringify(facts.reportedSettings) !== before) settingsHeard += 1;
     },
     save: () => {

@@ -8,9 +8,13 @@ import { createLearnedBands } from './learned-bands.ts';
 import type { LoadFacts } from './load-facts.ts';
 import { restingLoad } from './load-state.ts';
 import { createPrimeTeacher } from './prime-teacher.ts';
-import { HALFWAY_SHARE, type PrimedWatts, primedWattsAt, ROUGH_SHARE } from './primed-watts.ts';
+import { HALFWAY_SHARE, primedWattsAt, ROUGH_SHARE } from './primed-watts.ts';
 import { forgetSmoothing, raggednessOf, smoothWatts } from './smooth-watts.ts';
 import { endTry, judgeLoad, startTry, type TryLimits } from './track-prime.ts';
+
+const SPEED_STEP_RPM = 20;
+
+type Estimate = Pick<LoadFacts, 'basis' | 'usualRaggedness' | 'unloadedBelow'> & { readonly watts: number };
 
 /** Follows one pump's load: starts, tries to prime, loaded or not, and what the watts of each speed usually are. */
 export type LoadTracker = {
@@ -35,19 +39,24 @@ export function createLoadTracker(context: PumpContext, limits: TryLimits, hot: 
   const teacher = createPrimeTeacher(saved.prime);
   const facts = restingFacts((rpm) => primedWattsAt(rpm, bands, teacher.usual(), context).watts);
   let version = 0;
-  let estimate: PrimedWatts = { watts: 0, basis: 'none' };
-  let estimateRpm = -1;
+  const estimates = new Map<number, Estimate>();
   const bump = (): void => {
     version += 1;
-    estimateRpm = -1;
+    estimates.clear();
   };
 
-  function estimateAt(rpm: number): void {
-    if (Math.abs(rpm - estimateRpm) <= 0.01 * rpm) return;
-    estimate = primedWattsAt(rpm, bands, teacher.usual(), context);
-    estimateRpm = rpm;
-    const band = estimate.basis === 'band' ? bands.find(rpm) : undefined;
-    facts.usualRaggedness = band === undefined || band.median <= 0 ? 0 : (1.4826 * band.mad) / band.median;
+  /** By steps of speed, so that it depends on nothing but the speed and what was learnt. */
+  function estimateAt(measuredRpm: number): Estimate {
+    const rpm = Math.round(measuredRpm / SPEED_STEP_RPM) * SPEED_STEP_RPM;
+    const known = estimates.get(rpm);
+    if (known !== undefined) return known;
+    const { watts, basis } = primedWattsAt(rpm, bands, teacher.usual(), context);
+    const band = basis === 'band' ? bands.find(rpm) : undefined;
+    const usualRaggedness = band === undefined || band.median <= 0 ? 0 : (1.4826 * band.mad) / band.median;
+    const unloadedBelow = basis === 'band' || basis === 'prime' ? HALFWAY_SHARE : ROUGH_SHARE;
+    const estimate = { watts, basis, usualRaggedness, unloadedBelow };
+    estimates.set(rpm, estimate);
+    return estimate;
   }
 
   function run(reading: Reading, control: ControlAnswer, elapsedMs: number, gap: boolean): void {
@@ -57,10 +66,11 @@ export function createLoadTracker(context: PumpContext, limits: TryLimits, hot: 
     }
     if (control.primeEndsAt !== undefined) state.primeEndsAt = control.primeEndsAt;
     smoothWatts(state, reading.at, reading.rpm, reading.watts, elapsedMs);
-    estimateAt(reading.rpm);
+    const estimate = estimateAt(reading.rpm);
     facts.basis = estimate.basis;
     facts.primedWatts = estimate.watts;
-    facts.unloadedBelow = estimate.basis === 'band' || estimate.basis === 'prime' ? HALFWAY_SHARE : ROUGH_SHARE;
+    facts.unloadedBelow = estimate.unloadedBelow;
+    facts.usualRaggedness = estimate.usualRaggedness;
     facts.ratio = estimate.basis === 'none' ? Number.NaN : state.smoothWatts / estimate.watts;
     if (control.rampOver && judgeLoad(state, reading.at, facts.ratio, facts.unloadedBelow) && state.startSeen) bump();
     if (teacher.follow(reading, control, state)) bump();

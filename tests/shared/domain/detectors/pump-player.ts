@@ -168,9 +168,9 @@ export function createPlayer(context: PumpContext = CONTEXT, start = MONDAY, see
       fold = createPumpFold(nextContext, saved);
     },
     raised: (detector: Detector) =>
-      signals.filter((signal) => signal.type === 'raised' && signal.detector === detector),
+      signals.filter((signal) => signal.type === 'raised').filter((signal) => signal.detector === detector),
     cleared: (detector: Detector) =>
-      signals.filter((signal) => signal.type === 'cleared' && signal.detector === detector),
+      signals.filter((signal) => signal.type === 'cleared').filter((signal) => signal.detector === detector),
     /** Class, priority and cause as they stand now; undefined where the alarm does not stand. */
     standing(detector: Detector) {
       const last = signals.filter((signal) => signal.detector === detector).at(-1);

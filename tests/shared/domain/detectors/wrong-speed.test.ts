@@ -28,7 +28,7 @@ describe('wrong-speed', () => {
     ['runs-input-open', { closedInputs: 0, activeInput: 1, rpm: 2850 }],
     ['runs-input-open', { closedInputs: 0, activeInput: 0, rpm: 2850, reportedSource: 'program' as const }],
     ['unknown-speed', { closedInputs: 1, activeInput: 1, rpm: 2600 }],
-    ['derating', { closedInputs: 1, activeInput: 1, rpm: 2600, driveCelsius: 94 }],
+    ['derating', { closedInputs: 1, activeInput: 1, rpm: 2600, driveCelsius: 88 }],
     ['power-limit', { closedInputs: 1, activeInput: 1, rpm: 2600, load: 1.35 }],
   ])('names %s', (cause, scene) => {
     const player = createPlayer();
@@ -73,7 +73,7 @@ describe('wrong-speed', () => {
 
   it('stays silent under noise and at speeds within tolerance', () => {
     const player = createPlayer();
-    player.playUntil(0, 700, (at) => ({ rpm: at % 20_000 === 0 && at > MONDAY + 361 * MINUTE ? 1735 : undefined }));
+    player.playUntil(0, 700, (at) => (at % 20_000 === 0 && at > MONDAY + 365 * MINUTE ? { rpm: 1735 } : {}));
     expect(player.spoken()).toEqual([]);
   });
 });

@@ -1,0 +1,64 @@
+import { defineDetector, type Finding, type Spoken } from '../define-detector.ts';
+import type { RuleParameters } from '../detector-parameters.ts';
+import type { Facts } from '../facts.ts';
+import { ABNORMAL, type Judgement, NORMAL, UNJUDGED } from '../judgement.ts';
+
+type State = { ragged: boolean; dry: boolean };
+type Parameters = RuleParameters<'loss-of-prime'>;
+
+/** Ragged watts are air only where they are also lower than usual. */
+const RAGGED_BELOW = 0.92;
+
+/**
+ * A pump that had load in this run and holds its speed without it, or gulps air. Below 1500 rpm the watts say too
+ * little about the load to judge.
+ */
+function judge(state: State, facts: Facts, parameters: Parameters): Judgement {
+  const { load, control, context } = facts;
+  if (!load.running || load.basis === 'none' || control.rpm < parameters.slowRpm || !control.rampOver) return UNJUDGED;
+  // A model alone cannot tell a lost prime from a pump that differs from it; it may judge the prime, seen from zero.
+  if (!load.primedOnce || (control.offExpected && !facts.stands('loss-of-prime'))) return UNJUDGED;
+  state.dry = load.primed === false;
+  const usual = Math.max(parameters.raggedShare, parameters.raggedTimesUsual * load.usualRaggedness);
+  state.ragged = load.basis === 'band' && !hasRaggedDuty(facts) && load.ratio < RAGGED_BELOW && load.raggedness > usual;
+  if (context.padState === 'drained') return UNJUDGED;
+  return state.dry || state.ragged ? ABNORMAL : NORMAL;
+}
+
+/** Spa jets and features draw air and turn valves by design. */
+function hasRaggedDuty({ context, reading }: Facts): boolean {
+  return context.inputs.some(
+    ({ number, drives }) =>
+      (drives === 'spa' || drives === 'feature') && (reading.closedInputs & (1 << (number - 1))) !== 0,
+  );
+}
+
+function describe(state: State, facts: Facts, _: Parameters, { onset }: Spoken): Finding {
+  const { load, reading, now } = facts;
+  return {
+    cause: state.dry ? 'sudden' : 'ragged',
+    evidence: {
+      rpm: Math.round(reading.rpm),
+      watts: Math.round(load.watts),
+      primedWatts: Math.round(load.primedWatts),
+      loadShare: Math.round(load.ratio * 100) / 100,
+      raggedShare: Math.round(load.raggedness * 100) / 100,
+      knownFrom: load.basis,
+      minutes: Math.round((now - onset) / 60_000),
+    },
+  };
+}
+
+const isSlow = ({ control }: Facts, { fastRpm }: Parameters): boolean => control.rpm < fastRpm;
+
+export const lossOfPrime = defineDetector<'loss-of-prime', State>({
+  detector: 'loss-of-prime',
+  hears: ['reading'],
+  initial: () => ({ ragged: false, dry: false }),
+  judge,
+  delaySeconds: (_, facts, parameters) =>
+    isSlow(facts, parameters) ? parameters.slowDelaySeconds : parameters.delaySeconds,
+  offDelaySeconds: (_, facts, parameters) =>
+    isSlow(facts, parameters) ? parameters.slowOffDelaySeconds : parameters.offDelaySeconds,
+  describe,
+});
