@@ -17,6 +17,9 @@ export function mustInstallNpmPackages(project, needed = []) {
   return needed.some((name) => !existsSync(join(project, 'node_modules', name)));
 }
 
+/** npm tells how to use it at length; what went wrong comes first. */
+const MOST_LINES = 12;
+
 /**
  * Installs exactly what the lock file says.
  *
@@ -30,5 +33,6 @@ export async function installNpmPackages(project, { withTests = false, onLine, s
   const args = [...first, 'ci', '--no-audit', '--no-fund', ...(withTests ? ['--include=dev'] : [])];
   const { code, stderr } = await runCommand(command, args, { cwd: project, onLine, ...(signal ? { signal } : {}) });
   if (code === 0 || signal?.aborted) return;
-  throw refusal(`npm could not install the packages:\n${stderr.trim()}\nWhen the network is back, type: npm start`);
+  const words = stderr.trim().split('\n').slice(0, MOST_LINES).join('\n');
+  throw refusal(`npm could not install the packages. It said:\n${words}`);
 }

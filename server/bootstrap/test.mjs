@@ -18,7 +18,7 @@ import { countResults, needsServices } from './test-arguments.mjs';
 const project = join(dirname(fileURLToPath(import.meta.url)), '..', '..');
 
 /** How long what the tests started may take to notice that they are over, in ms. */
-const GRACE_MS = 15_000;
+const GRACE_MS = 8_000;
 
 /**
  * @param {readonly string[]} args
@@ -51,14 +51,17 @@ await runToTheEnd(async (life) => {
   const runFolder = mkdtempSync(join(tmpdir(), 'millrace-tests-'));
   // PostgreSQL's account passes through it to folders of its own.
   chmodSync(runFolder, 0o711);
+  let summary = '0 passed, 1 failed';
+  // Begun first, so said last, whatever else has to be told.
+  life.atEnd(() => say(summary));
   life.atEnd(async () => {
     const count = await endMarkedProcesses(`MILLRACE_TEST_RUN=${runFolder}`, GRACE_MS);
-    if (count > 0) say(`${count} processes outlived the tests and were ended.`);
+    if (count > 0) say(`${count} ${count === 1 ? 'process' : 'processes'} outlived the tests and had to be ended.`);
     rmSync(runFolder, { recursive: true, force: true });
   });
   const code = await runVitest(args, runFolder, life);
   const report = join(runFolder, 'report.json');
   const { passed, failed } = countResults(existsSync(report) ? readFileSync(report, 'utf8') : undefined, code);
-  say(`${passed} passed, ${failed} failed`);
+  summary = `${passed} passed, ${failed} failed`;
   return failed > 0 ? 1 : 0;
 });

@@ -15,12 +15,15 @@ export type StandInProject = {
   readonly env: Record<string, string>;
   /** Replaces one of the programs. */
   readonly write: (file: string, source: string) => void;
-  readonly run: (script: string, env?: Record<string, string>) => RunningScript;
+  readonly run: (script: string, env?: Record<string, string>, args?: readonly string[]) => RunningScript;
 };
 
 export type RunningScript = {
   readonly process: ChildProcess;
+  /** Everything it said, on both streams as they came. */
   readonly output: () => string;
+  /** What it said on standard output alone. */
+  readonly standardOutput: () => string;
   /** Resolves once the output holds the text; rejects when the program ends without it. */
   readonly says: (text: string) => Promise<void>;
   readonly ended: Promise<number | null>;
@@ -76,7 +79,8 @@ export async function makeStandInProject(): Promise<StandInProject> {
     dataFolder: join(folder, '.data'),
     env,
     write,
-    run: (script, more = {}) => runScript(folder, script, { ...env, ...more }),
+    run: (script, more = {}, args = []) =>
+      runScript(folder, [`server/bootstrap/${script}.mjs`, ...args], { ...env, ...more }),
   };
 }
 
@@ -84,13 +88,13 @@ export function removeStandInProject(project: StandInProject): void {
   rmSync(project.folder, { recursive: true, force: true });
 }
 
-function runScript(folder: string, script: string, env: Record<string, string>): RunningScript {
-  const child = spawn(process.execPath, [`server/bootstrap/${script}.mjs`], {
+function runScript(folder: string, args: readonly string[], env: Record<string, string>): RunningScript {
+  const child = spawn(process.execPath, args, {
     cwd: folder,
     env: { ...process.env, DATABASE_URL: '', ...env },
     stdio: ['ignore', 'pipe', 'pipe'],
   });
-  let output = '';
+  let [output, standardOutput] = ['', ''];
   const ended = new Promise<number | null>((done) => child.on('close', done));
   const says = (text: string) =>
     new Promise<void>((done, fail) => {
@@ -103,7 +107,8 @@ function runScript(folder: string, script: string, env: Record<string, string>):
   for (const stream of [child.stdout, child.stderr]) {
     stream.setEncoding('utf8').prependListener('data', (text: string) => {
       output += text;
+      if (stream === child.stdout) standardOutput += text;
     });
   }
-  return { process: child, output: () => output, says, ended };
+  return { process: child, output: () => output, standardOutput: () => standardOutput, says, ended };
 }
