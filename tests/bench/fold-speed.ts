@@ -8,7 +8,7 @@ import {
   MONDAY,
   primedWatts,
   SETTINGS,
-} from '../shared/domain/detectors/pump-player.ts';
+} from '#tests/shared/domain/detectors/pump-player.ts';
 
 /*
  * How many readings a second the whole fold takes on one core: control, runs and every detector, 10 s cadence, all

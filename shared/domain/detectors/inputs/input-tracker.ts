@@ -1,4 +1,4 @@
-import type { PumpContext } from '../../control/pump-context.ts';
+import type { PumpContext } from '#shared/domain/control/pump-context.ts';
 import type { InputFacts } from './input-facts.ts';
 
 /** Follows the edges of one pump's speed inputs. */

@@ -1,5 +1,5 @@
-import type { PumpContext } from '../../control/pump-context.ts';
-import type { PumpEvent } from '../../fold/pump-event.ts';
+import type { PumpContext } from '#shared/domain/control/pump-context.ts';
+import type { PumpEvent } from '#shared/domain/fold/pump-event.ts';
 import { copyJson, type Json, restoreState } from '../plain-state.ts';
 import type { LinkFacts, Outage } from './link-facts.ts';
 

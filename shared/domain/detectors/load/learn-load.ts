@@ -1,5 +1,5 @@
-import type { ControlAnswer } from '../../control/control-answer.ts';
-import type { Reading } from '../../readings/reading.ts';
+import type { ControlAnswer } from '#shared/domain/control/control-answer.ts';
+import type { Reading } from '#shared/domain/readings/reading.ts';
 import { type LearnedBands, SAME_SPEED_SHARE } from './learned-bands.ts';
 import type { LoadFacts } from './load-facts.ts';
 import type { LoadState } from './load-state.ts';

@@ -1,7 +1,7 @@
-import type { ControlAnswer } from '../../control/control-answer.ts';
-import type { PumpContext } from '../../control/pump-context.ts';
-import { STANDSTILL_RPM } from '../../control/speed-tolerance.ts';
-import type { Reading } from '../../readings/reading.ts';
+import type { ControlAnswer } from '#shared/domain/control/control-answer.ts';
+import type { PumpContext } from '#shared/domain/control/pump-context.ts';
+import { STANDSTILL_RPM } from '#shared/domain/control/speed-tolerance.ts';
+import type { Reading } from '#shared/domain/readings/reading.ts';
 import { copyJson, isRecord, type Json, restoreState } from '../plain-state.ts';
 import { discardLearning, keepLearning, learnReading } from './learn-load.ts';
 import { createLearnedBands } from './learned-bands.ts';

@@ -1,6 +1,6 @@
-import type { ControlAnswer } from '../../control/control-answer.ts';
-import { fitsSpeed } from '../../control/speed-tolerance.ts';
-import type { Reading } from '../../readings/reading.ts';
+import type { ControlAnswer } from '#shared/domain/control/control-answer.ts';
+import { fitsSpeed } from '#shared/domain/control/speed-tolerance.ts';
+import type { Reading } from '#shared/domain/readings/reading.ts';
 import { isRecord, type Json } from '../plain-state.ts';
 import type { LoadState } from './load-state.ts';
 import { weightedMedian } from './watts-sketch.ts';

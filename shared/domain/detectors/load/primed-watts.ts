@@ -1,4 +1,4 @@
-import type { PumpContext } from '../../control/pump-context.ts';
+import type { PumpContext } from '#shared/domain/control/pump-context.ts';
 import type { LearnedBands } from './learned-bands.ts';
 import type { LoadBasis } from './load-facts.ts';
 

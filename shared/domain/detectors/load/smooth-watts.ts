@@ -1,4 +1,4 @@
-import { speedTolerance } from '../../control/speed-tolerance.ts';
+import { speedTolerance } from '#shared/domain/control/speed-tolerance.ts';
 import type { LoadState } from './load-state.ts';
 
 /** Watts are smoothed over this long at one speed, and their spread over four times as long, ms. */

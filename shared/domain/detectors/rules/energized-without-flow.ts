@@ -1,4 +1,4 @@
-import { listClosedInputs } from '../../control/winning-input.ts';
+import { listClosedInputs } from '#shared/domain/control/winning-input.ts';
 import { defineDetector, type Finding, type Spoken } from '../define-detector.ts';
 import { listEnergized } from '../energized-equipment.ts';
 import type { Facts } from '../facts.ts';

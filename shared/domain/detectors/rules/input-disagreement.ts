@@ -1,5 +1,5 @@
-import { fitsSpeed } from '../../control/speed-tolerance.ts';
-import { inputSpeed, isWinningInput, listClosedInputs } from '../../control/winning-input.ts';
+import { fitsSpeed } from '#shared/domain/control/speed-tolerance.ts';
+import { inputSpeed, isWinningInput, listClosedInputs } from '#shared/domain/control/winning-input.ts';
 import { defineDetector, type Finding } from '../define-detector.ts';
 import type { Facts } from '../facts.ts';
 import { ABNORMAL, type Judgement, NORMAL, UNJUDGED } from '../judgement.ts';

@@ -1,6 +1,6 @@
-import { fitsSpeed } from '../../control/speed-tolerance.ts';
-import { inputSpeed } from '../../control/winning-input.ts';
-import { clockDifference } from '../../time/clock-time.ts';
+import { fitsSpeed } from '#shared/domain/control/speed-tolerance.ts';
+import { inputSpeed } from '#shared/domain/control/winning-input.ts';
+import { clockDifference } from '#shared/domain/time/clock-time.ts';
 import { defineDetector, type Finding, type Spoken } from '../define-detector.ts';
 import type { RuleParameters } from '../detector-parameters.ts';
 import type { Facts } from '../facts.ts';

@@ -1,5 +1,5 @@
-import { fitsSpeed } from '../../control/speed-tolerance.ts';
-import { inputSpeed, listClosedInputs } from '../../control/winning-input.ts';
+import { fitsSpeed } from '#shared/domain/control/speed-tolerance.ts';
+import { inputSpeed, listClosedInputs } from '#shared/domain/control/winning-input.ts';
 import type { RuleParameters } from '../detector-parameters.ts';
 import type { Facts } from '../facts.ts';
 

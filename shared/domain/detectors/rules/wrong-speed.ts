@@ -1,5 +1,5 @@
-import { speedTolerance } from '../../control/speed-tolerance.ts';
-import { inputSpeed, listClosedInputs } from '../../control/winning-input.ts';
+import { speedTolerance } from '#shared/domain/control/speed-tolerance.ts';
+import { inputSpeed, listClosedInputs } from '#shared/domain/control/winning-input.ts';
 import { defineDetector, type Finding } from '../define-detector.ts';
 import type { RuleParameters } from '../detector-parameters.ts';
 import type { Facts } from '../facts.ts';
