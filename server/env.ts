@@ -15,7 +15,7 @@ const address = (protocols: string, example: string) =>
 
 /** Every variable of the server and the worker, by its name in the environment. */
 const Variables = z.object({
-  /** `production` forbids the demo. */
+  /** `production` forbids the demo; `development` holds every answer against the contract. */
   NODE_ENV: z.string().optional(),
   /** 1 = the demo company may be made, and its people may sign in with the printed password. */
   MILLRACE_DEMO: z.enum(['0', '1']).default('0'),
@@ -75,6 +75,8 @@ const toEnvironment = (variables: z.output<typeof Variables>) => {
     mailCatcher: { smtpPort: variables.SMTP_PORT, pagePort: variables.MAIL_PAGE_PORT },
     dataFolder: resolve(variables.MILLRACE_DATA),
     logLevel: variables.LOG_LEVEL,
+    /** Whether every answer is held against the contract before it leaves: costly, for those who write the code. */
+    checksAnswers: variables.NODE_ENV === 'development' || variables.NODE_ENV === 'test',
   };
 };
 

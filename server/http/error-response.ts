@@ -1,6 +1,6 @@
-import type { ErrorRequestHandler, RequestHandler, Response } from 'express';
+import type { ErrorRequestHandler, Response } from 'express';
 import type { Logger } from 'pino';
-import { notFound, type RequestError } from '#server/errors.ts';
+import type { RequestError } from '#server/errors.ts';
 import { ERROR_STATUS, PROBLEM_MEDIA_TYPE } from '#shared/contract/errors.ts';
 import { toProblem, toRequestError } from './problem.ts';
 import { requestIdOf } from './request-id.ts';
@@ -25,8 +25,3 @@ function sendProblem(response: Response, refusal: RequestError): void {
     .type(PROBLEM_MEDIA_TYPE)
     .send(JSON.stringify(toProblem(refusal, requestIdOf(response))));
 }
-
-/** Below /api nothing is served that the contract does not name. */
-export const refuseUnknownPath: RequestHandler = () => {
-  throw notFound('endpoint');
-};

@@ -31,7 +31,7 @@ export function toRequestError(error: unknown): RequestError {
 
 export function toProblem(error: RequestError, requestId: string): Problem {
   return {
-    type: `about:blank#${error.code}`,
+    type: `urn:millrace:problem:${error.code}`,
     title: TITLES[error.code],
     status: ERROR_STATUS[error.code],
     detail: error.message,

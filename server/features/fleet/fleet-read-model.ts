@@ -22,7 +22,7 @@ const RANKS: Readonly<Record<FleetQuery['sort'], SQL>> = {
   rpm: sql`-coalesce(rpm, -1)`,
   watts: sql`-coalesce(watts, -1)`,
   // The one not heard for longest first: that is what one sorts by it for.
-  heard: sql`coalesce(heard, 'infinity')`,
+  heard: sql`coalesce(heard, 1e15)`,
 };
 
 const FILTERS: Readonly<Record<NonNullable<FleetQuery['filter']>, SQL>> = {
