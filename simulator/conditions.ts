@@ -31,6 +31,8 @@ export type Conditions = {
   /** A speed nobody set, whenever it would run at another. */
   overrideRpm: number | undefined;
   limitRpm: number | undefined;
+  /** Runs at this speed when nothing calls for any, and says that it is off. */
+  unaskedRpm: number | undefined;
   /** The shaft does not turn although the drive is told to. */
   deadShaft: boolean;
   hotDriveCelsius: number;
@@ -61,6 +63,7 @@ export function createConditions(): Conditions {
     followsLower: false,
     overrideRpm: undefined,
     limitRpm: undefined,
+    unaskedRpm: undefined,
     deadShaft: false,
     hotDriveCelsius: 0,
     supplyShare: 1,

@@ -43,6 +43,7 @@ export function decide(pump: Pump, at: number): void {
 /** The speed the shaft is truly driven at: what was commanded, unless something is wrong. */
 function aimedRpm(pump: Pump, command: Command): number {
   const { conditions, settings } = pump;
+  if (command.source === 'off' && conditions.unaskedRpm !== undefined) return conditions.unaskedRpm;
   if (command.rpm === 0 || conditions.deadShaft) return 0;
   if (command.source === 'prime') return Math.min(command.rpm, conditions.limitRpm ?? command.rpm);
   let rpm = command.rpm;
@@ -66,10 +67,4 @@ function aim(pump: Pump, rpm: number, at: number): void {
   aimShaft(shaft, rpm, spec.drive.rampUp, spec.drive.rampDown, at);
   aimWater(pump.water, spec.suction, pump.conditions.suction, rpm, at, pump.startLuck);
   refreshLoad(pump, at);
-}
-
-/** The water's aim follows at once when somebody changes what is wrong with the suction side. */
-export function disturbWater(pump: Pump, at: number): void {
-  refreshLoad(pump, at);
-  aimWater(pump.water, pump.spec.suction, pump.conditions.suction, pump.shaft.targetRpm, at, pump.startLuck);
 }

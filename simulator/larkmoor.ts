@@ -42,6 +42,7 @@ function describePump(pad: DemoPad, pump: DemoPump): PumpSpec {
     climate: climateOf(pad),
     motorClock: { knowsDaylightSaving: true, survivesCuts: true },
     stopWeekday: pad.stopWeekday,
+    dialsKept: true,
     lived: pad.state === 'open' && pump.purpose === 'filter',
   };
 }

@@ -53,7 +53,7 @@ function unsteadyFill(pump: Pump, at: number): number {
   const shifted = fill + pump.noise.normal() * (suction.gulps === 'ragged' ? 0.16 : 0.025);
   // A vortex at the skimmer comes and goes every quarter of a minute.
   const surging = suction.waterLow ? shifted + 0.16 * Math.sin(at / 2600) : shifted;
-  return surging < 0 ? 0 : surging > 1 ? 1 : surging;
+  return surging < 0 ? 0 : Math.min(surging, 1);
 }
 
 function observeVolts(pump: Pump, at: number): number {

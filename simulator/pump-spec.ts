@@ -52,6 +52,8 @@ export type PumpSpec = {
   readonly motorClock: { readonly knowsDaylightSaving: boolean; readonly survivesCuts: boolean };
   /** The weekday of the route's stop, 1 = Monday to 7; absent = nobody calls regularly. */
   readonly stopWeekday: number | undefined;
+  /** Whether somebody resets its mechanical clocks in the night when the wall clocks change. */
+  readonly dialsKept: boolean;
   /** Whether its household does now and then what households do: vacuums, parties, spa nights. */
   readonly lived: boolean;
 };

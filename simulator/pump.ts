@@ -11,7 +11,7 @@ import { createDirt, type Dirt } from './physics/filter.ts';
 import { createMeter, type Meter } from './physics/meter.ts';
 import type { Water } from './physics/prime.ts';
 import { createShaft, type Shaft } from './physics/shaft.ts';
-import type { PumpSpec } from './pump-spec.ts';
+import type { ContactSpec, PumpSpec } from './pump-spec.ts';
 import { createRandom, type Random } from './random.ts';
 
 /** What turns one input's contact. */
@@ -58,6 +58,12 @@ export type Pump = {
   load: Load;
   linkUp: boolean;
   onSite: boolean;
+  /** Somebody is at it until then; nothing else begins before. */
+  busyUntil: number;
+  /** How many faults stand; while one does, ordinary life keeps its hands off. */
+  troubles: number;
+  /** Called after every event while somebody watches. */
+  readonly watchers: Set<(at: number) => void>;
 };
 
 /** Flow and shaft power at one speed: full of water, and full of air. */
@@ -80,13 +86,7 @@ export function createPump(spec: PumpSpec, zone: Zone, seed: string, from: numbe
       clock:
         contact.clock === undefined
           ? undefined
-          : createTimeClock(
-              contact.clock.type,
-              contact.clock.circuit,
-              contact.clock.trippers,
-              offset + settingError(),
-              from,
-            ),
+          : createContactClock(contact.clock, spec.dialsKept, offset + settingError(), from),
       habit:
         contact.habit === undefined
           ? undefined
@@ -120,7 +120,17 @@ export function createPump(spec: PumpSpec, zone: Zone, seed: string, from: numbe
     load: { rpm: 0, gpm: 0, wetWatts: 0, dryWatts: 0 },
     linkUp: true,
     onSite: false,
+    busyUntil: from,
+    troubles: 0,
+    watchers: new Set(),
   };
+}
+
+/** A clock that reads `offsetMs` from UTC; kept by a careful household, a mechanical one follows daylight saving too. */
+function createContactClock(clock: NonNullable<ContactSpec['clock']>, kept: boolean, offsetMs: number, at: number) {
+  const created = createTimeClock(clock.type, clock.circuit, clock.trippers, offsetMs, at);
+  created.dial.knowsDaylightSaving ||= kept;
+  return created;
 }
 
 /** The week of a motor's own program. */

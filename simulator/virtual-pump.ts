@@ -24,6 +24,8 @@ export type VirtualPump = {
    * and the pump comes to the same state as if somebody had.
    */
   readonly advance: (until: number, emit?: Emit) => void;
+  /** From the next reading on, a steady pump speaks every so many ms. */
+  readonly setCadence: (cadenceMs: number) => void;
 };
 
 /** How often a ramp is looked at, ms. */
@@ -31,7 +33,8 @@ const LOOK_MS = 1000;
 const NEVER = Number.POSITIVE_INFINITY;
 
 /** Runs a pump from event to event, and its device's rule of when to speak. */
-export function createVirtualPump(pump: Pump, cadenceMs: number): VirtualPump {
+export function createVirtualPump(pump: Pump, initialCadenceMs: number): VirtualPump {
+  let cadenceMs = initialCadenceMs;
   let zoneChangeAt = pump.zone.nextChangeAfter(pump.now);
   // Devices do not all speak in the same second.
   let reportAt = pump.now + Math.round(pump.noise.between(0, cadenceMs));
@@ -88,13 +91,22 @@ export function createVirtualPump(pump: Pump, cadenceMs: number): VirtualPump {
 
   return {
     pump,
+    setCadence: (next) => {
+      cadenceMs = next;
+      reportAt = Math.min(reportAt, pump.now + next);
+    },
     advance: (until, emit) => {
       for (;;) {
         const at = nextAt(emit !== undefined);
         if (at > until) break;
         play(at);
-        if (emit !== undefined) tell(at, emit);
-        else if (at >= reportAt) reportAt = at + cadenceMs;
+        if (emit === undefined) {
+          // Nobody watches, so nothing falls due before somebody does.
+          reportAt = Math.max(reportAt, at);
+          continue;
+        }
+        tell(at, emit);
+        for (const watch of pump.watchers) watch(at);
       }
     },
   };

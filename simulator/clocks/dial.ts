@@ -70,3 +70,10 @@ export function startDial(dial: Dial, at: number): void {
 export function passZoneChange(dial: Dial, zone: Zone, at: number): void {
   if (dial.knowsDaylightSaving) moveDial(dial, zone.offsetAt(at) - zone.offsetAt(at - 1000));
 }
+
+/** From now on it gains so much a day, ms (below 0: it loses). */
+export function letDrift(dial: Dial, at: number, driftMsPerDay: number): void {
+  dial.offsetMs = dialMs(dial, at) - at;
+  dial.setAt = at;
+  dial.driftMsPerDay = driftMsPerDay;
+}

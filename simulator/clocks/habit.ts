@@ -1,4 +1,4 @@
-import { createRandom, type Random } from '../random.ts';
+import { createRandom, type Random } from '#simulator/random.ts';
 import type { Zone } from './zone.ts';
 
 /** What closes an input that no clock drives: people in the evening, or the sun on a collector. */

@@ -1,5 +1,5 @@
 import type { DeviceStatus } from '#shared/contract/mqtt/status.ts';
-import { createRandom } from '../random.ts';
+import { createRandom } from '#simulator/random.ts';
 
 /** Who a device says it is: its connections, its boots, and how long it has been up. */
 export type DeviceIdentity = {

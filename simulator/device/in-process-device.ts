@@ -2,7 +2,7 @@ import type { Reading } from '#shared/contract/mqtt/readings.ts';
 import type { MotorSettings } from '#shared/contract/mqtt/settings.ts';
 import type { DeviceStatus } from '#shared/contract/mqtt/status.ts';
 import { MAX_READINGS_PER_MESSAGE } from '#shared/contract/mqtt/wire-limits.ts';
-import type { News } from '../virtual-pump.ts';
+import type { News } from '#simulator/virtual-pump.ts';
 import { createDeviceIdentity } from './device-identity.ts';
 
 /** One message as it reaches a server, at its arrival, ms. */

@@ -1,4 +1,4 @@
-import type { Random } from '../random.ts';
+import type { Random } from '#simulator/random.ts';
 
 /** The error of one device's watt meter: fixed for the device, until somebody checks it with a clamp. */
 export type Meter = { readonly gain: number; readonly offsetWatts: number };

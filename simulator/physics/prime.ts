@@ -37,7 +37,7 @@ const FULL_TARGET = 1.06;
 
 export function waterFill(water: Water, at: number): number {
   const fill = water.target + (water.fill - water.target) * Math.exp(-(at - water.since) / water.tauMs);
-  return fill > 1 ? 1 : fill < 0 ? 0 : fill;
+  return fill > 1 ? 1 : Math.max(fill, 0);
 }
 
 /** Something changed: settle what has happened so far and aim anew. `luck` is this start's own factor on its time. */

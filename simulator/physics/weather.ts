@@ -1,4 +1,4 @@
-import type { Random } from '../random.ts';
+import type { Random } from '#simulator/random.ts';
 
 /** Air temperature of one area: seasons, days, passing fronts, and spells that somebody scripted. */
 export type Climate = {
