@@ -1,3 +1,5 @@
+import { fitsSpeed } from '../control/speed-tolerance.ts';
+
 /** The filter gauge just after cleaning, at one speed. `at` is an instant in ms. */
 export type CleanPressure = { readonly rpm: number; readonly psi: number; readonly at: number };
 
@@ -14,15 +16,10 @@ export type PressureComparison =
   | { readonly kind: 'no-clean-pressure-at-this-speed'; readonly knownRpm: readonly number[] }
   | { readonly kind: 'refused'; readonly field: string; readonly allowed: string };
 
-/** Two speeds are the same within this, as everywhere in the engine. */
-const SAME_SPEED = { rpm: 40, share: 0.02 };
 /** Clean the filter at a rise of a quarter over its clean pressure, or 10 psi; common practice. */
 const DUE = { share: 0.25, psi: 10 };
 /** This far under clean the water is held up before the filter (basket, suction) or the gauge is bad; common practice. */
 const BELOW_SHARE = -0.25;
-
-const isSameSpeed = (left: number, right: number): boolean =>
-  Math.abs(left - right) <= Math.max(SAME_SPEED.rpm, SAME_SPEED.share * Math.max(left, right));
 
 /**
  * Compares a filter pressure (psi, 0 to 100) with the latest clean one at the same speed (rpm); pressure goes with the
@@ -38,7 +35,7 @@ export function compareFilterPressure(clean: readonly CleanPressure[], reading: 
     return { kind: 'refused', field: 'rpm', allowed: 'the speed it was read at, above 0 up to 4000 rpm' };
   const usable = clean.filter(({ psi, rpm, at }) => psi > 0 && psi <= 100 && rpm > 0 && Number.isFinite(at));
   const latest = usable
-    .filter(({ rpm }) => isSameSpeed(rpm, reading.rpm))
+    .filter(({ rpm }) => fitsSpeed(reading.rpm, rpm))
     .reduce<CleanPressure | undefined>((last, one) => (last === undefined || one.at > last.at ? one : last), undefined);
   if (latest === undefined) {
     const knownRpm = [...new Set(usable.map(({ rpm }) => rpm))].sort((left, right) => left - right);
