@@ -11,6 +11,8 @@ import { readings } from '#server/db/schema/readings.ts';
 import { refusedMessages } from '#server/db/schema/refused-messages.ts';
 import { runs } from '#server/db/schema/runs.ts';
 import { asMachine, type Transaction } from '#server/db/transaction.ts';
+import type { AlarmRecord } from '#shared/domain/alarms/alarm-record.ts';
+import { applySignal } from '#shared/domain/alarms/apply-signal.ts';
 import type { Detector, Priority } from '#shared/domain/detectors/detector.ts';
 import type { PumpNow } from '#shared/domain/fold/fold-output.ts';
 
@@ -27,34 +29,35 @@ export type TestAlarm = {
   readonly detector?: Detector;
   readonly priority?: Priority;
   readonly state?: AlarmState;
-  readonly record?: unknown;
 };
+
+/** The record of an alarm as its state machine raises it, put into a state. */
+function recordOf({
+  from = new Date(),
+  detector = 'failed-prime',
+  priority = 'urgent',
+  state,
+}: TestAlarm): AlarmRecord {
+  const [at, cause, evidence] = [from.getTime(), 'air-leak', { primeWatts: 310 }];
+  const raised = { type: 'raised', detector, alarmClass: 'alarm', priority, from: at, at, cause, evidence } as const;
+  const record = applySignal(undefined, raised)?.record;
+  if (record === undefined) throw new Error('a raised signal raises an alarm');
+  return state === undefined ? record : { ...record, state, active: state !== 'normal' && state !== 'returned' };
+}
 
 /** Writes an alarm with its first transition and a mail about it; its id. */
 export function addAlarm(machine: pg.Pool, pumpId: string, alarm: TestAlarm = {}): Promise<string> {
-  const { from = new Date(), detector = 'failed-prime', priority = 'urgent', state = 'unacknowledged' } = alarm;
+  const record = recordOf(alarm);
+  const { detector, priority, state, alarmClass, cause, evidence } = record;
+  const from = new Date(record.from);
   return asMachine(machine, async (db) => {
     const { companyId, padId } = await getPump(db, pumpId);
     const id = newId();
-    const cause = 'air-leak';
-    await db.insert(alarms).values({
-      id,
-      companyId,
-      pumpId,
-      padId,
-      detector,
-      alarmClass: 'alarm',
-      priority,
-      state,
-      cause,
-      evidence: { primeWatts: 310 },
-      fromAt: from,
-      raisedAt: from,
-      record: alarm.record ?? {},
-    });
-    await db
-      .insert(alarmTransitions)
-      .values({ id: newId(), companyId, alarmId: id, at: from, kind: 'raised', priority, cause });
+    const key = { id, companyId, pumpId, padId, detector };
+    const times = { fromAt: from, raisedAt: from };
+    await db.insert(alarms).values({ ...key, ...times, alarmClass, priority, state, cause, evidence, record });
+    const transition = { at: from, kind: 'raised', priority, cause };
+    await db.insert(alarmTransitions).values({ id: newId(), companyId, alarmId: id, ...transition });
     await db.insert(outboxMails).values({
       id: newId(),
       companyId,
