@@ -70,6 +70,7 @@ export function createControl(context: PumpContext, saved?: unknown): Control {
     const gap = !state.seen || reading.at - state.at > gapMs;
     if (clockMoved(reading) || gap || mattersToAnswer(reading, standing)) judgement.renew({ reading, standing, gap });
     if (!state.rampOver) state.rampOver = hasSettled(state, reading, gap);
+    if (state.assumedSince !== null) judgement.review(reading);
     state.seen = true;
     state.at = reading.at;
     state.rpm = reading.rpm;

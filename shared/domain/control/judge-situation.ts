@@ -20,12 +20,16 @@ export type Judgement = {
   due: Decision;
   winner: number;
   toleranceRpm: number;
+  /** What is due but for a prime, rpm. */
+  baseRpm: number;
   primeEndsAt: number | undefined;
   edgeBefore: number | undefined;
   edgeAfter: number | undefined;
   validUntil: number;
   /** Works everything out anew for a reading, and moves the state along. */
   renew(step: Step): void;
+  /** To be called once a reading's ramp is judged. */
+  review(reading: Reading): void;
   /** Makes the next reading work it out anew. */
   expire(): void;
 };
@@ -57,6 +61,7 @@ export function createJudgement(context: PumpContext, state: ControlState): Judg
     due: NOTHING,
     winner: 0,
     toleranceRpm: speedTolerance(0),
+    baseRpm: 0,
     primeEndsAt: undefined,
     edgeBefore: undefined,
     edgeAfter: undefined,
@@ -67,6 +72,7 @@ export function createJudgement(context: PumpContext, state: ControlState): Judg
         { context, state, timeline: timelineAt(step.reading.at), winner: winnerOf(context, step.reading) },
         step,
       ),
+    review: (reading) => reviewAssumption(context, state, reading, judgement.baseRpm),
     expire() {
       judgement.validUntil = Number.NEGATIVE_INFINITY;
     },
@@ -116,6 +122,7 @@ function renew(judgement: Judgement, known: Known, step: Step): void {
   judgement.due = due;
   judgement.winner = winner;
   judgement.toleranceRpm = speedTolerance(due.rpm);
+  judgement.baseRpm = base.rpm;
   judgement.primeEndsAt = due.because.kind === 'prime' ? due.because.endsAt : undefined;
   noteEdges(judgement, timeline, slotIndex, reading.at);
   judgement.validUntil = nextChange(known, primed, slotIndex, reading.at);
@@ -144,14 +151,24 @@ function primeOf({ context, state }: Known, reading: Reading, baseRpm: number): 
   const { prime } = context.settings;
   if (prime === null) return undefined;
   const claimed = reading.reportedSource === 'prime';
-  const fits = claimed || fitsSpeed(reading.rpm, prime.rpm);
-  if (!claimed && (fitsSpeed(reading.rpm, baseRpm) || (!fits && state.rampOver))) state.assumedSince = null;
   const seen = state.standing ? (state.dueSince ?? (claimed ? reading.at : null)) : state.startedAt;
-  const since = fits ? (state.assumedSince ?? seen) : seen;
-  if (since === null) return undefined;
-  if (reading.at < since + (prime.seconds + PRIME_GRACE_SECONDS) * 1000) return { since, claimed };
-  state.assumedSince = null;
-  return undefined;
+  const primes = claimed || (fitsSpeed(reading.rpm, prime.rpm) && !fitsSpeed(reading.rpm, baseRpm));
+  const since = primes ? (state.assumedSince ?? seen) : seen;
+  return since !== null && reading.at < since + longestPrimeMs(prime) ? { since, claimed } : undefined;
+}
+
+function longestPrimeMs({ seconds }: { readonly seconds: number }): number {
+  return (seconds + PRIME_GRACE_SECONDS) * 1000;
+}
+
+/** Gives up the assumption of a missed start once the settled speed, or the time since, speaks against it. */
+function reviewAssumption({ settings }: PumpContext, state: ControlState, reading: Reading, baseRpm: number): void {
+  if (state.assumedSince === null) return;
+  const { prime } = settings;
+  const over = prime === null || reading.at >= state.assumedSince + longestPrimeMs(prime);
+  const elsewhere =
+    fitsSpeed(reading.rpm, baseRpm) || (prime !== null && state.rampOver && !fitsSpeed(reading.rpm, prime.rpm));
+  if (over || (elsewhere && reading.reportedSource !== 'prime')) state.assumedSince = null;
 }
 
 /** The situation with a believed keypad stop or fault; undefined where there is neither. */

@@ -4,7 +4,10 @@ import type { Reading } from '../readings/reading.ts';
 import { createRunFold } from './create-run-fold.ts';
 import type { Run } from './run.ts';
 
-/** What to fold again. `from` and `to` are the `from` of stored runs, ms; without `to` the last run stays open. */
+/**
+ * What to fold again. `from` is what `refoldStart` answers, `to` the `from` of a stored run that stays, ms; without it
+ * the last run stays open.
+ */
 export type Stretch = {
   readonly from: number;
   readonly to?: number | undefined;
