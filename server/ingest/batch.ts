@@ -77,23 +77,20 @@ function toInput(arrivals: readonly Arrival[], firstPlaces: readonly number[]): 
   return { readingCount, readings: columns.toParameters(), rest };
 }
 
+/** A message that left nothing new behind is nothing to the fold. */
 function toStoredMessage(
   { device, receivedAt, decoded }: Arrival,
   base: number,
   firstPlace: number,
   stored: ReadonlySet<number> | undefined,
 ): StoredMessage | undefined {
-  const { readings, status, settings, single } = decoded;
-  const rows = countRows(decoded);
-  if (device.pump === undefined || rows === 0) return undefined;
-  const kept = stored === undefined ? readings : readings.filter((_, index) => stored.has(firstPlace + index));
-  return {
-    pumpId: device.pump.id,
-    receivedAt,
-    sequence: base + firstPlace + rows - 1,
-    single,
-    readings: kept,
-    status,
-    settings,
-  };
+  const { status, settings, single } = decoded;
+  if (device.pump === undefined) return undefined;
+  const isEvent = status !== undefined || settings !== undefined;
+  const isKept = (index: number) => stored === undefined || stored.has(firstPlace + index);
+  const readings = stored === undefined ? decoded.readings : decoded.readings.filter((_, index) => isKept(index));
+  if (readings.length === 0 && !isEvent) return undefined;
+  const lastIndex = isEvent ? 0 : decoded.readings.findLastIndex((_, index) => isKept(index));
+  const sequence = base + firstPlace + lastIndex;
+  return { pumpId: device.pump.id, receivedAt, sequence, single, readings, status, settings };
 }

@@ -1,3 +1,5 @@
+import { encodeSettings } from '#shared/contract/mqtt/settings.ts';
+import { encodeStatus } from '#shared/contract/mqtt/status.ts';
 import { quoteElement } from './array-literal.ts';
 import type { Arrival } from './arrival.ts';
 
@@ -27,11 +29,14 @@ export function toEventParameters(rows: readonly EventRow[]): string[] {
   ];
 }
 
-/** The event of an arrival as a row; undefined when it has none. */
+/**
+ * The event of an arrival as a row; undefined when it has none. It is kept in the wire's own form, without what was
+ * refused of it, and read back by the wire's own decoder.
+ */
 export function findEventRow({ device, receivedAt, decoded }: Arrival, place: number): EventRow | undefined {
-  const { status, settings } = decoded;
-  if (status === undefined && settings === undefined) return undefined;
   const { companyId, deviceId, pump } = device;
-  const kind = status === undefined ? 'settings' : 'status';
-  return { place, companyId, deviceId, pumpId: pump?.id, kind, receivedAt, body: JSON.stringify(status ?? settings) };
+  const whose = { place, companyId, deviceId, pumpId: pump?.id, receivedAt };
+  if (decoded.status !== undefined) return { ...whose, kind: 'status', body: encodeStatus(decoded.status) };
+  if (decoded.settings !== undefined) return { ...whose, kind: 'settings', body: encodeSettings(decoded.settings) };
+  return undefined;
 }

@@ -56,7 +56,9 @@ export function createIngest(options: IngestOptions): Ingest {
       },
       onUnstorable: ({ device }, error) => options.log.error({ err: error, serial: device.serial }, 'message given up'),
       onUncertain: (arrivals, error) => {
-        options.log.warn({ err: error, messages: arrivals.length }, 'storing readings failed, trying again');
+        if (error !== undefined) {
+          options.log.warn({ err: error, messages: arrivals.length }, 'storing readings failed, trying again');
+        }
         options.onUncertain([...new Set(arrivals.flatMap(({ device }) => device.pump?.id ?? []))]);
       },
     }),

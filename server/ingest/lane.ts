@@ -10,7 +10,7 @@ export type LaneOptions = StoreArrivalsOptions & {
   readonly decode: (message: DeviceMessage, settle: Settle) => Arrival | undefined;
   /** What was committed, in order, just before it is acknowledged. */
   readonly onStored: (messages: readonly StoredMessage[]) => void;
-  /** The database did not say whether it stored these. */
+  /** The database did not say whether it stored these; `error` is undefined once it has them for certain. */
   readonly onUncertain: (arrivals: readonly Arrival[], error: unknown) => void;
   readonly now: () => number;
 };
@@ -87,9 +87,11 @@ export function createLane(options: LaneOptions): Lane {
 async function storeAndSettle(options: LaneOptions, batch: Batch): Promise<void> {
   const { arrivals } = batch;
   const oldest = Math.min(...arrivals.map(({ receivedAt }) => receivedAt));
-  for (;;) {
+  for (let failures = 0; ; failures += 1) {
     try {
       const stored = await storeArrivals(options, batch);
+      // What an earlier try stored unheard was old news to this one.
+      if (failures > 0) options.onUncertain(arrivals, undefined);
       options.onStored(stored);
       for (const { settle } of arrivals) settle();
       return;

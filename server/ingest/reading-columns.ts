@@ -1,11 +1,9 @@
 import { type Reading, SOURCES, type Source } from '#shared/domain/readings/reading.ts';
 import { createColumnText } from './array-literal.ts';
+import { SINGLE_FLAG } from './reading-row.ts';
 
 /** How the source is stored: its place in the list. */
 const SOURCE_PLACES: ReadonlyMap<Source, number> = new Map(SOURCES.map((source, place) => [source, place]));
-
-/** Bit 0 of a stored reading's flags: it came alone in its message. */
-export const SINGLE_FLAG = 1;
 
 /** The readings of a batch, column by column, in the order of the insert statement. */
 export type ReadingColumns = {

@@ -6,7 +6,7 @@ import type { Reading } from '#shared/domain/readings/reading.ts';
 export type StoredMessage = {
   readonly pumpId: string;
   readonly receivedAt: number;
-  /** Arrival sequence of its last row. */
+  /** Arrival sequence of its last new row. */
   readonly sequence: number;
   readonly single: boolean;
   /** Those that were new. */

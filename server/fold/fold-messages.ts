@@ -1,0 +1,33 @@
+import type { StoredMessage } from '#server/ingest/stored-message.ts';
+import type { PumpEvent } from '#shared/domain/fold/pump-event.ts';
+import { eventsOfMessage } from './events-of-message.ts';
+import type { FoldContext } from './fold-context.ts';
+import { feedSlot, type PumpSlot } from './pump-slot.ts';
+import { quarantine, saveTouched } from './save-touched.ts';
+
+/** Folds messages that were stored a moment ago, and commits what came of them in one transaction. */
+export async function foldMessages(context: FoldContext, messages: readonly StoredMessage[]): Promise<void> {
+  const touched = new Set<PumpSlot>();
+  for (const message of messages) {
+    const slot = context.slots.find(message.pumpId);
+    // What is behind reads this message from the database, in its turn.
+    if (slot === undefined || slot.mode !== 'live' || message.sequence <= slot.cursor) continue;
+    if (await feedAll(context, slot, eventsOfMessage(message), message.sequence)) touched.add(slot);
+  }
+  await saveTouched(context, touched);
+}
+
+async function feedAll(
+  context: FoldContext,
+  slot: PumpSlot,
+  events: readonly PumpEvent[],
+  sequence: number,
+): Promise<boolean> {
+  try {
+    for (const event of events) feedSlot(slot, event, sequence);
+    return true;
+  } catch (error) {
+    await quarantine(context, slot, error);
+    return false;
+  }
+}

@@ -1,0 +1,38 @@
+import { type AlarmRecord, type AlarmTransition, isAnnounced } from '#shared/domain/alarms/alarm-record.ts';
+
+/** Why a mail is written: `escalated` goes to the managers, everything else to the technician. */
+export type Announcement = {
+  readonly reason: 'raised' | 'raised-again' | 'worse' | 're-alarmed' | 'shelf-ended' | 'escalated';
+  /** Names the change among all of the alarm: with the address it makes a mail unique. */
+  readonly transition: string;
+};
+
+const REASONS: Partial<Record<AlarmTransition['kind'], Announcement['reason']>> = {
+  raised: 'raised',
+  'raised-again': 'raised-again',
+  're-alarmed': 're-alarmed',
+  'shelf-ended': 'shelf-ended',
+  escalated: 'escalated',
+};
+
+/**
+ * The one mail that an alarm's changes of a moment are worth: the last change that asks somebody to do something, while
+ * the condition holds. Notes wait for the work list, and what is shelved, suppressed or out of service calls nobody.
+ */
+export function chooseAnnouncement(
+  record: AlarmRecord,
+  transitions: readonly AlarmTransition[],
+): Announcement | undefined {
+  const calls = record.alarmClass === 'alarm' && record.priority !== 'note';
+  if (!calls || !record.active || record.state === 'acknowledged' || !isAnnounced(record)) return undefined;
+  for (const transition of transitions.toReversed()) {
+    const reason = reasonOf(record, transition);
+    if (reason !== undefined) return { reason, transition: `${transition.kind} ${transition.at}` };
+  }
+  return undefined;
+}
+
+function reasonOf(record: AlarmRecord, { kind, at }: AlarmTransition): Announcement['reason'] | undefined {
+  // A change that asks for a new acknowledgement restarts the wait.
+  return kind === 'changed' && record.waitingSince === at ? 'worse' : REASONS[kind];
+}
