@@ -5,7 +5,7 @@ import { canReach, giveTo } from './account.mjs';
 import { refusal, say } from './say.mjs';
 
 /** The file that says a folder is ours: nothing is ever deleted without it. */
-const MARKER = 'millrace-data-folder.txt';
+export const MARKER = 'millrace-data-folder.txt';
 
 /** A Unix socket's address holds 108 bytes with its closing zero (unix(7)). */
 const LONGEST_SOCKET_PATH = 107;

@@ -44,6 +44,7 @@ export function followSignals(signals = process) {
   for (const name of ['SIGINT', 'SIGTERM', 'SIGHUP']) {
     signals.on(name, () => requestStop(`\nStopping (${name}); once more to hurry.`));
   }
+  watchNpm(requestStop);
   return {
     stopping: stop.signal,
     hurry: hurry.signal,
@@ -61,6 +62,26 @@ export function followSignals(signals = process) {
       }
     },
   };
+}
+
+/** How often we look whether npm is still there, in ms. */
+const LOOK_EVERY_MS = 500;
+
+/**
+ * Under npm, which passes TERM on but not its own death by force, a new parent means that npm is gone and with it
+ * whoever could stop us. Started without npm, we may outlive the shell we came from.
+ *
+ * @param {(text: string) => void} requestStop
+ */
+function watchNpm(requestStop) {
+  if (!process.env.npm_lifecycle_event) return;
+  const parent = process.ppid;
+  const timer = setInterval(() => {
+    if (process.ppid === parent) return;
+    clearInterval(timer);
+    requestStop('\nStopping: npm is gone.');
+  }, LOOK_EVERY_MS);
+  timer.unref();
 }
 
 /**

@@ -1,8 +1,8 @@
 /** `npm run reset`: the demo as on its first day. Whatever runs is stopped first. */
-import { rmSync } from 'node:fs';
+import { readdirSync, rmSync } from 'node:fs';
 import { dirname, join } from 'node:path';
 import { stopCluster } from './cluster.mjs';
-import { findDatabaseFolder, isOurs } from './data-folder.mjs';
+import { findDatabaseFolder, isOurs, MARKER } from './data-folder.mjs';
 import { findLockHolder, takeInstanceLock } from './instance-lock.mjs';
 import { runToTheEnd } from './lifecycle.mjs';
 import { endOrphans } from './orphans.mjs';
@@ -12,6 +12,9 @@ import { readSettings } from './settings.mjs';
 
 /** How long a running demo may take to stop, in ms: every program its grace, and PostgreSQL its own. */
 const STOP_WITHIN_MS = 90_000;
+
+/** What a reset leaves: whose folder it is, and what went on before. */
+const KEPT = [MARKER, 'logs'];
 
 /** @param {string} dataFolder */
 async function stopWhatRuns(dataFolder) {
@@ -28,7 +31,7 @@ async function stopWhatRuns(dataFolder) {
 }
 
 /** @param {string} dataFolder */
-async function deleteDatabase(dataFolder) {
+async function deleteData(dataFolder) {
   const folder = findDatabaseFolder(dataFolder);
   if (folder !== undefined) {
     await stopCluster(join(folder, 'data'), { graceMs: 5_000 });
@@ -36,8 +39,9 @@ async function deleteDatabase(dataFolder) {
     if (isOutside && !isOurs(dirname(folder))) throw refusal(`${folder} is not Millrace's; nothing was deleted.`);
     rmSync(isOutside ? dirname(folder) : folder, { recursive: true, force: true });
   }
-  for (const file of ['database-folder.txt', 'secrets.json', 'children.json'])
-    rmSync(join(dataFolder, file), { force: true });
+  for (const name of readdirSync(dataFolder).filter((name) => !KEPT.includes(name))) {
+    rmSync(join(dataFolder, name), { recursive: true, force: true });
+  }
 }
 
 await runToTheEnd(async () => {
@@ -45,6 +49,6 @@ await runToTheEnd(async () => {
   if (databaseUrl) throw refusal("DATABASE_URL is set: that is a company's database, and only the demo can be reset.");
   if (!isOurs(dataFolder)) throw refusal(`There is no demo in ${dataFolder}; nothing was deleted. Type: npm start`);
   await stopWhatRuns(dataFolder);
-  await deleteDatabase(dataFolder);
+  await deleteData(dataFolder);
   say('The demo is gone. Type: npm start   for a new one.');
 });

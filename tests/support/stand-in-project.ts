@@ -16,6 +16,8 @@ export type StandInProject = {
   /** Replaces one of the programs. */
   readonly write: (file: string, source: string) => void;
   readonly run: (script: string, env?: Record<string, string>, args?: readonly string[]) => RunningScript;
+  /** The same through npm, as a person types it. */
+  readonly runByNpm: (script: string) => RunningScript;
 };
 
 export type RunningScript = {
@@ -80,7 +82,8 @@ export async function makeStandInProject(): Promise<StandInProject> {
     env,
     write,
     run: (script, more = {}, args = []) =>
-      runScript(folder, [`server/bootstrap/${script}.mjs`, ...args], { ...env, ...more }),
+      runCommand(folder, [process.execPath, `server/bootstrap/${script}.mjs`, ...args], { ...env, ...more }),
+    runByNpm: (script) => runCommand(folder, ['npm', 'run', script], env),
   };
 }
 
@@ -88,8 +91,9 @@ export function removeStandInProject(project: StandInProject): void {
   rmSync(project.folder, { recursive: true, force: true });
 }
 
-function runScript(folder: string, args: readonly string[], env: Record<string, string>): RunningScript {
-  const child = spawn(process.execPath, args, {
+function runCommand(folder: string, command: readonly string[], env: Record<string, string>): RunningScript {
+  const [program = '', ...args] = command;
+  const child = spawn(program, args, {
     cwd: folder,
     env: { ...process.env, DATABASE_URL: '', ...env },
     stdio: ['ignore', 'pipe', 'pipe'],

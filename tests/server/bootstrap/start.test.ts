@@ -148,6 +148,23 @@ describe('an end', () => {
   });
 });
 
+describe('npm start', () => {
+  it.each([
+    ['TERM, which npm passes on', 'SIGTERM'],
+    ['the death of npm by force', 'SIGKILL'],
+  ] as const)('stops everything at %s', async (_what, signal) => {
+    const running = project.runByNpm('start');
+    started.push(running);
+    await running.says(RUNNING);
+    const children = recordedChildren();
+    running.process.kill(signal);
+    // Its output closes with the last of those who write to it, the start program.
+    await running.ended;
+    expect(children.some(isStillRunning)).toBe(false);
+    expect(findRunningServer(databaseFolder())).toBeUndefined();
+  });
+});
+
 describe('a start program that is killed', () => {
   it('takes its programs with it and leaves a database that the next start takes over', async () => {
     const killed = await startToTheEnd();
