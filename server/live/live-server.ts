@@ -64,7 +64,10 @@ export function startLiveServer(server: Server, needs: LiveNeeds): LiveServer {
 
   const onUpgrade = (request: IncomingMessage, socket: Duplex, head: Buffer): void => {
     socket.on('error', () => socket.destroy());
-    if (new URL(request.url ?? '/', 'http://localhost').pathname !== LIVE_PATH) return refuse(socket, '404 Not Found');
+    if (new URL(request.url ?? '/', 'http://localhost').pathname !== LIVE_PATH) {
+      refuse(socket, '404 Not Found');
+      return;
+    }
     accept(request, socket, head).catch((err) => {
       needs.log.warn({ err }, 'a live connection was refused');
       refuse(socket, '503 Service Unavailable');
