@@ -2,7 +2,12 @@ import { checkNumber, checkNumbers, type NumberFault, type NumberRule } from '..
 import type { Refusal } from '../refusal/refusal.ts';
 import type { MotorSettings, MotorTraits, ProgramEntry } from './motor-settings.ts';
 
-export type SettingsFault = NumberFault | 'input-beyond-model' | 'not-seven-days' | 'no-length' | 'least-over-most';
+export type MotorSettingsFault =
+  | NumberFault
+  | 'input-beyond-model'
+  | 'not-seven-days'
+  | 'no-length'
+  | 'least-over-most';
 
 /** No motor in the trade is set beyond this, rpm (the wire's own bound). */
 const HIGHEST_RPM = 4000;
@@ -18,7 +23,7 @@ const FREEZE_CELSIUS: NumberRule = { field: 'freeze.celsius', unit: '°C', least
  * @example checkMotorSettings({ ...settings, inputs: [2850, 2400, null, 1800] }, DEFAULT_TRAITS)
  * // [{ reason: 'input-beyond-model', field: 'inputs[3]', allowed: 'no speed: the model has inputs 1 to 3' }]
  */
-export function checkMotorSettings(settings: MotorSettings, traits: MotorTraits): Refusal<SettingsFault>[] {
+export function checkMotorSettings(settings: MotorSettings, traits: MotorTraits): Refusal<MotorSettingsFault>[] {
   const limits = checkLimits(settings);
   // Against limits that are wrong themselves every speed would be wrong too.
   const speed = (field: string): NumberRule =>
@@ -38,7 +43,7 @@ export function checkMotorSettings(settings: MotorSettings, traits: MotorTraits)
   ];
 }
 
-function checkLimits({ minRpm, maxRpm }: MotorSettings): Refusal<SettingsFault>[] {
+function checkLimits({ minRpm, maxRpm }: MotorSettings): Refusal<MotorSettingsFault>[] {
   const bounds = { unit: 'rpm', least: 1, most: HIGHEST_RPM };
   const faults = [
     ...checkNumber(minRpm, { ...bounds, field: 'minRpm' }),
@@ -53,7 +58,7 @@ function checkInput(
   index: number,
   traits: MotorTraits,
   rule: NumberRule,
-): Refusal<SettingsFault>[] {
+): Refusal<MotorSettingsFault>[] {
   if (rpm === null) return [];
   if (index < traits.inputCount) return checkNumber(rpm, rule);
   const allowed =
@@ -65,8 +70,8 @@ function checkProgramEntry(
   { days, fromMinute, toMinute, rpm }: ProgramEntry,
   field: string,
   speed: (field: string) => NumberRule,
-): Refusal<SettingsFault>[] {
-  const faults: Refusal<SettingsFault>[] = [
+): Refusal<MotorSettingsFault>[] {
+  const faults: Refusal<MotorSettingsFault>[] = [
     ...checkNumber(fromMinute, { field: `${field}.fromMinute`, unit: 'min', least: 0, most: 1439, whole: true }),
     ...checkNumber(toMinute, { field: `${field}.toMinute`, unit: 'min', least: 1, most: 1440, whole: true }),
     ...checkNumber(rpm, speed(`${field}.rpm`)),

@@ -72,7 +72,7 @@ export const ENGLISH_MESSAGES = {
   'short.fault.code': 'drive fault {code}',
   'short.stop': 'keypad stop',
   'short.no-data': 'no data',
-  'short.unknown': 'runs {rpm}, nobody knows why',
+  'short.unknown': 'runs {rpm}, cause unknown',
   'short.differs.input': 'input {input} closed, {does}',
   'short.differs.program': '{part} program due, {does}',
   'short.differs.off': 'nothing due, {does}',

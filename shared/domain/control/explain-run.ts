@@ -42,7 +42,7 @@ function becauseOf(run: Run, decision: Decision, { settings }: ExplainContext): 
       return { kind: 'input', input: run.activeInput, others };
     }
     case 'program':
-      return decision.because.kind === 'program' ? decision.because : { kind: 'unknown' };
+      return decision.because.kind === 'program' ? decision.because : entryAt(run.expectedRpm, settings);
     case 'prime':
       return { kind: 'prime', endsAt: run.from + (settings.prime?.seconds ?? 0) * 1000, next: decision.source };
     case 'timed':
@@ -52,6 +52,14 @@ function becauseOf(run: Run, decision: Decision, { settings }: ExplainContext): 
     default:
       return { kind: run.expectedSource };
   }
+}
+
+/** The entry of that speed, where the clock no longer says which: the program may have been changed since. */
+function entryAt(rpm: number, { program }: ExplainContext['settings']): Because {
+  const index = program.findIndex((entry) => entry.rpm === rpm);
+  const entry = program[index];
+  if (entry === undefined) return { kind: 'unknown' };
+  return { kind: 'program', entry: index, fromMinute: entry.fromMinute, toMinute: entry.toMinute };
 }
 
 function untilOf(run: Run, decision: Decision): number | undefined {
