@@ -22,6 +22,7 @@ export type DeviceBrokerOptions = {
   /** Finds a device by its serial; rejects when that cannot be known now. */
   readonly findCredential: (serial: string) => Promise<DeviceCredential | undefined>;
   readonly receive: ReceiveMessage;
+  readonly onSignedIn?: (serial: string) => void;
   readonly now: () => number;
   readonly log: Logger;
   readonly maxConnections?: number;
@@ -90,7 +91,7 @@ async function createAedes(
   const { now, log } = options;
   const broker = await Aedes.createBroker({
     connectTimeout: CONNECT_TIMEOUT_MS,
-    ...createSignIn({ ...options, registry, isQuiet, sayRefused }),
+    ...createSignIn({ ...options, onSignedIn: options.onSignedIn ?? (() => undefined), registry, isQuiet, sayRefused }),
     authorizePublish: createTakePublish({ registry, receive: options.receive, now, isQuiet, sayRefused }),
     authorizeSubscribe: (client, subscription, callback) =>
       callback(null, allowSubscription(registry, client, subscription, sayRefused) ? subscription : null),

@@ -12,6 +12,7 @@ export type SignInOptions = {
   readonly now: () => number;
   readonly isQuiet: () => boolean;
   readonly sayRefused: RefusalLog;
+  readonly onSignedIn: (serial: string) => void;
 };
 
 type SignIn = {
@@ -72,7 +73,9 @@ async function decide(
     options.sayRefused(credential === undefined ? 'device-unknown' : 'secret-wrong', { serial });
     return CONNACK.badCredentials;
   }
-  if (!client.closed) options.registry.add(createConnectedDevice(serial, client, options.now));
+  if (client.closed) return undefined;
+  options.registry.add(createConnectedDevice(serial, client, options.now));
+  options.onSignedIn(serial);
   return undefined;
 }
 

@@ -13,6 +13,8 @@ export type FoldOptions = {
   /** Monitored pumps as commissioned now: all, or those asked for. */
   readonly listPumps: (pumpIds?: readonly string[]) => Promise<readonly CommissionedPump[]>;
   readonly onNews: (news: FoldNews) => void;
+  /** How long each message waited from its arrival until it was understood, ms. */
+  readonly onFolded: (lagsMs: readonly number[]) => void;
   readonly now: () => number;
   readonly log: Logger;
 };

@@ -15,6 +15,8 @@ export async function foldMessages(context: FoldContext, messages: readonly Stor
     if (await feedAll(context, slot, eventsOfMessage(message), message.sequence)) touched.add(slot);
   }
   await saveTouched(context, touched);
+  const now = context.now();
+  context.onFolded(messages.map(({ receivedAt }) => now - receivedAt));
 }
 
 async function feedAll(
