@@ -6,7 +6,6 @@ import { makeTestCompany, type TestCompany } from '#tests/support/test-company.t
 import { addAlarm, addDeviceTraces, addHour, setState } from '#tests/support/test-history.ts';
 import { openTestPools } from '#tests/support/test-pools.ts';
 
-const DAY_MS = 86_400_000;
 let pools: Pools;
 let ours: TestCompany;
 let theirs: TestCompany;
@@ -189,55 +188,6 @@ describe('a homeowner', () => {
     await expect(write(sight, (db) => db.execute(sql`update users set role = 'manager'`))).rejects.toMatchObject({
       cause: { message: expect.stringMatching(/permission denied/) },
     });
-  });
-});
-
-describe('a change of owner', () => {
-  it('hides the time before the new owner moved in, and everything from the one who left', async () => {
-    const company = await makeTestCompany(pools.machine);
-    const [pump] = company.pumps;
-    const now = Date.now();
-    for (const daysAgo of [6, 4, 2]) {
-      await addHour(pools.machine, pump!.pumpId, new Date(now - daysAgo * DAY_MS));
-      const state = daysAgo === 2 ? 'unacknowledged' : 'normal';
-      await addAlarm(pools.machine, pump!.pumpId, { from: new Date(now - daysAgo * DAY_MS), state });
-    }
-    await setState(pools.machine, pump!.pumpId, new Date(now));
-    const moved = new Date(now - 3 * DAY_MS);
-    await write(company.manager.sight, async (db) => {
-      await db.execute(
-        sql`update pad_ownerships set ends_at = ${moved.toISOString()} where pad_id = ${company.padIds[0]}`,
-      );
-      await db.execute(sql`insert into pad_ownerships (id, company_id, pad_id, customer_id, starts_at) values
-        (gen_random_uuid(), ${company.companyId}, ${company.padIds[0]}, ${company.neighbour.sight.customerId}, ${moved.toISOString()})`);
-    });
-    const { sight } = company.neighbour;
-    const first = (table: string, column: string) =>
-      `select min(${column})::text as id from ${table} where pump_${table === 'readings' ? 'number' : 'id'} is not null`;
-    for (const [table, column] of [
-      ['runs', 'from_at'],
-      ['alarms', 'from_at'],
-    ] as const) {
-      const [earliest] = await idsIn(
-        sight,
-        `select min(${column})::text as id from ${table} where pump_id = '${pump!.pumpId}'`,
-      );
-      expect(new Date(earliest ?? 0).getTime()).toBe(now - 2 * DAY_MS);
-    }
-    const [earliest] = await idsIn(sight, first('readings', 'at'));
-    expect(new Date(earliest ?? 0).getTime()).toBe(now - 2 * DAY_MS);
-    expect(await countIn(sight, 'pump_states')).toBe(1);
-    for (const table of ['pads', 'pumps', 'runs', 'readings', 'alarms', 'pump_states', 'pad_ownerships']) {
-      expect([table, await countIn(company.homeowner.sight, table)]).toEqual([table, 0]);
-    }
-  });
-
-  it('cannot give a pad two owners at once', async () => {
-    const overlap = write(ours.manager.sight, (db) =>
-      db.execute(sql`insert into pad_ownerships (id, company_id, pad_id, customer_id, starts_at) values
-        (gen_random_uuid(), ${ours.companyId}, ${ours.padIds[0]}, ${ours.neighbour.sight.customerId}, now())`),
-    );
-    await expect(overlap).rejects.toMatchObject({ cause: { constraint: 'pad_ownerships_one_owner' } });
   });
 });
 
