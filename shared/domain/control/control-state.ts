@@ -68,6 +68,15 @@ export function freshControlState(): ControlState {
   };
 }
 
+/** A saved state: plain JSON without the empty fields, since every pump's is written at every commit. */
+export type SavedControl = Readonly<Record<string, string | number | boolean>>;
+
+export function saveControlState(state: ControlState): SavedControl {
+  return Object.fromEntries(
+    Object.entries(state).filter((field): field is [string, string | number | boolean] => field[1] !== null),
+  );
+}
+
 /**
  * A saved state read back from JSON; undefined where its shape is not this version's, so that control starts afresh.
  *
@@ -77,8 +86,9 @@ export function parseControlState(saved: unknown): ControlState | undefined {
   if (typeof saved !== 'object' || saved === null) return undefined;
   const fresh: Record<string, unknown> = freshControlState();
   const given: Record<string, unknown> = { ...saved };
-  const fits = Object.entries(fresh).every(([name, value]) => hasKind(name, given[name], value));
-  return fits ? (Object.fromEntries(Object.keys(fresh).map((name) => [name, given[name]])) as ControlState) : undefined;
+  const fits = Object.entries(fresh).every(([name, value]) => hasKind(name, given[name] ?? null, value));
+  if (!fits) return undefined;
+  return Object.fromEntries(Object.keys(fresh).map((name) => [name, given[name] ?? null])) as ControlState;
 }
 
 const WORDS: ReadonlySet<string> = new Set(['reported', 'fault', 'source', 'dueSource']);

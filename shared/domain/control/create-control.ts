@@ -2,7 +2,13 @@ import type { Reading } from '../readings/reading.ts';
 import { MINUTE_MS } from '../time/local-time.ts';
 import { offsetSpanAt } from '../time/zone-offset.ts';
 import type { ControlAnswer } from './control-answer.ts';
-import { type ControlState, freshControlState, parseControlState } from './control-state.ts';
+import {
+  type ControlState,
+  freshControlState,
+  parseControlState,
+  type SavedControl,
+  saveControlState,
+} from './control-state.ts';
 import { createJudgement } from './judge-situation.ts';
 import { followMotorClock, motorClockOffset } from './motor-clock-offset.ts';
 import type { PumpContext } from './pump-context.ts';
@@ -28,7 +34,7 @@ export type Control = {
   /** What was learnt of the motor's clock, minutes ahead of wall time; it counts where the motor says nothing itself. */
   setMotorClockOffset(minutes: number | undefined): void;
   /** The state as plain JSON, for `createControl` to go on from. */
-  save(): ControlState;
+  save(): SavedControl;
 };
 
 /**
@@ -90,7 +96,7 @@ export function createControl(context: PumpContext, saved?: unknown): Control {
       state.learntOffset = minutes !== undefined && Number.isFinite(minutes) ? minutes : null;
       judgement.expire();
     },
-    save: () => ({ ...state }),
+    save: () => saveControlState(state),
   };
 }
 

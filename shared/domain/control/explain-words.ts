@@ -30,7 +30,7 @@ export function sayInput(input: number, { context, message }: Teller): { closer:
 }
 
 /** Names a program entry by the part of the day that its middle lies in. */
-export function sayPart(fromMinute: number, toMinute: number, { message }: Teller): string {
+function sayPart(fromMinute: number, toMinute: number, { message }: Teller): string {
   const length = toMinute > fromMinute ? toMinute - fromMinute : toMinute + 1440 - fromMinute;
   if (length >= 20 * 60) return message('part.all-day');
   const middle = (fromMinute + length / 2) % 1440;

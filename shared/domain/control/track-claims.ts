@@ -4,16 +4,14 @@ import type { ControlState } from './control-state.ts';
 import type { MotorSettings, MotorTraits } from './motor-settings.ts';
 
 /** A held keypad speed follows the shaft once it moves by this much, rpm. */
-export const KEYPAD_STEP_RPM = 20;
+const KEYPAD_STEP_RPM = 20;
 
 /**
  * Whether what a motor says commands it is believed. Only what the server cannot see is: keypad, timed run, freeze
  * protection, fault, stop and prime. A keypad or timed claim while a closed input wins is not, unless the model hears
  * the claim before its inputs. `winner` is the winning input, 0 = none.
- *
- * @example believesClaim('keypad', 2, DEFAULT_TRAITS) // false
  */
-export function believesClaim(claim: Source | undefined, winner: number, { precedence }: MotorTraits): boolean {
+function believesClaim(claim: Source | undefined, winner: number, { precedence }: MotorTraits): boolean {
   if (claim === undefined || claim === 'input' || claim === 'program' || claim === 'off') return false;
   if (claim !== 'keypad' && claim !== 'timed') return true;
   return winner === 0 || precedence.indexOf(claim) < precedence.indexOf('input');
