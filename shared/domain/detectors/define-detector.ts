@@ -4,7 +4,7 @@ import type { FoldedDetector } from './detector-defaults.data.ts';
 import type { DetectorParameters, RuleParameters } from './detector-parameters.ts';
 import type { Facts } from './facts.ts';
 import type { Judgement } from './judgement.ts';
-import { copyJson, isInitial, type PlainState, restoreState } from './plain-state.ts';
+import { type PlainState, restoreState, saveChanges } from './plain-state.ts';
 
 /** What a rule says when it speaks. `from` where it is not the first abnormal reading. */
 export type Finding = {
@@ -27,6 +27,11 @@ export type DetectorRule<Name extends FoldedDetector, State extends PlainState> 
   readonly clock?: 'device' | 'arrival';
   /** Is asked for its finding also while the return to normal is awaited. */
   readonly looksAgainOnReturn?: boolean;
+  /**
+   * Where its memory changes a few times a day, not with every reading: how often it has. Such a memory is stored with
+   * what is learnt.
+   */
+  readonly learntVersion?: (state: State) => number;
   readonly initial: () => State;
   /** Judges one event; changes only its own state; allocates nothing. */
   readonly judge: (state: State, facts: Facts, parameters: RuleParameters<Name>) => Judgement;
@@ -47,6 +52,8 @@ export type DetectorInstance = {
   readonly delayMs: (facts: Facts) => number;
   readonly offDelayMs: (facts: Facts) => number;
   readonly describe: (facts: Facts, spoken: Spoken) => Finding;
+  /** undefined where the memory is no learnt one. */
+  readonly learntVersion: () => number | undefined;
   /** undefined while there is nothing to remember. */
   readonly save: () => PlainState | undefined;
 };
@@ -75,7 +82,8 @@ export function defineDetector<Name extends FoldedDetector, State extends PlainS
       delayMs: (facts) => (rule.delaySeconds?.(state, facts, figures) ?? fixed.delay) * 1000,
       offDelayMs: (facts) => (rule.offDelaySeconds?.(state, facts, figures) ?? fixed.off) * 1000,
       describe: (facts, spoken) => rule.describe(state, facts, figures, spoken),
-      save: () => (isInitial(initial, state) ? undefined : copyJson(state)),
+      learntVersion: () => rule.learntVersion?.(state),
+      save: () => saveChanges(initial, state),
     };
   };
 }

@@ -7,7 +7,7 @@ import { detectorFailure } from './detector-failure.ts';
 import type { DetectorParameters } from './detector-parameters.ts';
 import type { Facts } from './facts.ts';
 import { ABNORMAL, type Judgement, NORMAL } from './judgement.ts';
-import { isInitial, isRecord, type Json, restoreState } from './plain-state.ts';
+import { isRecord, type Json, restoreState, saveChanges } from './plain-state.ts';
 import { clearSignal, findChange, nowOf, raiseSignal, type Speaker } from './speaker.ts';
 import { advance, CLEAR, RAISE, rest, restingStanding, STANDS } from './standing.ts';
 
@@ -16,7 +16,9 @@ export type DetectorBank = {
   /** Judges the event that the facts describe and adds what is said to `signals`; throws a DetectorFailure. */
   readonly judge: (facts: Facts, signals: AlarmSignal[]) => void;
   readonly stands: (detector: Detector) => boolean;
-  readonly save: () => Json;
+  readonly learntVersion: () => number;
+  readonly saveHot: () => Json;
+  readonly saveLearnt: () => Json;
 };
 
 type Slot = Speaker & { readonly explainedBy: readonly Slot[]; readonly waitsFor: readonly Slot[] };
@@ -27,14 +29,15 @@ const LOOK_AGAIN_MS = 60_000;
 /**
  * Holds the given detectors for one pump, with what was saved of them.
  *
- * @example const bank = createDetectorBank(DETECTOR_RULES, resolveParameters(), undefined);
+ * @example const bank = createDetectorBank(DETECTOR_RULES, resolveParameters(), undefined, undefined);
  */
 export function createDetectorBank(
   factories: readonly DetectorFactory[],
   parameters: DetectorParameters,
-  saved: unknown,
+  hot: unknown,
+  learnt: unknown,
 ): DetectorBank {
-  const slots = createSlots(factories, parameters, isRecord(saved) ? saved : {});
+  const slots = createSlots(factories, parameters, recordOf(hot), recordOf(learnt));
   const byName = new Map<Detector, Slot>(slots.map((slot) => [slot.instance.detector, slot]));
   const byKind = new Map<PumpEvent['kind'], readonly Slot[]>();
   const heardBy = (kind: PumpEvent['kind']): readonly Slot[] => {
@@ -60,21 +63,27 @@ export function createDetectorBank(
       }
     },
     stands: (detector) => (byName.get(detector)?.standing.raisedAt ?? 0) !== 0,
-    save: () => saveSlots(slots),
+    learntVersion: () => slots.reduce((sum, { instance }) => sum + (instance.learntVersion() ?? 0), 0),
+    saveHot: () => saveHot(slots),
+    saveLearnt: () => saveLearnt(slots),
   };
 }
+
+const recordOf = (value: unknown): Readonly<Record<string, unknown>> => (isRecord(value) ? value : {});
 
 function createSlots(
   factories: readonly DetectorFactory[],
   parameters: DetectorParameters,
-  saved: Readonly<Record<string, unknown>>,
+  hot: Readonly<Record<string, unknown>>,
+  learnt: Readonly<Record<string, unknown>>,
 ): Slot[] {
   const made = new Map<Detector, Slot>();
   for (const factory of factories) {
     const name = factory(parameters, undefined).detector;
-    const entry = isRecord(saved[name]) ? saved[name] : {};
-    const standing = restoreState(restingStanding(), entry.standing);
-    made.set(name, { instance: factory(parameters, entry.state), standing, explainedBy: [], waitsFor: [] });
+    const { standing, state } = recordOf(hot[name]);
+    const instance = factory(parameters, learnt[name] ?? state);
+    const restored = restoreState(restingStanding(), standing);
+    made.set(name, { instance, standing: restored, explainedBy: [], waitsFor: [] });
   }
   const find = (detector: Detector): Slot[] => {
     const slot = made.get(detector);
@@ -92,16 +101,25 @@ function createSlots(
   });
 }
 
-function saveSlots(slots: readonly Slot[]): Json {
+function saveHot(slots: readonly Slot[]): Json {
   const saved: { [key: string]: Json } = {};
   for (const { instance, standing } of slots) {
-    const state = instance.save();
-    const resting = isInitial(restingStanding(), standing);
-    if (state === undefined && resting) continue;
-    saved[instance.detector] = {
+    const state = instance.learntVersion() === undefined ? instance.save() : undefined;
+    const changed = saveChanges(restingStanding(), standing);
+    const entry = {
       ...(state === undefined ? {} : { state }),
-      ...(resting ? {} : { standing: { ...standing } }),
+      ...(changed === undefined ? {} : { standing: changed }),
     };
+    if (Object.keys(entry).length > 0) saved[instance.detector] = entry;
+  }
+  return saved;
+}
+
+function saveLearnt(slots: readonly Slot[]): Json {
+  const saved: { [key: string]: Json } = {};
+  for (const { instance } of slots) {
+    const state = instance.learntVersion() === undefined ? undefined : instance.save();
+    if (state !== undefined) saved[instance.detector] = state;
   }
   return saved;
 }

@@ -4,6 +4,7 @@ import type { PadState, PumpContext } from '../control/pump-context.ts';
 import type { PumpEvent } from '../fold/pump-event.ts';
 import type { Reading } from '../readings/reading.ts';
 import type { SettingsKey } from './changed-settings.ts';
+import type { MotorClockFacts } from './clocks/motor-clock-tracker.ts';
 import type { Detector } from './detector.ts';
 import type { InputFacts } from './inputs/input-facts.ts';
 import type { LinkFacts } from './link/link-facts.ts';
@@ -32,6 +33,7 @@ export type Facts = {
   inputs: InputFacts;
   load: LoadFacts;
   link: LinkFacts;
+  motorClock: MotorClockFacts;
   /** Pad-local time of the reading: day since 1970, weekday from Monday = 0, minute with its fraction. */
   localDay: number;
   localWeekday: number;

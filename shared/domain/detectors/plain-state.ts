@@ -21,19 +21,29 @@ export function restoreState<State extends PlainState>(initial: State, saved: un
 }
 
 /**
- * Whether a state still is as it began, so that nothing of it needs storing. Compares one level deep.
+ * What of a state differs from how it began, copied: `restoreState` makes the rest up again. Undefined where nothing
+ * does, so that nothing needs storing.
  *
- * @example isInitial({ tries: 0 }, { tries: 0 }) // true
+ * @example saveChanges({ tries: 0, note: '' }, { tries: 2, note: '' }) // { tries: 2 }
  */
-export function isInitial(initial: PlainState, state: PlainState): boolean {
-  for (const key of Object.keys(initial)) {
-    const before = initial[key];
-    const now = state[key];
-    if (before === now) continue;
-    if (Array.isArray(before) && Array.isArray(now) && before.length === 0 && now.length === 0) continue;
-    return false;
+export function saveChanges(initial: PlainState, state: PlainState): PlainState | undefined {
+  const changed = Object.entries(state).filter(([key, value]) => !isSame(initial[key] ?? null, value));
+  if (changed.length === 0) return undefined;
+  return Object.fromEntries(changed.map(([key, value]) => [key, copyJson(value)]));
+}
+
+function isSame(before: Json, now: Json): boolean {
+  if (before === now) return true;
+  if (Array.isArray(before) && Array.isArray(now)) {
+    return before.length === now.length && before.every((value, index) => isSame(value, now[index] ?? null));
   }
-  return true;
+  if (!isJsonRecord(before) || !isJsonRecord(now)) return false;
+  const keys = Object.keys(before);
+  return keys.length === Object.keys(now).length && keys.every((key) => isSame(before[key] ?? null, now[key] ?? null));
+}
+
+function isJsonRecord(value: Json): value is { readonly [key: string]: Json } {
+  return isRecord(value);
 }
 
 /**

@@ -18,11 +18,14 @@ export function foldReading(parts: PumpParts, { reading, single }: PumpEvent & {
   facts.elapsedMs = elapsedMs;
   facts.gap = gap;
   if (reading.reportedSource !== undefined) facts.reportsSource = true;
+  tellLocalTime(parts, reading.at);
   copyAnswer(parts.answer, control.push(reading));
-  inputs.read(reading.closedInputs, seen ? previous.closedInputs : undefined, gap);
+  const { localDay, localMinute } = facts;
+  const before = seen ? previous.closedInputs : undefined;
+  inputs.read({ at: reading.at, closed: reading.closedInputs, before, gap, elapsedMs, localDay, localMinute });
   load.read(reading, facts.control, gap ? 0 : elapsedMs, gap);
   link.read(reading.at, seen ? previous.at : 0, gap);
-  tellLocalTime(parts, reading.at);
+  parts.motorClock.read(facts);
   runs.push(reading, facts.control);
   if (facts.load.primed === false) runs.flag('unprimed');
 }

@@ -2,6 +2,7 @@ import { type Control, createControl } from '../control/create-control.ts';
 import type { MotorSettings } from '../control/motor-settings.ts';
 import type { PumpContext } from '../control/pump-context.ts';
 import { listChangedSettings } from '../detectors/changed-settings.ts';
+import { createMotorClockTracker, type MotorClockTracker } from '../detectors/clocks/motor-clock-tracker.ts';
 import { createDetectorBank, type DetectorBank } from '../detectors/detector-bank.ts';
 import type { DetectorParameters } from '../detectors/detector-parameters.ts';
 import { DETECTOR_RULES } from '../detectors/detector-rules.ts';
@@ -29,6 +30,7 @@ export type PumpParts = {
   readonly inputs: InputTracker;
   readonly load: LoadTracker;
   readonly link: LinkTracker;
+  readonly motorClock: MotorClockTracker;
   readonly pad: PadTracker;
   readonly runs: RunFold;
   readonly bank: DetectorBank;
@@ -49,12 +51,13 @@ export function createPumpParts(
   const hot = isRecord(saved?.hot) ? saved.hot : {};
   const learnt = isRecord(saved?.learnt) ? saved.learnt : {};
   const control = createControl(context, hot.control);
-  const inputs = createInputTracker(context);
+  const inputs = createInputTracker(context, hot.inputs, learnt.inputs);
   const load = createLoadTracker(context, parameters['failed-prime'], hot.load, learnt.load);
   const link = createLinkTracker(context, hot.link);
+  const motorClock = createMotorClockTracker(context, control, hot.motorClock);
   const pad = createPadTracker(context, hot.pad);
   const runs = createRunFold(context, hot.runs);
-  const bank = createDetectorBank(DETECTOR_RULES, parameters, hot.detectors);
+  const bank = createDetectorBank(DETECTOR_RULES, parameters, hot.detectors, learnt.detectors);
   const before = restoreReading(hot.reading);
   const answer: ControlCopy = { ...CONTROL_BEFORE_READINGS };
   const answered = control.answer();
@@ -73,6 +76,7 @@ export function createPumpParts(
     inputs: inputs.facts,
     load: load.facts,
     link: link.facts,
+    motorClock: motorClock.facts,
     localDay: 0,
     localWeekday: 0,
     localMinute: 0,
@@ -87,14 +91,25 @@ export function createPumpParts(
   };
   facts.fitsReported = createReportedFit(facts);
   facts.changedSettings = listChangedSettings(facts.reportedSettings, context.settings);
-  const versionBefore = typeof learnt.version === 'number' ? learnt.version : 0;
   let settingsHeard = 0;
+  const changes = (): number => load.learntVersion() + inputs.learntVersion() + bank.learntVersion() + settingsHeard;
+  const versionBefore = (typeof learnt.version === 'number' ? learnt.version : 0) - changes();
   let kept: { readonly version: number; readonly learnt: Json } | undefined;
 
   function learntNow(): { readonly version: number; readonly learnt: Json } {
-    const version = versionBefore + load.learntVersion() + settingsHeard;
+    const version = versionBefore + changes();
     if (kept?.version !== version) {
-      kept = { version, learnt: { version, load: load.saveLearnt(), reported: saveSettings(facts.reportedSettings) } };
+      const reported = saveSettings(facts.reportedSettings);
+      kept = {
+        version,
+        learnt: {
+          version,
+          load: load.saveLearnt(),
+          inputs: inputs.saveLearnt(),
+          detectors: bank.saveLearnt(),
+          reported,
+        },
+      };
     }
     return kept;
   }
@@ -107,6 +122,7 @@ export function createPumpParts(
     inputs,
     load,
     link,
+    motorClock,
     pad,
     runs,
     bank,
@@ -125,9 +141,11 @@ export function createPumpParts(
         control: control.save(),
         runs: parseSaved(runs.save()),
         load: load.saveHot(),
+        inputs: inputs.saveHot(),
         link: link.save(),
+        motorClock: motorClock.save(),
         pad: pad.save(),
-        detectors: bank.save(),
+        detectors: bank.saveHot(),
         reportsSource: facts.reportsSource,
       };
       return { hot: hotJson, learnt: learntJson, learntVersion: version };

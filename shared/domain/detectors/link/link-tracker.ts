@@ -1,6 +1,6 @@
 import type { PumpContext } from '#shared/domain/control/pump-context.ts';
 import type { PumpEvent } from '#shared/domain/fold/pump-event.ts';
-import { copyJson, type Json, restoreState } from '../plain-state.ts';
+import { type Json, restoreState, saveChanges } from '../plain-state.ts';
 import type { LinkFacts, Outage } from './link-facts.ts';
 
 type LinkState = {
@@ -88,7 +88,7 @@ export function createLinkTracker(context: PumpContext, saved: unknown): LinkTra
       }
       state.bootPending = false;
     },
-    save: () => copyJson(state),
+    save: () => saveChanges(restingLink(), state) ?? {},
   };
 }
 

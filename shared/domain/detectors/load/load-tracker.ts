@@ -2,7 +2,7 @@ import type { ControlAnswer } from '#shared/domain/control/control-answer.ts';
 import type { PumpContext } from '#shared/domain/control/pump-context.ts';
 import { STANDSTILL_RPM } from '#shared/domain/control/speed-tolerance.ts';
 import type { Reading } from '#shared/domain/readings/reading.ts';
-import { copyJson, isRecord, type Json, restoreState } from '../plain-state.ts';
+import { isRecord, type Json, restoreState, saveChanges } from '../plain-state.ts';
 import { discardLearning, keepLearning, learnReading } from './learn-load.ts';
 import { createLearnedBands } from './learned-bands.ts';
 import type { LoadFacts } from './load-facts.ts';
@@ -91,7 +91,7 @@ export function createLoadTracker(context: PumpContext, limits: TryLimits, hot: 
     },
     discard: () => discardLearning(state),
     learntVersion: () => version,
-    saveHot: () => copyJson(state),
+    saveHot: () => saveChanges(restingLoad(), state) ?? {},
     saveLearnt: () => ({ bands: bands.save(), prime: teacher.save() }),
   };
 }

@@ -4,7 +4,15 @@ import type { Facts } from '../facts.ts';
 import { ABNORMAL, type Judgement, NORMAL, UNJUDGED } from '../judgement.ts';
 
 /** Seconds to prime: what was usual (oldest first), and the last starts; `counted` is the start that was taken last. */
-type State = { usual: number[]; recent: number[]; recentAt: number[]; stood: number[]; counted: number; slow: boolean };
+type State = {
+  usual: number[];
+  recent: number[];
+  recentAt: number[];
+  stood: number[];
+  counted: number;
+  slow: boolean;
+  changes: number;
+};
 type Parameters = RuleParameters<'slow-prime'>;
 
 const KEPT = 20;
@@ -17,6 +25,7 @@ function judge(state: State, facts: Facts, parameters: Parameters): Judgement {
   const fresh = load.primedOnce && load.startSeen && load.startedAt !== state.counted && primedMs >= 60_000;
   if (!fresh) return UNJUDGED;
   state.counted = load.startedAt;
+  state.changes += 1;
   const leastSeconds = facts.context.intervalSeconds;
   takeStart(state, Math.max(load.primeSeconds, leastSeconds), facts, parameters);
   return state.slow ? ABNORMAL : state.usual.length < parameters.teachingStarts ? UNJUDGED : NORMAL;
@@ -76,7 +85,8 @@ function describe(state: State, _: Facts, parameters: Parameters): Finding {
 export const slowPrime = defineDetector<'slow-prime', State>({
   detector: 'slow-prime',
   hears: ['reading'],
-  initial: () => ({ usual: [], recent: [], recentAt: [], stood: [], counted: 0, slow: false }),
+  learntVersion: ({ changes }) => changes,
+  initial: () => ({ usual: [], recent: [], recentAt: [], stood: [], counted: 0, slow: false, changes: 0 }),
   judge,
   delaySeconds: () => 0,
   describe,

@@ -1,3 +1,4 @@
+import { isNearSuspectEdge } from '../clocks/motor-clock-tracker.ts';
 import { defineDetector, type Finding, type Spoken } from '../define-detector.ts';
 import type { RuleParameters } from '../detector-parameters.ts';
 import { listEnergized } from '../energized-equipment.ts';
@@ -7,10 +8,13 @@ import { ABNORMAL, type Judgement, NORMAL, UNJUDGED } from '../judgement.ts';
 type State = Record<string, never>;
 
 /** A speed is due and the shaft stands. What freeze protection alone asks for is judged by `freezing`. */
-function judge(_: State, { control, stands }: Facts): Judgement {
+function judge(_: State, facts: Facts): Judgement {
+  const { control, stands } = facts;
   if (!control.standing) return NORMAL;
   const { due } = control;
-  if (due.rpm > 0 && due.source !== 'freeze') return ABNORMAL;
+  if (due.rpm > 0 && due.source !== 'freeze') {
+    return control.winningInput === 0 && isNearSuspectEdge(facts) ? UNJUDGED : ABNORMAL;
+  }
   // Where nothing is due a standing shaft says nothing: only one that turns ends the alarm.
   return stands('stopped') ? UNJUDGED : NORMAL;
 }

@@ -1,6 +1,7 @@
 import { fitsSpeed } from '#shared/domain/control/speed-tolerance.ts';
 import { inputSpeed } from '#shared/domain/control/winning-input.ts';
 import { clockDifference } from '#shared/domain/time/clock-time.ts';
+import { isNearSuspectEdge } from '../clocks/motor-clock-tracker.ts';
 import { defineDetector, type Finding, type Spoken } from '../define-detector.ts';
 import type { RuleParameters } from '../detector-parameters.ts';
 import type { Facts } from '../facts.ts';
@@ -17,6 +18,7 @@ function judge(state: State, facts: Facts): Judgement {
   const nothingExpected = facts.padState === 'winterized' || facts.padState === 'drained';
   if (!nothingExpected && control.due.rpm > 0) return stands('unexpected-run') ? UNJUDGED : NORMAL;
   if (obeysOpenInput(facts) || (stands('settings-changed') && facts.fitsReported())) return UNJUDGED;
+  if (isNearSuspectEdge(facts)) return UNJUDGED;
   return ABNORMAL;
 }
 

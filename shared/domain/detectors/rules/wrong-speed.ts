@@ -1,5 +1,6 @@
 import { speedTolerance } from '#shared/domain/control/speed-tolerance.ts';
 import { inputSpeed, listClosedInputs } from '#shared/domain/control/winning-input.ts';
+import { isNearSuspectEdge } from '../clocks/motor-clock-tracker.ts';
 import { defineDetector, type Finding } from '../define-detector.ts';
 import type { RuleParameters } from '../detector-parameters.ts';
 import type { Facts } from '../facts.ts';
@@ -44,8 +45,11 @@ function isSameSituation({ situation }: State, facts: Facts): boolean {
 }
 
 /** Around a program edge either speed is right until the motor's clock is known. */
-function isNearUnknownEdge({ control, now }: Facts, { programEdgeMinutes }: RuleParameters<'wrong-speed'>): boolean {
-  if (control.motorClockKnown || control.winningInput !== 0) return false;
+function isNearUnknownEdge(facts: Facts, { programEdgeMinutes }: RuleParameters<'wrong-speed'>): boolean {
+  const { control, now } = facts;
+  if (control.winningInput !== 0) return false;
+  if (isNearSuspectEdge(facts)) return true;
+  if (control.motorClockKnown) return false;
   const near = programEdgeMinutes * 60_000;
   const { programEdgeBefore, programEdgeAfter } = control;
   if (programEdgeBefore !== undefined && now - programEdgeBefore < near) return true;

@@ -181,9 +181,10 @@ describe('the fold of a pump', () => {
       delayMs: () => 0,
       offDelayMs: () => 0,
       describe: () => ({ cause: '', evidence: {} }),
+      learntVersion: () => undefined,
       save: () => undefined,
     });
-    const bank = createDetectorBank([failing], resolveParameters(), undefined);
+    const bank = createDetectorBank([failing], resolveParameters(), undefined, undefined);
     const facts = { kind: 'reading' } as Parameters<typeof bank.judge>[0];
     try {
       bank.judge(facts, []);

@@ -1,0 +1,141 @@
+import { clockDifference } from '#shared/domain/time/clock-time.ts';
+import { MINUTE_MS } from '#shared/domain/time/local-time.ts';
+import { defineDetector, type Finding, type Spoken } from '../define-detector.ts';
+import type { RuleParameters } from '../detector-parameters.ts';
+import type { Facts } from '../facts.ts';
+import { perInput } from '../inputs/input-facts.ts';
+import { type KnownWindow, windowMinutes } from '../inputs/known-window.ts';
+import { nextClosing } from '../inputs/window-times.ts';
+import { ABNORMAL, type Judgement, NORMAL } from '../judgement.ts';
+
+/**
+ * Of the input that is closed longest past its off time: its number and when it should have opened. `since` and
+ * `offDue` list that for every input; `tripper` remembers inputs that ran through one off time and opened at another.
+ */
+type State = { since: number[]; offDue: number[]; input: number; offAt: number; cause: string; tripper: number };
+type Parameters = RuleParameters<'stuck-input'>;
+
+/** An edge further from a tripper than this was made by hand, unless the dial is off. */
+const BY_HAND_MINUTES = 45;
+/** A dial that is off moves its whole window; further than this it is another window. */
+const FARTHEST_SHIFT_MINUTES = 360;
+const AT_TRIPPER_MINUTES = 20;
+
+function judge(state: State, facts: Facts, parameters: Parameters): Judgement {
+  const { inputs, now } = facts;
+  let worst = 0;
+  let worstOff = 0;
+  for (let index = 0; index < inputs.closedSince.length; index += 1) {
+    const since = inputs.closedSince[index] ?? 0;
+    if (since !== (state.since[index] ?? 0)) follow(state, facts, index, since);
+    const offDue = state.offDue[index] ?? 0;
+    if (since === 0 || offDue === 0 || now < offDue) continue;
+    if (worst !== 0 && worstOff <= offDue) continue;
+    worst = index + 1;
+    worstOff = offDue;
+  }
+  if (worst === 0 || now - worstOff < parameters.noteAfterMinutes * MINUTE_MS) return NORMAL;
+  if (state.input !== worst) state.cause = causeOf(facts, worst, state);
+  state.input = worst;
+  state.offAt = worstOff;
+  if (state.cause === 'unknown' && hasPassedTwoTrippers(facts, worst)) state.cause = 'switch-welded';
+  return ABNORMAL;
+}
+
+/** An input closed or opened: when it should open again, or what its opening tells. */
+function follow(state: State, facts: Facts, index: number, since: number): void {
+  state.since[index] = since;
+  if (since === 0) {
+    if (state.input === index + 1) learnFromOpening(state, facts, index);
+    state.offDue[index] = 0;
+    return;
+  }
+  state.offDue[index] = offDueAt(facts, index, since);
+}
+
+/** The next off tripper, or the whole window after the edge, whichever is later: a shifted dial shifts both. */
+function offDueAt(facts: Facts, index: number, since: number): number {
+  const { context, inputs, localDay } = facts;
+  const windows = inputs.windows[index] ?? [];
+  let next = 0;
+  for (const window of windows) {
+    const closes = nextClosing(window, context.zone, localDay, since);
+    if (closes !== undefined && (next === 0 || closes < next)) next = closes;
+  }
+  const opened = nearestWindow(windows, inputs.onMinute[index] ?? 0);
+  if (next === 0 || opened === undefined || Math.abs(opened.missedBy) > FARTHEST_SHIFT_MINUTES) return next;
+  return Math.max(next, since + windowMinutes(opened.window) * MINUTE_MS);
+}
+
+function nearestWindow(
+  windows: readonly KnownWindow[],
+  minute: number,
+): { readonly window: KnownWindow; readonly missedBy: number } | undefined {
+  let nearest: { readonly window: KnownWindow; readonly missedBy: number } | undefined;
+  for (const window of windows) {
+    const missedBy = clockDifference(window.onMinute, minute);
+    if (nearest === undefined || Math.abs(missedBy) < Math.abs(nearest.missedBy)) nearest = { window, missedBy };
+  }
+  return nearest;
+}
+
+function causeOf(facts: Facts, input: number, { tripper }: State): string {
+  if ((tripper & (1 << (input - 1))) !== 0) return 'tripper-missing';
+  const { inputs } = facts;
+  const opened = nearestWindow(inputs.windows[input - 1] ?? [], inputs.onMinute[input - 1] ?? 0);
+  const byHand = inputs.edgeSeen[input - 1] === true && Math.abs(opened?.missedBy ?? 0) > BY_HAND_MINUTES;
+  return byHand && !facts.stands('clock-shift') ? 'lever-left-on' : 'unknown';
+}
+
+/** It stayed closed past two different off trippers: the trippers are there, the contact does not open. */
+function hasPassedTwoTrippers({ inputs, context, localDay, now }: Facts, input: number): boolean {
+  const since = inputs.closedSince[input - 1] ?? 0;
+  const windows = inputs.windows[input - 1] ?? [];
+  if (windows.length < 2) return false;
+  const passed = windows.filter((window) => {
+    const closes = nextClosing(window, context.zone, localDay - 1, since);
+    return closes !== undefined && now > closes + AT_TRIPPER_MINUTES * MINUTE_MS;
+  });
+  return passed.length >= 2;
+}
+
+/** It opened at another window's off tripper: the one it ran through is missing. */
+function learnFromOpening(state: State, { inputs, localMinute }: Facts, index: number): void {
+  const windows = inputs.windows[index] ?? [];
+  const atTripper = windows.some(
+    ({ offMinute }) => Math.abs(clockDifference(offMinute, localMinute)) <= AT_TRIPPER_MINUTES,
+  );
+  if (windows.length < 2 || !atTripper) return;
+  state.tripper |= 1 << index;
+  state.cause = 'tripper-missing';
+}
+
+function describe(state: State, { now, inputs }: Facts, parameters: Parameters, { raised, from }: Spoken): Finding {
+  const pastMinutes = (now - (raised ? from : state.offAt)) / MINUTE_MS;
+  const closed = (inputs.closedSince[state.input - 1] ?? 0) !== 0;
+  const alarm = pastMinutes >= parameters.alarmAfterMinutes && closed;
+  return {
+    cause: state.cause,
+    from: state.offAt,
+    alarmClass: alarm ? 'alarm' : 'note',
+    priority: alarm ? 'soon' : 'note',
+    evidence: { input: state.input, minutes: Math.round(pastMinutes) },
+  };
+}
+
+export const stuckInput = defineDetector<'stuck-input', State>({
+  detector: 'stuck-input',
+  hears: ['reading'],
+  looksAgainOnReturn: true,
+  initial: () => ({
+    since: perInput(() => 0),
+    offDue: perInput(() => 0),
+    input: 0,
+    offAt: 0,
+    cause: 'unknown',
+    tripper: 0,
+  }),
+  judge,
+  delaySeconds: () => 0,
+  describe,
+});
