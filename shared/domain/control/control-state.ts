@@ -22,6 +22,8 @@ export type ControlState = {
   /** When source, expected speed, winner or motion last changed; the ramp is counted from here. */
   changedAt: number;
   rampOver: boolean;
+  /** Since when the motor says that it primes. */
+  primeSaidSince: number | null;
   keypadRpm: number | null;
   timedSince: number | null;
   timedPausedAt: number | null;
@@ -53,6 +55,7 @@ export function freshControlState(): ControlState {
     dueSince: null,
     changedAt: 0,
     rampOver: false,
+    primeSaidSince: null,
     keypadRpm: null,
     timedSince: null,
     timedPausedAt: null,

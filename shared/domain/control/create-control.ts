@@ -93,7 +93,9 @@ export function createControl(context: PumpContext, saved?: unknown): Control {
       return before || (programEdgeAfter !== undefined && programEdgeAfter - state.at <= near);
     },
     setMotorClockOffset(minutes) {
-      state.learntOffset = minutes !== undefined && Number.isFinite(minutes) ? minutes : null;
+      const learnt = minutes !== undefined && Number.isFinite(minutes) ? minutes : null;
+      if (learnt === state.learntOffset) return;
+      state.learntOffset = learnt;
       judgement.expire();
     },
     save: () => saveControlState(state),

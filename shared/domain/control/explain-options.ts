@@ -1,4 +1,4 @@
-import type { UnitSystem } from '../../units/unit-system.ts';
+import type { UnitSystem } from '#shared/units/unit-system.ts';
 import type { MessageCatalogue } from './explain-messages.data.ts';
 import type { PumpContext } from './pump-context.ts';
 

@@ -1,4 +1,4 @@
-import { formatQuantity } from '../../units/format-quantity.ts';
+import { formatQuantity } from '#shared/units/format-quantity.ts';
 import type { Because } from './decision.ts';
 import type { ExplainContext, ExplainOptions } from './explain-options.ts';
 import { sayMinute, sayUntil } from './explain-time.ts';

@@ -151,7 +151,7 @@ function primeOf({ context, state }: Known, reading: Reading, baseRpm: number): 
   const { prime } = context.settings;
   if (prime === null) return undefined;
   const claimed = reading.reportedSource === 'prime';
-  const seen = state.standing ? (state.dueSince ?? (claimed ? reading.at : null)) : state.startedAt;
+  const seen = state.standing ? (state.dueSince ?? state.primeSaidSince) : state.startedAt;
   const primes = claimed || (fitsSpeed(reading.rpm, prime.rpm) && !fitsSpeed(reading.rpm, baseRpm));
   const since = primes ? (state.assumedSince ?? seen) : seen;
   return since !== null && reading.at < since + longestPrimeMs(prime) ? { since, claimed } : undefined;

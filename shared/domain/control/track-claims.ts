@@ -17,10 +17,11 @@ function believesClaim(claim: Source | undefined, winner: number, { precedence }
   return winner === 0 || precedence.indexOf(claim) < precedence.indexOf('input');
 }
 
-/** Follows the keypad's held speed and the timed run's beginning from a reading. */
+/** Follows since when the motor says that it primes, the keypad's held speed and the timed run's beginning. */
 export function trackClaims(state: ControlState, reading: Reading, winner: number, traits: MotorTraits): void {
   const claim = reading.reportedSource;
   const believed = believesClaim(claim, winner, traits);
+  state.primeSaidSince = claim === 'prime' ? (state.primeSaidSince ?? reading.at) : null;
   if (claim !== 'keypad' || !believed) state.keypadRpm = null;
   else if (state.keypadRpm === null || keypadMoved(state, reading)) state.keypadRpm = reading.rpm;
   if (claim === 'timed' && believed) {

@@ -1,6 +1,9 @@
 import type { RunSource } from '../readings/reading.ts';
 
-/** Marks on a run: `off-expected` (measured away from expected), `ramp-only`, `late-corrected`, `clock-unknown`. */
+/**
+ * Marks on a run: `off-expected` (settled away from the expected speed), `unprimed`, `ramp-only` (over before the ramp
+ * was), `late-corrected` (worked out again after late readings).
+ */
 export type RunFlag = 'off-expected' | 'unprimed' | 'ramp-only' | 'late-corrected';
 
 /**

@@ -5,17 +5,20 @@ import { type Reading, SOURCES } from '#shared/domain/readings/reading.ts';
 import type { Run } from '#shared/domain/runs/run.ts';
 import { localTime } from '#shared/domain/time/local-time.ts';
 
-/** The readings of a motor that does exactly what was planned: at every change, and every interval in between. */
+/**
+ * The readings of a motor that does exactly what was planned: at every change, and every interval in between. It
+ * shows its own clock where `motorClockOffset` (minutes ahead of the wall) is given.
+ */
 export function perfectReadings(
   runs: readonly PlannedRun[],
   { zone, intervalSeconds }: PumpContext,
-  motorClockOffset: number,
+  motorClockOffset: number | undefined,
 ): Reading[] {
   const readings: Reading[] = [];
   for (const { from, to, rpm, closedInputs, activeInput } of runs) {
     for (let at = from; at < to; at += intervalSeconds * 1000) {
-      const wallMinute = localTime(zone, at)?.minute ?? 0;
-      const motorClockMinute = Math.floor(wallMinute + motorClockOffset + 1440) % 1440;
+      const shown = Math.floor((localTime(zone, at)?.minute ?? 0) + (motorClockOffset ?? 0) + 1440) % 1440;
+      const motorClockMinute = motorClockOffset === undefined ? undefined : shown;
       readings.push({ at, rpm, closedInputs, activeInput, watts: 5 + rpm / 8, motorClockMinute });
     }
   }

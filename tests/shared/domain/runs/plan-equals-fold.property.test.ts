@@ -37,11 +37,11 @@ const places = fc.constantFrom(
 ) as fc.Arbitrary<[string, string]>;
 
 /** What a day holds, as the plan has it and as the fold of a motor that follows the plan has it. */
-function bothWays(context: PumpContext, date: string, offset: number, learnt: Parameters<typeof plan>[5]) {
+function bothWays(context: PumpContext, date: string, offset: number | undefined, learnt: Parameters<typeof plan>[5]) {
   const bounds = localDay(context.zone, Date.parse(`${date}T00:00:00Z`) / 86_400_000);
   if (bounds === undefined) throw new Error(`no zone ${context.zone}`);
   const { from, to } = bounds;
-  const where = { zone: context.zone, motorClockOffsetMinutes: offset };
+  const where = { zone: context.zone, motorClockOffsetMinutes: offset ?? 0 };
   const planned = plan(context.settings, context.traits, where, from, to, learnt);
   const dayBefore = plan(context.settings, context.traits, where, from - 86_400_000, from, learnt);
   const control = createControl(context);
@@ -60,7 +60,10 @@ describe('the plan of a day', () => {
         fc.record({ program: programs, prime, inputs: fc.tuple(rpm, rpm, fc.option(rpm)), place: places, overlap }),
         inputWindows,
         // A minute off is what a clock that shows whole minutes can be off without anyone knowing.
-        fc.integer({ min: -120, max: 120 }).filter((minutes) => Math.abs(minutes) !== 1),
+        fc.option(
+          fc.integer({ min: -120, max: 120 }).filter((minutes) => Math.abs(minutes) !== 1),
+          { nil: undefined },
+        ),
         ({ program, prime: primeSet, inputs, place: [zone, date], overlap: programOverlap }, learnt, offset) => {
           const settings = { program, prime: primeSet, inputs, freeze: null };
           const context = inventedPump({ zone, settings, traits: { programOverlap }, intervalSeconds: 60 });
