@@ -1,8 +1,11 @@
 import type { QueryClient } from '@tanstack/react-query';
 import { type LoaderFunctionArgs, redirect } from 'react-router-dom';
 import type { Session } from '#shared/contract/http/session.ts';
+import { alarmQueries } from '#src/features/alarms/alarm-queries.ts';
+import { parseAlarmsAddress } from '#src/features/alarms/alarms-address.ts';
 import { parseFleetAddress } from '#src/features/fleet/fleet-address.ts';
 import { fleetQueries } from '#src/features/fleet/fleet-queries.ts';
+import { pumpQueries } from '#src/features/pumps/pump-queries.ts';
 import { sessionQuery } from '#src/features/session/session-queries.ts';
 import { ApiError, isApiError } from '#src/lib/api/api-error.ts';
 import { paths } from '#src/lib/paths.ts';
@@ -37,6 +40,28 @@ export function createLoaders(client: QueryClient) {
       const { filter } = parseFleetAddress(new URL(request.url).searchParams);
       void client.prefetchInfiniteQuery(fleetQueries.list(filter));
       await requireStaff(request);
+      return null;
+    },
+    pump: async ({ request, params }: LoaderFunctionArgs) => {
+      void client.prefetchQuery(pumpQueries.detail(params.pumpId ?? ''));
+      await requireSession(request);
+      return null;
+    },
+    alarms: async ({ request }: LoaderFunctionArgs) => {
+      const { filter } = parseAlarmsAddress(new URL(request.url).searchParams);
+      void client.prefetchInfiniteQuery(alarmQueries.list({ ...filter, alarmClass: 'alarm' }));
+      void client.prefetchInfiniteQuery(alarmQueries.list({ ...filter, alarmClass: 'note' }));
+      await requireStaff(request);
+      return null;
+    },
+    alarm: async ({ request, params }: LoaderFunctionArgs) => {
+      void client.prefetchQuery(alarmQueries.detail(params.alarmId ?? ''));
+      await requireStaff(request);
+      return null;
+    },
+    myPump: async ({ request }: LoaderFunctionArgs) => {
+      void client.prefetchQuery(pumpQueries.mine());
+      await requireSession(request);
       return null;
     },
   };

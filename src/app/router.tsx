@@ -1,6 +1,7 @@
 import type { QueryClient } from '@tanstack/react-query';
 import { createBrowserRouter } from 'react-router-dom';
 import { ErrorPage } from './error-page.tsx';
+import { LAZY_PAGES } from './lazy-pages.ts';
 import { createLoaders } from './loaders.ts';
 import { NotFoundPage } from './not-found-page.tsx';
 import { PageSkeleton } from './page-skeleton.tsx';
@@ -10,12 +11,7 @@ import { Shell } from './shell/shell.tsx';
 export function createRouter(client: QueryClient) {
   const load = createLoaders(client);
   return createBrowserRouter([
-    {
-      path: '/sign-in',
-      lazy: { Component: async () => (await import('./routes/sign-in-page.tsx')).SignInPage },
-      ErrorBoundary: ErrorPage,
-      HydrateFallback: PageSkeleton,
-    },
+    { path: '/sign-in', lazy: LAZY_PAGES.signIn, ErrorBoundary: ErrorPage, HydrateFallback: PageSkeleton },
     {
       id: 'shell',
       loader: load.session,
@@ -28,15 +24,12 @@ export function createRouter(client: QueryClient) {
           ErrorBoundary: ErrorPage,
           children: [
             { index: true, loader: load.first, Component: PageSkeleton },
-            {
-              path: 'fleet',
-              loader: load.fleet,
-              lazy: { Component: async () => (await import('./routes/fleet-page.tsx')).FleetPage },
-            },
-            {
-              path: 'profile',
-              lazy: { Component: async () => (await import('./routes/profile-page.tsx')).ProfilePage },
-            },
+            { path: 'fleet', loader: load.fleet, lazy: LAZY_PAGES.fleet },
+            { path: 'pumps/:pumpId', loader: load.pump, lazy: LAZY_PAGES.pump },
+            { path: 'alarms', loader: load.alarms, lazy: LAZY_PAGES.alarms },
+            { path: 'alarms/:alarmId', loader: load.alarm, lazy: LAZY_PAGES.alarm },
+            { path: 'my-pump', loader: load.myPump, lazy: LAZY_PAGES.myPump },
+            { path: 'profile', lazy: LAZY_PAGES.profile },
             { path: '*', Component: NotFoundPage },
           ],
         },

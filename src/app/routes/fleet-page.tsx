@@ -32,6 +32,12 @@ export function FleetPage() {
   const [search] = useSearchParams();
   const now = useNow(NOW_STEP_MS);
   const [held, setHeld] = useState(false);
+  const hold = {
+    onPointerEnter: () => setHeld(true),
+    onPointerLeave: () => setHeld(false),
+    onFocus: () => setHeld(true),
+    onBlur: () => setHeld(false),
+  };
   const [cursor] = useState(() => createStore<number | undefined>(undefined));
   const view = useMemo(() => parseFleetAddress(search), [search]);
   const window = wallWindow(view.range, view.day, now, company.zone);
@@ -70,12 +76,7 @@ export function FleetPage() {
       ) : wall.rows.length === 0 ? (
         <FleetEmpty view={view} />
       ) : (
-        <div
-          onPointerEnter={() => setHeld(true)}
-          onPointerLeave={() => setHeld(false)}
-          onFocus={() => setHeld(true)}
-          onBlur={() => setHeld(false)}
-        >
+        <div {...hold}>
           <FleetWall
             rows={wall.rows}
             matching={wall.first?.matching ?? wall.rows.length}

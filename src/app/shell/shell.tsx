@@ -8,7 +8,9 @@ import { useStore } from '#src/hooks/use-store.ts';
 import { createFormat } from '#src/lib/format/create-format.ts';
 import { liveLink } from '#src/lib/live/live-link.ts';
 import { t } from '#src/lib/messages/t.ts';
+import { AlarmAnnouncer } from './alarm-announcer.tsx';
 import { Header } from './header.tsx';
+import { NoticeBar } from './notice-bar.tsx';
 import { OfflineBanner } from './offline-banner.tsx';
 import { useHeadingFocus } from './use-heading-focus.ts';
 import { useLive } from './use-live.ts';
@@ -42,6 +44,8 @@ export function Shell() {
         <main id="page" tabIndex={-1} data-link={phase} aria-busy={state === 'loading'} className="outline-none">
           <Outlet />
         </main>
+        <NoticeBar />
+        <AlarmAnnouncer />
         <ScrollRestoration />
       </FormatContext>
     </SessionContext>

@@ -2,7 +2,7 @@ import type { ComponentProps } from 'react';
 import { classNames } from '#src/lib/class-names.ts';
 
 const BASE =
-  'inline-flex min-h-8 items-center gap-1.5 whitespace-nowrap rounded-control border bg-sheet px-3 transition-colors hover:bg-wash';
+  'inline-flex min-h-8 items-center gap-1.5 whitespace-nowrap rounded-control border bg-sheet px-2.5 transition-colors hover:bg-wash';
 const ON = 'border-ink border-b-3 text-ink';
 const OFF = 'border-rule-strong border-b text-ink-2 hover:text-ink';
 

@@ -15,7 +15,7 @@ export function PageHeading({ title, children, size = 'usual' }: PageHeadingProp
   return (
     <h1
       tabIndex={-1}
-      className={`max-w-[26em] font-semibold tracking-[-0.012em] ${size === 'large' ? 'text-27 sm:text-34' : 'text-27'}`}
+      className={`max-w-[44em] text-balance font-semibold tracking-[-0.012em] ${size === 'large' ? 'text-27 sm:text-34' : 'text-27'}`}
     >
       {children ?? title}
     </h1>

@@ -24,7 +24,7 @@ export function Select<Value extends string>({ label, value, options, onChange, 
           const chosen = options.find((option) => option.value === event.target.value);
           if (chosen !== undefined) onChange(chosen.value);
         }}
-        className="min-h-8 max-w-48 rounded-control border border-ink-2 bg-sheet px-2 text-ink"
+        className="min-h-8 max-w-40 rounded-control border border-ink-2 bg-sheet px-2 text-ink"
       >
         {options.map((option) => (
           <option key={option.value} value={option.value}>

@@ -30,6 +30,13 @@ export const alarmQueries = {
       queryKey: [KEY, 'totals'] as const,
       queryFn: ({ signal }) => call(alarmEndpoints.list, { query: { show: 'open', limit: 1 }, signal }),
     }),
+  /** The latest of one pump, in whatever state. */
+  ofPump: (pumpId: string) =>
+    queryOptions({
+      queryKey: [KEY, 'pump', pumpId] as const,
+      queryFn: ({ signal }) =>
+        call(alarmEndpoints.list, { query: { show: 'all', pumpId, sort: 'newest', limit: 30 }, signal }),
+    }),
   detail: (alarmId: string) =>
     queryOptions({
       queryKey: [KEY, 'detail', alarmId] as const,

@@ -1,6 +1,7 @@
 import { FLEET_FILTERS, FLEET_SORTS } from '#shared/contract/http/pumps.ts';
 import { PRIORITIES } from '#shared/domain/detectors/detector.ts';
 import { formatDayParam, parseDayParam } from '#src/lib/day-param.ts';
+import { changeSearch, readOneOf, readText } from '#src/lib/read-search.ts';
 import type { FleetFilter } from './fleet-queries.ts';
 
 /** How long the strips are. */
@@ -14,23 +15,15 @@ export type FleetView = {
   readonly day: number | undefined;
 };
 
-const oneOf = <Value extends string>(values: readonly Value[], text: string | null): Value | undefined =>
-  values.find((value) => value === text);
-
-const textOf = (text: string | null, longest: number): string | undefined => {
-  const trimmed = text?.trim().slice(0, longest);
-  return trimmed === undefined || trimmed === '' ? undefined : trimmed;
-};
-
 /** Reads the wall's state from an address; what makes no sense there is left out. */
 export function parseFleetAddress(search: URLSearchParams): FleetView {
   return {
     filter: {
-      q: textOf(search.get('q'), 100),
-      area: textOf(search.get('area'), 60),
-      filter: oneOf(FLEET_FILTERS, search.get('filter')),
-      priority: oneOf(PRIORITIES, search.get('priority')),
-      sort: oneOf(FLEET_SORTS, search.get('sort')),
+      q: readText(search.get('q'), 100),
+      area: readText(search.get('area'), 60),
+      filter: readOneOf(FLEET_FILTERS, search.get('filter')),
+      priority: readOneOf(PRIORITIES, search.get('priority')),
+      sort: readOneOf(FLEET_SORTS, search.get('sort')),
     },
     range: search.get('range') === '7d' ? '7d' : '24h',
     day: parseDayParam(search.get('day')),
@@ -43,15 +36,13 @@ export type FleetChange = FleetFilter & {
   readonly day?: number | undefined;
 };
 
-/** The address after a change. What stands for the usual is left out, so that links stay short. */
+const USUAL = { sort: 'worst', range: '24h' };
+
+/** The address after a change. */
 export function changeFleetAddress(search: URLSearchParams, change: FleetChange): URLSearchParams {
-  const next = new URLSearchParams(search);
-  for (const [name, value] of Object.entries(change)) {
-    const text = name === 'day' && typeof value === 'number' ? formatDayParam(value) : value;
-    if (text === undefined || text === '' || text === '24h' || (name === 'sort' && text === 'worst')) next.delete(name);
-    else next.set(name, String(text));
-  }
-  return next;
+  const { day, ...rest } = change;
+  const days = 'day' in change ? { day: day === undefined ? undefined : formatDayParam(day) } : {};
+  return changeSearch(search, { ...rest, ...days }, USUAL);
 }
 
 export const isNarrowed = ({ filter }: FleetView): boolean =>

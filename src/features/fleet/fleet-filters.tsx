@@ -1,10 +1,10 @@
 import { useSearchParams } from 'react-router-dom';
 import { FLEET_FILTERS, FLEET_SORTS } from '#shared/contract/http/pumps.ts';
 import { Chip } from '#src/components/ui/chip.tsx';
+import { SearchField } from '#src/components/ui/search-field.tsx';
 import { Select } from '#src/components/ui/select.tsx';
 import { t } from '#src/lib/messages/t.ts';
 import { changeFleetAddress, type FleetChange, parseFleetAddress } from './fleet-address.ts';
-import { SearchField } from './search-field.tsx';
 
 const NO_AREA = '';
 
@@ -15,7 +15,7 @@ export function FleetFilters({ areas }: { readonly areas: readonly string[] }) {
   const change = (next: FleetChange, replace = false) =>
     setSearch((current) => changeFleetAddress(current, next), { replace, preventScrollReset: true });
   return (
-    <search className="flex flex-wrap items-center gap-2">
+    <search className="flex flex-wrap items-center gap-1.5">
       <SearchField value={filter.q ?? ''} onSearch={(q) => change({ q }, true)} />
       <fieldset className="contents">
         <legend className="sr-only">{t('fleet.filters')}</legend>

@@ -1,4 +1,4 @@
-import type { PumpDetail, PumpLive, Strip } from '#shared/contract/http/pumps.ts';
+import type { FleetPage, PumpDetail, PumpLive, Strip } from '#shared/contract/http/pumps.ts';
 import type { LiveTable } from '#src/lib/live/live-table.ts';
 import { pumpQueries } from './pump-queries.ts';
 import { upsertRun } from './upsert-run.ts';
@@ -6,9 +6,14 @@ import { upsertRun } from './upsert-run.ts';
 /** News of pumps and runs, written into the pump's page and into every strip that shows the pump. */
 export const pumpNews: LiveTable = {
   pumps: (client, pumps) => {
-    for (const live of pumps) {
-      client.setQueryData<PumpDetail>(pumpQueries.detail(live.pumpId).queryKey, (detail) => patchDetail(detail, live));
+    const news = new Map(pumps.map((live) => [live.pumpId, live]));
+    for (const [pumpId, live] of news) {
+      client.setQueryData<PumpDetail>(
+        pumpQueries.detail(pumpId).queryKey,
+        (detail) => detail && { ...detail, ...live },
+      );
     }
+    client.setQueryData<FleetPage>(pumpQueries.mine().queryKey, (page) => page && patchMine(page, news));
   },
   runs: (client, runs) => {
     for (const { pumpId, run } of runs) {
@@ -19,5 +24,7 @@ export const pumpNews: LiveTable = {
   },
 };
 
-const patchDetail = (detail: PumpDetail | undefined, live: PumpLive): PumpDetail | undefined =>
-  detail === undefined ? undefined : { ...detail, ...live };
+const patchMine = (page: FleetPage, news: ReadonlyMap<string, PumpLive>): FleetPage => ({
+  ...page,
+  items: page.items.map((row) => ({ ...row, ...news.get(row.pumpId) })),
+});

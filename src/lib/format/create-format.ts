@@ -37,7 +37,9 @@ export function createFormat({ locale, preferences: { units, clock } }: FormatOp
     /** The time alone when it lies in today, else with its day. */
     moment: (at: number, zone: string, now: number) =>
       isSameDay(at, now, zone) ? time(at, zone) : `${day(at, zone)}, ${time(at, zone)}`,
-    isSameDay,
+    /** The day, by its word when it is today, and the time. */
+    dayAndTime: (at: number, zone: string, now: number, today: string) =>
+      `${isSameDay(at, now, zone) ? today : day(at, zone)} ${time(at, zone)}`,
     span: formatSpan,
     zoneName: (at: number, zone: string) => formatZoneName(at, zone, locale),
   };

@@ -4,6 +4,11 @@ import type { ValuesOf } from './message-values.ts';
 
 export type MessageKey = keyof Catalogue;
 
+/** Keys of messages that have no places. */
+export type PlainKey = {
+  [Key in MessageKey]: ValuesOf<Catalogue[Key]> extends [] ? Key : never;
+}[MessageKey];
+
 /**
  * The words for a key, with its places filled. English is the first language; another one is another catalogue with
  * the same keys.
@@ -13,3 +18,6 @@ export type MessageKey = keyof Catalogue;
 export function t<Key extends MessageKey>(key: Key, ...[values]: ValuesOf<Catalogue[Key]>): string {
   return fillMessage(CATALOGUE[key], values);
 }
+
+/** Whether a name made at run time is a message's key. */
+export const isPlainKey = (key: string): key is PlainKey => Object.hasOwn(CATALOGUE, key);

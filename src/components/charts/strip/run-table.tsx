@@ -1,3 +1,4 @@
+import { DataTable } from '#src/components/ui/data-table.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
 import { t } from '#src/lib/messages/t.ts';
 import { STANDSTILL_RPM, type StripRun } from './strip-run.ts';
@@ -10,48 +11,34 @@ export type RunTableProps = {
   readonly caption: string;
 };
 
-const CELL = 'border-t border-rule px-3 py-1.5';
-
 /** Everything a strip shows, as text: the same runs, one a row, the latest first. */
 export function RunTable({ runs, zone, now, caption }: RunTableProps) {
   const format = useFormat();
   if (runs.length === 0) return <p className="text-ink-2">{t('strip.empty')}</p>;
+  const figure = (run: StripRun, value: number) => (run.source === 'no-data' ? '–' : format.number(value));
   return (
-    <div className="overflow-x-auto">
-      <table className="w-full border-collapse text-left">
-        <caption className="sr-only">{caption}</caption>
-        <thead className="text-13 text-ink-2">
-          <tr>
-            <th className="px-3 py-1.5 font-medium">{t('strip.from')}</th>
-            <th className="px-3 py-1.5 font-medium">{t('strip.to')}</th>
-            <th className="px-3 py-1.5 font-medium">{t('strip.lasted')}</th>
-            <th className="px-3 py-1.5 font-medium">{t('strip.source')}</th>
-            <th className="px-3 py-1.5 text-right font-medium">{t('strip.measured')}</th>
-            <th className="px-3 py-1.5 text-right font-medium">{t('strip.expected')}</th>
-            <th className="px-3 py-1.5 text-right font-medium">{t('strip.watts')}</th>
-          </tr>
-        </thead>
-        <tbody>
-          {newestFirst(runs).map((run) => {
-            const unseen = run.source === 'no-data';
-            return (
-              <tr key={run.from}>
-                <td className={`figures ${CELL}`}>{format.moment(run.from, zone, now)}</td>
-                <td className={`figures ${CELL}`}>
-                  {run.to === null ? t('strip.now') : format.moment(run.to, zone, now)}
-                </td>
-                <td className={`figures ${CELL}`}>{format.span((run.to ?? now) - run.from)}</td>
-                <td className={CELL}>{describeSource(run)}</td>
-                <td className={`figures text-right ${CELL}`}>{unseen ? '–' : format.number(run.meanRpm)}</td>
-                <td className={`figures text-right ${CELL}`}>
-                  {unseen || run.expectedRpm < STANDSTILL_RPM ? '–' : format.number(run.expectedRpm)}
-                </td>
-                <td className={`figures text-right ${CELL}`}>{unseen ? '–' : format.number(run.meanWatts)}</td>
-              </tr>
-            );
-          })}
-        </tbody>
-      </table>
-    </div>
+    <DataTable
+      caption={caption}
+      rows={newestFirst(runs)}
+      keyOf={({ from }) => from}
+      columns={[
+        { head: t('strip.from'), figures: true, cell: ({ from }: StripRun) => format.moment(from, zone, now) },
+        {
+          head: t('strip.to'),
+          figures: true,
+          cell: ({ to }) => (to === null ? t('strip.now') : format.moment(to, zone, now)),
+        },
+        { head: t('strip.lasted'), figures: true, cell: ({ from, to }) => format.span((to ?? now) - from) },
+        { head: t('strip.source'), cell: describeSource },
+        { head: t('strip.measured'), figures: true, right: true, cell: (run) => figure(run, run.meanRpm) },
+        {
+          head: t('strip.expected'),
+          figures: true,
+          right: true,
+          cell: (run) => (run.expectedRpm < STANDSTILL_RPM ? '–' : figure(run, run.expectedRpm)),
+        },
+        { head: t('strip.watts'), figures: true, right: true, cell: (run) => figure(run, run.meanWatts) },
+      ]}
+    />
   );
 }

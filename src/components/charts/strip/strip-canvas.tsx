@@ -5,7 +5,7 @@ import { themeStore } from '#src/lib/theme.ts';
 import { readStripColours } from './strip-colours.ts';
 import { placeLabels } from './strip-labels.ts';
 import { STRIP_METRICS, type StripSize } from './strip-metrics.ts';
-import { paintStrip, type StripPicture } from './strip-paint.ts';
+import { LABEL_FONT, paintStrip, type StripPicture } from './strip-paint.ts';
 import type { StripRun } from './strip-run.ts';
 import { listRules } from './strip-ticks.ts';
 import { layoutStrip, type StripInput } from './strip-view.ts';
@@ -23,7 +23,15 @@ const fontStore = createStore(false);
 if (typeof document !== 'undefined')
   void document.fonts.load('600 13px "JetBrains Mono"').then(() => fontStore.set(true));
 
-const LABEL_PIXELS = 6.9;
+/** Wide of what a label takes, until a canvas can measure it. */
+const PIXELS_A_LETTER = 6.9;
+const ruler = typeof document === 'undefined' ? null : document.createElement('canvas').getContext('2d');
+
+function measureLabel(text: string): number {
+  if (ruler === null) return text.length * PIXELS_A_LETTER;
+  ruler.font = LABEL_FONT;
+  return ruler.measureText(text).width;
+}
 
 /** The strip itself: one canvas, sharp at any density, in the theme's ink. It says nothing by itself: see Strip. */
 export function StripCanvas(props: StripCanvasProps) {
@@ -36,14 +44,12 @@ export function StripCanvas(props: StripCanvasProps) {
   const picture = useMemo((): StripPicture => {
     const layout = layoutStrip({ runs, planned, window, now, tone, topRpm }, width, metrics);
     const labels =
-      metrics.labelled && labelOf !== undefined
-        ? placeLabels(layout.blocks, labelOf, (text) => text.length * LABEL_PIXELS, width)
-        : [];
+      metrics.labelled && labelOf !== undefined ? placeLabels(layout.blocks, labelOf, measureLabel, width) : [];
     return { layout, rules, labels, metrics, width };
   }, [runs, planned, window, now, tone, topRpm, width, metrics, labelOf, rules]);
 
-  // biome-ignore lint/correctness/useExhaustiveDependencies: `fonts` is no input of the drawing, its arrival is a reason to draw again.
   // Before the browser paints or prints: a page on its way to paper must not show last theme's ink.
+  // biome-ignore lint/correctness/useExhaustiveDependencies: `fonts` is no input of the drawing, its arrival is a reason to draw again.
   useLayoutEffect(() => {
     const element = canvas.current;
     const context = element?.getContext('2d');

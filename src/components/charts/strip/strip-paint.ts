@@ -13,6 +13,8 @@ export type StripPicture = {
   readonly width: number;
 };
 
+export const LABEL_FONT = '500 13px "Atkinson Hyperlegible Next", sans-serif';
+
 type Pen = { readonly context: CanvasRenderingContext2D; readonly colours: StripColours; readonly density: number };
 
 function stroke(
@@ -90,7 +92,7 @@ function paintPlanned({ context, colours }: Pen, { layout }: StripPicture) {
 }
 
 function paintLabels({ context, colours }: Pen, { labels }: StripPicture) {
-  context.font = '500 13px "Atkinson Hyperlegible Next", sans-serif';
+  context.font = LABEL_FONT;
   context.fillStyle = colours.ink;
   for (const { text, x, y } of labels) context.fillText(text, x, y);
 }

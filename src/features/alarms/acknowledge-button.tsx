@@ -1,0 +1,50 @@
+import type { Alarm } from '#shared/contract/http/alarms.ts';
+import { Button } from '#src/components/ui/button.tsx';
+import { useNow } from '#src/hooks/use-now.ts';
+import { useSession } from '#src/hooks/use-session.ts';
+import { t } from '#src/lib/messages/t.ts';
+import { isWaiting, mayUndo, titleOf, whereOf } from './alarm-view.ts';
+import { useAcknowledge } from './use-acknowledge.ts';
+import { useWithdraw } from './use-withdraw.ts';
+
+export type AcknowledgeButtonProps = {
+  readonly alarm: Alarm;
+  readonly note?: string;
+  /** As high as a gloved finger needs, and as wide as the page. */
+  readonly touch?: boolean;
+};
+
+/** Acknowledge; for five minutes after one has, the way back; else nothing. */
+export function AcknowledgeButton({ alarm, note = '', touch = false }: AcknowledgeButtonProps) {
+  const acknowledge = useAcknowledge();
+  const withdraw = useWithdraw();
+  const { user } = useSession();
+  const now = useNow(10_000);
+  const words = { title: titleOf(alarm), where: whereOf(alarm) };
+  const wide = touch ? 'w-full' : '';
+  if (isWaiting(alarm)) {
+    return (
+      <Button
+        look="main"
+        touch={touch}
+        className={wide}
+        aria-label={t('alarm.acknowledgeNamed', words)}
+        onClick={() => acknowledge.mutate({ alarm, note })}
+      >
+        {t('alarm.acknowledge')}
+      </Button>
+    );
+  }
+  if (!mayUndo(alarm, user.name, now)) return null;
+  return (
+    <Button
+      touch={touch}
+      className={wide}
+      disabled={acknowledge.isPending || withdraw.isPending}
+      aria-label={t('alarm.undoNamed', words)}
+      onClick={() => withdraw.mutate(alarm)}
+    >
+      {t('alarm.undo')}
+    </Button>
+  );
+}
