@@ -5,10 +5,17 @@ import type { FoldContext } from './fold-context.ts';
 import { feedSlot, type PumpSlot } from './pump-slot.ts';
 import { quarantine, saveTouched } from './save-touched.ts';
 
+/** Readings that are folded before the event loop gets its turn. */
+const EVENTS_A_TURN = 400;
+
 /** Folds messages that were stored a moment ago, and commits what came of them in one transaction. */
 export async function foldMessages(context: FoldContext, messages: readonly StoredMessage[]): Promise<void> {
   const touched = new Set<PumpSlot>();
+  let fed = 0;
   for (const message of messages) {
+    // Folding must not keep what arrives meanwhile from being acknowledged.
+    if (fed >= EVENTS_A_TURN) await new Promise((resolve) => setImmediate(resolve));
+    fed = fed >= EVENTS_A_TURN ? 0 : fed + Math.max(1, message.readings.length);
     const slot = context.slots.find(message.pumpId);
     // What is behind reads this message from the database, in its turn.
     if (slot === undefined || slot.mode !== 'live' || message.sequence <= slot.cursor) continue;

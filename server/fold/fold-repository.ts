@@ -10,7 +10,7 @@ const WRITE = `with given as (
   select * from json_to_recordset($2::json) as g(pump_id uuid, cursor bigint, hot jsonb, now jsonb, high_water float8,
     heard_at float8, silent_since float8)),
 written as (
-  update pump_states s set cursor = g.cursor, hot = g.hot, now = g.now,
+  update pump_states s set cursor = coalesce(g.cursor, s.cursor), hot = coalesce(g.hot, s.hot), now = g.now,
     high_water = to_timestamp(g.high_water / 1000), heard_at = to_timestamp(g.heard_at / 1000),
     silent_since = to_timestamp(g.silent_since / 1000), quarantined_at = null, quarantine_reason = null
   from given g where s.pump_id = g.pump_id and s.epoch = $1
@@ -56,22 +56,21 @@ export async function writeFold(
   return new Set(rows.map(({ pump_id }) => pump_id));
 }
 
-function stateJson(write: FoldWrite): string {
-  const { slot, cursor, hot, now, highWater, heardAt, silentSince } = write;
+function stateJson({ slot, state, now, highWater, heardAt, silentSince }: FoldWrite): string {
   const plain = JSON.stringify({
     pump_id: slot.pump.pumpId,
-    cursor,
+    cursor: state?.cursor,
     now,
     high_water: highWater,
     heard_at: heardAt,
     silent_since: silentSince,
   });
-  return `${plain.slice(0, -1)},"hot":${hot}}`;
+  return state === undefined ? plain : `${plain.slice(0, -1)},"hot":${state.hot}}`;
 }
 
-function learntJson({ slot, learnt }: FoldWrite): string[] {
-  if (learnt === undefined) return [];
-  return [`{"pump_id":"${slot.pump.pumpId}","version":${learnt.version},"learnt":${learnt.json}}`];
+function learntJson({ slot, state }: FoldWrite): string[] {
+  if (state?.learnt === undefined) return [];
+  return [`{"pump_id":"${slot.pump.pumpId}","version":${state.learnt.version},"learnt":${state.learnt.json}}`];
 }
 
 /** A run as JSON text with the columns' names. */

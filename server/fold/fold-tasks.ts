@@ -10,7 +10,9 @@ import { reloadContexts } from './reload-contexts.ts';
 import { tickPumps } from './tick-pumps.ts';
 
 /** Messages are folded together up to this many readings: beyond it a commit takes long and gains nothing. */
-export const EVENTS_PER_COMMIT = 4000;
+const EVENTS_PER_COMMIT = 10_000;
+/** Between two commits, so that what comes in a trickle is committed in sips and not in drops. */
+const BETWEEN_COMMITS_MS = 40;
 
 /** Everything the fold does, in the order in which it is looked for. */
 export function listFoldTasks(context: FoldContext, requests: FoldRequests): FoldTask[] {
@@ -85,6 +87,7 @@ async function foldNext(context: FoldContext, requests: FoldRequests): Promise<v
   // Before anything of theirs is folded from memory.
   doubtRequested(context, requests);
   await foldMessages(context, context.queue.take(EVENTS_PER_COMMIT));
+  await new Promise((resolve) => setTimeout(resolve, BETWEEN_COMMITS_MS));
 }
 
 function doubtRequested(context: FoldContext, { doubted }: FoldRequests): void {

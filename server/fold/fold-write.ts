@@ -4,37 +4,66 @@ import type { Run } from '#shared/domain/runs/run.ts';
 import type { PumpSlot } from './pump-slot.ts';
 import { encodeHot } from './saved-hot.ts';
 
+/** The state a fold goes on from, with the place in the order of arrival that it stands for: written together, always. */
+export type SavedState = {
+  readonly cursor: number;
+  readonly hot: string;
+  /** Only when it changed since it was last written. */
+  readonly learnt: { readonly version: number; readonly json: string } | undefined;
+};
+
 /** Everything one commit says of one pump. */
 export type FoldWrite = {
   readonly slot: PumpSlot;
-  readonly cursor: number;
-  readonly hot: string;
+  /** Undefined = as it was written before: after a crash the events since then are folded again. */
+  readonly state: SavedState | undefined;
   readonly now: PumpNow | undefined;
   readonly highWater: number | undefined;
   readonly heardAt: number | undefined;
   readonly silentSince: number | undefined;
-  /** Only when it changed since it was last written. */
-  readonly learnt: { readonly version: number; readonly json: string } | undefined;
   readonly runs: readonly Run[];
   readonly signals: readonly AlarmSignal[];
 };
 
-/** Takes what a pump's fold put out, with its state as it is after that. */
-export function takeFoldWrite(slot: PumpSlot, output: FoldOutput = slot.fold.take()): FoldWrite {
+/**
+ * Folding again is harmless as long as it says nothing twice: runs are named by their beginning. What it would cost is
+ * time after a crash, what it saves is most of the writing.
+ */
+const STATE_EVERY_MS = 30_000;
+
+/**
+ * Takes what a pump's fold put out. The state goes with it when there are signals, which must never be said twice, and
+ * otherwise every half minute.
+ */
+export function takeFoldWrite(slot: PumpSlot, at: number, output: FoldOutput = slot.fold.take()): FoldWrite {
   const { fold } = slot;
   const { runs, signals } = output;
-  const saved = fold.save();
-  const isLearnt = saved.learntVersion !== slot.learntVersion;
+  const isDue = signals.length > 0 || at - slot.stateSavedAt >= STATE_EVERY_MS;
   return {
     slot,
-    cursor: slot.cursor,
-    hot: encodeHot(saved.hot, slot),
+    state: isDue ? takeState(slot, at) : undefined,
     now: fold.now(),
     highWater: fold.highWater(),
     heardAt: slot.heardAt,
     silentSince: slot.silentSince,
-    learnt: isLearnt ? { version: saved.learntVersion, json: JSON.stringify(saved.learnt) } : undefined,
     runs,
     signals,
+  };
+}
+
+/** The same with the state in any case. */
+export function takeWholeWrite(slot: PumpSlot, at: number): FoldWrite {
+  const write = takeFoldWrite(slot, at);
+  return write.state === undefined ? { ...write, state: takeState(slot, at) } : write;
+}
+
+function takeState(slot: PumpSlot, at: number): SavedState {
+  const { hot, learnt, learntVersion } = slot.fold.save();
+  slot.stateSavedAt = at;
+  const isLearnt = learntVersion !== slot.learntVersion;
+  return {
+    cursor: slot.cursor,
+    hot: encodeHot(hot, slot),
+    learnt: isLearnt ? { version: learntVersion, json: JSON.stringify(learnt) } : undefined,
   };
 }

@@ -3,6 +3,7 @@ import type { FoldContext, FoldOptions, FoldRequests } from './fold-context.ts';
 import { createFoldQueue } from './fold-queue.ts';
 import { listFoldTasks } from './fold-tasks.ts';
 import { createFoldWork } from './fold-work.ts';
+import { saveStates } from './save-touched.ts';
 import { createSlotTable } from './slot-table.ts';
 
 /** "Stored, then understood": the second half. Everything but `start`, `drain` and `stop` returns at once. */
@@ -91,6 +92,7 @@ export function createFold(options: FoldOptions): Fold {
     stop: async () => {
       clearInterval(waker);
       await work.stop();
+      await saveStates(context);
     },
   };
 }

@@ -19,6 +19,9 @@ export type PumpSlot = {
   /** Not to be read from the database before this, ms. */
   notBefore: number;
   learntVersion: number;
+  /** When the state was last written, ms; whether anything was folded since. */
+  stateSavedAt: number;
+  isStateOld: boolean;
   heardAt: number | undefined;
   silentSince: number | undefined;
   connection: string | undefined;
@@ -42,6 +45,9 @@ export function createPumpSlot(pump: CommissionedPump, state: ClaimedState, notB
     lastStored: state.cursor,
     notBefore,
     learntVersion: state.learntVersion,
+    // Not all pumps in the same half minute.
+    stateSavedAt: notBefore - ((pump.pumpNumber * 7919) % 30_000),
+    isStateOld: false,
     heardAt: state.heardAt,
     silentSince: state.silentSince,
     connection: hot.connection,
@@ -58,6 +64,7 @@ export function feedSlot(slot: PumpSlot, event: PumpEvent, sequence: number): vo
   }
   slot.fold.push(event);
   slot.cursor = sequence;
+  slot.isStateOld = true;
 }
 
 /** Advances a pump's time where nothing was heard; says whether its silence began now. */

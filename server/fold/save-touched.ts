@@ -3,23 +3,33 @@ import { commitFold } from './commit-fold.ts';
 import { fallBehind } from './fall-behind.ts';
 import type { FoldContext } from './fold-context.ts';
 import { setAside } from './fold-repository.ts';
-import { type FoldWrite, takeFoldWrite } from './fold-write.ts';
+import { type FoldWrite, takeFoldWrite, takeWholeWrite } from './fold-write.ts';
 import type { PumpSlot } from './pump-slot.ts';
 
 /** A write that failed is read anew after this, ms. */
 const RELOAD_AFTER_MS = 500;
 const MOST_RACES = 5;
+const STATES_A_COMMIT = 500;
 
 /**
  * Commits what the fold of some pumps put out, together. A pump that another process owns by now is let go. Where the
  * database cannot be reached the pumps go back to what is stored and are folded again from there.
  */
 export async function saveTouched(context: FoldContext, touched: Iterable<PumpSlot>): Promise<void> {
+  const now = context.now();
   const slots = [...touched].filter(({ mode }) => mode !== 'set-aside');
-  await saveWrites(
-    context,
-    slots.map((slot) => takeFoldWrite(slot)),
-  );
+  const writes = slots.map((slot) => takeFoldWrite(slot, now));
+  await saveWrites(context, writes);
+}
+
+/** Writes the states of all pumps of which something was folded since: the next start has nothing to fold again. */
+export async function saveStates(context: FoldContext): Promise<void> {
+  const now = context.now();
+  const old = context.slots.list().filter(({ mode, isStateOld }) => mode === 'live' && isStateOld);
+  for (let from = 0; from < old.length; from += STATES_A_COMMIT) {
+    const writes = old.slice(from, from + STATES_A_COMMIT).map((slot) => takeWholeWrite(slot, now));
+    await saveWrites(context, writes);
+  }
 }
 
 /** The same for output that was taken already. */
@@ -39,8 +49,9 @@ export async function saveWrites(context: FoldContext, writes: readonly FoldWrit
   }
 }
 
-function afterWrite(context: FoldContext, { slot, learnt }: FoldWrite, isWritten: boolean): void {
-  if (learnt !== undefined && isWritten) slot.learntVersion = learnt.version;
+function afterWrite(context: FoldContext, { slot, state }: FoldWrite, isWritten: boolean): void {
+  if (state !== undefined && isWritten) slot.isStateOld = false;
+  if (state?.learnt !== undefined && isWritten) slot.learntVersion = state.learnt.version;
   if (!isWritten) {
     context.slots.delete(slot.pump.pumpId);
     context.log.info({ pump: slot.pump.pumpId }, 'pump is folded by another process now');

@@ -19,7 +19,7 @@ export async function tickPumps(context: FoldContext): Promise<void> {
       const wentSilent = tickSlot(slot, now, context.listeningSince);
       const output = slot.fold.take();
       const isNews = wentSilent || output.signals.length > 0 || output.runs.length > 0;
-      if (isNews) writes.push(takeFoldWrite(slot, output));
+      if (isNews) writes.push(takeFoldWrite(slot, now, output));
     } catch (error) {
       await quarantine(context, slot, error);
     }
