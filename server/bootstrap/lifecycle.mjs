@@ -17,13 +17,17 @@ import { say, wordsFor } from './say.mjs';
 /** Thrown to leave a start that is no longer wanted. It is not a fault. */
 export const STOPPING = Symbol('stopping');
 
+/** Ctrl-C at a terminal reaches us twice under npm, which passes on what we got ourselves: it is one wish. In ms. */
+const ONE_WISH_MS = 500;
+
 /**
  * Follows Ctrl-C, TERM and HUP (the terminal is gone). The first asks for an end in order, the next one hurries.
  *
  * @param {import('node:events').EventEmitter} [signals] the process, or a stand-in
+ * @param {() => number} [now] ms
  * @returns {Lifecycle}
  */
-export function followSignals(signals = process) {
+export function followSignals(signals = process, now = () => performance.now()) {
   const [stop, hurry] = [new AbortController(), new AbortController()];
   /** @type {(() => unknown)[]} */
   const undos = [];
@@ -32,14 +36,17 @@ export function followSignals(signals = process) {
   const leaveIfStopping = () => {
     if (stop.signal.aborted) throw STOPPING;
   };
+  let askedAt = 0;
   /** @param {string} text */
   const requestStop = (text) => {
-    if (stop.signal.aborted) {
-      if (!hurry.signal.aborted) say('Hurrying.');
-      return hurry.abort();
+    if (!stop.signal.aborted) {
+      askedAt = now();
+      say(text);
+      return stop.abort();
     }
-    say(text);
-    stop.abort();
+    if (hurry.signal.aborted || now() - askedAt < ONE_WISH_MS) return;
+    say('Hurrying.');
+    hurry.abort();
   };
   for (const name of ['SIGINT', 'SIGTERM', 'SIGHUP']) {
     signals.on(name, () => requestStop(`\nStopping (${name}); once more to hurry.`));

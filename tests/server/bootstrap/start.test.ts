@@ -131,8 +131,10 @@ describe('an end', () => {
     running.process.kill('SIGINT');
     await running.says('Stopping worker');
     const asked = performance.now();
-    running.process.kill('SIGINT');
+    const impatience = setInterval(() => running.process.kill('SIGINT'), 200);
     expect(await running.ended).toBe(0);
+    clearInterval(impatience);
+    expect(running.output()).toContain('Hurrying.');
     // Its grace alone is ten seconds.
     expect(performance.now() - asked).toBeLessThan(8_000);
     expect(findRunningServer(databaseFolder())).toBeUndefined();
