@@ -36,14 +36,21 @@ export async function lockOpenAlarms(database: Database, pumpIds: readonly strin
   return rows.map(toOpenAlarm);
 }
 
-/** Open alarms that time alone may change (escalation, re-alarm, end of a shelf), locked unless somebody else has them. */
-export async function lockWaitingAlarms(database: Database, limit: number, afterId: string): Promise<OpenAlarm[]> {
+/** Open alarms that time alone may change (escalation, re-alarm, the end of a shelf), as they stand. */
+export async function listWaitingAlarms(database: Database): Promise<OpenAlarm[]> {
   const { rows } = await database.query<Row>(
     `select id, company_id, pump_id, pad_id, record from alarms
-     where state in ('unacknowledged', 'acknowledged', 'returned', 'latched') and id > $2::uuid
-       and (alarm_class = 'alarm' and priority <> 'note' or shelved_until is not null)
-     order by id limit $1 for update skip locked`,
-    [limit, afterId],
+     where state <> 'normal' and (alarm_class = 'alarm' and priority <> 'note' or shelved_until is not null)`,
+  );
+  return rows.map(toOpenAlarm);
+}
+
+/** These alarms, locked. */
+export async function lockAlarms(database: Database, alarmIds: readonly string[]): Promise<OpenAlarm[]> {
+  const { rows } = await database.query<Row>(
+    `select id, company_id, pump_id, pad_id, record from alarms
+     where id = any($1::uuid[]) and state <> 'normal' order by id for update`,
+    [alarmIds],
   );
   return rows.map(toOpenAlarm);
 }
