@@ -145,10 +145,10 @@ function liveAnswer(state: ControlState, judgement: ReturnType<typeof createJudg
       return judgement.primeEndsAt;
     },
     get programEdgeBefore() {
-      return judgement.edgeBefore;
+      return judgement.edges.before;
     },
     get programEdgeAfter() {
-      return judgement.edgeAfter;
+      return judgement.edges.after;
     },
     get motorClockOffsetMinutes() {
       return motorClockOffset(state);

@@ -4,10 +4,12 @@ import type { ControlState } from './control-state.ts';
 import { decide, PRIME_GRACE_SECONDS } from './decide.ts';
 import type { Decision } from './decision.ts';
 import { motorClockOffset } from './motor-clock-offset.ts';
+import { findPrimeStart, reviewAssumedStart } from './prime-start.ts';
+import { type ProgramEdges, programEdges } from './program-edges.ts';
 import { findSlotIndex, type ProgramTimeline, programTimeline } from './program-timeline.ts';
 import type { PumpContext } from './pump-context.ts';
 import type { Situation } from './situation.ts';
-import { fitsSpeed, speedTolerance } from './speed-tolerance.ts';
+import { speedTolerance } from './speed-tolerance.ts';
 import { trackClaims, trackFreeze } from './track-claims.ts';
 import { type Step, trackDue, trackMotion } from './track-start.ts';
 import { winningInput } from './winning-input.ts';
@@ -23,8 +25,7 @@ export type Judgement = {
   /** What is due but for a prime, rpm. */
   baseRpm: number;
   primeEndsAt: number | undefined;
-  edgeBefore: number | undefined;
-  edgeAfter: number | undefined;
+  edges: ProgramEdges;
   validUntil: number;
   /** Works everything out anew for a reading, and moves the state along. */
   renew(step: Step): void;
@@ -63,8 +64,7 @@ export function createJudgement(context: PumpContext, state: ControlState): Judg
     toleranceRpm: speedTolerance(0),
     baseRpm: 0,
     primeEndsAt: undefined,
-    edgeBefore: undefined,
-    edgeAfter: undefined,
+    edges: { before: undefined, after: undefined },
     validUntil: Number.NEGATIVE_INFINITY,
     renew: (step) =>
       renew(
@@ -72,7 +72,7 @@ export function createJudgement(context: PumpContext, state: ControlState): Judg
         { context, state, timeline: timelineAt(step.reading.at), winner: winnerOf(context, step.reading) },
         step,
       ),
-    review: (reading) => reviewAssumption(context, state, reading, judgement.baseRpm),
+    review: (reading) => reviewAssumedStart(context.settings.prime, state, reading, judgement.baseRpm),
     expire() {
       judgement.validUntil = Number.NEGATIVE_INFINITY;
     },
@@ -112,7 +112,7 @@ function renew(judgement: Judgement, known: Known, step: Step): void {
   const base = state.freezeSince === null ? asked : decide(settings, traits, wanted, timeline);
   const slotIndex = findSlotIndex(timeline, reading.at);
   trackDue(state, step, base.rpm, base.source === 'program' ? timeline.slots[slotIndex] : undefined);
-  const primed: Situation = { ...wanted, prime: primeOf(known, reading, base.rpm) };
+  const primed: Situation = { ...wanted, prime: findPrimeStart(settings.prime, state, reading, base.rpm) };
   const due = decide(settings, traits, primed, timeline);
   const held = heldSituation(primed, reading, step.standing);
   const decision = held === undefined ? due : decide(settings, traits, held, timeline);
@@ -124,7 +124,7 @@ function renew(judgement: Judgement, known: Known, step: Step): void {
   judgement.toleranceRpm = speedTolerance(due.rpm);
   judgement.baseRpm = base.rpm;
   judgement.primeEndsAt = due.because.kind === 'prime' ? due.because.endsAt : undefined;
-  noteEdges(judgement, timeline, slotIndex, reading.at);
+  judgement.edges = programEdges(timeline, slotIndex, reading.at);
   judgement.validUntil = nextChange(known, primed, slotIndex, reading.at);
   state.closedInputs = reading.closedInputs;
   state.reported = reading.reportedSource ?? null;
@@ -141,34 +141,6 @@ function bareSituation({ context, state }: Known, reading: Reading): Situation {
     keypadRpm: state.keypadRpm ?? undefined,
     timedSince: state.timedPausedAt === null ? (state.timedSince ?? undefined) : undefined,
   };
-}
-
-/**
- * The start whose prime counts: the one seen, or the one due while the shaft stands. Where a start may have been
- * missed, it is the first reading since, as long as the shaft turns at the prime's speed.
- */
-function primeOf({ context, state }: Known, reading: Reading, baseRpm: number): Situation['prime'] {
-  const { prime } = context.settings;
-  if (prime === null) return undefined;
-  const claimed = reading.reportedSource === 'prime';
-  const seen = state.standing ? (state.dueSince ?? state.primeSaidSince) : state.startedAt;
-  const primes = claimed || (fitsSpeed(reading.rpm, prime.rpm) && !fitsSpeed(reading.rpm, baseRpm));
-  const since = primes ? (state.assumedSince ?? seen) : seen;
-  return since !== null && reading.at < since + longestPrimeMs(prime) ? { since, claimed } : undefined;
-}
-
-function longestPrimeMs({ seconds }: { readonly seconds: number }): number {
-  return (seconds + PRIME_GRACE_SECONDS) * 1000;
-}
-
-/** Gives up the assumption of a missed start once the settled speed, or the time since, speaks against it. */
-function reviewAssumption({ settings }: PumpContext, state: ControlState, reading: Reading, baseRpm: number): void {
-  if (state.assumedSince === null) return;
-  const { prime } = settings;
-  const over = prime === null || reading.at >= state.assumedSince + longestPrimeMs(prime);
-  const elsewhere =
-    fitsSpeed(reading.rpm, baseRpm) || (prime !== null && state.rampOver && !fitsSpeed(reading.rpm, prime.rpm));
-  if (over || (elsewhere && reading.reportedSource !== 'prime')) state.assumedSince = null;
 }
 
 /** The situation with a believed keypad stop or fault; undefined where there is neither. */
@@ -194,17 +166,6 @@ function noteChange(state: ControlState, { decision, due, moved, winner }: Chang
   state.dueSource = due.source;
   state.dueRpm = due.rpm;
   state.winner = winner;
-}
-
-/** An edge is where the program's speed changes. */
-function noteEdges(judgement: Judgement, { slots }: ProgramTimeline, slotIndex: number, at: number): void {
-  let before = slotIndex;
-  while (before > 0 && slots[before - 1]?.rpm === slots[before]?.rpm) before -= 1;
-  let after = slotIndex;
-  while (after + 1 < slots.length && slots[after + 1]?.rpm === slots[after]?.rpm) after += 1;
-  const edgeBefore = before > 0 ? slots[before]?.from : undefined;
-  judgement.edgeBefore = edgeBefore !== undefined && edgeBefore <= at ? edgeBefore : undefined;
-  judgement.edgeAfter = after + 1 < slots.length ? slots[after]?.to : undefined;
 }
 
 /** The first instant at which the clock alone can change the answer. */

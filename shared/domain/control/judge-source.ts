@@ -31,7 +31,8 @@ export function judgeSource(
   if (fitsInput(true)) return 'input';
   if (program.some((entry) => fitsSpeed(rpm, entry.rpm))) return 'program';
   const said = reading.reportedSource;
-  if (said === 'prime' && prime !== null && fitsSpeed(rpm, prime.rpm)) return 'prime';
+  // A motor that says nothing may have started before its time: its prime is the likeliest.
+  if ((said === 'prime' || said === undefined) && prime !== null && fitsSpeed(rpm, prime.rpm)) return 'prime';
   if (said === 'timed' && timed !== null && fitsSpeed(rpm, timed.rpm)) return 'timed';
   if (said === 'freeze' && freeze !== null && fitsSpeed(rpm, freeze.rpm)) return 'freeze';
   return fitsInput(false) ? 'input' : 'unknown';

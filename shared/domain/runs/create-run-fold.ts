@@ -1,25 +1,19 @@
 import type { ControlAnswer } from '../control/control-answer.ts';
 import { GAP_INTERVALS } from '../control/create-control.ts';
 import type { PumpContext } from '../control/pump-context.ts';
-import { speedTolerance } from '../control/speed-tolerance.ts';
 import type { Reading } from '../readings/reading.ts';
+import { addInterval } from './add-interval.ts';
 import { describeGap, describeRun } from './describe-run.ts';
+import { followDeparture } from './follow-departure.ts';
+import { isAnotherRun, openRun, partedRun } from './open-run.ts';
 import type { Run, RunFlag } from './run.ts';
 import {
   copyRunFoldState,
-  type Departure,
   freshRunFoldState,
   type OpenRun,
   parseRunFoldState,
   type RunFoldState,
 } from './run-fold-state.ts';
-import { addSums, emptySums, type RunSums, settledMean } from './run-sums.ts';
-
-/** A speed off the mean for this long is a run of its own, ms. */
-const DEPARTURE_MS = 60_000;
-/** Within a departure the speed is settled once it moved under 20 rpm, or from 30 s on, like a ramp. */
-const SETTLED_STEP_RPM = 20;
-const SETTLED_AFTER_MS = 30_000;
 
 export type RunFold = {
   /**
@@ -78,7 +72,7 @@ export function createRunFold(context: PumpContext, saved?: unknown): RunFold {
       finish(reading.at);
       state.open = openRun(reading.at, reading, control);
     } else {
-      const parted = stay(state, open, reading, gpm);
+      const parted = followDeparture(state, open, reading, gpm);
       if (parted !== undefined) {
         open.wattMs += parted.holdWattMs;
         finish(parted.since);
@@ -134,96 +128,4 @@ export function createRunFold(context: PumpContext, saved?: unknown): RunFold {
     },
     save: () => copyRunFoldState(state),
   };
-}
-
-function openRun(from: number, reading: Reading, { decision, due, winningInput }: ControlAnswer): OpenRun {
-  return {
-    ...emptySums(),
-    from,
-    decisionSource: decision.source,
-    decisionRpm: decision.rpm,
-    dueSource: due.source,
-    dueRpm: due.rpm,
-    closedInputs: reading.closedInputs,
-    activeInput: winningInput,
-    reported: reading.reportedSource ?? null,
-    settled: false,
-    firstRpm: reading.rpm,
-    firstWatts: reading.watts,
-    flags: [],
-  };
-}
-
-/** The departure that lasted: the same answer of control, another speed. */
-function partedRun(departure: Departure, before: OpenRun, reading: Reading): OpenRun {
-  const { since, firstWatts, holdWattMs: _, ...sums } = departure;
-  return { ...before, ...sums, from: since, settled: true, firstRpm: reading.rpm, firstWatts, flags: [] };
-}
-
-function isAnotherRun(open: OpenRun, reading: Reading, { decision, due }: ControlAnswer): boolean {
-  return (
-    reading.closedInputs !== open.closedInputs ||
-    decision.source !== open.decisionSource ||
-    due.source !== open.dueSource ||
-    (due.rpm !== open.dueRpm && due.source !== 'keypad')
-  );
-}
-
-/** Adds the interval to the open run, or to a departure from it; answers a departure that has lasted long enough. */
-function stay(state: RunFoldState, open: OpenRun, reading: Reading, gpm: number | undefined): Departure | undefined {
-  const { departure } = state;
-  const end = { at: reading.at, rpm: reading.rpm, watts: reading.watts, gpm };
-  const out = open.settled && isOff(reading.rpm, settledMean(open) ?? open.firstRpm);
-  if (departure === null) {
-    addInterval(state, open, end, open.settled && !out);
-    if (out) state.departure = depart(state, reading);
-    return undefined;
-  }
-  const settled =
-    Math.abs(reading.rpm - state.rpm) < SETTLED_STEP_RPM || state.at - departure.since >= SETTLED_AFTER_MS;
-  addInterval(state, departure, end, settled && out);
-  if (!out) {
-    const { settledRpmMs, settledMs } = open;
-    addSums(open, departure);
-    // What was off the mean must not move it.
-    open.settledRpmMs = settledRpmMs;
-    open.settledMs = settledMs;
-    state.departure = null;
-    return undefined;
-  }
-  if (reading.at - departure.since < DEPARTURE_MS) return undefined;
-  state.departure = null;
-  return departure;
-}
-
-function isOff(rpm: number, meanRpm: number): boolean {
-  return Math.abs(rpm - meanRpm) > speedTolerance(meanRpm);
-}
-
-function depart(state: RunFoldState, reading: Reading): Departure {
-  const holdWattMs = ((state.watts - reading.watts) / 2) * (reading.at - state.at);
-  return { ...emptySums(), since: reading.at, firstWatts: reading.watts, holdWattMs };
-}
-
-type IntervalEnd = {
-  readonly at: number;
-  readonly rpm: number;
-  readonly watts: number;
-  readonly gpm: number | undefined;
-};
-
-/** The trapezoid from the last reading to `end`; with the last values at the end too it is the value held. */
-function addInterval(state: RunFoldState, sums: RunSums, end: IntervalEnd, settled = false): void {
-  const ms = end.at - state.at;
-  const meanRpm = (state.rpm + end.rpm) / 2;
-  sums.wattMs += ((state.watts + end.watts) / 2) * ms;
-  sums.rpmMs += meanRpm * ms;
-  sums.coveredMs += ms;
-  if (settled) {
-    sums.settledRpmMs += meanRpm * ms;
-    sums.settledMs += ms;
-  }
-  if (state.gpm === null || end.gpm === undefined) return;
-  sums.gallons += (((state.gpm + end.gpm) / 2) * ms) / 60_000;
-  sums.gallonsMs += ms;
 }

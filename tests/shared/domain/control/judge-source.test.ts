@@ -30,7 +30,12 @@ describe('what a motor is judged to be doing', () => {
     expect(judged(3200, { reportedSource: 'timed' })).toBe('timed');
     expect(judged(1150, { reportedSource: 'freeze' })).toBe('freeze');
     expect(judged(3000, { reportedSource: 'prime' })).toBe('unknown');
-    expect(judged(3450)).toBe('unknown');
+    expect(judged(3450, { reportedSource: 'program' })).toBe('unknown');
+  });
+
+  it('is a prime at its speed also where the motor says nothing', () => {
+    expect(judged(3450)).toBe('prime');
+    expect(judged(3450, { decision: ['off', 0] })).toBe('prime');
   });
 
   it('is a closed input before the program, and an open one last', () => {
