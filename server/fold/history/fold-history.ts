@@ -37,7 +37,8 @@ export async function foldHistory(options: FoldHistoryOptions): Promise<number> 
   const bySerial = new Map<string, HistoryPump>();
   for (const pump of pumps) {
     const { device, pumpId } = pump;
-    if (device !== undefined) bySerial.set(device.serial, createHistoryPump(pump, cadenceSeconds, technicians.get(pumpId)));
+    if (device !== undefined)
+      bySerial.set(device.serial, createHistoryPump(pump, cadenceSeconds, technicians.get(pumpId)));
   }
   const readings = createHistoryReadings(client);
   const progress = createDayCount(from, to, onProgress);
@@ -54,8 +55,12 @@ export async function foldHistory(options: FoldHistoryOptions): Promise<number> 
         progress(toldAt);
       }
       history.take(event);
-      if (event.kind === 'reading') await readings.add(event.reading, history.pump.pumpNumber, event.receivedAt, event.single);
-      else await storeEvent(client, history, event);
+      if (event.kind === 'reading')
+        await readings.add(event.reading, history.pump.pumpNumber, event.receivedAt, event.single);
+      else {
+        await readings.settle();
+        await storeEvent(client, history, event);
+      }
     }
   }
   await readings.flush();

@@ -34,7 +34,11 @@ const TAKE_EVERY_EVENTS = 200;
  * A pump whose history is told at a cadence of its own. In a history every alarm that returned was seen by the
  * technician of its pad, as it would have been: what is left is what stands.
  */
-export function createHistoryPump(pump: CommissionedPump, cadenceSeconds: number, seenBy: string | undefined): HistoryPump {
+export function createHistoryPump(
+  pump: CommissionedPump,
+  cadenceSeconds: number,
+  seenBy: string | undefined,
+): HistoryPump {
   const fold = createPumpFold({ ...pump.context, intervalSeconds: cadenceSeconds });
   const runs = new Map<number, Run>();
   const alarms: HistoryAlarm[] = [];
@@ -49,7 +53,8 @@ export function createHistoryPump(pump: CommissionedPump, cadenceSeconds: number
     alarm.transitions.push(step.transition);
   };
   const see = (alarm: HistoryAlarm, at: number): void => {
-    if (seenBy !== undefined && alarm.record.alarmClass === 'alarm') note(alarm, acknowledge(alarm.record, { by: seenBy, at, note: null }));
+    if (seenBy !== undefined && alarm.record.alarmClass === 'alarm')
+      note(alarm, acknowledge(alarm.record, { by: seenBy, at, note: null }));
   };
   const takeSignal = (signal: AlarmSignal): void => {
     const alarm = open.get(signal.detector);
@@ -92,7 +97,8 @@ export function createHistoryPump(pump: CommissionedPump, cadenceSeconds: number
       gather();
       for (const alarm of open.values()) {
         const limit = ACKNOWLEDGE_WITHIN_MS[alarm.record.priority];
-        if (limit !== undefined && now - alarm.record.raisedAt > limit) see(alarm, alarm.record.raisedAt + SEEN_AFTER_MS);
+        if (limit !== undefined && now - alarm.record.raisedAt > limit)
+          see(alarm, alarm.record.raisedAt + SEEN_AFTER_MS);
       }
     },
   };
@@ -100,7 +106,9 @@ export function createHistoryPump(pump: CommissionedPump, cadenceSeconds: number
 
 /** Two alarms of one detector may name the same beginning; the second then began a moment later. */
 function startApart(record: AlarmRecord, alarms: readonly HistoryAlarm[]): AlarmRecord {
-  const starts = new Set(alarms.filter((alarm) => alarm.record.detector === record.detector).map((alarm) => alarm.record.from));
+  const starts = new Set(
+    alarms.filter((alarm) => alarm.record.detector === record.detector).map((alarm) => alarm.record.from),
+  );
   let from = record.from;
   while (starts.has(from)) from += 1;
   return from === record.from ? record : { ...record, from };

@@ -1,13 +1,15 @@
 import type pg from 'pg';
-import { createReadingColumns } from '#server/ingest/reading-columns.ts';
-import { storeBatch } from '#server/ingest/ingest-repository.ts';
 import { MAX_BATCH_ROWS } from '#server/ingest/batch.ts';
+import { storeBatch } from '#server/ingest/ingest-repository.ts';
+import { createReadingColumns } from '#server/ingest/reading-columns.ts';
 import type { Reading } from '#shared/domain/readings/reading.ts';
 
 /** Stores the readings of a history in batches, through the statement that stores live ones. */
 export type HistoryReadings = {
   readonly add: (reading: Reading, pumpNumber: number, receivedAt: number, single: boolean) => Promise<void>;
   readonly flush: () => Promise<void>;
+  /** Resolves when the connection is free again. */
+  readonly settle: () => Promise<unknown>;
   readonly count: () => number;
 };
 
@@ -40,6 +42,7 @@ export function createHistoryReadings(client: pg.ClientBase): HistoryReadings {
       await flush();
       await storing;
     },
+    settle: () => storing,
     count: () => stored,
   };
 }

@@ -46,7 +46,16 @@ export async function saveHistoryPump(database: Database, history: HistoryPump, 
   const saved = fold.save();
   const hot = encodeHot(saved.hot, { lateAt: [], connection: history.connection() });
   const now = fold.now();
-  const values = [pumpId, companyId, pumpNumber, cursor, hot, now === undefined ? null : JSON.stringify(now), fold.highWater() ?? null, history.heardAt() ?? null];
+  const values = [
+    pumpId,
+    companyId,
+    pumpNumber,
+    cursor,
+    hot,
+    now === undefined ? null : JSON.stringify(now),
+    fold.highWater() ?? null,
+    history.heardAt() ?? null,
+  ];
   await database.query(STATE, values);
   await database.query(LEARNT, [pumpId, companyId, saved.learntVersion, JSON.stringify(saved.learnt)]);
 }
