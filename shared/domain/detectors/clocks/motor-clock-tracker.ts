@@ -15,17 +15,37 @@ export type MotorClockFacts = {
    * which a motor does not know. 0 where it shows its own time.
    */
   suspectMinutes: number;
+  /** When it was last seen to be right within a quarter of an hour, ms, 0 = never; its offset and the pad's zone then. */
+  goodAt: number;
+  goodOffsetMinutes: number;
+  goodZoneMinutes: number;
 };
 
 /** `late` = minutes by which the last edges came after the program's, newest last. */
-type Memory = { late: number[]; wasStanding: boolean; offset: number | null; suspect: number; zone: number | null };
+/** `good` = instant, offset and zone of the last right look. */
+type Memory = {
+  late: number[];
+  wasStanding: boolean;
+  offset: number | null;
+  suspect: number;
+  zone: number | null;
+  good: number[];
+};
 
-const restingMemory = (): Memory => ({ late: [], wasStanding: true, offset: null, suspect: 0, zone: null });
+const restingMemory = (): Memory => ({
+  late: [],
+  wasStanding: true,
+  offset: null,
+  suspect: 0,
+  zone: null,
+  good: [0, 0, 0],
+});
 
 /** Edges this far off another one of their kind are no edges of the program. */
 const FARTHEST_MINUTES = 360;
 const EDGES = 3;
 const AGREE_MINUTES = 10;
+const RIGHT_MINUTES = 15;
 const SHORTEST_CUT_MINUTES = 15;
 const MOST_SUSPECT_MINUTES = 720;
 /** Inputs must have been open for this long, or the motor was following them, ms. */
@@ -51,9 +71,19 @@ export function createMotorClockTracker(context: PumpContext, control: Control, 
     offsetMinutes: memory.offset ?? 0,
     basis: memory.offset === null ? 'none' : 'edges',
     suspectMinutes: memory.suspect,
+    goodAt: memory.good[0] ?? 0,
+    goodOffsetMinutes: memory.good[1] ?? 0,
+    goodZoneMinutes: memory.good[2] ?? 0,
   };
 
-  function takeEdge(minute: number, among: readonly number[]): void {
+  function noteGood(at: number, offset: number, zone: number): void {
+    if (Math.abs(offset) > RIGHT_MINUTES) return;
+    memory.good[0] = facts.goodAt = at;
+    memory.good[1] = facts.goodOffsetMinutes = offset;
+    memory.good[2] = facts.goodZoneMinutes = zone;
+  }
+
+  function takeEdge(minute: number, among: readonly number[], { now, zoneOffsetMinutes }: Facts): void {
     let nearest: number | undefined;
     for (const edge of among) {
       const late = weekDifference(edge, minute);
@@ -61,6 +91,7 @@ export function createMotorClockTracker(context: PumpContext, control: Control, 
     }
     if (nearest === undefined || Math.abs(nearest) > FARTHEST_MINUTES) return;
     if (Math.abs(nearest + (memory.offset ?? 0)) <= AGREE_MINUTES) memory.suspect = 0;
+    noteGood(now, 0 - nearest, zoneOffsetMinutes);
     memory.late = [...memory.late, Math.round(nearest * 10) / 10].slice(-EDGES);
     const spread = Math.max(...memory.late) - Math.min(...memory.late);
     if (memory.late.length < EDGES || spread > AGREE_MINUTES) return;
@@ -80,11 +111,12 @@ export function createMotorClockTracker(context: PumpContext, control: Control, 
         facts.offsetMinutes = answer.motorClockOffsetMinutes;
         facts.basis = 'says';
         facts.suspectMinutes = 0;
+        noteGood(now, facts.offsetMinutes, known.zoneOffsetMinutes);
         return;
       }
       suspect(memory, known);
       if (turned && isOfProgram(reading.reportedSource) && areOpen(reading.closedInputs, inputs.lastOffAt, now)) {
-        takeEdge(localWeekday * DAY_MINUTES + localMinute, answer.standing ? edges.stops : edges.starts);
+        takeEdge(localWeekday * DAY_MINUTES + localMinute, answer.standing ? edges.stops : edges.starts, known);
       }
       facts.offsetMinutes = memory.offset ?? 0;
       facts.basis = memory.offset === null ? 'none' : 'edges';

@@ -26,7 +26,7 @@ export type ShiftLimits = { readonly shiftMinutes: number; readonly deadbandMinu
 
 const KEPT_EDGES = 6;
 /** The usual time is the mean of the first edges, and then stands. */
-const TEACHING_EDGES = 14;
+const TEACHING_EDGES = 7;
 /** Edges of one shift lie together; those of a drift follow each other in small steps, minutes. */
 const TOGETHER_MINUTES = 20;
 const STEP_MINUTES = 10;

@@ -19,6 +19,8 @@ export type InputFacts = {
   readonly onMinute: number[];
   /** The hours each input's clock is known for; recorded ones where there are any, else learnt ones. */
   readonly windows: (readonly KnownWindow[])[];
+  /** They changed with this reading, or are new to this fold. */
+  windowsChanged: boolean;
 };
 
 /** The motor inputs that the wire can speak of. */

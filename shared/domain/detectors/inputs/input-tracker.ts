@@ -62,6 +62,7 @@ export function createInputTracker(context: PumpContext, hot: unknown, learnt: u
   for (const key of ['since', 'onAt', 'offAt', 'onDay', 'onMinute'] as const) memory[key] = padded(memory[key]);
   const edges = parseEdges(learnt);
   let version = 0;
+  let fresh = true;
   const facts: InputFacts = {
     wired: wiredMask(context),
     closedEdges: 0,
@@ -73,7 +74,14 @@ export function createInputTracker(context: PumpContext, hot: unknown, learnt: u
     settledOn: 0,
     onMinute: memory.onMinute,
     windows: edges.map((list, index) => windowsOf(context, index + 1, list)),
+    windowsChanged: true,
   };
+
+  function relearn(index: number): void {
+    facts.windows[index] = windowsOf(context, index + 1, edges[index] ?? []);
+    facts.windowsChanged = true;
+    version += 1;
+  }
 
   function settle(index: number): void {
     const bit = 1 << index;
@@ -81,8 +89,7 @@ export function createInputTracker(context: PumpContext, hot: unknown, learnt: u
     facts.settledOn |= bit;
     const edge: ClosedEdge = [memory.onDay[index] ?? 0, Math.round((memory.onMinute[index] ?? 0) * 10) / 10, 0];
     edges[index] = [...(edges[index] ?? []), edge].slice(-KEPT_EDGES);
-    facts.windows[index] = windowsOf(context, index + 1, edges[index] ?? []);
-    version += 1;
+    relearn(index);
   }
 
   /** The closing that ended is an edge only if it lasted; then its length is learnt too. */
@@ -94,8 +101,7 @@ export function createInputTracker(context: PumpContext, hot: unknown, learnt: u
     const isOfEdge = (memory.seen & bit) !== 0 && (memory.waiting & bit) === 0 && day === memory.onDay[index];
     if (isOfEdge) {
       edges[index] = [...list.slice(0, -1), [day, minute, Math.round(lasted * 10) / 10]];
-      facts.windows[index] = windowsOf(context, index + 1, edges[index] ?? []);
-      version += 1;
+      relearn(index);
     }
     memory.since[index] = 0;
     memory.offAt[index] = at;
@@ -121,6 +127,8 @@ export function createInputTracker(context: PumpContext, hot: unknown, learnt: u
       facts.closedEdges = known ? closed & ~before : 0;
       facts.openedEdges = known ? before & ~closed : 0;
       facts.settledOn = 0;
+      facts.windowsChanged = fresh;
+      fresh = false;
       const lostSight = gap && step.elapsedMs > LONGEST_UNSEEN_MS;
       const changed = before === undefined ? closed : (closed ^ before) | (lostSight ? closed : 0);
       if (changed === 0 && memory.waiting === 0) return;

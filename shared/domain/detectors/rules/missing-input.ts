@@ -18,7 +18,7 @@ type Due = {
   misses: number;
   missedAt: number;
 };
-type State = { dues: Due[]; nextCheckAt: number; missing: number; windowCount: number; changes: number };
+type State = { dues: Due[]; nextCheckAt: number; missing: number; changes: number };
 type Parameters = RuleParameters<'missing-input'>;
 
 const MINUTE_MS = 60_000;
@@ -32,30 +32,24 @@ const SAME_OPENING_MS = 3_600_000;
 
 function judge(state: State, facts: Facts, parameters: Parameters): Judgement {
   const { inputs, now } = facts;
-  const count = countWindows(facts);
-  if (count === 0) return NORMAL;
-  if (state.windowCount !== count || state.nextCheckAt === 0) layOut(state, facts, parameters, count);
-  if (now >= state.nextCheckAt) checkDues(state, facts, parameters);
+  if (inputs.windowsChanged) layOut(state, facts, parameters);
+  if (state.nextCheckAt !== 0 && now >= state.nextCheckAt) checkDues(state, facts, parameters);
   if (state.missing !== 0) forgiveClosed(state, inputs.closedSince);
   return state.missing === 0 ? NORMAL : ABNORMAL;
-}
-
-function countWindows({ inputs }: Facts): number {
-  let count = 0;
-  for (const windows of inputs.windows) count += windows.length;
-  return count;
 }
 
 const isSame = (due: Due, window: KnownWindow): boolean =>
   due.input === window.input && Math.abs(due.onMinute - window.onMinute) < 30;
 
-/** Follows the known windows as they are learnt; what is known of one that stays is kept. */
-function layOut(state: State, facts: Facts, parameters: Parameters, count: number): void {
+/** Follows the known windows as they are recorded or learnt; what is known of one that stays is kept. */
+function layOut(state: State, facts: Facts, parameters: Parameters): void {
   const known = state.dues;
-  state.windowCount = count;
-  state.dues = facts.inputs.windows.flat().flatMap((window) => {
+  const windows = facts.inputs.windows.flat();
+  state.dues = windows.flatMap((window) => {
     const kept = known.find((due) => isSame(due, window));
-    const due: Due = kept ?? {
+    if (kept !== undefined)
+      return isSooner(kept, window, facts) && !setNext(kept, window, facts, parameters) ? [] : [kept];
+    const due = {
       input: window.input,
       onMinute: window.onMinute,
       dueAt: 0,
@@ -64,9 +58,15 @@ function layOut(state: State, facts: Facts, parameters: Parameters, count: numbe
       misses: 0,
       missedAt: 0,
     };
-    return due.checkAt > facts.now || setNext(due, window, facts, parameters) ? [due] : [];
+    return setNext(due, window, facts, parameters) ? [due] : [];
   });
   noteNextCheck(state);
+}
+
+/** A window learnt for more days is due sooner than was thought. */
+function isSooner(due: Due, window: KnownWindow, { context, localDay, now }: Facts): boolean {
+  const opens = nextOpening(window, context.zone, localDay, now);
+  return opens !== undefined && opens < due.dueAt - SAME_OPENING_MS;
 }
 
 /** Sets the next due opening; the check waits an hour, and longer where the dial is known to be behind. */
@@ -74,7 +74,7 @@ function setNext(due: Due, window: KnownWindow, facts: Facts, { lateMinutes, gra
   const { context, localDay, now } = facts;
   const opens = nextOpening(window, context.zone, localDay, now);
   if (opens === undefined) return false;
-  due.beforeAt = due.dueAt === 0 ? now : due.dueAt;
+  due.beforeAt = due.dueAt === 0 || due.dueAt > opens ? now : due.dueAt;
   due.dueAt = opens;
   due.onMinute = window.onMinute;
   due.checkAt = opens + (lateMinutes + graceMinutes) * MINUTE_MS + Math.max(0, springMs(context.zone, opens));
@@ -87,9 +87,11 @@ function springMs(zone: string, at: number): number {
 }
 
 function noteNextCheck(state: State): void {
-  state.changes += 1;
-  state.nextCheckAt = Number.MAX_SAFE_INTEGER;
-  for (const { checkAt } of state.dues) state.nextCheckAt = Math.min(state.nextCheckAt, checkAt);
+  let next = Number.MAX_SAFE_INTEGER;
+  for (const { checkAt } of state.dues) next = Math.min(next, checkAt);
+  if (state.dues.length === 0) next = 0;
+  if (next !== state.nextCheckAt) state.changes += 1;
+  state.nextCheckAt = next;
 }
 
 function checkDues(state: State, facts: Facts, parameters: Parameters): void {
@@ -184,7 +186,7 @@ export const missingInput = defineDetector<'missing-input', State>({
   detector: 'missing-input',
   hears: ['reading'],
   learntVersion: ({ changes }) => changes,
-  initial: () => ({ dues: [], nextCheckAt: 0, missing: 0, windowCount: 0, changes: 0 }),
+  initial: () => ({ dues: [], nextCheckAt: 0, missing: 0, changes: 0 }),
   judge,
   delaySeconds: () => 0,
   describe,
