@@ -9,4 +9,7 @@ export function setServerNow(serverNow: number): void {
   offsetMs = serverNow - Date.now();
 }
 
+/** An instant of the browser's clock, as the server's clock showed it. */
+export const asServerTime = (browserAt: number): number => browserAt + offsetMs;
+
 export const serverNow = (): number => Date.now() + offsetMs;

@@ -11,10 +11,12 @@ import { alarmQueries } from '#src/features/alarms/alarm-queries.ts';
 import { whereOf } from '#src/features/alarms/alarm-view.ts';
 import { Cautions } from '#src/features/alarms/cautions.tsx';
 import { EvidenceSheet } from '#src/features/alarms/evidence-sheet.tsx';
+import { usualWattsOf } from '#src/features/alarms/evidence-view.ts';
 import { LookFirst } from '#src/features/alarms/look-first.tsx';
 import { NowCard } from '#src/features/pumps/now-card.tsx';
 import { pumpQueries } from '#src/features/pumps/pump-queries.ts';
 import { StripSource } from '#src/features/pumps/strip-source.tsx';
+import { EvidenceChart } from '#src/features/readings/evidence-chart.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
 import { useNow } from '#src/hooks/use-now.ts';
 import { useWatchedPumps } from '#src/hooks/use-watched-pumps.ts';
@@ -72,7 +74,21 @@ function LoadedAlarm({ alarm }: { readonly alarm: AlarmDetail }) {
       </div>
       <div className="grid items-start gap-3.5 lg:grid-cols-2">
         <div className="flex min-w-0 flex-col gap-3.5">
-          <EvidenceSheet alarm={alarm} words={words} now={now} StripSource={StripSource} />
+          <EvidenceSheet
+            alarm={alarm}
+            words={words}
+            now={now}
+            StripSource={StripSource}
+            chart={
+              <EvidenceChart
+                pumpId={alarm.pumpId}
+                from={alarm.from}
+                zone={alarm.zone}
+                now={now}
+                usualWatts={usualWattsOf(alarm.evidence)}
+              />
+            }
+          />
           <AcknowledgePanel alarm={alarm} />
           {pump === undefined ? null : <NowCard pump={pump} />}
         </div>

@@ -1,4 +1,5 @@
 import { useNavigate, useSearchParams } from 'react-router-dom';
+import { DayTrace } from '#src/components/ui/day-trace.tsx';
 import { Mark } from '#src/components/ui/mark.tsx';
 import { PageHeading } from '#src/components/ui/page-heading.tsx';
 import { SignInForm } from '#src/features/session/sign-in-form.tsx';
@@ -17,10 +18,13 @@ export function SignInPage() {
           <Mark size={40} />
           <span className="figures text-27 font-semibold tracking-[-0.02em]">{t('shell.wordmark')}</span>
         </div>
-        <div className="ruled-top border border-ink bg-sheet px-5 py-6 sm:px-7">
-          <PageHeading title={t('signIn.page')}>{t('signIn.heading')}</PageHeading>
-          <p className="mt-1 mb-6 text-ink-2">{to === '/' ? null : t('signIn.returning')}</p>
-          <SignInForm onSignedIn={() => void navigate(to, { replace: true })} />
+        <div className="border border-ink bg-sheet">
+          <DayTrace />
+          <div className="px-5 py-6 sm:px-7">
+            <PageHeading title={t('signIn.page')}>{t('signIn.heading')}</PageHeading>
+            <p className="mt-1 mb-6 text-ink-2">{to === '/' ? null : t('signIn.returning')}</p>
+            <SignInForm onSignedIn={() => void navigate(to, { replace: true })} />
+          </div>
         </div>
         <p className="mt-4 text-13 text-ink-2">{t('signIn.watches')}</p>
       </div>

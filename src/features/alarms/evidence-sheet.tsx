@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react';
 import type { AlarmDetail } from '#shared/contract/http/alarms.ts';
 import type { AlarmWords } from '#shared/domain/wording/alarm-words.ts';
 import { FactList } from '#src/components/ui/fact-list.tsx';
@@ -15,10 +16,12 @@ export type EvidenceSheetProps = {
   readonly words: AlarmWords;
   readonly now: number;
   readonly StripSource: StripSource;
+  /** A chart of the readings, given by the page. */
+  readonly chart: ReactNode;
 };
 
 /** What is wrong and how one knows: title, the day around it, what it means, the numbers. */
-export function EvidenceSheet({ alarm, words, now, StripSource }: EvidenceSheetProps) {
+export function EvidenceSheet({ alarm, words, now, StripSource, chart }: EvidenceSheetProps) {
   const format = useFormat();
   const tone = ALARM_TONE[alarm.priority];
   const reasons = listReasons(alarm.evidence);
@@ -33,6 +36,7 @@ export function EvidenceSheet({ alarm, words, now, StripSource }: EvidenceSheetP
       </h2>
       <div className="flex flex-col gap-3 px-4 py-3">
         <EvidenceStrip alarm={alarm} now={now} StripSource={StripSource} />
+        {chart}
         <p className="text-17">
           <Figures text={words.meaning} />
         </p>

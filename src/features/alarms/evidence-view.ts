@@ -48,6 +48,10 @@ export function listEvidence(evidence: Evidence, format: Format): (readonly [str
   );
 }
 
+/** What the watts would be if all were well, where the rule knows it. */
+export const usualWattsOf = ({ primedWatts, usualWatts }: Evidence): number | undefined =>
+  [primedWatts, usualWatts].find((value): value is number => typeof value === 'number' && value > 0);
+
 /** The rule's own reasons, the most telling first; empty where it gives none. */
 export function listReasons({ because }: Evidence): string[] {
   if (typeof because === 'string') return [because];

@@ -87,8 +87,20 @@ export const FleetRow = memo(function FleetRow(props: FleetRowProps) {
           {t('strip.table')}
         </button>
       </div>
-      <Cell label={t('fleet.column.speed')} value={then?.rpm ?? view.rpm} then={then !== undefined} />
-      <Cell label={t('fleet.column.watts')} value={then?.watts ?? view.watts} then={then !== undefined} />
+      <div className="pr-2.5 text-right md:contents">
+        <Cell
+          label={t('fleet.column.speed')}
+          unit={t('unit.rpm')}
+          value={then?.rpm ?? view.rpm}
+          then={then !== undefined}
+        />
+        <Cell
+          label={t('fleet.column.watts')}
+          unit={t('unit.watts')}
+          value={then?.watts ?? view.watts}
+          then={then !== undefined}
+        />
+      </div>
       {table ? (
         <RowRunsDialog name={name} runs={strip.runs ?? []} zone={row.zone} now={now} onClose={() => setTable(false)} />
       ) : null}
@@ -96,11 +108,17 @@ export const FleetRow = memo(function FleetRow(props: FleetRowProps) {
   );
 });
 
-function Cell({ label, value, then }: { readonly label: string; readonly value: string; readonly then: boolean }) {
+type CellProps = { readonly label: string; readonly unit: string; readonly value: string; readonly then: boolean };
+
+/** A figure; its unit stands in the column's head, or beside it where a phone has no columns. */
+function Cell({ label, unit, value, then }: CellProps) {
   return (
-    <div className={`figures px-2.5 text-right text-17 font-medium ${then ? 'text-focus' : ''}`}>
+    <p className={`figures text-15 font-medium md:px-2.5 md:text-right md:text-17 ${then ? 'text-focus' : ''}`}>
       <span className="sr-only">{label} </span>
       {value}
-    </div>
+      <span aria-hidden="true" className="ml-1 text-13 text-ink-2 md:hidden">
+        {unit}
+      </span>
+    </p>
   );
 }

@@ -30,7 +30,7 @@ function describeCalm(row: PumpRow, format: Format, now: number): string {
 
 /** Pad state where it is not the usual one, then the line. */
 const withPadState = ({ padState }: PumpRow, line: string): string =>
-  padState === 'open' ? line : `${t('fleet.padState', { state: t(`padState.${padState}`) })} · ${line}`;
+  padState === 'open' ? line : `${t(`padState.${padState}`)} · ${line}`;
 
 export function viewRow(row: PumpRow, format: Format, now: number): RowView {
   const { alarm, silentSince } = row;

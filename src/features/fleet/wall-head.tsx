@@ -1,4 +1,5 @@
 import type { RefCallback } from 'react';
+import { handleBox, restingAt } from '#src/components/charts/strip/handle-box.ts';
 import { StripAxis } from '#src/components/charts/strip/strip-axis.tsx';
 import type { StripWindow } from '#src/components/charts/strip/strip-run.ts';
 import { CursorHandle, CursorLine, type CursorStore } from '#src/components/charts/strip/time-cursor.tsx';
@@ -20,17 +21,24 @@ export function WallHead({ window, zone, now, cursor, track, width }: WallHeadPr
   const format = useFormat();
   const long = window.until - window.from > 2 * 86_400_000;
   const textOf = (at: number) => (long ? `${format.day(at, zone)}, ${format.time(at, zone)}` : format.time(at, zone));
+  const resting = restingAt(now, window);
   return (
     <div className={`sticky top-0 z-20 h-8 items-end border-b border-ink bg-sheet text-13 text-ink-2 ${FLEET_COLUMNS}`}>
       <div className="hidden md:block" />
       <div className="hidden px-2.5 pb-1.5 md:block">{t('fleet.column.pump')}</div>
       <div ref={track} data-track className="relative col-span-full h-full md:col-span-1">
-        <StripAxis window={window} zone={zone} width={width} clearOf={now} />
+        <StripAxis
+          window={window}
+          zone={zone}
+          width={width}
+          clearOf={handleBox(resting, window, width, textOf(resting).length)}
+        />
         <CursorLine cursor={cursor} window={window} />
         <CursorHandle
           cursor={cursor}
           window={window}
           now={now}
+          width={width}
           textOf={textOf}
           describe={(at) => `${format.day(at, zone)}, ${format.time(at, zone)}`}
           className="top-1"

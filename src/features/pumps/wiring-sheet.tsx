@@ -45,6 +45,7 @@ export function WiringSheet({ pump }: { readonly pump: PumpDetail }) {
           <p>{t('pump.wiring.none')}</p>
         ) : (
           <DataTable
+            wide
             caption={t('pump.wiring')}
             rows={rows}
             keyOf={({ number }) => number}

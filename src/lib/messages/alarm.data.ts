@@ -62,6 +62,8 @@ export const ALARM_MESSAGES = {
   'alarm.note': 'A note with it',
   'alarm.note.hint': 'What you know or will do; whoever looks next reads it.',
   'alarm.strip': 'What {where} did around it',
+  'alarm.usualWatts': 'when all is well',
+  'alarm.wattsAround': 'Watts around the beginning of the alarm',
   'alarm.evidence': 'What the readings say',
   'alarm.now': 'Now',
   'alarm.heard': '{ago} ago',

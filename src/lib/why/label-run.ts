@@ -20,12 +20,13 @@ const LABELS = {
 const isLabelled = (source: RunSourceName): source is keyof typeof LABELS => Object.hasOwn(LABELS, source);
 
 /**
- * The words written above a run on a large strip: what closes the input and what it drives, or the source's name.
+ * The words that may be written above a run on a large strip, the fullest first: what closes the input and what it
+ * drives, what it drives, or the source's name. Empty where a run needs none.
  *
- * @example labelRun({ source: 'input', activeInput: 1 }, pump, format) // 'time clock 1: cleaner'
+ * @example labelRun({ source: 'input', activeInput: 1 }, pump, format) // ['time clock 1: cleaner', 'cleaner']
  */
-export function labelRun({ source, activeInput }: Labelled, context: WhyContext, format: Format): string | undefined {
-  if (source !== 'input') return isLabelled(source) ? t(LABELS[source]) : undefined;
+export function labelRun({ source, activeInput }: Labelled, context: WhyContext, format: Format): readonly string[] {
+  if (source !== 'input') return isLabelled(source) ? [t(LABELS[source])] : [];
   const { closer, duty } = sayInput(activeInput, tellerOf(context, explainOptions(format, 'homeowner')));
-  return duty === undefined ? closer : `${closer}: ${duty}`;
+  return duty === undefined ? [closer] : [`${closer}: ${duty}`, duty];
 }

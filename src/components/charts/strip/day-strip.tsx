@@ -1,5 +1,6 @@
 import { useElementWidth } from '#src/hooks/use-element-width.ts';
 import { useFormat } from '#src/hooks/use-format.ts';
+import { handleBox, restingAt } from './handle-box.ts';
 import { StripAxis } from './strip-axis.tsx';
 import { StripCanvas, type StripCanvasProps } from './strip-canvas.tsx';
 import { STRIP_METRICS } from './strip-metrics.ts';
@@ -21,6 +22,7 @@ export function DayStrip({ cursor, name, describe, scaled = false, ...strip }: D
   const format = useFormat();
   const [track, width] = useElementWidth<HTMLDivElement>();
   const pointer = usePointerInstant(cursor, strip.window);
+  const resting = restingAt(strip.now, strip.window);
   const { base, top } = STRIP_METRICS[strip.size];
   const shares = scaled ? [1, 2 / 3, 1 / 3] : [];
   return (
@@ -41,11 +43,17 @@ export function DayStrip({ cursor, name, describe, scaled = false, ...strip }: D
         </div>
         <CursorLine cursor={cursor} window={strip.window} />
         <div className="relative h-8">
-          <StripAxis window={strip.window} zone={strip.zone} width={width} clearOf={strip.now} />
+          <StripAxis
+            window={strip.window}
+            zone={strip.zone}
+            width={width}
+            clearOf={handleBox(resting, strip.window, width, format.time(resting, strip.zone).length)}
+          />
           <CursorHandle
             cursor={cursor}
             window={strip.window}
             now={strip.now}
+            width={width}
             textOf={(at) => format.time(at, strip.zone)}
             describe={describe}
             className="top-1"

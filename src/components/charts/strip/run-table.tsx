@@ -18,6 +18,7 @@ export function RunTable({ runs, zone, now, caption }: RunTableProps) {
   const figure = (run: StripRun, value: number) => (run.source === 'no-data' ? '–' : format.number(value));
   return (
     <DataTable
+      wide
       caption={caption}
       rows={newestFirst(runs)}
       keyOf={({ from }) => from}

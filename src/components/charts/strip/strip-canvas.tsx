@@ -5,7 +5,7 @@ import { themeStore } from '#src/lib/theme.ts';
 import { readStripColours } from './strip-colours.ts';
 import { placeLabels } from './strip-labels.ts';
 import { STRIP_METRICS, type StripSize } from './strip-metrics.ts';
-import { LABEL_FONT, paintStrip, type StripPicture } from './strip-paint.ts';
+import { LABEL_FONT, NUMERAL_FONT, paintStrip, type StripPicture } from './strip-paint.ts';
 import type { StripRun } from './strip-run.ts';
 import { listRules } from './strip-ticks.ts';
 import { layoutStrip, type StripInput } from './strip-view.ts';
@@ -15,13 +15,15 @@ export type StripCanvasProps = StripInput & {
   readonly width: number;
   /** Zone of the ruled lines: the wall's is the company's, a single pad's its own. */
   readonly zone: string;
-  readonly labelOf?: ((run: StripRun) => string | undefined) | undefined;
+  /** What may be written above a run, the fullest first: the first that fits is taken. */
+  readonly labelOf?: ((run: StripRun) => readonly string[]) | undefined;
 };
 
 /** A canvas drawn before its font has come must be drawn again. */
 const fontStore = createStore(false);
-if (typeof document !== 'undefined')
-  void document.fonts.load('600 13px "JetBrains Mono"').then(() => fontStore.set(true));
+if (typeof document !== 'undefined') {
+  void Promise.all([NUMERAL_FONT, LABEL_FONT].map((font) => document.fonts.load(font))).then(() => fontStore.set(true));
+}
 
 /** Wide of what a label takes, until a canvas can measure it. */
 const PIXELS_A_LETTER = 6.9;
@@ -43,8 +45,7 @@ export function StripCanvas(props: StripCanvasProps) {
   const rules = useMemo(() => listRules(window, zone, width), [window, zone, width]);
   const picture = useMemo((): StripPicture => {
     const layout = layoutStrip({ runs, planned, window, now, tone, topRpm }, width, metrics);
-    const labels =
-      metrics.labelled && labelOf !== undefined ? placeLabels(layout.blocks, labelOf, measureLabel, width) : [];
+    const labels = metrics.labelled && labelOf !== undefined ? placeLabels(layout, labelOf, measureLabel, width) : [];
     return { layout, rules, labels, metrics, width };
   }, [runs, planned, window, now, tone, topRpm, width, metrics, labelOf, rules]);
 

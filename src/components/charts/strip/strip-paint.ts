@@ -13,6 +13,7 @@ export type StripPicture = {
   readonly width: number;
 };
 
+export const NUMERAL_FONT = '600 13px "JetBrains Mono", monospace';
 export const LABEL_FONT = '500 13px "Atkinson Hyperlegible Next", sans-serif';
 
 type Pen = { readonly context: CanvasRenderingContext2D; readonly colours: StripColours; readonly density: number };
@@ -67,14 +68,17 @@ function paintPen(pen: Pen, block: StripBlock, before: StripBlock | undefined, m
   stroke(pen, colours.ink, 0.8, block.x, before.y, block.x, block.y);
 }
 
+/** A narrower block would be all numeral and no hatch. */
+const NUMERAL_ROOM = 30;
+
 /** Which input commands, for certain: direction alone is hard to tell in a narrow block. */
 function paintNumeral({ context, colours }: Pen, { texture, x, y, width, height, input, tone }: StripBlock) {
-  if ((texture !== 'hatch' && texture !== 'cross') || input === 0 || width < 16 || height < 18) return;
+  if ((texture !== 'hatch' && texture !== 'cross') || input === 0 || width < NUMERAL_ROOM || height < 18) return;
   const ground = tone === undefined ? colours.wash : colours.tone[tone].ground;
   context.fillStyle = ground;
   context.fillRect(x + 1, y + 2, 13, 15);
   context.fillStyle = tone === undefined ? colours.ink : colours.tone[tone].line;
-  context.font = '600 13px "JetBrains Mono", monospace';
+  context.font = NUMERAL_FONT;
   context.fillText(String(input), x + 3.5, y + 14);
 }
 

@@ -4,6 +4,7 @@ import { classNames } from '#src/lib/class-names.ts';
 import { t } from '#src/lib/messages/t.ts';
 import type { Store } from '#src/lib/store.ts';
 import { moveCursor } from './cursor-keys.ts';
+import { handleBox, restingAt } from './handle-box.ts';
 import type { StripWindow } from './strip-run.ts';
 
 /** The instant everybody on the page is asked about; undefined when nobody points at one. */
@@ -31,6 +32,8 @@ export type CursorHandleProps = {
   readonly cursor: CursorStore;
   readonly window: StripWindow;
   readonly now: number;
+  /** Of the track, px: the handle turns to the left before it leaves it. */
+  readonly width: number;
   /** What a screen reader is told of an instant, and what stands on the handle. */
   readonly describe: (at: number) => string;
   readonly textOf: (at: number) => string;
@@ -38,11 +41,12 @@ export type CursorHandleProps = {
 };
 
 /** The cursor's time, and the handle that the keyboard moves it by. Shows now when nobody points anywhere. */
-export function CursorHandle({ cursor, window, now, describe, textOf, className }: CursorHandleProps) {
+export function CursorHandle({ cursor, window, now, width, describe, textOf, className }: CursorHandleProps) {
   const chosen = useStore(cursor);
-  const start = Math.min(Math.max(now, window.from), window.until - 1);
+  const start = restingAt(now, window);
   const at = chosen ?? start;
-  const share = (at - window.from) / (window.until - window.from);
+  const text = textOf(at);
+  const { x, left } = handleBox(at, window, width, text.length);
   const move = (event: KeyboardEvent) => {
     if (event.key === 'Escape') return cursor.set(undefined);
     const target = moveCursor(event.key, event.shiftKey, chosen, window, start);
@@ -67,9 +71,12 @@ export function CursorHandle({ cursor, window, now, describe, textOf, className 
         chosen === undefined ? 'bg-ink text-sheet' : 'bg-focus text-sheet',
         className,
       )}
-      style={{ left: `${share * 100}%`, transform: `translateX(${share > 0.9 ? '-100%' : '0'})` }}
+      style={{
+        left: x,
+        transform: `translateX(${left < x ? '-100%' : '0'})`,
+      }}
     >
-      {textOf(at)}
+      {text}
     </div>
   );
 }
