@@ -46,6 +46,8 @@ const Variables = z.object({
   MAIL_PAGE_PORT: port(4314),
   /** Files of the demo: logs, device secrets, caught mail. */
   MILLRACE_DATA: z.string().min(1).default('.data'),
+  /** Days of the past that the demo company gets on its first start; 0 = none. */
+  MILLRACE_HISTORY_DAYS: z.coerce.number().int().min(0).max(60).default(30),
   LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'trace', 'silent']).default('info'),
 });
 
@@ -74,6 +76,7 @@ const toEnvironment = (variables: z.output<typeof Variables>) => {
     },
     mailCatcher: { smtpPort: variables.SMTP_PORT, pagePort: variables.MAIL_PAGE_PORT },
     dataFolder: resolve(variables.MILLRACE_DATA),
+    historyDays: variables.MILLRACE_HISTORY_DAYS,
     logLevel: variables.LOG_LEVEL,
     /** Whether every answer is held against the contract before it leaves: costly, for those who write the code. */
     checksAnswers: variables.NODE_ENV === 'development' || variables.NODE_ENV === 'test',

@@ -2,11 +2,12 @@ import { hashDeviceSecret } from './broker/device-credential.ts';
 import { migrateDatabase } from './db/migrate.ts';
 import type { Pools } from './db/pools.ts';
 import { DEMO_PASSWORD, seedDemo } from './db/seed/seed-demo.ts';
+import { tellDemoHistory } from './demo-history.ts';
 import type { Environment } from './env.ts';
 import { hashPassword, refuseDemoPeople } from './features/session/index.ts';
 
 type Options = {
-  readonly env: Pick<Environment, 'databaseUrl' | 'isDemo' | 'dataFolder' | 'deviceKey'>;
+  readonly env: Pick<Environment, 'databaseUrl' | 'isDemo' | 'dataFolder' | 'deviceKey' | 'historyDays'>;
   readonly openPools: () => Pools;
   readonly onProgress: (text: string) => void;
 };
@@ -17,12 +18,18 @@ export async function prepareData({ env, openPools, onProgress }: Options): Prom
   const pools = openPools();
   try {
     if (!env.isDemo) await refuseDemoPeople(pools.machine);
-    else if (await seedDemoCompany(env, pools)) onProgress('The demo company is made');
+    else await prepareDemo(env, pools, onProgress);
     return pools;
   } catch (error) {
     await pools.end();
     throw error;
   }
+}
+
+async function prepareDemo(env: Options['env'], pools: Pools, onProgress: Options['onProgress']): Promise<void> {
+  if (await seedDemoCompany(env, pools)) onProgress('The demo company is made');
+  const { dataFolder, historyDays } = env;
+  await tellDemoHistory({ machine: pools.machine, dataFolder, days: historyDays, now: Date.now(), onProgress });
 }
 
 const seedDemoCompany = ({ dataFolder, deviceKey }: Options['env'], { machine }: Pools): Promise<boolean> =>

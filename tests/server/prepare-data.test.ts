@@ -12,7 +12,7 @@ describe('preparing a database', () => {
     const dataFolder = await mkdtemp(join(tmpdir(), 'millrace-seed-'));
     const openPools = () => createPools(databaseUrl, { onError: () => undefined });
     const start = async (isDemo: boolean) => {
-      const env = { databaseUrl, isDemo, dataFolder, deviceKey: 'd'.repeat(40) };
+      const env = { databaseUrl, isDemo, dataFolder, deviceKey: 'd'.repeat(40), historyDays: 0 };
       await (await prepareData({ env, openPools, onProgress: () => undefined })).end();
     };
     await start(false);

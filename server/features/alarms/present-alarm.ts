@@ -8,20 +8,20 @@ const presentEvidence = (evidence: AlarmRow['record']['evidence']): Alarm['evide
 
 const isList = (value: unknown): value is readonly (number | string)[] => Array.isArray(value);
 
-/** What staff write to one another is not for the homeowner. */
-function presentPeople(row: AlarmRow, actor: Pick<Actor, 'role'>) {
-  const isStaff = actor.role !== 'homeowner';
-  return {
-    customerName: isStaff ? row.customerName : null,
-    acknowledgedBy: isStaff ? row.acknowledgedByName : null,
-    acknowledgementNote: isStaff ? row.record.acknowledgementNote : null,
-    shelvedBy: isStaff ? row.shelvedByName : null,
-    technicianName: row.technicianName,
-  };
-}
+/** An alarm without what staff write to one another: as a homeowner reads it. */
+export const hideStaffWords = (alarm: Alarm): Alarm => ({
+  ...alarm,
+  customerName: null,
+  acknowledgedBy: null,
+  acknowledgementNote: null,
+  shelvedBy: null,
+});
 
 /** An alarm as the person may read it. */
-export function presentAlarm(row: AlarmRow, actor: Pick<Actor, 'role'>): Alarm {
+export const presentAlarm = (row: AlarmRow, { role }: Pick<Actor, 'role'>): Alarm =>
+  role === 'homeowner' ? hideStaffWords(presentForStaff(row)) : presentForStaff(row);
+
+function presentForStaff(row: AlarmRow): Alarm {
   const { record } = row;
   return {
     id: row.id,
@@ -29,6 +29,7 @@ export function presentAlarm(row: AlarmRow, actor: Pick<Actor, 'role'>): Alarm {
     padId: row.padId,
     padName: row.padName,
     pumpName: row.pumpName,
+    customerName: row.customerName,
     area: row.area,
     zone: row.zone,
     detector: record.detector,
@@ -42,11 +43,14 @@ export function presentAlarm(row: AlarmRow, actor: Pick<Actor, 'role'>): Alarm {
     returnedAt: record.returnedAt,
     count: record.count,
     acknowledgedAt: record.acknowledgedAt,
+    acknowledgedBy: row.acknowledgedByName,
+    acknowledgementNote: record.acknowledgementNote,
     escalatedAt: record.escalatedAt,
     shelvedUntil: record.shelf?.until ?? null,
+    shelvedBy: row.shelvedByName,
     suppressed: record.suppressedBy !== null,
     outOfService: record.outOfService !== null,
+    technicianName: row.technicianName,
     version: row.version,
-    ...presentPeople(row, actor),
   };
 }

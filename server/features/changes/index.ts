@@ -1,3 +1,2 @@
-export { findCursor } from './change-read-model.ts';
 export { mountChangeRoutes } from './change-routes.ts';
-export { listChanges } from './list-changes.ts';
+export { listChanges, listNoChanges } from './list-changes.ts';

@@ -37,3 +37,8 @@ export async function listChanges({ db, actor, now }: Asking, since: string): Pr
     serverNow: now,
   };
 }
+
+/** The cursor of this moment, for somebody who has yet to read anything. */
+export async function listNoChanges({ db, now }: Pick<Asking, 'db' | 'now'>): Promise<Changes> {
+  return { cursor: await findCursor(db), complete: true, pumps: [], runs: [], alarms: [], serverNow: now };
+}

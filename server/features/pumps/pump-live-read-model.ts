@@ -55,3 +55,9 @@ export async function listPumpLiveRows(db: Transaction, pumpIds: readonly string
     where p.id = ${ids}`);
   return rows;
 }
+
+/** Ids of every pump the person may see. */
+export async function listVisiblePumpIds(db: Transaction): Promise<Set<string>> {
+  const { rows } = await db.execute<{ id: string }>(sql`select id from pumps`);
+  return new Set(rows.map(({ id }) => id));
+}

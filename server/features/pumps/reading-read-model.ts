@@ -33,13 +33,13 @@ export async function listReadings(db: Transaction, asked: Asked, limit: number)
  */
 export async function listReadingBuckets(db: Transaction, asked: Asked, bucketMs: number): Promise<ReadingBucket[]> {
   const { pumpNumber, from, until } = asked;
+  const length = sql`${`${bucketMs} milliseconds`}::interval`;
   const { rows } = await db.execute<ReadingBucket>(sql`
-    select ${from}::float8 + bucket * ${bucketMs}::float8 as at,
+    select ${epochMs(sql`bucket`)} as at,
       avg(rpm)::float4 as rpm, min(rpm) as "rpmMin", max(rpm) as "rpmMax",
       avg(watts)::float4 as watts, min(watts) as "wattsMin", max(watts) as "wattsMax", bit_or(closed_inputs) as "closedInputs"
     from (
-      select floor((extract(epoch from at)::float8 * 1000 - ${from}::float8) / ${bucketMs}::float8)::int as bucket,
-        rpm, watts, closed_inputs
+      select date_bin(${length}, at, ${instantOfMs(from)}) as bucket, rpm, watts, closed_inputs
       from readings where pump_number = ${pumpNumber} and at >= ${instantOfMs(from)} and at < ${instantOfMs(until)}
     ) as placed
     group by bucket order by bucket`);
