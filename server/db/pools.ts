@@ -18,6 +18,8 @@ export function createPools(
       connectionString: deriveRoleUrl(databaseUrl, role),
       application_name: role,
       max,
+      // Compiling a statement costs seconds where running it takes milliseconds: row-level security makes them long.
+      options: '-c jit=off',
       connectionTimeoutMillis: 10_000,
       ...limits,
     });
