@@ -35,6 +35,10 @@ export type Stream = {
   /** Stops in order: no new message, what was received is answered, then connections close. */
   readonly stop: () => Promise<void>;
   readonly isUp: () => boolean;
+  /** Resolves when everything received is answered and understood. */
+  readonly drain: () => Promise<void>;
+  /** Time passes: it does so by itself every few seconds. */
+  readonly tick: () => void;
   readonly count: () => { readonly connected: number; readonly ingest: IngestCounts; readonly fold: FoldCounts };
 };
 
@@ -59,6 +63,11 @@ export function createStream(options: StreamOptions): Stream {
   let isUp = false;
   return {
     isUp: () => isUp,
+    drain: async () => {
+      await ingest.drain();
+      await fold.drain();
+    },
+    tick: fold.tick,
     count: () => ({ connected: broker.countConnected(), ingest: ingest.count(), fold: fold.counts() }),
     start: async (onProgress = () => undefined) => {
       await makeReadingPartitions(machine);

@@ -13,6 +13,8 @@ import { tickPumps } from './tick-pumps.ts';
 const EVENTS_PER_COMMIT = 10_000;
 /** Between two commits, so that what comes in a trickle is committed in sips and not in drops. */
 const BETWEEN_COMMITS_MS = 40;
+/** Late readings of a run that is still open are looked at again after this. */
+const LATE_AGAIN_MS = 5 * 60_000;
 
 /** Everything the fold does, in the order in which it is looked for. */
 export function listFoldTasks(context: FoldContext, requests: FoldRequests): FoldTask[] {
@@ -143,7 +145,7 @@ async function correctLate(context: FoldContext): Promise<void> {
   const now = context.now();
   for (const slot of context.slots.list()) {
     if (slot.lateAt.length === 0 || slot.lateDueAt > now || slot.mode !== 'live') continue;
-    slot.lateDueAt = now + 60_000;
+    slot.lateDueAt = now + LATE_AGAIN_MS;
     if (await correctLateRuns(context, slot)) context.onNews({ pumpIds: [slot.pump.pumpId], mails: 0 });
   }
 }

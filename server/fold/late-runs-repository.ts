@@ -6,41 +6,30 @@ import { toRunJson } from './fold-repository.ts';
 
 type Database = Pick<pg.ClientBase, 'query'>;
 
-/** The stored runs that late readings touch: from the beginning of the first to the end of the last. */
-export type TouchedStretch = {
+type RunRow = Omit<Run, 'from' | 'to' | 'gallons'> & {
   readonly from: number;
-  /** Undefined = the last run is still open. */
-  readonly to: number | undefined;
+  readonly to: number | null;
+  readonly gallons: number | null;
 };
 
-/** Finds the stretch of whole runs around two instants; undefined where no run lies there. */
-export async function findTouchedStretch(
-  database: Database,
-  pumpId: string,
-  first: number,
-  last: number,
-): Promise<TouchedStretch | undefined> {
-  const { rows } = await database.query<{ from_at: number | null; to_at: number | null }>(
-    `select date_part('epoch', coalesce(
-         (select max(from_at) from runs where pump_id = $1 and from_at <= to_timestamp($2::float8 / 1000)),
-         (select min(from_at) from runs where pump_id = $1))) * 1000 as from_at,
-       (select date_part('epoch', min(from_at)) * 1000 from runs
-         where pump_id = $1 and from_at > to_timestamp($3::float8 / 1000)) as to_at`,
-    [pumpId, first, last],
+/** The stored runs of a pump that began at or after an instant, and the one before them, in order. */
+export async function listStoredRuns(database: Database, pumpId: string, from: number): Promise<Run[]> {
+  const { rows } = await database.query<RunRow>(
+    `select date_part('epoch', from_at) * 1000 as from, date_part('epoch', to_at) * 1000 as to, source,
+       expected_source as "expectedSource", closed_inputs as "closedInputs", active_input as "activeInput",
+       expected_rpm as "expectedRpm", mean_rpm as "meanRpm", mean_watts as "meanWatts", watt_hours as "wattHours",
+       covered_ms::float8 as "coveredMs", gallons, flags
+     from runs where pump_id = $1 and from_at >= coalesce(
+       (select max(from_at) from runs where pump_id = $1 and from_at < to_timestamp($2::float8 / 1000)), '-infinity')
+     order by from_at`,
+    [pumpId, from],
   );
-  const row = rows[0];
-  if (row?.from_at === undefined || row.from_at === null) return undefined;
-  return { from: Math.min(first, Math.round(row.from_at)), to: row.to_at === null ? undefined : Math.round(row.to_at) };
-}
-
-/** When the run that is still open began, ms; undefined where none is. */
-export async function findOpenRunStart(database: Database, pumpId: string): Promise<number | undefined> {
-  const { rows } = await database.query<{ from_at: number | null }>(
-    `select date_part('epoch', max(from_at)) * 1000 as from_at from runs where pump_id = $1 and to_at is null`,
-    [pumpId],
-  );
-  const from = rows[0]?.from_at ?? null;
-  return from === null ? undefined : Math.round(from);
+  return rows.map(({ from: begin, to, gallons, ...run }) => ({
+    ...run,
+    from: Math.round(begin),
+    to: to === null ? undefined : Math.round(to),
+    gallons: gallons ?? undefined,
+  }));
 }
 
 /** Readings of a pump from an instant to before another, by device time. */
