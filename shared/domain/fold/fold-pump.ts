@@ -1,6 +1,8 @@
 import type { PumpContext } from '../control/pump-context.ts';
 import type { AlarmSignal } from '../detectors/detector.ts';
 import { type DetectorParameters, resolveParameters } from '../detectors/detector-parameters.ts';
+import type { Facts } from '../detectors/facts.ts';
+import { silenceLimitMs } from '../detectors/link/link-tracker.ts';
 import type { Json } from '../detectors/plain-state.ts';
 import type { FoldOutput, PumpNow } from './fold-output.ts';
 import { foldReading } from './fold-reading.ts';
@@ -22,6 +24,8 @@ export type PumpFold = {
   now(): PumpNow | undefined;
   /** Device time of the last reading folded, ms; undefined before the first. */
   highWater(): number | undefined;
+  /** The device's last word, ms, once it is silent: no word for three intervals, at least two minutes, or its will. */
+  silentSince(): number | undefined;
   /** The state: `hot` small and ever changing, `learnt` seldom; `learntVersion` grows only when `learnt` changed. */
   save(): { readonly hot: Json; readonly learnt: Json; readonly learntVersion: number };
   /** The same state under new commissioned data, and new rule figures where given. This fold is not to be used on. */
@@ -64,6 +68,7 @@ function foldOf(parts: PumpParts, pending: AlarmSignal[]): PumpFold {
     },
     now: () => (parts.seen() ? pumpNow(facts) : undefined),
     highWater: () => (parts.seen() ? facts.reading.at : undefined),
+    silentSince: () => silentSinceOf(facts),
     save: () => parts.save(),
     withContext: (context, parameters = parts.parameters) =>
       foldOf(createPumpParts(context, parameters, parts.save()), signals),
@@ -86,4 +91,10 @@ function takeIn(parts: PumpParts, event: PumpEvent): void {
   // A late reading corrects history elsewhere; here it only says that the device is there.
   if (late) facts.kind = 'time';
   else foldReading(parts, event);
+}
+
+function silentSinceOf({ link, receivedAt, context }: Facts): number | undefined {
+  if (link.lastWordAt === 0) return undefined;
+  const quiet = receivedAt - Math.max(link.lastWordAt, link.listeningSince) > silenceLimitMs(context);
+  return quiet || link.connection === 'lost' ? link.lastWordAt : undefined;
 }

@@ -1,0 +1,134 @@
+import type { AlarmSignal, Detector, Priority } from '../detectors/detector.ts';
+import type { Json } from '../detectors/plain-state.ts';
+import { type AreaLedger, createAreaLedger } from './area/area-ledger.ts';
+import type { AreaSignal } from './area/area-signal.ts';
+import { type AreaAlarm, type AreaState, type Member, restoreAreaState, saveAreaState } from './area/area-state.ts';
+import { listOwnLinkDrops } from './area/own-link.ts';
+
+/** Where a pump stands among the company's others. */
+export type AreaPump = { readonly pumpId: string; readonly padId: string; readonly area?: string | undefined };
+
+/** A second fold, over the pumps of one company: what befalls several of them at once is one alarm. */
+export type AreaFold = {
+  /**
+   * How a pump's device is heard now: `silentSince` = its last word once it is silent (see PumpFold.silentSince),
+   * undefined while it is heard. Saying it again changes nothing.
+   */
+  hear(pump: AreaPump, silentSince: number | undefined, at: number): void;
+  /** What the pump's own fold said, after `hear`. `at` is now, ms. */
+  push(pumpId: string, signal: AlarmSignal, at: number): void;
+  /** What came of it since the last call. */
+  take(): AreaSignal[];
+  /** The key of the alarm that speaks for this pump's alarm; undefined where it speaks for itself. */
+  coveredBy(pumpId: string, detector: Detector): string | undefined;
+  save(): Json;
+};
+
+/** Last words within this time of one another are one event, ms. */
+const TOGETHER_MS = 600_000;
+/** Clocks that missed the same shift tell of it within this time, ms. */
+const SEASON_MS = 30 * 86_400_000;
+
+type Parts = { readonly state: AreaState; readonly ledger: AreaLedger };
+
+/**
+ * A fold over pumps that goes on from what was saved.
+ *
+ * @example
+ * const area = createAreaFold();
+ * area.hear({ pumpId, padId, area: 'North' }, lastWordAt, now);
+ * area.push(pumpId, silentRaised, now);
+ * area.take(); // one alarm for the street once a neighbour is silent too
+ */
+export function createAreaFold(saved?: unknown): AreaFold {
+  const state = restoreAreaState(saved);
+  const ledger = createAreaLedger(state);
+  const parts = { state, ledger };
+  return {
+    hear: (pump, silentSince, at) => hear(parts, pump, silentSince, at),
+    push: (pumpId, signal, at) => {
+      const member = state.members.get(pumpId);
+      if (member === undefined) return;
+      if (signal.type === 'cleared') ledger.leave(pumpId, ['daylight-saving'], signal.detector, at);
+      else if (signal.detector === 'silent') silenceRaised(parts, member, signal.priority, at);
+      else if (signal.cause === 'daylight-saving') shiftRaised(parts, member, signal, at);
+    },
+    take: ledger.take,
+    coveredBy: (pumpId, detector) => findCovering(state, pumpId, detector)?.key,
+    save: () => saveAreaState(state),
+  };
+}
+
+function findCovering({ alarms }: AreaState, pumpId: string, detector: Detector): AreaAlarm | undefined {
+  return alarms.find((alarm) => alarm.detector === detector && alarm.open.includes(pumpId));
+}
+
+function hear(parts: Parts, pump: AreaPump, silentSince: number | undefined, at: number): void {
+  const { state, ledger } = parts;
+  const { pumpId, padId, area = '' } = pump;
+  const member = state.members.get(pumpId) ?? { pumpId, padId, area, silentSince: 0 };
+  Object.assign(member, { padId, area });
+  state.members.set(pumpId, member);
+  if (silentSince !== undefined && member.silentSince === 0) {
+    member.silentSince = silentSince;
+    fellSilent(parts, member, at);
+  } else if (silentSince === undefined && member.silentSince !== 0) {
+    member.silentSince = 0;
+    ledger.leave(pumpId, ['area-silence', 'own-link'], undefined, at);
+  }
+}
+
+function fellSilent({ state, ledger }: Parts, member: Member, at: number): void {
+  const standing = state.alarms.find(({ kind }) => kind === 'own-link');
+  if (standing !== undefined && isNear(standing.from, member)) {
+    ledger.join(standing, member.pumpId, 'note', at);
+    return;
+  }
+  const dropped = listOwnLinkDrops(state, member);
+  if (dropped.length === 0) return;
+  const from = Math.min(...dropped.map(({ silentSince }) => silentSince));
+  ledger.raise(
+    { kind: 'own-link', detector: 'silent', cause: 'link', area: '', from, priority: 'urgent' },
+    dropped,
+    at,
+  );
+}
+
+/** The first pump listed as silent speaks for its street, where a pad beside it went at the same time. */
+function silenceRaised({ state, ledger }: Parts, member: Member, priority: Priority, at: number): void {
+  const { area, silentSince, pumpId } = member;
+  if (silentSince === 0) return;
+  const near = state.alarms.find(
+    (alarm) => alarm.kind === 'area-silence' && alarm.area === area && isNear(alarm.from, member),
+  );
+  const standing = findCovering(state, pumpId, 'silent') ?? near;
+  if (standing !== undefined) {
+    ledger.join(standing, pumpId, priority, at);
+    return;
+  }
+  const together = [...state.members.values()].filter(
+    (other) => other.area === area && other.silentSince !== 0 && isNear(silentSince, other),
+  );
+  if (area === '' || new Set(together.map(({ padId }) => padId)).size < 2) return;
+  const from = Math.min(...together.map((other) => other.silentSince));
+  ledger.raise({ kind: 'area-silence', detector: 'silent', cause: 'power', area, from, priority }, together, at);
+}
+
+type Raised = Extract<AlarmSignal, { type: 'raised' | 'changed' }>;
+
+function shiftRaised({ state, ledger }: Parts, member: Member, { detector, from, priority }: Raised, at: number): void {
+  const list = state.alarms.find(
+    (alarm) => alarm.kind === 'daylight-saving' && alarm.detector === detector && at - alarm.raisedAt <= SEASON_MS,
+  );
+  if (list !== undefined) ledger.join(list, member.pumpId, priority, at);
+  else
+    ledger.raise(
+      { kind: 'daylight-saving', detector, cause: 'daylight-saving', area: '', from, priority },
+      [member],
+      at,
+    );
+}
+
+function isNear(at: number, { silentSince }: Member): boolean {
+  return Math.abs(silentSince - at) <= TOGETHER_MS;
+}

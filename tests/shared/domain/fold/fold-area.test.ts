@@ -1,0 +1,138 @@
+import { describe, expect, it } from 'vitest';
+import type { AlarmSignal } from '#shared/domain/detectors/detector.ts';
+import { type AreaFold, createAreaFold } from '#shared/domain/fold/fold-area.ts';
+
+const MINUTE = 60_000;
+const HOUR = 60 * MINUTE;
+
+const silent = (from: number, at: number): AlarmSignal => ({
+  type: 'raised',
+  detector: 'silent',
+  alarmClass: 'alarm',
+  priority: 'note',
+  from,
+  at,
+  cause: 'unknown',
+  evidence: {},
+});
+const shifted = (at: number): AlarmSignal => ({
+  type: 'raised',
+  detector: 'clock-shift',
+  alarmClass: 'note',
+  priority: 'note',
+  from: at,
+  at,
+  cause: 'daylight-saving',
+  evidence: {},
+});
+
+/** Pumps named by area and number, `North-3`; each on a pad of its own unless it names one. */
+function fleet(fold: AreaFold, names: readonly string[]): void {
+  for (const name of names) fold.hear(pump(name), undefined, 0);
+}
+const pump = (name: string) => ({ pumpId: name, padId: name, area: name.split('-')[0] ?? '' });
+const names = (area: string, count: number): string[] =>
+  Array.from({ length: count }, (_, index) => `${area}-${index}`);
+
+describe('the fold over pumps', () => {
+  it('makes one alarm of a street that went silent within ten minutes, and clears it when all are back', () => {
+    const fold = createAreaFold();
+    fleet(fold, [...names('North', 3), ...names('South', 30)]);
+    for (const [index, name] of names('North', 3).entries()) fold.hear(pump(name), HOUR + index * 3 * MINUTE, 2 * HOUR);
+    fold.push('North-0', silent(HOUR, 2 * HOUR), 2 * HOUR);
+    fold.push('North-1', silent(HOUR + 3 * MINUTE, 2 * HOUR), 2 * HOUR + 3 * MINUTE);
+
+    const [raised, ...rest] = fold.take();
+    expect(raised).toMatchObject({
+      type: 'raised',
+      kind: 'area-silence',
+      detector: 'silent',
+      cause: 'power',
+      area: 'North',
+      from: HOUR,
+      pumpIds: names('North', 3),
+    });
+    expect(rest).toEqual([]);
+    expect(fold.coveredBy('North-2', 'silent')).toBe(raised?.key);
+    expect(fold.coveredBy('South-0', 'silent')).toBeUndefined();
+
+    for (const name of names('North', 3)) fold.hear(pump(name), undefined, 3 * HOUR);
+    expect(fold.take()).toMatchObject([{ type: 'cleared', key: raised?.key }]);
+  });
+
+  it('leaves alone one pad with two pumps, pads of different areas, and last words far apart', () => {
+    const fold = createAreaFold();
+    fleet(fold, [...names('North', 4), ...names('South', 30)]);
+    fold.hear({ pumpId: 'North-0', padId: 'same', area: 'North' }, HOUR, HOUR);
+    fold.hear({ pumpId: 'North-1', padId: 'same', area: 'North' }, HOUR, HOUR);
+    fold.hear(pump('South-0'), HOUR, HOUR);
+    fold.hear(pump('North-2'), HOUR + 15 * MINUTE, 2 * HOUR);
+    for (const name of ['North-0', 'North-1', 'South-0', 'North-2']) fold.push(name, silent(HOUR, 2 * HOUR), 2 * HOUR);
+
+    expect(fold.take()).toEqual([]);
+  });
+
+  it('makes no area alarm where the area is not known', () => {
+    const fold = createAreaFold();
+    for (const name of ['a', 'b']) fold.hear({ pumpId: name, padId: name }, HOUR, HOUR);
+    for (const name of ['a', 'b']) fold.push(name, silent(HOUR, 2 * HOUR), 2 * HOUR);
+    expect(fold.take()).toEqual([]);
+  });
+
+  it('makes one list of the clocks that missed a daylight-saving shift', () => {
+    const fold = createAreaFold();
+    fleet(fold, [...names('North', 5), ...names('South', 5)]);
+    for (const name of ['North-1', 'South-2', 'South-3']) fold.push(name, shifted(HOUR), HOUR);
+    const signals = fold.take();
+    expect(signals.map(({ type }) => type)).toEqual(['raised', 'changed', 'changed']);
+    expect(signals.at(-1)).toMatchObject({
+      kind: 'daylight-saving',
+      alarmClass: 'note',
+      pumpIds: ['North-1', 'South-2', 'South-3'],
+    });
+
+    for (const name of ['North-1', 'South-2', 'South-3']) {
+      fold.push(name, { type: 'cleared', detector: 'clock-shift', at: 2 * HOUR, evidence: {} }, 2 * HOUR);
+    }
+    expect(fold.take().at(-1)?.type).toBe('cleared');
+  });
+
+  it('blames our own link when over a fifth of the devices drop within two minutes, all over the place', () => {
+    const fold = createAreaFold();
+    const all = [...names('North', 15), ...names('South', 15)];
+    fleet(fold, all);
+    const dropped = all.filter((_, index) => index % 3 === 0);
+    for (const [index, name] of dropped.entries()) fold.hear(pump(name), HOUR + index * 5000, HOUR + 2 * MINUTE);
+    const signals = fold.take();
+    expect(signals[0]).toMatchObject({ type: 'raised', kind: 'own-link', priority: 'urgent' });
+    expect(signals.filter(({ type }) => type === 'raised')).toHaveLength(1);
+    expect(signals.at(-1)?.pumpIds).toEqual(dropped);
+    fold.push('North-0', silent(HOUR, 2 * HOUR), 2 * HOUR);
+    expect(fold.coveredBy('North-0', 'silent')).toBe(signals[0]?.key);
+
+    for (const name of dropped) fold.hear(pump(name), undefined, 2 * HOUR);
+    expect(fold.take().at(-1)).toMatchObject({ type: 'cleared', kind: 'own-link' });
+  });
+
+  it('blames the area, not our link, when its power takes a quarter of the fleet', () => {
+    const fold = createAreaFold();
+    fleet(fold, [...names('North', 9), ...names('South', 27)]);
+    for (const name of names('North', 9)) fold.hear(pump(name), HOUR, HOUR + 2 * MINUTE);
+    fold.push('North-0', silent(HOUR, 2 * HOUR), 2 * HOUR);
+    expect(fold.take()).toMatchObject([{ kind: 'area-silence', pumpIds: names('North', 9) }]);
+  });
+
+  it('goes on from what was saved', () => {
+    const fold = createAreaFold();
+    fleet(fold, names('North', 3));
+    for (const name of names('North', 2)) fold.hear(pump(name), HOUR, HOUR);
+    fold.push('North-0', silent(HOUR, 2 * HOUR), 2 * HOUR);
+    const [raised] = fold.take();
+    const again = createAreaFold(JSON.parse(JSON.stringify(fold.save())));
+
+    expect(again.coveredBy('North-1', 'silent')).toBe(raised?.key);
+    for (const name of names('North', 2)) again.hear(pump(name), undefined, 3 * HOUR);
+    expect(again.take()).toMatchObject([{ type: 'cleared', key: raised?.key }]);
+    expect(createAreaFold({ members: 'x', alarms: [{}] }).take()).toEqual([]);
+  });
+});
