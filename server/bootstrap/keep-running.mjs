@@ -61,7 +61,8 @@ export function keepRunning(plan, { onSpawn = () => undefined, delays = DELAYS }
   async function untilReady() {
     const began = performance.now();
     const patience = setInterval(() => {
-      tell(`${plan.name}: still working (${Math.round((performance.now() - began) / 1000)} s)`);
+      const where = plan.logFile ? `; its log: ${plan.logFile}` : '';
+      tell(`${plan.name}: still working (${Math.round((performance.now() - began) / 1000)} s)${where}`);
     }, PATIENCE_MS);
     const end = await current.settled.finally(() => clearInterval(patience));
     if (end && !stopping.signal.aborted) throw refusal(`${plan.name} ${end.reason} before it was ready:\n${end.words}`);

@@ -30,7 +30,7 @@ export async function installNpmPackages(project, { withTests = false, onLine, s
   // npm tells its scripts where it is; without that, the one on the PATH.
   const npm = process.env.npm_execpath;
   const [command, first] = npm?.endsWith('.js') ? [process.execPath, [npm]] : ['npm', []];
-  const args = [...first, 'ci', '--no-audit', '--no-fund', ...(withTests ? ['--include=dev'] : [])];
+  const args = [...first, 'ci', '--no-audit', '--no-fund', '--loglevel=error', ...(withTests ? ['--include=dev'] : [])];
   const { code, stderr } = await runCommand(command, args, { cwd: project, onLine, ...(signal ? { signal } : {}) });
   if (code === 0 || signal?.aborted) return;
   const words = stderr.trim().split('\n').slice(0, MOST_LINES).join('\n');
