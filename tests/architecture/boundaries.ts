@@ -135,7 +135,7 @@ export const BOUNDARY_RULES: readonly BoundaryRule[] = [
 /** Packages that run in one place only; their types may be named where what they made is handed on. */
 export const PACKAGE_HOMES: readonly { readonly names: readonly string[]; readonly home: RegExp }[] = [
   { names: ['drizzle-orm'], home: /^server\/db\/|-(repository|read-model)\.ts$/ },
-  { names: ['pg'], home: /^server\/db\/|-repository\.ts$|^server\/ingest\/database-fault\.ts$/ },
+  { names: ['pg'], home: /^server\/(?!features\/)|-repository\.ts$/ },
   { names: ['express', 'helmet', 'compression'], home: /^server\/(app\.ts|http\/)|-routes\.ts$/ },
   { names: ['aedes'], home: /^server\/broker\// },
   { names: ['ws'], home: /^server\/live\// },

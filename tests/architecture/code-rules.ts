@@ -85,7 +85,7 @@ export const CODE_RULES: readonly CodeRule[] = [
   },
   {
     sentence: 'no test sleeps',
-    where: (path) => isTest(path) && !isRuleBook(path),
+    where: (path) => /^tests\/.*\.test\.tsx?$/.test(path) && !isRuleBook(path),
     forbids: /await\s+(sleep|delay)\(|setTimeout\(\s*(resolve|done|r)\b|timers\/promises/,
     inFile: 'tests/server/app.test.ts',
     refused: 'await new Promise((resolve) => setTimeout(resolve, 500));',
