@@ -78,13 +78,14 @@ function foldOf(parts: PumpParts, pending: AlarmSignal[]): PumpFold {
 function takeIn(parts: PumpParts, event: PumpEvent): void {
   const { facts, link, pad } = parts;
   link.hear(event);
-  pad.hear(event);
   facts.kind = event.kind;
   facts.now = event.receivedAt;
   facts.receivedAt = event.receivedAt;
-  facts.padState = pad.state();
-  facts.onSite = pad.onSite();
-  facts.onSiteEndedAt = pad.onSiteEndedAt();
+  if (pad.hear(event)) {
+    facts.padState = pad.state();
+    facts.onSite = pad.onSite();
+    facts.onSiteEndedAt = pad.onSiteEndedAt();
+  }
   if (event.kind === 'settings') parts.hearSettings(event.settings);
   if (event.kind !== 'reading') return;
   const late = parts.seen() && event.reading.at <= facts.reading.at;

@@ -1,7 +1,7 @@
 import { silenceLimitMs } from '../detectors/link/link-tracker.ts';
 import { DAY_MS, MINUTE_MS, weekdayOf } from '../time/local-time.ts';
 import { offsetSpanAt } from '../time/zone-offset.ts';
-import { copyAnswer } from './control-copy.ts';
+import { followAnswer } from './control-copy.ts';
 import type { PumpEvent } from './pump-event.ts';
 import type { PumpParts } from './pump-parts.ts';
 
@@ -19,7 +19,7 @@ export function foldReading(parts: PumpParts, { reading, single }: PumpEvent & {
   facts.gap = gap;
   if (reading.reportedSource !== undefined) facts.reportsSource = true;
   tellLocalTime(parts, reading.at);
-  copyAnswer(parts.answer, control.push(reading));
+  followAnswer(parts.answer, control.push(reading), reading, elapsedMs);
   const { localDay, localMinute } = facts;
   const before = seen ? previous.closedInputs : undefined;
   inputs.read({ at: reading.at, closed: reading.closedInputs, before, gap, elapsedMs, localDay, localMinute });

@@ -10,7 +10,8 @@ const LONGEST_VISIT_MS = 90 * 60_000;
 
 /** Follows what people say of a pad: its state, and whether one of ours stands at it. */
 export type PadTracker = {
-  readonly hear: (event: PumpEvent) => void;
+  /** Takes an event in; answers whether anything changed. */
+  readonly hear: (event: PumpEvent) => boolean;
   readonly state: () => PadState;
   readonly onSite: () => boolean;
   readonly onSiteEndedAt: () => number;
@@ -37,7 +38,8 @@ export function createPadTracker(context: PumpContext, saved: unknown): PadTrack
   let state = parsePadState(memory.state, context.padState);
   return {
     hear: (event) => {
-      const { receivedAt } = event;
+      const { receivedAt, kind } = event;
+      if (memory.onSiteSince === 0 && kind !== 'on-site' && kind !== 'pad-state') return false;
       if (memory.onSiteSince !== 0 && receivedAt - memory.onSiteSince > LONGEST_VISIT_MS) {
         memory.onSiteEndedAt = memory.onSiteSince + LONGEST_VISIT_MS;
         memory.onSiteSince = 0;
@@ -50,6 +52,7 @@ export function createPadTracker(context: PumpContext, saved: unknown): PadTrack
         if (!event.on && memory.onSiteSince !== 0) memory.onSiteEndedAt = receivedAt;
         memory.onSiteSince = event.on ? receivedAt : 0;
       }
+      return true;
     },
     state: () => state,
     onSite: () => memory.onSiteSince !== 0,
