@@ -1,6 +1,7 @@
 import { and, eq, ne, sql } from 'drizzle-orm';
 import type { Context } from '#server/context.ts';
 import { newId } from '#server/db/new-id.ts';
+import { recordAct } from '#server/db/record-act.ts';
 import { alarmTransitions } from '#server/db/schema/alarm-transitions.ts';
 import { alarms } from '#server/db/schema/alarms.ts';
 import { notFound } from '#server/errors.ts';
@@ -30,12 +31,9 @@ export async function getAlarmForUpdate({ db, actor }: Context, alarmId: string)
 const toDate = (at: number | null): Date | null => (at === null ? null : new Date(at));
 
 /** Stores what a person did to an alarm, with its transition, and rings for the open screens. */
-export async function saveStep(
-  { db, actor }: Context,
-  alarm: LockedAlarm,
-  { record, transition }: AlarmStep,
-): Promise<void> {
+export async function saveStep(context: Context, alarm: LockedAlarm, { record, transition }: AlarmStep): Promise<void> {
   if (transition === undefined) return;
+  const { db, actor } = context;
   await db
     .update(alarms)
     .set({
@@ -61,7 +59,8 @@ export async function saveStep(
     cause: transition.cause,
     evidence: transition.evidence,
   });
-  await db.execute(sql`select pg_notify('millrace_live', '')`);
+  await recordAct(context, { action: `alarm.${transition.kind}`, subjectKind: 'alarm', subjectId: alarm.id });
+  await db.execute(sql`select pg_notify('millrace_live', ${alarm.pumpId})`);
 }
 
 /** Whether another alarm of the same pump and detector is open: two at once cannot be. */

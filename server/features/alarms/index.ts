@@ -1,4 +1,3 @@
 export { listAlarmRowsChangedSince } from './alarm-detail-read-model.ts';
 export { mountAlarmRoutes } from './alarm-routes.ts';
-export type { AlarmRow } from './alarm-row.ts';
 export { hideStaffWords, presentAlarm } from './present-alarm.ts';

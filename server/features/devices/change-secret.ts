@@ -1,9 +1,10 @@
 import type { Context } from '#server/context.ts';
 import { newDeviceSecret } from '#server/db/new-device-secret.ts';
+import { recordAct } from '#server/db/record-act.ts';
 import { notFound } from '#server/errors.ts';
 import { type ExpectedVersion, requireVersion } from '#server/http/etag.ts';
 import type { Device } from '#shared/contract/http/devices.ts';
-import { findDeviceForUpdate, type LockedDevice, recordDeviceAct, saveSecret } from './device-repository.ts';
+import { findDeviceForUpdate, type LockedDevice, saveSecret } from './device-repository.ts';
 import type { DeviceServices } from './device-services.ts';
 import { getDevice } from './get-device.ts';
 
@@ -25,7 +26,7 @@ export async function rotateSecret(
   const device = await getLocked(context, change);
   const secret = newDeviceSecret();
   await saveSecret(context, device, hashSecret(secret));
-  await recordDeviceAct(context, 'device-secret-rotated', device.id);
+  await recordAct(context, { action: 'device.secret-rotated', subjectKind: 'device', subjectId: device.id });
   return { ...(await getDevice(context, device.id)), secret };
 }
 
@@ -33,6 +34,6 @@ export async function rotateSecret(
 export async function revokeSecret(context: Context, change: Change): Promise<Device> {
   const device = await getLocked(context, change);
   await saveSecret(context, device, null);
-  await recordDeviceAct(context, 'device-secret-revoked', device.id);
+  await recordAct(context, { action: 'device.secret-revoked', subjectKind: 'device', subjectId: device.id });
   return getDevice(context, device.id);
 }

@@ -1,8 +1,9 @@
 import type { Context } from '#server/context.ts';
 import { newDeviceSecret } from '#server/db/new-device-secret.ts';
+import { recordAct } from '#server/db/record-act.ts';
 import { conflict, invalid } from '#server/errors.ts';
 import type { CreateDevice, Device } from '#shared/contract/http/devices.ts';
-import { addDevice, checkPump, fitDevice, recordDeviceAct } from './device-repository.ts';
+import { addDevice, checkPump, fitDevice } from './device-repository.ts';
 import type { DeviceServices } from './device-services.ts';
 import { getDevice } from './get-device.ts';
 
@@ -18,7 +19,7 @@ export async function createDevice(
   const deviceId = await addDevice(context, { serial, intervalSeconds, secretHash: hashSecret(secret) });
   if (deviceId === undefined) throw conflict(`The serial ${serial} is registered already.`);
   if (input.pumpId !== undefined) await fitDevice(context, deviceId, input.pumpId);
-  await recordDeviceAct(context, 'device-registered', deviceId);
+  await recordAct(context, { action: 'device.registered', subjectKind: 'device', subjectId: deviceId });
   return { ...(await getDevice(context, deviceId)), secret };
 }
 

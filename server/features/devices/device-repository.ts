@@ -1,7 +1,6 @@
 import { and, eq, sql } from 'drizzle-orm';
 import type { Context } from '#server/context.ts';
 import { newId } from '#server/db/new-id.ts';
-import { auditEntries } from '#server/db/schema/audit-entries.ts';
 import { deviceFittings } from '#server/db/schema/device-fittings.ts';
 import { devices } from '#server/db/schema/devices.ts';
 import { pumps } from '#server/db/schema/pumps.ts';
@@ -67,24 +66,4 @@ export async function saveSecret(
     })
     .where(and(eq(devices.companyId, actor.companyId), eq(devices.id, device.id)));
   await db.execute(sql`select pg_notify('millrace_credentials', ${device.serial})`);
-}
-
-/** Records what a person did with a device. */
-export async function recordDeviceAct(
-  { db, actor, now, address, requestId }: Context,
-  action: string,
-  deviceId: string,
-): Promise<void> {
-  await db.insert(auditEntries).values({
-    id: newId(),
-    companyId: actor.companyId,
-    at: new Date(now),
-    actorUserId: actor.userId,
-    actorName: actor.name,
-    action,
-    subjectKind: 'device',
-    subjectId: deviceId,
-    address: address ?? null,
-    requestId,
-  });
 }

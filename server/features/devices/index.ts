@@ -1,2 +1,1 @@
 export { mountDeviceRoutes } from './device-routes.ts';
-export type { DeviceServices } from './device-services.ts';

@@ -1,2 +1,1 @@
 export { mountHealthRoutes } from './health-routes.ts';
-export type { HealthServices } from './read-health.ts';

@@ -4,5 +4,4 @@ export { hashPassword } from './password.ts';
 export { refuseDemoPeople } from './refuse-demo-people.ts';
 export { createSessionCookies } from './session-cookies.ts';
 export { mountSessionRoutes } from './session-routes.ts';
-export type { SessionServices } from './session-services.ts';
 export { createSignInThrottle } from './sign-in-throttle.ts';
