@@ -27,10 +27,10 @@ export function createLeadership(databaseUrl: string): Leadership {
   return {
     isOurs: async () => {
       const held = client ?? (await open());
-      // Held already: taking it again only counts up, so it is given back at once.
+      // Taking a lock again that is held only counts up, so the table of locks is asked first.
       const { rows } = await held.query<{ ours: boolean }>(
         `select exists (select from pg_locks where locktype = 'advisory' and pid = pg_backend_pid() and classid = 0
-           and objid = $1 and granted) or pg_try_advisory_lock($1) as ours`,
+           and objid = $1::bigint and granted) or pg_try_advisory_lock($1::bigint) as ours`,
         [LOCK],
       );
       return rows[0]?.ours === true;
