@@ -72,7 +72,9 @@ export function createLoadTracker(context: PumpContext, limits: TryLimits, hot: 
     facts.unloadedBelow = estimate.unloadedBelow;
     facts.usualRaggedness = estimate.usualRaggedness;
     facts.ratio = estimate.basis === 'none' ? Number.NaN : state.smoothWatts / estimate.watts;
-    if (control.rampOver && judgeLoad(state, reading.at, facts.ratio, facts.unloadedBelow) && state.startSeen) bump();
+    // While the shaft slows down its watts tell of the drive, not of the water: two readings at one speed are judged.
+    const isSettled = control.rampOver && state.samples >= 2;
+    if (isSettled && judgeLoad(state, reading.at, facts.ratio, facts.unloadedBelow) && state.startSeen) bump();
     if (teacher.follow(reading, control, state)) bump();
     if (learnReading(state, bands, reading, control, elapsedMs, facts)) bump();
   }
