@@ -15,6 +15,9 @@ export type LoadState = {
   smoothSince: number;
   loadedSince: number;
   unloadedSince: number;
+  /** Speed and watts when the load was last judged. */
+  judgedRpm: number;
+  judgedWatts: number;
   primedOnce: boolean;
   caught: boolean;
   /** 0 no, 1 yes, 2 not judged. */
@@ -43,6 +46,8 @@ export const restingLoad = (): LoadState => ({
   smoothSince: 0,
   loadedSince: 0,
   unloadedSince: 0,
+  judgedRpm: 0,
+  judgedWatts: 0,
   primedOnce: false,
   caught: false,
   primed: 2,

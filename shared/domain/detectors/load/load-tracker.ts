@@ -74,6 +74,10 @@ export function createLoadTracker(context: PumpContext, limits: TryLimits, hot: 
     facts.ratio = estimate.basis === 'none' ? Number.NaN : state.smoothWatts / estimate.watts;
     // While the shaft slows down its watts tell of the drive, not of the water: two readings at one speed are judged.
     const isSettled = control.rampOver && state.samples >= 2;
+    if (isSettled) {
+      state.judgedRpm = Math.round(reading.rpm);
+      state.judgedWatts = Math.round(state.smoothWatts);
+    }
     if (isSettled && judgeLoad(state, reading.at, facts.ratio, facts.unloadedBelow) && state.startSeen) bump();
     if (teacher.follow(reading, control, state)) bump();
     if (learnReading(state, bands, reading, control, elapsedMs, facts)) bump();
@@ -104,6 +108,8 @@ function publish(facts: LoadFacts, state: ReturnType<typeof restingLoad>): void 
   facts.startSeen = state.startSeen;
   facts.primeEndsAt = state.primeEndsAt;
   facts.watts = state.smoothWatts;
+  facts.judgedRpm = state.judgedRpm;
+  facts.judgedWatts = state.judgedWatts;
   facts.primedOnce = state.primedOnce;
   facts.primed = state.primed === 2 ? undefined : state.primed === 1;
   facts.primeSeconds = state.primeSeconds;
@@ -125,6 +131,8 @@ function restingFacts(wattsAt: LoadFacts['wattsAt']): LoadFacts {
     basis: 'none',
     ratio: Number.NaN,
     unloadedBelow: ROUGH_SHARE,
+    judgedRpm: 0,
+    judgedWatts: 0,
     primedOnce: false,
     primed: undefined,
     primeSeconds: 0,

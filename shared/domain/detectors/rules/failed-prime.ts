@@ -36,8 +36,10 @@ function trySeconds(primeSeconds: number, { shortestTrySeconds, longestTrySecond
   return Math.min(longestTrySeconds, Math.max(shortestTrySeconds, primeSeconds));
 }
 
+/** The figures of the last moment that was judged: a shaft that slows down after a try tells of nothing. */
 function describe(_: State, facts: Facts): Finding {
-  const { load, reading } = facts;
+  const { load } = facts;
+  const primedWatts = load.wattsAt(load.judgedRpm);
   const ranked = rankPrimeCauses(facts);
   const from = load.firstTryAt === 0 ? load.startedAt : load.firstTryAt;
   return {
@@ -45,10 +47,10 @@ function describe(_: State, facts: Facts): Finding {
     ...(from === 0 ? {} : { from }),
     evidence: {
       tries: load.failedTries + (load.running ? 1 : 0),
-      rpm: Math.round(reading.rpm),
-      watts: Math.round(load.watts),
-      primedWatts: Math.round(load.primedWatts),
-      loadShare: Number.isFinite(load.ratio) ? Math.round(load.ratio * 100) / 100 : null,
+      rpm: load.judgedRpm,
+      watts: load.judgedWatts,
+      primedWatts: Math.round(primedWatts),
+      loadShare: primedWatts > 0 ? Math.round((load.judgedWatts / primedWatts) * 100) / 100 : null,
       knownFrom: load.basis,
       stoodMinutes: Math.round(load.stoodSeconds / 60),
       causes: ranked.map(({ cause }) => cause),

@@ -21,7 +21,9 @@ const SHUT_OFF_SHARE = 0.1;
  */
 export function rankPrimeCauses(facts: Facts): readonly PrimeCause[] {
   const { load } = facts;
-  const share = Number.isFinite(load.ratio) ? load.ratio : 0;
+  const primedWatts = load.wattsAt(load.judgedRpm);
+  const share = primedWatts > 0 ? load.judgedWatts / primedWatts : 0;
+  const stoodLong = load.stoodSeconds >= LONG_STAND_SECONDS;
   const air = share < AIR_SHARE;
   const ragged = load.raggedness > RAGGED_SHARE;
   const causes: readonly PrimeCause[] = [
@@ -33,8 +35,8 @@ export function rankPrimeCauses(facts: Facts): readonly PrimeCause[] {
     { cause: 'air-leak', weight: air ? 3 : ragged ? 2 : 0, because: ragged ? 'ragged watts' : 'watts of air' },
     {
       cause: 'drained-back',
-      weight: air && load.stoodSeconds >= LONG_STAND_SECONDS ? 1.5 : 0.5,
-      because: 'stood for long before the start',
+      weight: air && stoodLong ? 1.5 : 0.5,
+      because: stoodLong ? 'stood for long before the start' : 'a try that follows another drains between them',
     },
     { cause: 'valve-shut', weight: !air && isNearShutOff(facts) ? 4 : 0, because: 'steady watts of no flow' },
     { cause: 'blocked', weight: air ? 0.5 : 3, because: 'some load, far too little' },
@@ -42,10 +44,10 @@ export function rankPrimeCauses(facts: Facts): readonly PrimeCause[] {
   return causes.filter(({ weight }) => weight > 0).sort((left, right) => right.weight - left.weight);
 }
 
-function isNearShutOff({ load, reading, context }: Facts): boolean {
+function isNearShutOff({ load, context }: Facts): boolean {
   const { wetEnd } = context;
   if (wetEnd === undefined) return false;
   const shut = wetEnd.points.filter(({ gpm }) => gpm === 0);
-  const atNoFlow = modelWatts(reading.rpm, { ...context, wetEnd: { ...wetEnd, points: shut } })?.watts;
-  return atNoFlow !== undefined && Math.abs(load.watts / atNoFlow - 1) <= SHUT_OFF_SHARE;
+  const atNoFlow = modelWatts(load.judgedRpm, { ...context, wetEnd: { ...wetEnd, points: shut } })?.watts;
+  return atNoFlow !== undefined && Math.abs(load.judgedWatts / atNoFlow - 1) <= SHUT_OFF_SHARE;
 }
