@@ -1,4 +1,4 @@
-import { RequestError } from '#server/errors.ts';
+import { notFound, RequestError } from '#server/errors.ts';
 import { ERROR_STATUS, type ErrorCode, type Problem } from '#shared/contract/errors.ts';
 
 const TITLES: Readonly<Record<ErrorCode, string>> = {
@@ -22,8 +22,8 @@ const POOL_IS_LATE = /timeout exceeded when trying to connect|Connection termina
 /** What a thrown thing is for the person: a refusal as it is, anything else without a word about our inside. */
 export function toRequestError(error: unknown): RequestError {
   if (error instanceof RequestError) return error;
-  const body = findBodyError(error);
-  if (body !== undefined) return body;
+  const refusal = findBodyError(error) ?? findPathError(error);
+  if (refusal !== undefined) return refusal;
   return isUnavailable(error)
     ? new RequestError('unavailable', 'The database does not answer. Try again in a moment.', { retryAfterSeconds: 5 })
     : new RequestError('internal', 'Something went wrong on our side. It was written down under this request id.');
@@ -50,6 +50,13 @@ function findBodyError(error: unknown): RequestError | undefined {
   return new RequestError('validation', 'The body cannot be read.', {
     issues: [{ path: 'body', message: 'is not JSON in UTF-8' }],
   });
+}
+
+/** What Express and its file server throw for a path: a file that is missing, a `%` that begins no character. */
+function findPathError(error: unknown): RequestError | undefined {
+  const status = error instanceof Error && 'status' in error ? error.status : undefined;
+  if (status === 403 || status === 404) return notFound('page');
+  return status === 400 ? new RequestError('validation', 'The address cannot be read.') : undefined;
 }
 
 /** Looks through what a query builder wraps around the database's own error. */
