@@ -15,6 +15,8 @@ export type Conditions = {
   cutWires: number;
   stuckClosed: number;
   heldClosed: number;
+  /** Somebody has turned the levers of all clocks to off, for as long as he works. */
+  leversOff: boolean;
   /** The off tripper is missing: once closed it stays closed. */
   latchesClosed: number;
   flicker: number;
@@ -53,6 +55,7 @@ export function createConditions(): Conditions {
     cutWires: 0,
     stuckClosed: 0,
     heldClosed: 0,
+    leversOff: false,
     latchesClosed: 0,
     flicker: 0,
     chatter: undefined,

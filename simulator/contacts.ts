@@ -18,7 +18,12 @@ export function readContacts(pump: Pump, at: number): Closed {
     until = Math.min(until, state.until + CONTACT_DEBOUNCE_MS);
   }
   closed = (closed | conditions.heldClosed | conditions.stuckClosed) & ~conditions.cutWires;
+  if (conditions.leversOff) closed &= ~clockBits(pump);
   return flicker(pump, at, { closed: closed ^ conditions.flicker, until });
+}
+
+function clockBits(pump: Pump): number {
+  return pump.contacts.reduce((mask, { bit, clock }) => (clock === undefined ? mask : mask | bit), 0);
 }
 
 function readContact(contact: Contact, at: number): { readonly closed: boolean; readonly until: number } {

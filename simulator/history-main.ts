@@ -1,15 +1,21 @@
+import { writeFileSync } from 'node:fs';
 import { parseArgs } from 'node:util';
 import { encodeArrival } from './arrival-line.ts';
 import { createDemoFleet } from './demo-fleet.ts';
 import { generateHistory } from './history.ts';
+import { describePad } from './score/pad-file.ts';
+import { listStandingTruths } from './score/standing-truth.ts';
 import { writeStoryMark } from './story-mark.ts';
+import { createTruthBook, encodeTruth } from './truth.ts';
 import { writeLines } from './write-lines.ts';
 
 /*
  * Writes the demo company's history to standard output, one JSON object a line in order of arrival, in the format of
  * a backtest's readings file:
- *   tsx simulator/history-main.ts --to <ms> [--days 30] [--cadence 60] [--seed larkmoor] [--mark <file>]
- * The same arguments give the same bytes. `--mark` names the file that tells the live fleet where the story stands.
+ *   tsx simulator/history-main.ts --to <ms> [--days 30] [--cadence 60] [--seed larkmoor]
+ *     [--mark <file>] [--pads <file>] [--truth <file>]
+ * The same arguments give the same bytes. `--mark` names the file that tells the live fleet where the story stands,
+ * `--pads` that of the backtest's pads file, `--truth` that of the truth, one fault a line (see truth.ts).
  */
 
 const DAY_MS = 86_400_000;
@@ -20,6 +26,8 @@ type HistoryArguments = {
   readonly to: number;
   readonly cadenceSeconds: number;
   readonly mark: string | undefined;
+  readonly pads: string | undefined;
+  readonly truth: string | undefined;
 };
 
 const OPTIONS = {
@@ -28,6 +36,8 @@ const OPTIONS = {
   to: { type: 'string' },
   cadence: { type: 'string', default: '60' },
   mark: { type: 'string' },
+  pads: { type: 'string' },
+  truth: { type: 'string' },
 } as const;
 
 /** The arguments, or one sentence about what is wrong with them. */
@@ -40,7 +50,8 @@ function readArguments(): HistoryArguments | string {
   if (values.to === undefined || !Number.isSafeInteger(to)) return '--to must be an instant in ms since 1970.';
   if (!(days > 0 && days <= 400)) return '--days must be above 0 and at most 400.';
   if (!(cadenceSeconds >= 5 && cadenceSeconds <= 600)) return '--cadence must be 5 to 600 seconds.';
-  return { seed: values.seed, days, to, cadenceSeconds, mark: values.mark };
+  const { mark, pads, truth } = values;
+  return { seed: values.seed, days, to, cadenceSeconds, mark, pads, truth };
 }
 
 function parseValues() {
@@ -58,11 +69,21 @@ async function main(): Promise<void> {
     process.exitCode = 2;
     return;
   }
-  const { seed, to, mark } = options;
+  const { seed, to } = options;
+  const cadenceMs = options.cadenceSeconds * 1000;
+  const truth = createTruthBook();
   const from = to - Math.round(options.days * DAY_MS);
-  const fleet = createDemoFleet({ seed, from, to, cadenceMs: options.cadenceSeconds * 1000 });
+  const fleet = createDemoFleet({ seed, from, to, cadenceMs }, truth);
+  if (options.pads !== undefined) {
+    const pads = fleet.pumps.map(({ spec }) => describePad(spec, cadenceMs));
+    writeFileSync(options.pads, `${JSON.stringify(pads, null, 1)}\n`);
+  }
   await writeLines(process.stdout, encodeAll(generateHistory(fleet, { to, latencyMs: 0 })));
-  if (mark !== undefined) writeStoryMark(mark, { seed, from, to, until: to });
+  if (options.truth !== undefined) {
+    const standing = fleet.pumps.flatMap(({ spec }) => listStandingTruths(spec, from));
+    writeFileSync(options.truth, encodeTruth([...standing, ...truth.rows()]));
+  }
+  if (options.mark !== undefined) writeStoryMark(options.mark, { seed, from, to, until: to });
 }
 
 function* encodeAll(arrivals: ReturnType<typeof generateHistory>): Generator<string, void> {

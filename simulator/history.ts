@@ -19,10 +19,12 @@ export function* generateHistory(fleet: Fleet, options: HistoryOptions): Generat
   const { seed, from } = fleet.options;
   let waiting: Arrival[] = [];
   const players = fleet.members.map((member) => {
-    const { serial } = member.pump.spec;
+    const { serial, firmware } = member.pump.spec;
     const random = createRandom(`${seed}/${serial}/latency`);
     const latency = options.latencyMs === 0 ? () => 0 : () => random.between(20, options.latencyMs);
-    const device = createInProcessDevice(serial, seed, latency, (arrival) => waiting.push(arrival));
+    const device = createInProcessDevice(serial, { firmware, storySeed: seed }, latency, (arrival) =>
+      waiting.push(arrival),
+    );
     return { member, device };
   });
   for (let until = from; until < options.to; ) {

@@ -238,9 +238,9 @@ export const LARKMOOR_PHYSICS: Readonly<Record<string, LarkmoorPhysics>> = {
   },
   // Pebble Drive 90
   'MR-000206': {
-    staticFeet: 0.5,
-    pipe: 0.019,
-    filter: 0.006,
+    staticFeet: 3,
+    pipe: 0.062,
+    filter: 0.018,
     primeSeconds: 42,
     restFill: 0.45,
     drainHours: 12,

@@ -34,6 +34,12 @@ function describePump(pad: DemoPad, pump: DemoPump): PumpSpec {
     settings: pump.settings,
     model: getByName(MOTOR_MODELS, pump.motorModel),
     firmware: '1.4.2',
+    paper: {
+      state: pad.state,
+      poolGallons: pump.purpose === 'filter' ? pad.poolGallons : undefined,
+      turnoversPerDay: pump.purpose === 'filter' ? pad.turnoversPerDay : undefined,
+      nominalVolts: pump.nominalVolts,
+    },
     contacts: pump.inputs.map(describeContact),
     equipment: pump.equipment.map(({ kind, input, interlock, minimumGpm }) => ({ kind, input, interlock, minimumGpm })),
     wetEnd: getByName(WET_ENDS, pump.wetEndModel),
@@ -57,12 +63,12 @@ function describePhysics(physics: LarkmoorPhysics): Pick<PumpSpec, 'system' | 's
 }
 
 function describeContact(input: DemoPump['inputs'][number]): ContactSpec {
-  const { number, drives } = input;
-  if (input.kind === 'clock') {
+  const { number, drives, kind } = input;
+  if (kind === 'clock') {
     const { clockType = 'synchronous', circuit = 'own' } = input;
-    return { number, drives, clock: { type: clockType, circuit, trippers: input.windows } };
+    return { number, kind, drives, clock: { type: clockType, circuit, trippers: input.windows } };
   }
-  return { number, drives, habit: HABITS[drives ?? ''] ?? 'never' };
+  return { number, kind, drives, habit: HABITS[drives ?? ''] ?? 'never' };
 }
 
 function climateOf(pad: DemoPad): Climate {

@@ -50,7 +50,7 @@ function run(environment: SimulatorEnvironment, secrets: ReadonlyMap<string, str
       port: environment.mqttPort,
       serial: spec.serial,
       secret,
-      seed: `${mark.seed}/${startedAt}`,
+      identity: { firmware: spec.firmware, storySeed: mark.seed, connectionSeed: `${mark.seed}/${startedAt}` },
       now: Date.now,
       openConnection,
       schedule: (delayMs, task) => {
@@ -83,6 +83,7 @@ function createReports(expected: number): { readonly take: (report: DeviceReport
     settled = true;
     process.send?.({ type: 'ready', text: `${connected.size} simulated pumps are live.` });
   };
+  if (expected === 0) settle();
   setTimeout(() => connected.size > 0 && settle(), PATIENCE_MS).unref();
   return {
     take: (report) => {

@@ -3,6 +3,7 @@ import { setDial } from './clocks/dial.ts';
 import { createFirmware } from './control/firmware.ts';
 import { type Key, pressKey } from './control/press-key.ts';
 import { aimWater } from './physics/prime.ts';
+import { cutPower } from './power.ts';
 import { addDeed, type Pump, planProgram } from './pump.ts';
 
 /** Somebody presses a key at the motor. */
@@ -17,19 +18,37 @@ export function openLid(pump: Pump, at: number): void {
   pump.water.since = at;
 }
 
-/** The drive starts from nothing, as after a breaker was thrown and closed again by the person who stands there. */
+/** Clears the drive's fault: it starts from nothing. */
 export function restartDrive(pump: Pump): void {
   Object.assign(pump.firmware, createFirmware());
 }
 
-/** Stops the pump at the keypad for a while, opens the lid, and lets it go on: it primes again. */
-export function stopOpenAndGoOn(pump: Pump, at: number, forMs: number): void {
-  press(pump, { key: 'stop' }, at);
-  addDeed(pump, at + forMs, (stopped, when) => {
-    openLid(stopped, when);
-    press(stopped, { key: 'resume' }, when);
-    if (stopped.shaft.targetRpm > 0) restartDrive(stopped);
+/**
+ * Works on the pump while it stands, then lets it go on: it primes again. Clocks at off and the breaker, or the keypad
+ * where that stops this motor and whoever does it knows no better.
+ */
+export function workOnPump(
+  pump: Pump,
+  at: number,
+  forMs: number,
+  stopBy: 'breaker' | 'keypad',
+  done: (at: number) => void,
+): void {
+  const keypad = stopBy === 'keypad' && pump.spec.model.stopBeatsInputs;
+  pump.conditions.leversOff = true;
+  pump.busyUntil = Math.max(pump.busyUntil, at + forMs + 60_000);
+  if (keypad) press(pump, { key: 'stop' }, at);
+  else cutPower(pump, at, at + forMs, 'motor');
+  addDeed(pump, at + forMs, (_, when) => {
+    pump.conditions.leversOff = false;
+    if (keypad) press(pump, { key: 'resume' }, when);
+    done(when);
   });
+}
+
+/** Stops the pump, opens the lid, cleans the basket and starts it again. */
+export function cleanBasket(pump: Pump, at: number, forMs: number, stopBy: 'breaker' | 'keypad'): void {
+  workOnPump(pump, at, forMs, stopBy, (when) => openLid(pump, when));
 }
 
 /** Changes what the motor is set to, at the keypad. */

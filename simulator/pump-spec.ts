@@ -13,6 +13,8 @@ import type { WetEnd } from './physics/wet-end.ts';
 /** What closes one speed input: a time clock with trippers, or a habit. */
 export type ContactSpec = {
   readonly number: number;
+  /** What the company calls it: clock, twist-timer, toggle, solar-controller, heater-call or remote. */
+  readonly kind: string;
   readonly drives: string | undefined;
   readonly clock?: {
     readonly type: ClockType;
@@ -29,6 +31,14 @@ export type EquipmentSpec = {
   readonly minimumGpm: number | undefined;
 };
 
+/** What the company has on paper beside the motor's settings. */
+export type Paper = {
+  readonly state: string;
+  readonly poolGallons: number | undefined;
+  readonly turnoversPerDay: number | undefined;
+  readonly nominalVolts: number;
+};
+
 /** One pump as it truly is: what was commissioned, and the physics behind it that nobody at a desk knows. */
 export type PumpSpec = {
   readonly serial: string;
@@ -40,6 +50,7 @@ export type PumpSpec = {
   readonly settings: MotorSettings;
   readonly model: MotorModel;
   readonly firmware: string;
+  readonly paper: Paper;
   readonly contacts: readonly ContactSpec[];
   readonly equipment: readonly EquipmentSpec[];
   readonly wetEnd: WetEnd;

@@ -138,8 +138,9 @@ export function planProgram(settings: MotorSettings): WeekPlan {
   return planWeek(settings.program);
 }
 
-/** Adds a deed in its place; deeds of one instant keep the order in which they came. */
-export function addDeed(pump: Pump, at: number, act: Deed['act']): void {
+/** Adds a deed in its place, at a whole ms; deeds of one instant keep the order in which they came. */
+export function addDeed(pump: Pump, instant: number, act: Deed['act']): void {
+  const at = Math.round(instant);
   let index = pump.deeds.length;
   while (index > 0 && (pump.deeds[index - 1]?.at ?? 0) > at) index -= 1;
   pump.deeds.splice(index, 0, { at, act });

@@ -10,7 +10,8 @@ export type TruthRow = {
   readonly s: string;
   readonly fault: string;
   readonly detector: string;
-  readonly cause: string;
+  /** Null where the table of detectors names no causes. */
+  readonly cause: string | null;
   readonly from: number;
   readonly to: number | null;
   readonly required: boolean;
@@ -73,6 +74,11 @@ export function createTruthBook(): TruthBook {
   };
 }
 
+/** Writes truth rows, one JSON object a line. */
+export function encodeTruth(rows: readonly TruthRow[]): string {
+  return rows.map((row) => `${JSON.stringify(row)}\n`).join('');
+}
+
 function look(sighting: Sighting, at: number): void {
   const { pump, fault } = sighting;
   if (!fault.shows(pump, at)) return;
@@ -95,7 +101,7 @@ function toRow(sighting: Sighting): TruthRow[] {
       s: pump.spec.serial,
       fault: fault.slug,
       detector: fault.detector,
-      cause: fault.cause,
+      cause: fault.causeOn?.(pump.spec) ?? fault.cause,
       from: firstAt,
       to: sighting.endedAt === null ? null : sighting.lastAt,
       required: sighting.longestMs >= stretchMs && sighting.stretches >= stretches && sighting.days.size >= days,

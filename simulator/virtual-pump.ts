@@ -11,7 +11,14 @@ import type { Pump } from './pump.ts';
 export type News =
   | { readonly kind: 'reading'; readonly at: number; readonly reading: Reading }
   | { readonly kind: 'settings'; readonly at: number; readonly settings: MotorSettings }
-  | { readonly kind: 'device'; readonly at: number; readonly up: boolean }
+  /** `boot` counts the device's starts; `since` is when it last started, ms. */
+  | {
+      readonly kind: 'device';
+      readonly at: number;
+      readonly up: boolean;
+      readonly boot: number;
+      readonly since: number;
+    }
   | { readonly kind: 'link'; readonly at: number; readonly up: boolean }
   | { readonly kind: 'on-site'; readonly at: number; readonly on: boolean };
 
@@ -30,6 +37,8 @@ export type VirtualPump = {
 
 /** How often a ramp is looked at, ms. */
 const LOOK_MS = 1000;
+/** A pump that primes is not steady: its device speaks at least so often, ms. */
+const PRIMING_CADENCE_MS = 10_000;
 const NEVER = Number.POSITIVE_INFINITY;
 
 /** Runs a pump from event to event, and its device's rule of when to speak. */
@@ -38,6 +47,8 @@ export function createVirtualPump(pump: Pump, initialCadenceMs: number): Virtual
   let zoneChangeAt = pump.zone.nextChangeAfter(pump.now);
   // Devices do not all speak in the same second.
   let reportAt = pump.now + Math.round(pump.noise.between(0, cadenceMs));
+  // Up to here everything has been played; nobody may be told of anything earlier.
+  let playedUntil = pump.now;
   let lastSent: Reading | undefined;
   let told = { up: false, linkUp: true, onSite: false, settings: undefined as MotorSettings | undefined };
 
@@ -46,7 +57,7 @@ export function createVirtualPump(pump: Pump, initialCadenceMs: number): Virtual
     const at = Math.min(deedAt, pump.decideAt, zoneChangeAt);
     if (!watched) return at;
     const lookAt = pump.shaft.settlesAt > pump.now ? Math.min(pump.now + LOOK_MS, pump.shaft.settlesAt) : NEVER;
-    return Math.min(at, reportAt, lookAt);
+    return Math.min(at, Math.max(playedUntil, Math.min(reportAt, lookAt)));
   };
 
   const play = (at: number): void => {
@@ -70,7 +81,7 @@ export function createVirtualPump(pump: Pump, initialCadenceMs: number): Virtual
   const tell = (at: number, emit: Emit): void => {
     const up = pump.powered && !pump.conditions.hung;
     if (pump.linkUp !== told.linkUp) emit({ kind: 'link', at, up: pump.linkUp });
-    if (up !== told.up) emit({ kind: 'device', at, up });
+    if (up !== told.up) emit({ kind: 'device', at, up, boot: pump.boots, since: pump.poweredSince });
     if (pump.onSite !== told.onSite) emit({ kind: 'on-site', at, on: pump.onSite });
     const settings = up ? pump.settings : undefined;
     if (settings !== undefined && settings !== told.settings && pump.spec.model.says.settings) {
@@ -82,7 +93,7 @@ export function createVirtualPump(pump: Pump, initialCadenceMs: number): Virtual
   };
 
   const report = (at: number, emit: Emit): void => {
-    reportAt = at + cadenceMs;
+    reportAt = at + (pump.command.source === 'prime' ? Math.min(cadenceMs, PRIMING_CADENCE_MS) : cadenceMs);
     const reading = observeReading(pump, at);
     if (lastSent !== undefined && reading.at <= lastSent.at) return;
     lastSent = reading;
@@ -100,14 +111,11 @@ export function createVirtualPump(pump: Pump, initialCadenceMs: number): Virtual
         const at = nextAt(emit !== undefined);
         if (at > until) break;
         play(at);
-        if (emit === undefined) {
-          // Nobody watches, so nothing falls due before somebody does.
-          reportAt = Math.max(reportAt, at);
-          continue;
-        }
+        if (emit === undefined) continue;
         tell(at, emit);
         for (const watch of pump.watchers) watch(at);
       }
+      playedUntil = Math.max(playedUntil, until);
     },
   };
 }

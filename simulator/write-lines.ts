@@ -1,21 +1,24 @@
-import { once } from 'node:events';
-import type { Writable } from 'node:stream';
+import { Readable, type Writable } from 'node:stream';
+import { pipeline } from 'node:stream/promises';
 
 const CHUNK_LENGTH = 256 * 1024;
 
-/** Writes texts in large pieces and waits while the reader is slower. Ends quietly when the reader has gone. */
+/** Writes texts in large pieces, no faster than they are taken, and leaves the output open. Ends quietly when nobody reads any more. */
 export async function writeLines(output: Writable, texts: Iterable<string>): Promise<void> {
-  let gone = false;
-  output.once('error', () => {
-    gone = true;
-  });
+  try {
+    await pipeline(Readable.from(gather(texts)), output, { end: false });
+  } catch (error) {
+    if (!(error instanceof Error && 'code' in error && error.code === 'EPIPE')) throw error;
+  }
+}
+
+function* gather(texts: Iterable<string>): Generator<string, void> {
   let chunk = '';
   for (const text of texts) {
     chunk += text;
     if (chunk.length < CHUNK_LENGTH) continue;
-    if (gone) return;
-    if (!output.write(chunk)) await Promise.race([once(output, 'drain'), once(output, 'close')]).catch(() => undefined);
+    yield chunk;
     chunk = '';
   }
-  if (!gone && chunk !== '') output.write(chunk);
+  if (chunk !== '') yield chunk;
 }

@@ -42,10 +42,10 @@ export function readWeekPlan(
   const first = edges[0];
   const last = edges.at(-1);
   if (first === undefined || last === undefined) return { on: NONE, until: Number.POSITIVE_INFINITY };
-  // A hair ahead, so that an edge computed to fall on this instant counts as passed.
+  // A millisecond ahead, so that an edge that rounding put on this instant counts as passed.
   const minute = minuteOfWeek(dialMs(dial, at) + 1);
   const next = edges.findIndex((edge) => edge.minute > minute);
   const current = next === -1 ? last : next === 0 ? last : edges[next - 1];
   const nextMinute = next === -1 ? first.minute + WEEK_MINUTES : (edges[next]?.minute ?? first.minute);
-  return { on: current?.on ?? NONE, until: Math.ceil(at + realMs(dial, nextMinute - minute)) };
+  return { on: current?.on ?? NONE, until: Math.max(at + 1, Math.round(at + 1 + realMs(dial, nextMinute - minute))) };
 }

@@ -3,21 +3,30 @@ import { createRandom } from '#simulator/random.ts';
 
 /** Who a device says it is: its connections, its boots, and how long it has been up. */
 export type DeviceIdentity = {
-  readonly boot: (at: number) => void;
+  /** The device started for the n-th time, at `since`, ms. */
+  readonly boot: (count: number, since: number) => void;
   readonly nextConnection: () => string;
   readonly online: (connection: string, at: number) => DeviceStatus;
   readonly between: (low: number, high: number) => number;
 };
 
-/** Creates an identity whose every id follows from the seed. */
-export function createDeviceIdentity(serial: string, seed: string, firmware = '1.4.2'): DeviceIdentity {
-  const random = createRandom(`${seed}/${serial}/identity`);
-  let bootId = uuidFrom(random.next);
+export type IdentityOptions = {
+  readonly serial: string;
+  readonly firmware: string;
+  /** Boots follow from the story, so that they go on where a history ended… */
+  readonly storySeed: string;
+  /** …and connections from each start of the program. */
+  readonly connectionSeed: string;
+};
+
+export function createDeviceIdentity({ serial, firmware, storySeed, connectionSeed }: IdentityOptions): DeviceIdentity {
+  const random = createRandom(`${connectionSeed}/${serial}/connections`);
+  let bootId = '';
   let bootedAt = 0;
   return {
-    boot: (at) => {
-      bootId = uuidFrom(random.next);
-      bootedAt = at;
+    boot: (count, since) => {
+      bootId = uuidFrom(createRandom(`${storySeed}/${serial}/boot-${count}`).next);
+      bootedAt = since;
     },
     nextConnection: () => uuidFrom(random.next),
     online: (connection, at) => ({

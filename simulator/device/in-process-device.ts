@@ -3,7 +3,7 @@ import type { MotorSettings } from '#shared/contract/mqtt/settings.ts';
 import type { DeviceStatus } from '#shared/contract/mqtt/status.ts';
 import { MAX_READINGS_PER_MESSAGE } from '#shared/contract/mqtt/wire-limits.ts';
 import type { News } from '#simulator/virtual-pump.ts';
-import { createDeviceIdentity } from './device-identity.ts';
+import { createDeviceIdentity, type IdentityOptions } from './device-identity.ts';
 
 /** One message as it reaches a server, at its arrival, ms. */
 export type Arrival = { readonly at: number; readonly serial: string } & (
@@ -31,11 +31,12 @@ const RECONNECT_MS = { min: 4000, max: 40_000 };
  */
 export function createInProcessDevice(
   serial: string,
-  seed: string,
+  identityOptions: Pick<IdentityOptions, 'firmware' | 'storySeed'>,
   latencyMs: () => number,
   deliver: (arrival: Arrival) => void,
 ): InProcessDevice {
-  const identity = createDeviceIdentity(serial, seed);
+  const { storySeed } = identityOptions;
+  const identity = createDeviceIdentity({ ...identityOptions, serial, connectionSeed: storySeed });
   const buffer: Reading[] = [];
   let connectAt = Number.POSITIVE_INFINITY;
   let connection: string | undefined;
@@ -88,7 +89,7 @@ export function createInProcessDevice(
         alive = news.up;
         if (!alive) disconnect(news.at);
         else {
-          identity.boot(news.at);
+          identity.boot(news.boot, news.since);
           if (linkUp) connect(news.at);
         }
         return;

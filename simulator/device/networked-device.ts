@@ -3,7 +3,7 @@ import { encodeSettings, type MotorSettings } from '#shared/contract/mqtt/settin
 import { encodeStatus } from '#shared/contract/mqtt/status.ts';
 import type { Connection, OpenConnection } from '#simulator/link.ts';
 import type { News } from '#simulator/virtual-pump.ts';
-import { createDeviceIdentity } from './device-identity.ts';
+import { createDeviceIdentity, type IdentityOptions } from './device-identity.ts';
 import { createOutgoing } from './outgoing.ts';
 
 export type DeviceReport = { readonly serial: string } & (
@@ -16,8 +16,7 @@ export type NetworkedDeviceOptions = {
   readonly port: number;
   readonly serial: string;
   readonly secret: string;
-  /** What its connection and boot ids come from; another one at every start of the program. */
-  readonly seed: string;
+  readonly identity: Pick<IdentityOptions, 'firmware' | 'storySeed' | 'connectionSeed'>;
   readonly now: () => number;
   readonly openConnection: OpenConnection;
   readonly schedule: (delayMs: number, task: () => void) => { readonly cancel: () => void };
@@ -31,7 +30,7 @@ const RETRY_MS = { first: 1000, most: 30_000, refused: 60_000 };
 /** A device on a real link: connects while it is up, stores while it is not, and sends again what nobody stored. */
 export function createNetworkedDevice(options: NetworkedDeviceOptions): NetworkedDevice {
   const { serial, report } = options;
-  const identity = createDeviceIdentity(serial, options.seed);
+  const identity = createDeviceIdentity({ ...options.identity, serial });
   const outgoing = createOutgoing();
   let connection: Connection | undefined;
   let isOpen = false;
@@ -105,7 +104,7 @@ export function createNetworkedDevice(options: NetworkedDeviceOptions): Networke
         if (isOpen) connection?.publish('settings', encodeSettings(settings));
       } else if (news.kind === 'device') {
         up = news.up;
-        if (up) identity.boot(news.at);
+        if (up) identity.boot(news.boot, news.since);
         follow();
       } else if (news.kind === 'link') {
         linkUp = news.up;

@@ -1,8 +1,8 @@
 import { type Fault, HOUR_MS } from './fault.ts';
-import { isSettled, loadOfClean } from './pump-view.ts';
+import { isSettled, loadOfClean, wattsShareAtValve } from './pump-view.ts';
 
 /** Friction left when the bypass is open. */
-const FACTOR = 0.22;
+const FACTOR = 0.14;
 
 export const bypassOpen: Fault = {
   slug: 'bypass-open',
@@ -13,12 +13,12 @@ export const bypassOpen: Fault = {
   needs: { stretchMs: 3 * HOUR_MS },
   also: [],
   // Only where the way through is narrow enough that opening it shows.
-  suits: ({ system, purpose }) => purpose === 'filter' && system.pipe + system.filter > 0.022,
+  suits: (spec) => spec.purpose === 'filter' && wattsShareAtValve(spec, FACTOR) > 1.2,
   begin: (pump) => {
     pump.conditions.valve = FACTOR;
   },
   end: (pump) => {
     pump.conditions.valve = 1;
   },
-  shows: (pump, at) => isSettled(pump, at) && loadOfClean(pump, at) > 1.17,
+  shows: (pump, at) => isSettled(pump, at) && pump.command.source !== 'prime' && loadOfClean(pump, at) > 1.16,
 };

@@ -1,6 +1,5 @@
-import { disturbWater, openLid, restartDrive, stopOpenAndGoOn } from '#simulator/pad-deeds.ts';
-import { cutPower } from '#simulator/power.ts';
-import { addDeed, type Pump } from '#simulator/pump.ts';
+import { cleanBasket, disturbWater } from '#simulator/pad-deeds.ts';
+import type { Pump } from '#simulator/pump.ts';
 import { type Fault, MINUTE_MS } from './fault.ts';
 import { isUnloaded } from './pump-view.ts';
 
@@ -29,18 +28,13 @@ export function definePrimeFault({ slug, cause, story, trouble, stoppedBy = 'key
     suits: ({ settings, purpose }) => settings.prime !== null && purpose === 'filter',
     begin: (pump, at) => {
       trouble(pump, true);
-      if (stoppedBy === 'breaker') {
-        addDeed(pump, at + BREAKER_MS, openLid);
-        cutPower(pump, at, at + BREAKER_MS, 'motor');
-      } else {
-        stopOpenAndGoOn(pump, at, pump.chance.between(2, 5) * MINUTE_MS);
-      }
+      const forMs = stoppedBy === 'breaker' ? BREAKER_MS : pump.chance.between(2, 5) * MINUTE_MS;
+      cleanBasket(pump, at, forMs, stoppedBy);
       disturbWater(pump, at);
     },
     end: (pump, at) => {
       trouble(pump, false);
-      openLid(pump, at);
-      restartDrive(pump);
+      cleanBasket(pump, at, 3 * MINUTE_MS, 'breaker');
       disturbWater(pump, at);
     },
     shows: (pump, at) => pump.firmware.pausedUntil !== undefined || isUnloaded(pump, at),

@@ -1,3 +1,4 @@
+import { addDeed } from '#simulator/pump.ts';
 import { type Fault, HOUR_MS } from './fault.ts';
 import { isSettled } from './pump-view.ts';
 
@@ -15,13 +16,19 @@ export const deratingDrive: Fault = {
   suits: ({ settings, model, contacts }) =>
     model.says.temperatures &&
     contacts.some(({ clock, number }) => clock !== undefined && (settings.inputs[number - 1] ?? 0) > ALLOWED_RPM + 200),
-  begin: (pump) => {
+  begin: (pump, at) => {
     pump.conditions.hotDriveCelsius = pump.spec.model.driveHotCelsius - 20;
-    pump.conditions.limitRpm = ALLOWED_RPM;
+    addDeed(pump, at + HOUR_MS, ({ conditions }) => {
+      if (conditions.hotDriveCelsius > 0) conditions.limitRpm = ALLOWED_RPM;
+    });
   },
   end: (pump) => {
     pump.conditions.hotDriveCelsius = 0;
     pump.conditions.limitRpm = undefined;
   },
-  shows: (pump, at) => isSettled(pump, at) && pump.command.source !== 'prime' && pump.command.rpm > ALLOWED_RPM + 100,
+  shows: (pump, at) =>
+    pump.conditions.limitRpm !== undefined &&
+    isSettled(pump, at) &&
+    pump.command.source !== 'prime' &&
+    pump.command.rpm > ALLOWED_RPM + 100,
 };

@@ -5,7 +5,7 @@ import { type Fault, HOUR_MS } from './fault.ts';
 export const driveHot: Fault = {
   slug: 'drive-hot',
   detector: 'drive-hot',
-  cause: 'drive-hot',
+  cause: null,
   story: 'The drive’s fins are full of lint and stand in the sun.',
   hours: [10, 60],
   needs: { stretchMs: HOUR_MS },

@@ -10,9 +10,11 @@ export type Needs = { readonly stretchMs?: number; readonly stretches?: number; 
 /** Something that goes wrong at a pad, and what a watcher should make of it. */
 export type Fault = {
   readonly slug: string;
-  /** Slugs of the detector and the cause that are the truth. */
+  /** Slug of the detector that has to speak, and of the true cause: null where the table of detectors names none. */
   readonly detector: string;
-  readonly cause: string;
+  readonly cause: string | null;
+  /** The cause on this pump, where it depends on what hangs on it. */
+  readonly causeOn?: (spec: PumpSpec) => string;
   /** What happens, for whoever reads a scenario. */
   readonly story: string;
   /** How long it usually stands, hours. */

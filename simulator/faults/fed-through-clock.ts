@@ -5,7 +5,7 @@ import { DAY_MS, type Fault, HOUR_MS } from './fault.ts';
 export const fedThroughClock: Fault = {
   slug: 'fed-through-clock',
   detector: 'fed-through-clock',
-  cause: 'fed-through-clock',
+  cause: null,
   story: 'The motor was wired behind the old time clock’s line contacts: every night it loses its power.',
   hours: [70, 160],
   needs: { days: 3 },

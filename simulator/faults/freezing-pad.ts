@@ -9,7 +9,7 @@ const COLDEST_CELSIUS = -4;
 export const freezingPad: Fault = {
   slug: 'freezing-pad',
   detector: 'freezing',
-  cause: 'freezing',
+  cause: null,
   story: 'A hard frost, and somebody has pressed stop: water stands in the pipes.',
   hours: [20, 34],
   needs: { stretchMs: HOUR_MS },

@@ -4,7 +4,7 @@ import { type Fault, HOUR_MS } from './fault.ts';
 export const keypadHold: Fault = {
   slug: 'keypad-hold',
   detector: 'keypad-hold',
-  cause: 'keypad-hold',
+  cause: null,
   story: 'Somebody set a speed by hand, and it was never put back to its program.',
   hours: [28, 60],
   needs: { stretchMs: 20 * HOUR_MS },

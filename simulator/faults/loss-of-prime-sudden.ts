@@ -1,4 +1,4 @@
-import { disturbWater, openLid, restartDrive } from '#simulator/pad-deeds.ts';
+import { cleanBasket, disturbWater } from '#simulator/pad-deeds.ts';
 import { type Fault, MINUTE_MS } from './fault.ts';
 import { isUnloaded } from './pump-view.ts';
 
@@ -17,8 +17,7 @@ export const lossOfPrimeSudden: Fault = {
   },
   end: (pump, at) => {
     pump.conditions.suction.gulps = 'no';
-    openLid(pump, at);
-    restartDrive(pump);
+    cleanBasket(pump, at, 3 * MINUTE_MS, 'breaker');
     disturbWater(pump, at);
   },
   shows: (pump, at) => pump.command.source !== 'prime' && pump.shaft.targetRpm >= 1500 && isUnloaded(pump, at),

@@ -2,6 +2,7 @@ import { dialMs } from '#simulator/clocks/dial.ts';
 import { readTimeClock } from '#simulator/clocks/time-clock.ts';
 import { readWeekPlan } from '#simulator/clocks/week-plan.ts';
 import { findLoad } from '#simulator/load.ts';
+import { dutyGpm } from '#simulator/physics/duty-point.ts';
 import { lineWatts } from '#simulator/physics/motor-drive.ts';
 import { loadShare, waterFill } from '#simulator/physics/prime.ts';
 import { dryShaftWatts, shaftWatts } from '#simulator/physics/wet-end.ts';
@@ -77,4 +78,15 @@ export function isClosed(pump: Pump, number: number): boolean {
 export function isDue(pump: Pump, at: number): boolean {
   const wanted = pump.settings.inputs.some((rpm, index) => rpm !== null && (pump.closed & (1 << index)) !== 0);
   return wanted || readWeekPlan(pump.program, pump.motorClock, at).on.length > 0;
+}
+
+/** Watts with all friction times `valve`, as a share of the commissioned watts, at the slowest speed of the program. */
+export function wattsShareAtValve(spec: PumpSpec, valve: number): number {
+  const rpm = Math.min(...spec.settings.program.map((entry) => entry.rpm));
+  if (!Number.isFinite(rpm)) return 1;
+  const watts = (factor: number) => {
+    const gpm = dutyGpm(spec.wetEnd, spec.system, { valve: factor, dirt: 1, staticFeet: 0 }, rpm);
+    return lineWatts(spec.drive, shaftWatts(spec.wetEnd, gpm, rpm), rpm);
+  };
+  return watts(valve) / watts(1);
 }

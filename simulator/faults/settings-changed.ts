@@ -4,7 +4,7 @@ import { type Fault, MINUTE_MS } from './fault.ts';
 export const settingsChanged: Fault = {
   slug: 'settings-changed',
   detector: 'settings-changed',
-  cause: 'settings-changed',
+  cause: null,
   story: 'The speed of the program was turned down at the keypad.',
   hours: [20, 120],
   needs: { stretchMs: 5 * MINUTE_MS },

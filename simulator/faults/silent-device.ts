@@ -12,8 +12,10 @@ export const silentDevice: Fault = {
   begin: (pump) => {
     pump.conditions.hung = true;
   },
-  end: (pump) => {
+  end: (pump, at) => {
     pump.conditions.hung = false;
+    pump.boots += 1;
+    pump.poweredSince = at;
   },
   shows: (pump) => pump.conditions.hung,
 };

@@ -8,7 +8,7 @@ const CUT_MS = 9 * MINUTE_MS;
 export const skewedDevice: Fault = {
   slug: 'skewed-device',
   detector: 'clock-skew',
-  cause: 'clock-skew',
+  cause: null,
   story: 'After a breaker trip the device’s own clock is minutes behind, and it stamps its readings with that.',
   hours: [3, 30],
   needs: { stretchMs: 10 * MINUTE_MS },

@@ -1,12 +1,12 @@
 import { disturbWater } from '#simulator/pad-deeds.ts';
 import { waterFill } from '#simulator/physics/prime.ts';
-import { DAY_MS, type Fault } from './fault.ts';
+import type { Fault } from './fault.ts';
 
 export const slowPrime: Fault = {
   slug: 'slow-prime',
   detector: 'slow-prime',
-  cause: 'air-leak',
-  story: 'The lid seal is drying out: it primes still, but takes three times as long.',
+  cause: null,
+  story: 'The lid seal is drying out: it primes still, but takes four times as long.',
   hours: [6 * 24, 12 * 24],
   needs: { stretches: 7 },
   also: [],
@@ -15,9 +15,9 @@ export const slowPrime: Fault = {
     settings.prime !== null &&
     suction.restFill < 0.6 &&
     suction.primeSeconds >= 18 &&
-    suction.primeSeconds * 4 < settings.prime.seconds,
-  begin: (pump, at, until) => {
-    pump.conditions.suction.slowness = until - at > 2 * DAY_MS ? 3 : 2.5;
+    suction.primeSeconds * 5.6 < settings.prime.seconds,
+  begin: (pump, at) => {
+    pump.conditions.suction.slowness = 4;
     disturbWater(pump, at);
   },
   end: (pump, at) => {

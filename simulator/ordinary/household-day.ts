@@ -1,4 +1,4 @@
-import { press, stopOpenAndGoOn } from '#simulator/pad-deeds.ts';
+import { cleanBasket, press } from '#simulator/pad-deeds.ts';
 import { cutPower } from '#simulator/power.ts';
 import { addDeed, type Pump } from '#simulator/pump.ts';
 import type { Random } from '#simulator/random.ts';
@@ -19,7 +19,7 @@ type Habit = {
 /** What happens at a pad where people live: none of it is a fault. */
 const HABITS: readonly Habit[] = [
   // Somebody cleans the basket.
-  { likely: 0.05, between: [9, 18], minutes: [3, 8], act: (pump, at, forMs) => stopOpenAndGoOn(pump, at, forMs) },
+  { likely: 0.05, between: [9, 18], minutes: [3, 8], act: (pump, at, forMs) => cleanBasket(pump, at, forMs, 'keypad') },
   // Vacuuming by hand at a higher speed.
   { likely: 0.04, between: [9, 17], minutes: [25, 70], act: holdManual },
   // The timed high-speed run.

@@ -1,5 +1,4 @@
-import { openLid, press, restartDrive, setTimeClocks } from '#simulator/pad-deeds.ts';
-import { cutPower } from '#simulator/power.ts';
+import { openLid, setTimeClocks, workOnPump } from '#simulator/pad-deeds.ts';
 import { addDeed, type Pump } from '#simulator/pump.ts';
 import type { Random } from '#simulator/random.ts';
 import { addOrdinaryDeed } from './ordinary-deed.ts';
@@ -14,20 +13,17 @@ export function planWeeklyStop(pump: Pump, random: Random, dayStart: number): vo
   const at = dayStart + random.between(8.5, 15) * 60 * MINUTE_MS;
   const offMinutes = random.between(5, 11);
   const cleansFilter = random.chance(0.25);
-  const usesBreaker = random.chance(0.5) || !pump.spec.model.stopBeatsInputs;
+  const stopBy = random.chance(0.5) ? 'breaker' : 'keypad';
   addOrdinaryDeed(pump, Math.round(at), 45, (_, arrived) => {
     pump.onSite = true;
-    const offAt = arrived + Math.round(4 * MINUTE_MS);
+    const offAt = arrived + 4 * MINUTE_MS;
     const onAt = offAt + Math.round(offMinutes * MINUTE_MS);
     addDeed(pump, offAt, (_pump, when) =>
-      usesBreaker ? cutPower(pump, when, onAt, 'motor') : press(pump, { key: 'stop' }, when),
+      workOnPump(pump, when, onAt - offAt, stopBy, (doneAt) => {
+        openLid(pump, doneAt);
+        if (cleansFilter) pump.dirt.filter = 1;
+      }),
     );
-    addDeed(pump, onAt, (_pump, when) => {
-      openLid(pump, when);
-      if (cleansFilter) pump.dirt.filter = 1;
-      if (!usesBreaker) press(pump, { key: 'resume' }, when);
-      restartDrive(pump);
-    });
     addDeed(pump, onAt + 20 * MINUTE_MS, (_pump, when) => {
       setTimeClocks(pump, when);
       pump.onSite = false;

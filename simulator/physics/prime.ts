@@ -32,6 +32,9 @@ export function createSuctionTrouble(): SuctionTrouble {
   return { airLeak: 0, waterLow: false, blocked: false, drainsBack: false, gulps: 'no', slowness: 1 };
 }
 
+/** With the whole lift to draw it takes a quarter of an hour at the least, if it gets there at all. */
+const LIFT_TAU_MS = 700_000;
+
 /** A healthy pump overshoots its full mark, so that it gets there in finite time. */
 const FULL_TARGET = 1.06;
 
@@ -69,7 +72,7 @@ function drawing(suction: Suction, trouble: SuctionTrouble, rpm: number, luck: n
   if (trouble.waterLow) return { target: 0.42, tauMs };
   if (trouble.blocked) return { target: 0.74, tauMs };
   if (trouble.gulps === 'ragged') return { target: 0.78, tauMs: 40_000 };
-  return { target: FULL_TARGET, tauMs: trouble.drainsBack ? tauMs * 14 : tauMs };
+  return { target: FULL_TARGET, tauMs: trouble.drainsBack ? Math.max(tauMs * 14, LIFT_TAU_MS) : tauMs };
 }
 
 function standing(suction: Suction, trouble: SuctionTrouble): Aim {

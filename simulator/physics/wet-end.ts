@@ -44,10 +44,10 @@ export function shaftWatts(wetEnd: WetEnd, gpm: number, rpm: number): number {
   return bestShaftWatts(wetEnd) * speed ** 3 * (shutOffPowerShare + (1 - shutOffPowerShare) * rise);
 }
 
-/** Shaft power, W, of a wet end that churns air: windage grows less steeply than the cube, seal drag with the speed. */
+/** Shaft power, W, of a wet end that churns air: windage grows a little less than the cube, seal drag with the speed. */
 export function dryShaftWatts(wetEnd: WetEnd, rpm: number): number {
   const speed = rpm / wetEnd.referenceRpm;
-  return speed <= 0 ? 0 : bestShaftWatts(wetEnd) * wetEnd.dryPowerShare * (0.3 * speed + 0.7 * speed ** 2.6);
+  return speed <= 0 ? 0 : bestShaftWatts(wetEnd) * wetEnd.dryPowerShare * (0.05 * speed + 0.95 * speed ** 2.8);
 }
 
 /** Shaft power, W, at the best point and the reference speed. */

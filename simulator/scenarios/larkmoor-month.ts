@@ -11,15 +11,15 @@ export const LARKMOOR_MONTH: readonly HistoryLine[] = [
   { daysBefore: 12, at: '07:30', pad: 'Sagebrush Loop 204', fault: 'drained-back', hours: 5 },
   { daysBefore: 8, at: '11:15', pad: 'Kelp Street 33', fault: 'valve-shut', hours: 4 },
   { daysBefore: 4, at: '08:05', pad: 'Tern Court 4', fault: 'air-leak', hours: 2.5 },
-  { daysBefore: 13, at: '12:00', pad: 'Harbour Steps 12', fault: 'slow-prime', hours: 200 },
+  { daysBefore: 14, at: '12:00', pad: 'Sluice Walk 8', fault: 'slow-prime', hours: 220 },
   { daysBefore: 16, at: '09:20', pad: 'Marram Avenue 15', fault: 'loss-of-prime-sudden', hours: 3 },
   { daysBefore: 22, at: '10:30', pad: 'Heron Close 2', fault: 'loss-of-prime-ragged', hours: 7 },
 
   // Flow and load. Fennel Street's filter is what the demo opens with.
   { daysBefore: 13, at: '06:00', pad: 'Fennel Street 9', fault: 'dirty-filter', hours: 400, everyDays: 26 },
-  { daysBefore: 6, at: '14:00', pad: 'Pebble Drive 90', fault: 'plugged-basket', hours: 22 },
+  { daysBefore: 6, at: '14:00', pad: 'Beacon Terrace 64', fault: 'plugged-basket', hours: 22 },
   { daysBefore: 13, at: '05:00', pad: 'Dunlin Court 5', fault: 'rubbing-impeller', hours: 80 },
-  { daysBefore: 20, at: '13:00', pad: 'Lantern Hill 3', fault: 'bypass-open', hours: 50 },
+  { daysBefore: 12, at: '13:00', pad: 'Pebble Drive 90', fault: 'bypass-open', hours: 50 },
   { daysBefore: 17, at: '11:00', pad: 'Pebble Drive 90', fault: 'pumping-to-waste', hours: 3 },
 
   // Speed, inputs and wires.

@@ -452,7 +452,7 @@ export const LARKMOOR_NORTH_PADS: readonly DemoPad[] = [
     state: 'open',
     customer: 'farrowmont',
     accessNote: 'Side gate sticks: lift it.',
-    poolGallons: 12800,
+    poolGallons: 27000,
     turnoversPerDay: 1,
     stopWeekday: 3,
     pumps: [
