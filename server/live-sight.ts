@@ -2,7 +2,7 @@ import type pg from 'pg';
 import { asPerson } from './db/transaction.ts';
 import { hideStaffWords } from './features/alarms/index.ts';
 import { listChanges, listNoChanges } from './features/changes/index.ts';
-import { listVisiblePumpIds } from './features/pumps/index.ts';
+import { listOwnedPumps } from './features/pumps/index.ts';
 import type { LiveNeeds } from './live/live-needs.ts';
 
 /** Nobody: the reader of a company's news, which are cut for each person before they leave. */
@@ -22,7 +22,7 @@ export function createLiveSight(
       });
     },
     listVisiblePumps: async (actor) =>
-      actor.role === 'homeowner' ? asPerson(app, actor, 'read', listVisiblePumpIds) : 'all',
+      actor.role === 'homeowner' ? asPerson(app, actor, 'read', listOwnedPumps) : 'all',
     hideStaffWords,
   };
 }

@@ -1,7 +1,7 @@
 import type { WebSocket } from 'ws';
 import type { Actor } from '#server/context.ts';
 import { CLOSE_BAD_FRAME, CLOSE_NOT_SIGNED_IN, CLOSE_TOO_SLOW, ClientFrame } from '#shared/contract/socket/frames.ts';
-import { type CompanyNews, composeNews } from './compose-news.ts';
+import { type CompanyNews, composeNews, type Sight } from './compose-news.ts';
 
 /** Above this nothing more is queued for a connection; it is told to read again once it has caught up. */
 export const SLOW_BYTES = 64 * 1024;
@@ -13,7 +13,7 @@ export const SILENT_MS = 35_000;
 
 export type LiveConnection = {
   readonly actor: Actor;
-  readonly setVisible: (visible: ReadonlySet<string> | 'all') => void;
+  readonly setVisible: (visible: Sight) => void;
   readonly isWatching: () => boolean;
   readonly hello: (cursor: string) => void;
   readonly tell: (news: CompanyNews) => void;
@@ -25,7 +25,7 @@ export type LiveConnection = {
 type Options = {
   readonly socket: WebSocket;
   readonly actor: Actor;
-  readonly visible: ReadonlySet<string> | 'all';
+  readonly visible: Sight;
   readonly now: () => number;
 };
 

@@ -5,6 +5,7 @@ import type { Actor } from '#server/context.ts';
 import { isFromOwnPage } from '#server/http/same-origin.ts';
 import { CLOSE_NOT_SIGNED_IN, LIVE_PATH } from '#shared/contract/socket/frames.ts';
 import { type CompanyHub, createCompanyHub } from './company-hub.ts';
+import type { Sight } from './compose-news.ts';
 import { createLiveConnection, type LiveConnection } from './live-connection.ts';
 import type { LiveNeeds } from './live-needs.ts';
 
@@ -102,7 +103,7 @@ export function startLiveServer(server: Server, needs: LiveNeeds): LiveServer {
 }
 
 async function refreshSight(connections: readonly LiveConnection[], needs: LiveNeeds): Promise<void> {
-  const seen = new Map<string, Promise<ReadonlySet<string> | 'all'>>();
+  const seen = new Map<string, Promise<Sight>>();
   const look = (actor: Actor) => {
     const known = seen.get(actor.userId) ?? needs.listVisiblePumps(actor);
     seen.set(actor.userId, known);

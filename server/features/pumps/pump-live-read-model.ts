@@ -56,8 +56,9 @@ export async function listPumpLiveRows(db: Transaction, pumpIds: readonly string
   return rows;
 }
 
-/** Ids of every pump the person may see. */
-export async function listVisiblePumpIds(db: Transaction): Promise<Set<string>> {
-  const { rows } = await db.execute<{ id: string }>(sql`select id from pumps`);
-  return new Set(rows.map(({ id }) => id));
+/** The pumps a homeowner may see, each with the instant (ms) from which on: the day they moved in. */
+export async function listOwnedPumps(db: Transaction): Promise<Map<string, number>> {
+  const { rows } = await db.execute<{ id: string; since: number }>(sql`
+    select p.id, ${epochMs(sql`o.starts_at`)} as since from pumps p join pad_ownerships o on o.pad_id = p.pad_id`);
+  return new Map(rows.map(({ id, since }) => [id, since]));
 }
