@@ -1,4 +1,5 @@
 import type { MotorSettings } from '../control/motor-settings.ts';
+import { DAY_MINUTES } from '../time/local-time.ts';
 
 const KEYS = ['inputs', 'program', 'prime', 'timed', 'freeze', 'maxRpm', 'minRpm'] as const;
 export type SettingsKey = (typeof KEYS)[number];
@@ -17,10 +18,16 @@ export function listChangedSettings(
 }
 
 function plain(settings: Partial<MotorSettings>, key: SettingsKey): string {
+  if (key === 'program') return JSON.stringify((settings.program ?? []).map(plainEntry).sort());
   if (key !== 'inputs') return JSON.stringify(sorted(settings[key]));
   const inputs = [...(settings.inputs ?? [])];
   while (inputs.length > 0 && (inputs.at(-1) ?? null) === null) inputs.pop();
   return JSON.stringify(inputs);
+}
+
+/** Entries in any order, and midnight as the end of the day or the beginning of the next, are the same program. */
+function plainEntry({ days, fromMinute, toMinute, rpm }: MotorSettings['program'][number]): string {
+  return JSON.stringify([days, fromMinute, toMinute % DAY_MINUTES, rpm]);
 }
 
 /** Two reports of the same settings may write their fields in another order. */

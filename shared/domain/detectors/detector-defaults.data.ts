@@ -80,7 +80,13 @@ export const DETECTOR_DEFAULTS = {
     powerLimitShare: 0.9,
     lowVoltsShare: 0.9,
   },
-  'stuck-input': { noteAfterMinutes: 180, alarmAfterMinutes: 1560, offDelaySeconds: 600 },
+  'stuck-input': {
+    noteAfterMinutes: 180,
+    alarmAfterMinutes: 1560,
+    // A lever put on by hand at another hour: a party lasts longer than three hours.
+    byHandMinutes: 300,
+    offDelaySeconds: 600,
+  },
   'chattering-input': {
     transitions: 6,
     withinSeconds: 300,
@@ -88,8 +94,11 @@ export const DETECTOR_DEFAULTS = {
     edgeSeconds: 30,
     quietSeconds: 300,
     days: 3,
-    // Loose wires chatter in bursts: one alarm for a bad afternoon, not one a burst.
-    offDelaySeconds: 7200,
+    // A burst in which the sixth transition came; so many within the hours are a wire, fewer on several days a switch.
+    wireBursts: 3,
+    wireWithinSeconds: 10_800,
+    // Contacts chatter in bursts, a worn switch once or twice a day: one alarm until a whole day was quiet.
+    offDelaySeconds: 93_600,
   },
   'slow-prime': {
     timesUsual: 2,

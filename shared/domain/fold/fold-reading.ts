@@ -1,3 +1,4 @@
+import type { Facts } from '../detectors/facts.ts';
 import { silenceLimitMs } from '../detectors/link/link-tracker.ts';
 import { DAY_MS, MINUTE_MS, weekdayOf } from '../time/local-time.ts';
 import { offsetSpanAt } from '../time/zone-offset.ts';
@@ -27,7 +28,12 @@ export function foldReading(parts: PumpParts, { reading, single }: PumpEvent & {
   link.read(reading.at, seen ? previous.at : 0, gap);
   parts.motorClock.read(facts);
   runs.push(reading, facts.control);
-  if (facts.load.primed === false) runs.flag('unprimed');
+  if (isUnprimed(facts)) runs.flag('unprimed');
+}
+
+/** Every start is unprimed for a while; it says something once the prime is over, or after the pump had load. */
+function isUnprimed({ load, now }: Facts): boolean {
+  return load.primed === false && (load.primedOnce || now > load.primeEndsAt);
 }
 
 function tellLocalTime({ facts, zone }: PumpParts, at: number): void {

@@ -32,14 +32,31 @@ const REMEMBERED_DAYS = 14;
  */
 export function recordedWindows({ inputs }: PumpContext, input: number): KnownWindow[] {
   const record = inputs.find(({ number }) => number === input);
-  return (record?.windows ?? []).map(({ onMinute, offMinute, opensEarlyMinutes, days }) => ({
+  const windows = (record?.windows ?? []).map(({ onMinute, offMinute, opensEarlyMinutes, days }) => ({
     input,
     onMinute,
     offMinute: (offMinute - opensEarlyMinutes + DAY_MINUTES) % DAY_MINUTES,
     days,
     recorded: true,
   }));
+  return joined(windows);
 }
+
+/** Two windows that touch are one: the contact does not open in between. */
+function joined(windows: readonly KnownWindow[]): KnownWindow[] {
+  const sorted = windows.toSorted((left, right) => left.onMinute - right.onMinute);
+  const result: KnownWindow[] = [];
+  for (const window of sorted) {
+    const last = result.at(-1);
+    const sameDays = last !== undefined && window.days.every((on, weekday) => on === last.days[weekday]);
+    const touches = last !== undefined && window.onMinute - last.onMinute <= windowMinutes(last);
+    if (last === undefined || !sameDays || !touches) result.push(window);
+    else if (endOf(window) > endOf(last)) result[result.length - 1] = { ...last, offMinute: window.offMinute };
+  }
+  return result;
+}
+
+const endOf = (window: KnownWindow): number => window.onMinute + windowMinutes(window);
 
 /**
  * Whether an input's windows may be learnt: a clock, or an input nobody recorded. People, heaters and solar

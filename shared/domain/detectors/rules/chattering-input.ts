@@ -21,10 +21,14 @@ type State = {
   input: number;
   several: boolean;
   atEdges: boolean;
+  /** When the last bursts began, and on which local days. */
+  bursts: number[];
+  burstDays: number[];
 };
 type Parameters = RuleParameters<'chattering-input'>;
 
 const NEAR_TRIPPER_MINUTES = 10;
+const NEW_BURST_MS = 120_000;
 
 function judge(state: State, facts: Facts, parameters: Parameters): Judgement {
   const edges = facts.inputs.closedEdges | facts.inputs.openedEdges;
@@ -74,9 +78,15 @@ function speak(state: State, index: number, facts: Facts, from: number, atEdges:
     state.input = index + 1;
     state.atEdges = atEdges;
     state.several = false;
+    state.bursts = state.bursts.filter((at) => facts.now - at < 86_400_000);
   }
   state.several ||= state.input !== index + 1;
-  state.burstAt = facts.now;
+  const { now, localDay } = facts;
+  if (now - state.burstAt > NEW_BURST_MS) {
+    state.bursts = [...state.bursts, now].slice(-6);
+    state.burstDays = [...state.burstDays.filter((day) => day !== localDay && localDay - day < 7), localDay];
+  }
+  state.burstAt = now;
 }
 
 /** The unrest began where the clock's own switch moves: the switch, not the wire. */
@@ -87,10 +97,22 @@ function isNearTripper({ edge }: State, index: number, { inputs, localMinute, no
   );
 }
 
-function describe(state: State, { reading }: Facts): Finding {
+/**
+ * A switch bounces when it moves, and a worn one now and then, day after day. A contact that comes and goes while the
+ * switch should hold is a wire, the more so again and again, or on several inputs: then it is the common one.
+ */
+function causeOf(state: State, { now }: Facts, parameters: Parameters): string {
+  if (state.several) return 'loose-wire';
+  const lately = state.bursts.filter((at) => now - at <= parameters.wireWithinSeconds * 1000);
+  if (lately.length >= parameters.wireBursts) return 'loose-wire';
+  return state.atEdges || state.burstDays.length >= parameters.days ? 'switch-failing' : 'loose-wire';
+}
+
+function describe(state: State, facts: Facts, parameters: Parameters): Finding {
+  const { reading } = facts;
   const index = state.input - 1;
   return {
-    cause: state.atEdges && !state.several ? 'switch-failing' : 'loose-wire',
+    cause: causeOf(state, facts, parameters),
     from: state.from,
     evidence: {
       input: state.input,
@@ -116,6 +138,8 @@ export const chatteringInput = defineDetector<'chattering-input', State>({
     input: 0,
     several: false,
     atEdges: false,
+    bursts: [],
+    burstDays: [],
   }),
   judge,
   delaySeconds: () => 0,

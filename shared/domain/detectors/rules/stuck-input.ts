@@ -1,18 +1,26 @@
 import { clockDifference } from '#shared/domain/time/clock-time.ts';
-import { MINUTE_MS } from '#shared/domain/time/local-time.ts';
+import { DAY_MINUTES, MINUTE_MS } from '#shared/domain/time/local-time.ts';
 import { defineDetector, type Finding, type Spoken } from '../define-detector.ts';
 import type { RuleParameters } from '../detector-parameters.ts';
 import type { Facts } from '../facts.ts';
 import { perInput } from '../inputs/input-facts.ts';
 import { type KnownWindow, windowMinutes } from '../inputs/known-window.ts';
-import { nextClosing } from '../inputs/window-times.ts';
+import { nextClosing, nextOpening } from '../inputs/window-times.ts';
 import { ABNORMAL, type Judgement, NORMAL } from '../judgement.ts';
 
 /**
- * Of the input that is closed longest past its off time: its number and when it should have opened. `since` and
- * `offDue` list that for every input; `tripper` remembers inputs that ran through one off time and opened at another.
+ * Of the input that is closed longest past its off time: its number and when it should have opened. `since`, `offDue`
+ * and `waits` (minutes to wait after it) list that for every input; `tripper` remembers inputs that ran through one off time and opened at another.
  */
-type State = { since: number[]; offDue: number[]; input: number; offAt: number; cause: string; tripper: number };
+type State = {
+  since: number[];
+  offDue: number[];
+  waits: number[];
+  input: number;
+  offAt: number;
+  cause: string;
+  tripper: number;
+};
 type Parameters = RuleParameters<'stuck-input'>;
 
 /** An edge further from a tripper than this was made by hand, unless the dial is off. */
@@ -24,47 +32,80 @@ const AT_TRIPPER_MINUTES = 20;
 function judge(state: State, facts: Facts, parameters: Parameters): Judgement {
   const { inputs, now } = facts;
   let worst = 0;
-  let worstOff = 0;
+  let worstPast = 0;
   for (let index = 0; index < inputs.closedSince.length; index += 1) {
     const since = inputs.closedSince[index] ?? 0;
-    if (since !== (state.since[index] ?? 0)) follow(state, facts, index, since);
+    if (since !== (state.since[index] ?? 0)) follow(state, facts, index, since, parameters);
     const offDue = state.offDue[index] ?? 0;
-    if (since === 0 || offDue === 0 || now < offDue) continue;
-    if (worst !== 0 && worstOff <= offDue) continue;
+    if (since === 0 || offDue === 0) continue;
+    const past = now - offDue - (state.waits[index] ?? 0) * MINUTE_MS;
+    if (past < 0 || (worst !== 0 && past <= worstPast)) continue;
     worst = index + 1;
-    worstOff = offDue;
+    worstPast = past;
   }
-  if (worst === 0 || now - worstOff < parameters.noteAfterMinutes * MINUTE_MS) return NORMAL;
-  if (state.input !== worst) state.cause = causeOf(facts, worst, state);
+  if (worst === 0) return NORMAL;
+  if (state.input !== worst || !facts.stands('stuck-input')) state.cause = causeOf(facts, worst, state);
   state.input = worst;
-  state.offAt = worstOff;
+  state.offAt = state.offDue[worst - 1] ?? now;
   if (state.cause === 'unknown' && hasPassedTwoTrippers(facts, worst)) state.cause = 'switch-welded';
   return ABNORMAL;
 }
 
 /** An input closed or opened: when it should open again, or what its opening tells. */
-function follow(state: State, facts: Facts, index: number, since: number): void {
+function follow(state: State, facts: Facts, index: number, since: number, parameters: Parameters): void {
   state.since[index] = since;
+  state.waits[index] = parameters.noteAfterMinutes;
   if (since === 0) {
     if (state.input === index + 1) learnFromOpening(state, facts, index);
     state.offDue[index] = 0;
     return;
   }
-  state.offDue[index] = offDueAt(facts, index, since);
+  const byHand = isByHand(facts, index, since, parameters);
+  state.offDue[index] = byHand ? since : offDueAt(facts, index, since);
+  if (byHand) state.waits[index] = parameters.byHandMinutes;
 }
 
-/** The next off tripper, or the whole window after the edge, whichever is later: a shifted dial shifts both. */
+/** Closed at an hour of no window, by a dial that cannot be off by that much, and no window opens soon. */
+function isByHand(
+  { inputs, context, localDay }: Facts,
+  index: number,
+  since: number,
+  { byHandMinutes }: Parameters,
+): boolean {
+  const windows = inputs.windows[index] ?? [];
+  const minute = inputs.onMinute[index] ?? 0;
+  const opened = nearestWindow(windows, minute);
+  if (inputs.edgeSeen[index] !== true || opened === undefined) return false;
+  if (Math.abs(opened.missedBy) <= FARTHEST_SHIFT_MINUTES || windows.some((window) => holds(window, minute)))
+    return false;
+  return windows.every((window) => {
+    const opens = nextOpening(window, context.zone, localDay, since);
+    return opens === undefined || opens - since > byHandMinutes * MINUTE_MS;
+  });
+}
+
+function holds(window: KnownWindow, minute: number): boolean {
+  return (minute - window.onMinute + DAY_MINUTES) % DAY_MINUTES < windowMinutes(window);
+}
+
+/**
+ * In its window an input opens at the off tripper, or a whole window after a late edge: a dial that is behind shifts
+ * both. Outside of it, a dial that is off closes it for as long as the window lasts; else the next off tripper opens it.
+ */
 function offDueAt(facts: Facts, index: number, since: number): number {
   const { context, inputs, localDay } = facts;
   const windows = inputs.windows[index] ?? [];
+  const minute = inputs.onMinute[index] ?? 0;
   let next = 0;
   for (const window of windows) {
     const closes = nextClosing(window, context.zone, localDay, since);
     if (closes !== undefined && (next === 0 || closes < next)) next = closes;
   }
-  const opened = nearestWindow(windows, inputs.onMinute[index] ?? 0);
+  const opened = nearestWindow(windows, minute);
   if (next === 0 || opened === undefined || Math.abs(opened.missedBy) > FARTHEST_SHIFT_MINUTES) return next;
-  return Math.max(next, since + windowMinutes(opened.window) * MINUTE_MS);
+  const whole = since + windowMinutes(opened.window) * MINUTE_MS;
+  const early = opened.missedBy < 0 && next - since <= (windowMinutes(opened.window) - opened.missedBy) * MINUTE_MS;
+  return early || windows.some((window) => holds(window, minute)) ? Math.max(next, whole) : whole;
 }
 
 function nearestWindow(
@@ -130,6 +171,7 @@ export const stuckInput = defineDetector<'stuck-input', State>({
   initial: () => ({
     since: perInput(() => 0),
     offDue: perInput(() => 0),
+    waits: perInput(() => 0),
     input: 0,
     offAt: 0,
     cause: 'unknown',

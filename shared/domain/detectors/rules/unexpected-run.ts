@@ -18,7 +18,7 @@ function judge(state: State, facts: Facts): Judgement {
   const nothingExpected = facts.padState === 'winterized' || facts.padState === 'drained';
   if (!nothingExpected && control.due.rpm > 0) return stands('unexpected-run') ? UNJUDGED : NORMAL;
   if (obeysOpenInput(facts) || (stands('settings-changed') && facts.fitsReported())) return UNJUDGED;
-  if (isNearSuspectEdge(facts)) return UNJUDGED;
+  if (isNearSuspectEdge(facts) || mayBeFreezeProtection(facts)) return UNJUDGED;
   return ABNORMAL;
 }
 
@@ -28,6 +28,14 @@ export function obeysOpenInput({ reading, context }: Pick<Facts, 'reading' | 'co
   if (activeInput === 0 || (closedInputs & (1 << (activeInput - 1))) !== 0) return false;
   const speed = inputSpeed(context.settings.inputs, activeInput);
   return speed > 0 && fitsSpeed(rpm, speed);
+}
+
+/** Where neither the source nor the air's temperature is told, the speed of freeze protection may well be that. */
+function mayBeFreezeProtection({ context, reading, reportsSource }: Facts): boolean {
+  const { freeze } = context.settings;
+  return (
+    freeze !== null && !reportsSource && reading.ambientCelsius === undefined && fitsSpeed(reading.rpm, freeze.rpm)
+  );
 }
 
 function noteStart(state: State, { context, localMinute }: Facts): void {

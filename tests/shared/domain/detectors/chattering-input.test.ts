@@ -7,7 +7,7 @@ function chatter(player: Player, transitions: number, every: number): void {
 }
 
 describe('chattering-input', () => {
-  it('raises at the sixth transition in five minutes, names a loose wire, and clears after two quiet hours', () => {
+  it('raises at the sixth transition in five minutes, names a loose wire, and clears after a quiet day', () => {
     const player = createPlayer();
     player.playUntil(0, 480, goodDay());
     chatter(player, 5, 40 * SECOND);
@@ -19,7 +19,7 @@ describe('chattering-input', () => {
       evidence: { input: 1 },
     });
 
-    player.play(3 * HOUR, {});
+    player.play(27 * HOUR, goodDay());
     expect(player.standing('chattering-input')).toBeUndefined();
     expect(player.spoken()).toEqual(['chattering-input']);
   });

@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import type { PumpContext } from '#shared/domain/control/pump-context.ts';
 import {
-  CONTEXT,
+  COARSE,
   clocks,
   createPlayer,
   DAY,
@@ -28,7 +28,7 @@ function cutPower(player: Player, minutes: number): void {
 
 describe('clock-shift', () => {
   it('notes three edges that moved together, says by how much and which way, and clears when they are back', () => {
-    const player = createPlayer();
+    const player = createPlayer(COARSE);
     player.playUntil(5, 0, goodDay());
     player.playUntil(7, 700, late(-50));
     expect(player.raised('clock-shift')).toHaveLength(1);
@@ -43,7 +43,7 @@ describe('clock-shift', () => {
   });
 
   it('needs two edges after a known cut, and names it', () => {
-    const player = createPlayer();
+    const player = createPlayer(COARSE);
     player.push({ kind: 'status', receivedAt: player.at, status: online('first') });
     player.playUntil(5, 120, goodDay());
     cutPower(player, 150);
@@ -54,7 +54,7 @@ describe('clock-shift', () => {
   });
 
   it('names daylight saving, which a dial does not know', () => {
-    const newYork = { ...CONTEXT, zone: 'America/New_York' };
+    const newYork = { ...COARSE, zone: 'America/New_York' };
     const start = Date.UTC(2025, 2, 3, 5);
     const player = createPlayer(newYork, start);
     // The dial goes on by winter time: its hours are the same instants of the day as before.
@@ -66,13 +66,13 @@ describe('clock-shift', () => {
   });
 
   it('names drift where it walked rather than stepped', () => {
-    const player = createPlayer();
+    const player = createPlayer(COARSE);
     player.playUntil(14, 0, (at) => late(((at - MONDAY) / DAY) * 2)(at));
     expect(player.standing('clock-shift')?.cause).toBe('drift');
   });
 
   it('is for soon where the clock feeds the heater or covers a booster', () => {
-    const heated: PumpContext = { ...CONTEXT, equipment: [{ kind: 'booster', input: 1, interlock: 'none' }] };
+    const heated: PumpContext = { ...COARSE, equipment: [{ kind: 'booster', input: 1, interlock: 'none' }] };
     const player = createPlayer(heated);
     player.playUntil(5, 0, goodDay());
     player.playUntil(8, 700, late(-50));
@@ -80,7 +80,7 @@ describe('clock-shift', () => {
   });
 
   it('learns the hours nobody recorded, and takes a shift that stays for the usual time in the end', () => {
-    const player = createPlayer({ ...CONTEXT, inputs: [{ number: 1, kind: 'clock', windows: [] }] });
+    const player = createPlayer({ ...COARSE, inputs: [{ number: 1, kind: 'clock', windows: [] }] });
     const only =
       (shift: number) =>
       (at: number): Scene => ({ closedInputs: usual(at - shift * MINUTE) & 1 });
@@ -94,7 +94,7 @@ describe('clock-shift', () => {
   });
 
   it('stays silent on edges that wander by ten minutes, a lever put on early, and one odd day', () => {
-    const player = createPlayer();
+    const player = createPlayer(COARSE);
     player.playUntil(12, 0, (at) => {
       const day = Math.floor((at - MONDAY) / DAY);
       if (day === 6) return late(-120)(at);

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import type { PumpContext } from '#shared/domain/control/pump-context.ts';
-import { CONTEXT, clocks, createPlayer, DAY, goodDay, HOUR, MINUTE, MONDAY, type Scene } from './pump-player.ts';
+import { COARSE, clocks, createPlayer, DAY, goodDay, HOUR, MINUTE, MONDAY, type Scene } from './pump-player.ts';
 
 const usual = clocks();
 /** The clocks with some inputs never closing. */
@@ -8,13 +8,13 @@ const without =
   (mask: number) =>
   (at: number): Scene => ({ closedInputs: usual(at) & ~mask });
 const drives = (duty: 'heater' | 'cleaner'): PumpContext => ({
-  ...CONTEXT,
-  inputs: CONTEXT.inputs.map((input) => (input.number === 1 ? { ...input, drives: duty } : input)),
+  ...COARSE,
+  inputs: COARSE.inputs.map((input) => (input.number === 1 ? { ...input, drives: duty } : input)),
 });
 
 describe('missing-input', () => {
   it('raises an hour late on the second due day, from the edge that did not come, and clears when it closes', () => {
-    const player = createPlayer();
+    const player = createPlayer(COARSE);
     player.playUntil(3, 0, goodDay());
     player.playUntil(4, 720, without(1));
     const raised = player.raised('missing-input')[0]!;
@@ -36,14 +36,14 @@ describe('missing-input', () => {
   });
 
   it('names the common supply when every clock stays away', () => {
-    const player = createPlayer();
+    const player = createPlayer(COARSE);
     player.playUntil(2, 0, goodDay());
     player.playUntil(4, 0, without(3));
     expect(player.standing('missing-input')?.cause).toBe('all-inputs');
   });
 
   it('learns the hours of a clock nobody recorded', () => {
-    const unrecorded = { ...CONTEXT, inputs: [] };
+    const unrecorded = { ...COARSE, inputs: [] };
     const player = createPlayer(unrecorded);
     player.playUntil(6, 0, (at) => ({ closedInputs: usual(at) }));
     player.playUntil(7, 720, without(1));
@@ -68,8 +68,8 @@ describe('missing-input', () => {
 
   it('stays silent on days that are not due, through a silence, and on a winterized pad', () => {
     const weekdays = {
-      ...CONTEXT,
-      inputs: CONTEXT.inputs.map((input) => ({
+      ...COARSE,
+      inputs: COARSE.inputs.map((input) => ({
         ...input,
         windows: input.windows.map((window) => ({ ...window, days: [true, true, true, true, true, false, false] })),
       })),
@@ -78,7 +78,7 @@ describe('missing-input', () => {
     player.playUntil(14, 0, (at) => ({ closedInputs: Math.floor((at - MONDAY) / DAY) % 7 < 5 ? usual(at) : 0 }));
     expect(player.signals).toEqual([]);
 
-    const silent = createPlayer();
+    const silent = createPlayer(COARSE);
     silent.playUntil(2, 590, goodDay());
     silent.silence(3 * HOUR);
     silent.playUntil(3, 590, (at) => ({ closedInputs: usual(at) & 2 }));
@@ -86,14 +86,14 @@ describe('missing-input', () => {
     silent.playUntil(4, 0, goodDay());
     expect(silent.raised('missing-input')).toEqual([]);
 
-    const winter = createPlayer({ ...CONTEXT, padState: 'winterized' });
+    const winter = createPlayer({ ...COARSE, padState: 'winterized' });
     winter.playUntil(4, 0, { rpm: 0 });
     expect(winter.signals).toEqual([]);
   });
 
   it('expects nothing of a toggle, a twist timer or a heater', () => {
     for (const kind of ['toggle', 'twist-timer', 'heater-call', 'solar-controller'] as const) {
-      const byHand = { ...CONTEXT, inputs: [{ number: 1, kind, windows: [] }] };
+      const byHand = { ...COARSE, inputs: [{ number: 1, kind, windows: [] }] };
       const player = createPlayer(byHand);
       player.playUntil(6, 0, (at) => ({ closedInputs: usual(at) & 1 }));
       player.playUntil(9, 0, {});

@@ -153,8 +153,8 @@ export function createPlayer(context: PumpContext = CONTEXT, start = MONDAY, see
       }
     },
     /** Plays a scene until so many minutes after local midnight of the day counted from the start. */
-    playUntil(day: number, minute: number, scene: Scene | ((at: number) => Scene) = {}): void {
-      player.play(start + day * DAY + minute * MINUTE - at, scene);
+    playUntil(day: number, minute: number, scene: Scene | ((at: number) => Scene) = {}, every?: number): void {
+      player.play(start + day * DAY + minute * MINUTE - at, scene, every);
     },
     /** Lets time pass without a reading; the server goes on listening. */
     silence(duration: number, tick = MINUTE): void {
@@ -183,6 +183,9 @@ export function createPlayer(context: PumpContext = CONTEXT, start = MONDAY, see
   };
   return player;
 }
+
+/** For tests that last days: a reading a minute is enough for clocks. */
+export const COARSE: PumpContext = { ...CONTEXT, intervalSeconds: 60 };
 
 export type Player = ReturnType<typeof createPlayer>;
 

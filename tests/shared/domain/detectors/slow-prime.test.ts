@@ -1,12 +1,13 @@
 import { describe, expect, it } from 'vitest';
-import { createPlayer, type Player, SECOND } from './pump-player.ts';
+import { createPlayer, MINUTE, type Player, SECOND } from './pump-player.ts';
 
 /** One start a day that takes so long to carry load. */
 function startAfter(player: Player, day: number, seconds: number): void {
-  player.playUntil(day, 360, {});
+  player.playUntil(day, 360, {}, MINUTE);
   player.play(seconds * SECOND, { load: 0.35 });
-  player.playUntil(day, 480, {});
-  player.playUntil(day + 1, 0, { rpm: 0, reportedSource: 'stop' });
+  player.play(5 * MINUTE, {});
+  player.playUntil(day, 480, {}, MINUTE);
+  player.playUntil(day + 1, 0, { rpm: 0, reportedSource: 'stop' }, MINUTE);
 }
 
 function play(seconds: readonly number[]): Player {

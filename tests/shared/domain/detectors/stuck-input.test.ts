@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import type { PumpContext } from '#shared/domain/control/pump-context.ts';
 import {
-  CONTEXT,
+  COARSE,
   clocks,
   createPlayer,
   DAY,
@@ -18,7 +18,7 @@ const held =
   (mask: number) =>
   (at: number): Scene => ({ closedInputs: usual(at) | mask });
 const TWICE: PumpContext = {
-  ...CONTEXT,
+  ...COARSE,
   inputs: [
     {
       number: 1,
@@ -33,7 +33,7 @@ const TWICE: PumpContext = {
 
 describe('stuck-input', () => {
   it('is a note three hours past the time the contact opens, an alarm at 26 hours, and clears when it opens', () => {
-    const player = createPlayer();
+    const player = createPlayer(COARSE);
     player.playUntil(2, 605, goodDay());
     player.playUntil(2, 1010, held(1));
     const opens = MONDAY + 2 * DAY + 820 * MINUTE;
@@ -50,13 +50,13 @@ describe('stuck-input', () => {
     expect(player.spoken()).toEqual(['stuck-input']);
   });
 
-  it('names a lever that was put on by hand and outlived the next off tripper', () => {
-    const player = createPlayer();
+  it('names a lever that was put on by hand and is still on after a party is over', () => {
+    const player = createPlayer(COARSE);
     player.playUntil(2, 1140, goodDay());
-    player.playUntil(3, 1010, held(1));
+    player.playUntil(3, 90, held(1));
     expect(player.standing('stuck-input')).toMatchObject({
       cause: 'lever-left-on',
-      from: MONDAY + 3 * DAY + 820 * MINUTE,
+      from: MONDAY + 2 * DAY + 1140 * MINUTE,
     });
   });
 
@@ -85,18 +85,18 @@ describe('stuck-input', () => {
   });
 
   it('stays silent on a party, a spa toggle, and a dial that is four hours behind', () => {
-    const party = createPlayer();
+    const party = createPlayer(COARSE);
     party.playUntil(1, 1140, goodDay());
     party.playUntil(1, 1430, held(1));
     party.playUntil(3, 0, goodDay());
     expect(party.signals).toEqual([]);
 
-    const spa = { ...CONTEXT, inputs: [{ number: 1, kind: 'toggle' as const, windows: [], drives: 'spa' as const }] };
+    const spa = { ...COARSE, inputs: [{ number: 1, kind: 'toggle' as const, windows: [], drives: 'spa' as const }] };
     const night = createPlayer(spa);
     night.play(40 * HOUR, { closedInputs: 1 });
     expect(night.signals).toEqual([]);
 
-    const late = createPlayer();
+    const late = createPlayer(COARSE);
     late.playUntil(2, 0, goodDay());
     late.playUntil(6, 0, (at) => ({ closedInputs: usual(at - 4 * HOUR) }));
     expect(late.raised('stuck-input')).toEqual([]);
