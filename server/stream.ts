@@ -148,7 +148,10 @@ function openEpochPool(databaseUrl: string, epoch: number, max: number, log: Log
     statement_timeout: STATEMENT_MS,
     onConnect: (client) => holdEpoch(client, epoch),
   });
-  pool.on('error', (err) => log.warn({ err }, 'a database connection broke'));
+  const onError = (err: Error) => log.warn({ err }, 'a database connection broke');
+  pool.on('error', onError);
+  // The same for one that is in use: its query fails, and the event must not end the process either.
+  pool.on('connect', (client) => client.on('error', onError));
   return pool;
 }
 

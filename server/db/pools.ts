@@ -25,6 +25,8 @@ export function createPools(
     });
     // An idle connection that dies (the database restarts) is replaced by the next query; it must not end the process.
     pool.on('error', onError);
+    // The same for one that is in use: its query fails, and the event must not end the process either.
+    pool.on('connect', (client) => client.on('error', onError));
     return pool;
   };
   const app = create('millrace_app', sizes.app ?? 10, { statement_timeout: STATEMENT_LIMIT_MS });

@@ -1,7 +1,7 @@
 import type pg from 'pg';
 import { asMachine } from '#server/db/transaction.ts';
 import { announceAlarms } from '#server/mail/announce-alarms.ts';
-import { withdrawMails } from '#server/mail/outbox-repository.ts';
+import { withdrawMails } from '#server/mail/withdraw-mails.ts';
 import type { AlarmChange } from './alarm-change.ts';
 import { listNewestStarts, lockOpenAlarms, saveAlarmChanges } from './alarms-repository.ts';
 import { applySignals, BACKLOG_AFTER_MS } from './apply-signals.ts';

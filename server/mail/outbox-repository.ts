@@ -45,20 +45,54 @@ export async function enqueueMails(database: Database, mails: readonly OutboxMai
   );
 }
 
-/** Withdraws what was not due yet of alarms that need nobody any more; answers the alarms of which nothing had left. */
+/** A mail that was taken back before it left. */
+export type WithdrawnMail = {
+  readonly alarmId: string;
+  readonly companyId: string;
+  readonly padId: string;
+  readonly recipientUserId: string;
+  readonly dueAt: number;
+  /** Something of this alarm has left, or is leaving. */
+  readonly isHeard: boolean;
+  /** Other alarms leave with it, at the same instant. */
+  readonly isShared: boolean;
+};
+
+type WithdrawnRow = {
+  readonly alarm_id: string;
+  readonly company_id: string;
+  readonly pad_id: string;
+  readonly recipient_user_id: string;
+  readonly due_at: number;
+  readonly is_heard: boolean;
+  readonly is_shared: boolean;
+};
+
+/** Takes back what was not due yet of alarms that need nobody any more. */
 export async function withdrawMails(
   database: Database,
   alarmIds: readonly string[],
   now: number,
-): Promise<Set<string>> {
-  const { rows } = await database.query<{ alarm_id: string }>(
+): Promise<WithdrawnMail[]> {
+  const { rows } = await database.query<WithdrawnRow>(
     `with withdrawn as (
        delete from outbox_mails where alarm_id = any($1::uuid[]) and attempts = 0 and due_at > to_timestamp($2::float8 / 1000)
-       returning alarm_id)
-     select distinct w.alarm_id from withdrawn w where not exists (
-       select from outbox_mails m where m.alarm_id = w.alarm_id
-         and (m.attempts > 0 or m.due_at <= to_timestamp($2::float8 / 1000)))`,
+       returning id, alarm_id, company_id, recipient_user_id, due_at)
+     select w.alarm_id, w.company_id, a.pad_id, w.recipient_user_id, date_part('epoch', w.due_at) * 1000 as due_at,
+       exists (select from outbox_mails m where m.alarm_id = w.alarm_id
+         and (m.attempts > 0 or m.due_at <= to_timestamp($2::float8 / 1000))) as is_heard,
+       exists (select from outbox_mails m where m.recipient_user_id = w.recipient_user_id and m.due_at = w.due_at
+         and m.id not in (select id from withdrawn)) as is_shared
+     from withdrawn w join alarms a on a.id = w.alarm_id`,
     [alarmIds, now],
   );
-  return new Set(rows.map(({ alarm_id }) => alarm_id));
+  return rows.map((row) => ({
+    alarmId: row.alarm_id,
+    companyId: row.company_id,
+    padId: row.pad_id,
+    recipientUserId: row.recipient_user_id,
+    dueAt: Math.round(row.due_at),
+    isHeard: row.is_heard,
+    isShared: row.is_shared,
+  }));
 }

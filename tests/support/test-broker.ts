@@ -77,7 +77,10 @@ export async function openRawDevice(port: number, serial?: string, change: objec
   });
   const closed = new Promise<void>((resolve) => socket.once('close', () => resolve()));
   socket.on('error', () => undefined);
-  await new Promise<void>((resolve) => socket.once('connect', () => resolve()));
+  await new Promise<void>((resolve, reject) => {
+    socket.once('connect', () => resolve());
+    socket.once('close', () => reject(new Error('nobody listens')));
+  });
   const send = (packet: Packet) => void socket.write(mqttPacket.generate(packet));
   const next = async (command: Packet['cmd']): Promise<Packet> => {
     for (;;) {
