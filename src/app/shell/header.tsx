@@ -39,10 +39,10 @@ export function Header() {
           </span>
           <Link
             to={paths.profile()}
-            aria-label={t('shell.profile', { name: user.name })}
             className="figures flex min-h-8 min-w-9 items-center justify-center rounded-control border border-rule-strong px-2 hover:bg-wash"
           >
             {user.initials}
+            <span className="sr-only">, {t('shell.profile', { name: user.name })}</span>
           </Link>
         </div>
       </div>

@@ -27,7 +27,7 @@ export function AlarmRow({ alarm, now, StripSource }: AlarmRowProps) {
         <h3 className="text-17 font-semibold">
           <Link
             to={paths.alarm(alarm.id)}
-            className={`underline-offset-2 hover:underline ${ALARM_TONE[alarm.priority].text}`}
+            className={`inline-block min-h-6 underline-offset-2 hover:underline ${ALARM_TONE[alarm.priority].text}`}
           >
             {titleOf(alarm)}
           </Link>
