@@ -47,9 +47,13 @@ export function findDataMajor(folder) {
  * interrupted first start leaves nothing that looks like a database.
  *
  * @param {Cluster} cluster
- * @param {{ superuserPassword: string, settings: readonly string[] }} options settings: lines of postgresql.conf
+ * @param {{ superuserPassword: string, settings: readonly string[], isThrowaway?: boolean }} options settings: lines of
+ *   postgresql.conf; isThrowaway: nobody minds when it is lost with the machine's power
  */
-export async function createCluster({ programs, folder, account }, { superuserPassword, settings }) {
+export async function createCluster(
+  { programs, folder, account },
+  { superuserPassword, settings, isThrowaway = false },
+) {
   const [building, passwordFile] = [`${folder}.new`, `${folder}.password`];
   rmSync(building, { recursive: true, force: true });
   rmSync(passwordFile, { force: true });
@@ -66,7 +70,7 @@ export async function createCluster({ programs, folder, account }, { superuserPa
       `--pwfile=${passwordFile}`,
       `--auth-local=${method}`,
       `--auth-host=${method}`,
-    ].concat(['--encoding=UTF8', '--locale=C.UTF-8', '--no-instructions']),
+    ].concat(['--encoding=UTF8', '--locale=C.UTF-8', '--no-instructions', ...(isThrowaway ? ['--no-sync'] : [])]),
     { account, cwd: dirname(folder), env: { ...process.env, LC_ALL: 'C.UTF-8' } },
   );
   rmSync(passwordFile, { force: true });

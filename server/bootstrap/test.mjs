@@ -4,7 +4,6 @@
  */
 import { spawn } from 'node:child_process';
 import { chmodSync, existsSync, mkdtempSync, readFileSync, rmSync } from 'node:fs';
-import { tmpdir } from 'node:os';
 import { dirname, join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { runToTheEnd } from './lifecycle.mjs';
@@ -12,6 +11,7 @@ import { endMarkedProcesses } from './marked-processes.mjs';
 import { refuseOldNode } from './node-version.mjs';
 import { prepareTests } from './prepare-tests.mjs';
 import { sendSignal } from './process-table.mjs';
+import { findQuickFolder } from './quick-folder.mjs';
 import { say } from './say.mjs';
 import { countResults, needsServices } from './test-arguments.mjs';
 
@@ -48,7 +48,7 @@ await runToTheEnd(async (life) => {
   const args = process.argv.slice(2);
   await prepareTests(project, { withServices: needsServices(args), signal: life.stopping });
   life.leaveIfStopping();
-  const runFolder = mkdtempSync(join(tmpdir(), 'millrace-tests-'));
+  const runFolder = mkdtempSync(join(findQuickFolder(), 'millrace-tests-'));
   // PostgreSQL's account passes through it to folders of its own.
   chmodSync(runFolder, 0o711);
   let summary = '0 passed, 1 failed';

@@ -1,6 +1,5 @@
 import { type ChildProcess, spawn } from 'node:child_process';
 import { chmodSync, mkdtempSync } from 'node:fs';
-import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { findDatabaseAccount, giveTo } from '#server/bootstrap/account.mjs';
@@ -14,6 +13,7 @@ import {
 import { chooseSocketFolder } from '#server/bootstrap/data-folder.mjs';
 import { listPostgres } from '#server/bootstrap/find-postgres.mjs';
 import { listProcessesIn, sendSignal, waitUntil } from '#server/bootstrap/process-table.mjs';
+import { findQuickFolder } from '#server/bootstrap/quick-folder.mjs';
 import { findFreePort } from '#tests/support/free-port.ts';
 
 const PASSWORD = 'only-for-tests';
@@ -46,7 +46,7 @@ export async function startOwnPostgres({ durable }: { durable: boolean }): Promi
   const [newest] = await listPostgres();
   if (!newest) throw new Error('No PostgreSQL 15 or later on this machine: npm test installs it.');
   const account = findDatabaseAccount();
-  const runFolder = mkdtempSync(join(process.env.MILLRACE_TEST_RUN ?? tmpdir(), 'millrace-postgres-'));
+  const runFolder = mkdtempSync(join(process.env.MILLRACE_TEST_RUN ?? findQuickFolder(), 'millrace-postgres-'));
   giveTo(account, runFolder);
   chmodSync(runFolder, 0o700);
   const keeper = startKeeper(runFolder);
@@ -59,7 +59,7 @@ export async function startOwnPostgres({ durable }: { durable: boolean }): Promi
     account,
   };
   const settings = ['max_connections=200', 'shared_buffers=128MB', ...(durable ? [] : FORGETFUL)];
-  await createCluster(cluster, { superuserPassword: PASSWORD, settings });
+  await createCluster(cluster, { superuserPassword: PASSWORD, settings, isThrowaway: true });
   const start = () => startCluster(cluster, { port, withinMs: 60_000 });
   await start();
   return {

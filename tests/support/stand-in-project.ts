@@ -72,7 +72,7 @@ export async function makeStandInProject(): Promise<StandInProject> {
     write(file, standInProgram(port ? { port } : {}));
   });
 
-  const env: Record<string, string> = { MILLRACE_FLEET: '1' };
+  const env: Record<string, string> = { MILLRACE_FLEET: '0' };
   for (const name of ['PORT', 'MQTT_PORT', 'SMTP_PORT', 'PG_PORT', 'MAIL_PAGE_PORT']) {
     env[name] = String(await findFreePort());
   }

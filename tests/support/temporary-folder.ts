@@ -1,7 +1,7 @@
 import { mkdtempSync, rmSync } from 'node:fs';
-import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterAll } from 'vitest';
+import { findQuickFolder } from '#server/bootstrap/quick-folder.mjs';
 
 const made: string[] = [];
 
@@ -12,7 +12,7 @@ afterAll(() => {
 
 /** A folder of one's own that is gone when the test file is: below the run's own folder when there is a run. */
 export function makeTemporaryFolder(name: string): string {
-  const folder = mkdtempSync(join(process.env.MILLRACE_TEST_RUN ?? tmpdir(), `millrace-${name}-`));
+  const folder = mkdtempSync(join(process.env.MILLRACE_TEST_RUN ?? findQuickFolder(), `millrace-${name}-`));
   made.push(folder);
   return folder;
 }
