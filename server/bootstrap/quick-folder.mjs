@@ -1,4 +1,4 @@
-import { existsSync, statfsSync } from 'node:fs';
+import { accessSync, constants, statfsSync } from 'node:fs';
 import { freemem, tmpdir } from 'node:os';
 
 /** Linux's folder in memory. */
@@ -15,7 +15,17 @@ const ROOM = 4 * 2 ** 30;
  * @param {{ environment?: NodeJS.ProcessEnv, folder?: string, room?: number }} [machine]
  */
 export function findQuickFolder({ environment = process.env, folder = MEMORY, room = ROOM } = {}) {
-  if (environment.TMPDIR || !existsSync(folder)) return tmpdir();
+  if (environment.TMPDIR || !isWritable(folder)) return tmpdir();
   const { bavail, bsize } = statfsSync(folder);
   return Math.min(bavail * bsize, freemem()) >= room ? folder : tmpdir();
+}
+
+/** @param {string} folder */
+function isWritable(folder) {
+  try {
+    accessSync(folder, constants.W_OK | constants.X_OK);
+    return true;
+  } catch {
+    return false;
+  }
 }
