@@ -4,12 +4,8 @@ import type { Task } from './cautions.data.ts';
 /** One thing to look at first, and why. */
 export type Look = { readonly what: string; readonly why: string };
 
-/**
- * The English words of one alarm. `titles`: the first whose `{places}` the evidence can fill is taken; a place is
- * `{name}` for a number or word, `{name:duration}` for minutes, `{name:percent}` for a share of 1.
- */
+/** The English words of one alarm beside its title, which alarm-titles.data.ts holds. */
 export type AlarmWording = {
-  readonly titles: readonly string[];
   readonly meaning: string;
   readonly homeowner: string;
   readonly look: readonly Look[];
@@ -24,7 +20,6 @@ export type DetectorWording = AlarmWording & {
 /** Common practice in the trade where no source is named. */
 export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
   'wrong-speed': {
-    titles: ['Runs {measuredRpm} rpm, {expectedRpm} expected', 'Not at its expected speed'],
     meaning: 'The measured speed is off the one that the closed inputs and the program call for.',
     homeowner: 'Your pump is not running at the speed it was set up for. We have been told.',
     look: [
@@ -44,10 +39,6 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     task: 'look',
     causes: {
       'follows-lower-input': {
-        titles: [
-          'Follows input {followedInput} though input {input} is closed',
-          'Follows the lower of two closed inputs',
-        ],
         meaning: 'Several inputs are closed and the motor obeys one with a lower speed. The highest should win.',
         look: [
           { what: 'Speeds stored for the closed inputs', why: 'They may have been entered the wrong way round' },
@@ -56,7 +47,6 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
         task: 'wiring',
       },
       'ignores-input': {
-        titles: ['Input {input} closed, runs program speed', 'A closed input is ignored'],
         meaning: 'A clock holds an input closed, and the motor does not follow it.',
         look: [
           {
@@ -69,10 +59,6 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
         task: 'wiring',
       },
       'runs-input-open': {
-        titles: [
-          'Runs input {followedInput}’s speed with all inputs open',
-          'Runs an input’s speed with all inputs open',
-        ],
         meaning: 'No input is closed, yet the motor holds a speed that belongs to one.',
         look: [
           { what: 'Whether somebody chose that speed on the keypad', why: 'On manual looks the same' },
@@ -81,7 +67,6 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
         task: 'wiring',
       },
       derating: {
-        titles: ['Runs {measuredRpm} rpm, {expectedRpm} expected: hot drive', 'Slowed down by a hot drive'],
         meaning: 'The drive has lowered the speed to protect itself from heat.',
         look: [
           { what: 'Vents, leaves, sun on the motor', why: 'The drive cools by the air around it' },
@@ -89,10 +74,6 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
         ],
       },
       'power-limit': {
-        titles: [
-          'Runs {measuredRpm} rpm, {expectedRpm} expected: at its power limit',
-          'Held back at the drive’s power limit',
-        ],
         meaning: 'The motor draws its largest power and cannot reach the speed asked for.',
         look: [
           {
@@ -102,16 +83,10 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
           { what: 'Supply voltage under load', why: 'A low supply lowers the power the drive can give' },
         ],
       },
-      'unknown-speed': {
-        titles: ['Runs {measuredRpm} rpm, which no setting explains', 'Runs a speed that no setting explains'],
-      },
+      'unknown-speed': {},
     },
   },
   'input-disagreement': {
-    titles: [
-      'Obeys input {activeInput}, but input {input} is closed',
-      'The motor’s input does not match the closed contact',
-    ],
     meaning: 'The motor says that it obeys an input which cannot be the winner among the closed ones.',
     homeowner: 'A control wire at your pump may be on the wrong terminal. It still runs; we will look at it.',
     look: [
@@ -123,11 +98,10 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     ],
     task: 'wiring',
     causes: {
-      'swapped-leads': { titles: ['Inputs {input} and {activeInput} look swapped', 'Two input leads look swapped'] },
+      'swapped-leads': {},
     },
   },
   'missing-input': {
-    titles: ['Input {input} did not close when its clock should', 'An input did not close when it should'],
     meaning: 'The window that this input’s clock is known for has not opened.',
     homeowner: 'One of your time clocks did not switch when it usually does.',
     look: [
@@ -141,7 +115,6 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     task: 'wiring',
     causes: {
       'all-inputs': {
-        titles: ['None of the inputs closes any more'],
         meaning:
           'Every input that a clock should have closed stayed open: they share a supply, a breaker or a common lead.',
         look: [
@@ -153,7 +126,6 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     },
   },
   'stuck-input': {
-    titles: ['Input {input} closed {minutes:duration} past its off time', 'An input stays closed past its off time'],
     meaning: 'The contact should have opened at its off tripper and has not.',
     homeowner: 'One of your time clocks has not switched off when it usually does.',
     look: [
@@ -163,15 +135,12 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     ],
     task: 'wiring',
     causes: {
-      'tripper-missing': {
-        titles: ['Input {input} never opens: off tripper missing?', 'An off tripper looks missing'],
-      },
-      'switch-welded': { titles: ['Input {input} never opens: welded contact?', 'A switch looks welded'] },
-      'lever-left-on': { titles: ['Input {input} left on by hand?', 'A clock’s lever looks left on'] },
+      'tripper-missing': {},
+      'switch-welded': {},
+      'lever-left-on': {},
     },
   },
   'chattering-input': {
-    titles: ['Input {input} opens and closes again and again', 'An input chatters'],
     meaning: 'The contact opens and closes many times within minutes. Each change restarts the motor’s decision.',
     homeowner: 'A switch at your pump is making poor contact. We will look at it.',
     look: [
@@ -180,12 +149,11 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     ],
     task: 'wiring',
     causes: {
-      'loose-wire': { titles: ['Input {input} chatters: loose wire?', 'An input chatters: loose wire?'] },
-      'switch-failing': { titles: ['Input {input} chatters: worn switch?', 'An input chatters: worn switch?'] },
+      'loose-wire': {},
+      'switch-failing': {},
     },
   },
   'failed-prime': {
-    titles: ['Did not prime, {tries} tries', 'Did not prime'],
     meaning: 'The motor runs at speed but its watts say that the wet end is moving air. Run dry it ruins its seal.',
     homeowner: 'Your pump started but is not moving water. Please leave it alone: we have been told and will call you.',
     look: [
@@ -216,7 +184,6 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     },
   },
   'slow-prime': {
-    titles: ['Takes {usualRatio} times its usual time to prime', 'Takes longer and longer to prime'],
     meaning: 'The last starts took at least twice the usual time to prime. It still primes.',
     homeowner: 'Your pump takes longer than it used to to fill with water when it starts.',
     look: [
@@ -227,7 +194,6 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     causes: {},
   },
   'loss-of-prime': {
-    titles: ['Lost its prime at {rpm} rpm', 'Lost its prime while running'],
     meaning: 'The speed holds but the load is gone: the wet end is moving air.',
     homeowner: 'Your pump is running but has stopped moving water. We have been told and will call you.',
     look: [
@@ -237,12 +203,11 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     ],
     task: 'lid',
     causes: {
-      sudden: { titles: ['Lost its prime all at once at {rpm} rpm', 'Lost its prime all at once'] },
-      ragged: { titles: ['Draws air: ragged load at {rpm} rpm', 'Draws air: the load is ragged'] },
+      sudden: {},
+      ragged: {},
     },
   },
   'low-load': {
-    titles: ['Load down {drop:percent} at the same speed', 'Less load than usual at this speed'],
     meaning:
       'The pump does less work at the same speed: less water. The watts cannot tell a shut valve from a blocked suction.',
     homeowner: 'Less water than usual is moving. A basket or the filter may need cleaning.',
@@ -257,12 +222,11 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     ],
     task: 'lid',
     causes: {
-      slow: { titles: ['Flow down {drop:percent}, dirty filter?', 'Less flow week by week, dirty filter?'] },
-      sudden: { titles: ['Load down {drop:percent} all at once, basket?', 'Load fell all at once, basket?'] },
+      slow: {},
+      sudden: {},
     },
   },
   'high-load': {
-    titles: ['Load up {rise:percent} at the same speed', 'More load than usual at this speed'],
     meaning: 'The pump draws more than it did at the same speed.',
     homeowner: 'Your pump is working harder than usual at the same speed.',
     look: [
@@ -271,16 +235,14 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     ],
     task: 'look',
     causes: {
-      rubbing: { titles: ['Load up {rise:percent}: something may rub', 'Load up: something may rub'], task: 'lid' },
-      bypass: { titles: ['Load up {rise:percent}: a bypass may be open', 'Load up: a bypass may be open'] },
+      rubbing: { task: 'lid' },
+      bypass: {},
       'to-waste': {
-        titles: ['Perhaps pumping to waste', 'Perhaps pumping to waste'],
         meaning: 'The load is far above usual: the water may be going to waste. The pool loses water.',
       },
     },
   },
   stopped: {
-    titles: ['Stands still, {expectedRpm} rpm due', 'Stands still though a speed is due'],
     meaning: 'The inputs or the program call for a speed and the motor does not turn.',
     homeowner: 'Your pump is standing still when it should be running. We have been told.',
     look: [
@@ -290,12 +252,10 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     task: 'look',
     causes: {
       'keypad-stop': {
-        titles: ['Stopped at the keypad', 'Stopped at the keypad'],
         meaning: 'Somebody stopped the pump at its keypad and it is still stopped.',
         homeowner: 'Your pump was stopped at its keypad and is still off.',
       },
       fault: {
-        titles: ['Stopped by fault {fault}', 'Stopped by a drive fault'],
         meaning: 'The drive reports a fault and holds the motor.',
         task: 'wiring',
       },
@@ -303,7 +263,6 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     },
   },
   'unexpected-run': {
-    titles: ['Runs {measuredRpm} rpm with nothing due', 'Runs though nothing is due'],
     meaning: 'No input is closed and no program entry is due, yet the motor runs.',
     homeowner: 'Your pump is running outside its planned hours.',
     look: [
@@ -312,12 +271,11 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     ],
     task: 'look',
     causes: {
-      'program-changed': { titles: ['Runs a program we did not set', 'Runs a program we did not set'] },
-      'motor-clock': { titles: ['Runs its program at the wrong time', 'Runs its program at the wrong time'] },
+      'program-changed': {},
+      'motor-clock': {},
     },
   },
   'clock-shift': {
-    titles: ['Time clock {input} is {minutes:duration} {direction}', 'A time clock is off'],
     meaning: 'The times at which this clock switches have moved against those it had.',
     homeowner: 'One of your time clocks shows the wrong time. We will set it at the next stop.',
     look: [
@@ -326,40 +284,24 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     ],
     task: 'look',
     causes: {
-      'power-cut': {
-        titles: [
-          'Time clock {input} is {minutes:duration} slow since a power cut',
-          'A time clock stood still in a power cut',
-        ],
-      },
-      'daylight-saving': {
-        titles: ['Time clock {input} still has last season’s time', 'A time clock still has last season’s time'],
-      },
-      drift: { titles: ['Time clock {input} drifts, now {minutes:duration} {direction}', 'A time clock drifts'] },
-      'trippers-moved': { titles: ['Time clock {input}: trippers moved', 'A time clock’s trippers were moved'] },
+      'power-cut': {},
+      'daylight-saving': {},
+      drift: {},
+      'trippers-moved': {},
     },
   },
   'motor-clock': {
-    titles: ['Motor clock {minutes:duration} {direction}', 'The motor’s own clock is off'],
     meaning: 'The motor’s own clock is off, so its program runs at the wrong times.',
     homeowner: 'Your pump’s own clock shows the wrong time. We will set it at the next stop.',
     look: [{ what: 'Clock on the drive’s display', why: 'Set it; note whether it survives a power cut' }],
     task: 'look',
     causes: {
-      'power-cut': {
-        titles: [
-          'Motor clock {minutes:duration} {direction} since a power cut',
-          'The motor’s clock lost time in a power cut',
-        ],
-      },
-      'daylight-saving': {
-        titles: ['Motor clock still has last season’s time', 'Motor clock still has last season’s time'],
-      },
-      drift: { titles: ['Motor clock drifts, now {minutes:duration} {direction}', 'The motor’s clock drifts'] },
+      'power-cut': {},
+      'daylight-saving': {},
+      drift: {},
     },
   },
   'fed-through-clock': {
-    titles: ['Loses power at the same time every day', 'Loses power at the same time every day'],
     meaning:
       'The motor goes dark at the same time every day: its supply runs through a clock. It needs constant power.',
     homeowner:
@@ -374,7 +316,6 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     causes: {},
   },
   'keypad-hold': {
-    titles: ['On manual for {minutes:duration}', 'Left on manual'],
     meaning: 'The motor has been run from its keypad for a long time. Its program waits.',
     homeowner: 'Your pump is running at a speed chosen on its keypad.',
     look: [{ what: 'Keypad: back to its program', why: 'Ask first whether somebody wants it so' }],
@@ -382,7 +323,6 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     causes: {},
   },
   'settings-changed': {
-    titles: ['{changes} settings differ from the commissioned ones', 'Settings differ from the commissioned ones'],
     meaning: 'What the motor says it is set to is not what was commissioned, and nobody of ours was on site.',
     homeowner: 'Settings of your pump were changed.',
     look: [
@@ -395,7 +335,6 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     causes: {},
   },
   'energized-without-flow': {
-    titles: ['{equipment} may be energized without flow', 'Equipment may be energized without flow'],
     meaning:
       'The clock that closes input {input} also feeds equipment without a flow switch of its own, and no water moves. It can overheat or gas off.',
     homeowner:
@@ -407,13 +346,12 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     ],
     task: 'lid',
     causes: {
-      heater: { titles: ['Heater may fire without flow', 'Heater may fire without flow'] },
-      cell: { titles: ['Chlorine cell may run without flow', 'Chlorine cell may run without flow'] },
-      feeder: { titles: ['Feeder may dose without flow', 'Feeder may dose without flow'] },
+      heater: {},
+      cell: {},
+      feeder: {},
     },
   },
   'too-little-water': {
-    titles: ['Turns over {turnovers} times a day, {target} wanted', 'Moves too little water for this pool'],
     meaning: 'Over three days the pump moved less water than this pool, its heater or its cell needs.',
     homeowner: 'Your pump has been moving less water than your pool needs.',
     look: [
@@ -422,14 +360,11 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     ],
     task: 'look',
     causes: {
-      'short-hours': {
-        titles: ['Runs too few hours: {turnovers} of {target} turnovers', 'Runs too few hours for this pool'],
-      },
-      'low-flow': { titles: ['Flow too low: {turnovers} of {target} turnovers', 'Flow too low for this pool'] },
+      'short-hours': {},
+      'low-flow': {},
     },
   },
   freezing: {
-    titles: ['{ambientCelsius} °C and standing still', 'Freezing and standing still'],
     meaning: 'The air at the motor is at or near freezing and no water moves. Pipes, filter and heater can burst.',
     homeowner: 'It is freezing at your pump and no water is moving. We have been told.',
     look: [
@@ -443,7 +378,6 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     causes: {},
   },
   'supply-voltage': {
-    titles: ['Supply {volts} V, {nominalVolts} V nominal', 'Supply voltage out of range'],
     meaning: 'The voltage at the motor is more than ten per cent off its nominal.',
     homeowner: 'The electrical supply at your pump is out of range.',
     look: [
@@ -454,12 +388,11 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     ],
     task: 'wiring',
     causes: {
-      sag: { titles: ['Supply sagged to {volts} V', 'The supply sags'] },
-      standing: { titles: ['Supply stands at {volts} V, {nominalVolts} V nominal', 'Supply voltage out of range'] },
+      sag: {},
+      standing: {},
     },
   },
   'drive-fault': {
-    titles: ['Drive fault {fault}', 'The drive reports a fault'],
     meaning: 'The drive reports a fault of its own.',
     homeowner: 'Your pump’s drive reports a fault. We have been told.',
     look: [
@@ -470,7 +403,6 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     causes: {},
   },
   'drive-hot': {
-    titles: ['Drive at {driveCelsius} °C, limit {limitCelsius} °C', 'The drive runs hot'],
     meaning: 'The drive’s temperature is over its model’s limit. It will slow the motor down to save itself.',
     homeowner: 'Your pump’s electronics are running hot.',
     look: [{ what: 'Vents, leaves, sun, enclosure', why: 'The drive cools by the air around it' }],
@@ -478,7 +410,6 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     causes: {},
   },
   silent: {
-    titles: ['No word for {minutes:duration}', 'No word from the device'],
     meaning: 'The device has not been heard. The pump may run as always: we cannot see it.',
     homeowner: 'We cannot see your pump at the moment. It may be running as always.',
     look: [
@@ -488,15 +419,13 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     task: 'look',
     causes: {
       power: {
-        titles: ['No word: the power may be out there', 'No word: the power may be out'],
         meaning: 'Neighbours went quiet at the same time: the power may be out there.',
       },
-      link: { titles: ['No word for {minutes:duration}: its link is down', 'No word: its link is down'] },
-      device: { titles: ['No word for {minutes:duration}: the device itself?', 'No word: the device itself?'] },
+      link: {},
+      device: {},
     },
   },
   'clock-skew': {
-    titles: ['Device clock {skewMinutes:duration} behind', 'The device’s clock is behind'],
     meaning: 'Readings arrive with times well behind their arrival: the device’s clock is wrong.',
     homeowner: 'The clock of our device at your pump is wrong. Your pump is not affected.',
     look: [
@@ -506,7 +435,6 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     causes: {},
   },
   'costly-program': {
-    titles: ['The same water for {saving:percent} less', 'The same water could cost less'],
     meaning: 'Another program moves the same water, meets every need of the pad and costs at least a quarter less.',
     homeowner: 'Your pump could do the same work for less. We will suggest a new program.',
     look: [{ what: 'Proposed program beside the one it has', why: 'Advice only: a person decides' }],

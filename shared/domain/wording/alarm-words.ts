@@ -1,7 +1,10 @@
 import type { Detector, Evidence } from '../detectors/detector.ts';
+import { alarmTitle } from './alarm-title.ts';
 import { ALARM_WORDING, type AlarmWording, type Look } from './alarm-wording.data.ts';
 import { CAUTIONS, type Task } from './cautions.data.ts';
 import { fillTemplate } from './fill-template.ts';
+
+export { alarmTitle };
 
 /** Everything a person is told of an alarm, ready to print. */
 export type AlarmWords = {
@@ -15,21 +18,6 @@ export type AlarmWords = {
 
 const choose = <Key extends keyof AlarmWording>(detector: Detector, cause: string, key: Key): AlarmWording[Key] =>
   ALARM_WORDING[detector].causes[cause]?.[key] ?? ALARM_WORDING[detector][key];
-
-/**
- * The short title of an alarm, with the evidence's numbers where it has them.
- *
- * @example alarmTitle('failed-prime', 'air-leak', { tries: 3 }) // 'Did not prime, 3 tries'
- * @example alarmTitle('failed-prime', 'air-leak', {}) // 'Did not prime'
- */
-export function alarmTitle(detector: Detector, cause: string, evidence: Evidence): string {
-  const titles = [...choose(detector, cause, 'titles'), ...ALARM_WORDING[detector].titles];
-  for (const title of titles) {
-    const filled = fillTemplate(title, evidence);
-    if (filled !== undefined) return filled;
-  }
-  return detector;
-}
 
 /**
  * Title, meaning, what to look at first and the cautions of an alarm. An unknown cause gets the detector's own words.

@@ -1,8 +1,8 @@
 import { useQuery } from '@tanstack/react-query';
 import { useCallback, useMemo, useState } from 'react';
 import { useSearchParams } from 'react-router-dom';
+import type { FleetPage as FleetPageData } from '#shared/contract/http/pumps.ts';
 import { StripLegend } from '#src/components/charts/strip/strip-legend.tsx';
-import { Button } from '#src/components/ui/button.tsx';
 import { ErrorNotice } from '#src/components/ui/error-notice.tsx';
 import { PageHeading } from '#src/components/ui/page-heading.tsx';
 import { parseFleetAddress } from '#src/features/fleet/fleet-address.ts';
@@ -24,6 +24,12 @@ import { t } from '#src/lib/messages/t.ts';
 import { createStore } from '#src/lib/store.ts';
 
 const NOW_STEP_MS = 30_000;
+
+/** How many of all are left, where a filter leaves some out. */
+const matchingLine = (page: FleetPageData | undefined, all: number | undefined): string | undefined =>
+  page === undefined || all === undefined || page.matching === all
+    ? undefined
+    : t('fleet.matching', { count: page.matching, all });
 
 /** The manager's wall: what the whole fleet does and did, worst first. */
 export function FleetPage() {
@@ -62,11 +68,6 @@ export function FleetPage() {
         <FleetFilters areas={wall.first?.areas ?? []} />
         <TimeTravel range={view.range} window={window} />
       </div>
-      {wall.moved ? (
-        <p className="pb-3">
-          <Button onClick={wall.resort}>{t('fleet.resort')}</Button>
-        </p>
-      ) : null}
       {isError && wall.rows.length === 0 ? (
         <div className="border border-ink bg-sheet">
           <ErrorNotice error={error} onRetry={() => void refetch()} />
@@ -86,11 +87,16 @@ export function FleetPage() {
             cursor={cursor}
             StripSource={StripSource}
             onNearEnd={onNearEnd}
+            onResort={wall.moved ? wall.resort : undefined}
           />
         </div>
       )}
       <p role="status" className="py-2 text-13 text-ink-2">
-        {isFetchingNextPage ? t('fleet.loadingMore') : t('fleet.zone', { zone: format.zoneName(now, company.zone) })}
+        {isFetchingNextPage
+          ? t('fleet.loadingMore')
+          : [matchingLine(wall.first, totals?.pumps), t('fleet.zone', { zone: format.zoneName(now, company.zone) })]
+              .filter((line) => line !== undefined)
+              .join(' · ')}
       </p>
       <StripLegend inputs={inputs} />
     </div>

@@ -1,5 +1,5 @@
 import type { AlarmDetail } from '#shared/contract/http/alarms.ts';
-import { alarmTitle } from '#shared/domain/wording/alarm-words.ts';
+import { alarmTitle } from '#shared/domain/wording/alarm-title.ts';
 import { Sheet } from '#src/components/ui/sheet.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
 import { isPlainKey, t } from '#src/lib/messages/t.ts';

@@ -1,5 +1,5 @@
 import type { Alarm } from '#shared/contract/http/alarms.ts';
-import { alarmTitle } from '#shared/domain/wording/alarm-words.ts';
+import { alarmTitle } from '#shared/domain/wording/alarm-title.ts';
 import type { Format } from '#src/lib/format/create-format.ts';
 import { t } from '#src/lib/messages/t.ts';
 

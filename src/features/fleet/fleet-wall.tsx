@@ -28,6 +28,8 @@ export type FleetWallProps = {
   readonly cursor: CursorStore;
   readonly StripSource: StripSource;
   readonly onNearEnd: () => void;
+  /** Takes the truer order, where there is one. */
+  readonly onResort: (() => void) | undefined;
 };
 
 /** Rows before the end at which the next page is asked for. */
@@ -35,7 +37,7 @@ const NEAR_END = 30;
 
 /** The wall: every pump's strip on one axis, only what is near the screen on the page, however many there are. */
 export function FleetWall(props: FleetWallProps) {
-  const { rows, matching, window, companyZone, now, cursor, StripSource, onNearEnd } = props;
+  const { rows, matching, window, companyZone, now, cursor, StripSource, onNearEnd, onResort } = props;
   const [track, width] = useElementWidth<HTMLDivElement>();
   const list = useRef<HTMLUListElement>(null);
   const height = useMediaQuery(WIDE) ? ROW_HEIGHT.wide : ROW_HEIGHT.narrow;
@@ -51,7 +53,15 @@ export function FleetWall(props: FleetWallProps) {
 
   return (
     <div className="border border-ink bg-sheet" {...pointer}>
-      <WallHead window={stable} zone={companyZone} now={now} cursor={cursor} track={track} width={width} />
+      <WallHead
+        window={stable}
+        zone={companyZone}
+        now={now}
+        cursor={cursor}
+        track={track}
+        width={width}
+        onResort={onResort}
+      />
       <ul ref={list} aria-label={t('fleet.wall')} className="relative" style={{ height: rows.length * height }}>
         {shown.map((row, offset) => {
           const index = first + offset;

@@ -1,6 +1,6 @@
 import type { PumpRow } from '#shared/contract/http/pumps.ts';
 import { zoneOffsetAt } from '#shared/domain/time/zone-offset.ts';
-import { alarmTitle } from '#shared/domain/wording/alarm-words.ts';
+import { alarmTitle } from '#shared/domain/wording/alarm-title.ts';
 import type { MarkKind } from '#src/components/ui/priority-mark.tsx';
 import type { Format } from '#src/lib/format/create-format.ts';
 import { t } from '#src/lib/messages/t.ts';

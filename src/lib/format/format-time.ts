@@ -42,7 +42,8 @@ export function formatTime(at: number, zone: string, { locale, clock, seconds = 
     ...(fullHour ? {} : { minute: '2-digit' }),
     ...(seconds ? { second: '2-digit' } : {}),
   };
-  return plainSpaces(formatterFor(locale, options).format(at));
+  // The AM stays with its figures.
+  return plainSpaces(formatterFor(locale, options).format(at)).replaceAll(' ', '\u00a0');
 }
 
 /** A time of day in minutes after midnight, as a clock or a program shows it; 1440 is the end of the day. */

@@ -53,7 +53,6 @@ export const ALARM_MESSAGES = {
   'alarm.technician': 'goes to {name}',
   'alarm.acknowledge': 'Acknowledge',
   'alarm.acknowledgeNamed': 'Acknowledge: {title}, {where}',
-  'alarm.acknowledging': 'Acknowledging…',
   'alarm.undo': 'Undo',
   'alarm.undoNamed': 'Undo acknowledging: {title}, {where}',
   'alarm.acknowledged': 'Acknowledged: {title}, {where}.',

@@ -1,6 +1,5 @@
 /** The fleet wall. */
 export const FLEET_MESSAGES = {
-  'fleet.page': 'Fleet',
   'fleet.heading.live24': 'Fleet, last 24 hours',
   'fleet.heading.live7': 'Fleet, last 7 days',
   'fleet.heading.day': 'Fleet, {day}',
@@ -50,12 +49,10 @@ export const FLEET_MESSAGES = {
   'fleet.moreAlarms': { one: '{title}, and {count} more', other: '{title}, and {count} more' },
   'fleet.resort': 'The order has changed. Sort again',
   'fleet.loadingMore': 'Loading more pumps',
-  'fleet.end': 'That is all of them.',
   'fleet.empty': 'No pumps yet.',
   'fleet.empty.detail': 'A pump appears here as soon as a device is registered for it and sends its first reading.',
   'fleet.noMatch': 'No pump matches.',
   'fleet.noMatch.detail': 'Nothing fits the search and filters together.',
-  'fleet.openPump': 'Open {name}',
   'padState.open': 'Open',
   'padState.reduced': 'Reduced for winter',
   'padState.winterized': 'Winterized',

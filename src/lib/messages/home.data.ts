@@ -21,7 +21,6 @@ export const HOME_MESSAGES = {
   'home.lately.none': 'Nothing out of the ordinary in the last week.',
   'home.lately.loading': 'Loading the last week',
   'home.lately.primed': 'Started, and filled itself with water for {span}.',
-  'home.lately.started': 'Started.',
   'home.lately.manual': 'Ran at a speed chosen on its keypad for {span}.',
   'home.lately.timed': 'A timed run at high speed, {span}.',
   'home.lately.freeze': 'Freeze protection kept the water moving for {span}.',

@@ -16,7 +16,6 @@ export const SESSION_MESSAGES = {
   'signIn.returning': 'After that you come back to the page you asked for.',
   'signIn.watches': 'Millrace watches pump motors. It never starts, stops or sets one.',
   'profile.page': 'Profile',
-  'profile.heading': '{name}',
   'profile.email': 'E-mail',
   'profile.role': 'Role',
   'profile.company': 'Company',

@@ -1,6 +1,5 @@
 /** The frame around every page. */
 export const SHELL_MESSAGES = {
-  'shell.name': 'Millrace',
   'shell.wordmark': 'millrace',
   'shell.documentTitle': '{page} · Millrace',
   'shell.skip': 'Skip to the page',
@@ -18,7 +17,6 @@ export const SHELL_MESSAGES = {
   'link.broken': 'not live, trying again',
   'link.offline': 'offline',
   'link.signedOut': 'signed out',
-  'link.label': 'Live connection',
   'offline.title': 'No connection to Millrace.',
   'offline.detail': 'What you see is as of {time}. The page catches up by itself when the connection is back.',
   'offline.never': 'The page catches up by itself when the connection is back.',

@@ -114,6 +114,16 @@ function nowOf(run: Run, planned: readonly PlannedRun[], now: number): PumpNow {
   };
 }
 
+/** Laying out a program is dear: copies of a pad share one plan. */
+function planOnce(pad: DemoPad, pump: DemoPump, now: number): readonly PlannedRun[] {
+  const key = `${pump.serial} ${now}`;
+  const planned = plans.get(key) ?? planFakePump(pad, pump, modelOf(pump), now - 9 * DAY_MS, now + 2 * DAY_MS);
+  plans.set(key, planned);
+  return planned;
+}
+
+const plans = new Map<string, readonly PlannedRun[]>();
+
 function buildPump(
   pad: DemoPad,
   pump: DemoPump,
@@ -124,7 +134,7 @@ function buildPump(
 ): FakePump {
   const model = modelOf(pump);
   const fault = copy === 0 ? FAKE_FAULTS.find(({ serial }) => serial === pump.serial) : undefined;
-  const planned = planFakePump(pad, pump, model, now - 9 * DAY_MS, now + 2 * DAY_MS);
+  const planned = planOnce(pad, pump, now);
   const runs = runFakePump(planned, fault, now);
   const open = runs.at(-1);
   const silent = fault?.runs === 'silent';

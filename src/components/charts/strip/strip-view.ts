@@ -69,7 +69,7 @@ export function layoutStrip(input: StripInput, width: number, metrics: StripMetr
   const { window, now } = input;
   const scale = createStripScale(window, width, metrics, input.topRpm);
   const shown = input.runs.filter(({ from, to }) => overlaps(from, to ?? Math.max(now, from + 1), window));
-  const ahead = input.planned.filter(({ from, to, rpm }) => rpm > 0 && overlaps(Math.max(from, now), to, window));
+  const ahead = input.planned.filter(({ from, to, rpm }) => rpm > 0 && to > now && overlaps(from, to, window));
   return {
     blocks: shown.map((run) => layoutBlock(run, input, scale, metrics)),
     planned: ahead.map(({ from, to, rpm }) => {
