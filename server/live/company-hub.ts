@@ -23,6 +23,7 @@ export function createCompanyHub(companyId: string, needs: LiveNeeds): CompanyHu
   let cursor: string | undefined;
   let reading: Promise<void> | undefined;
   let isRung = false;
+  let isHeartbeatDue = false;
   let readAt = 0;
   let timer: NodeJS.Timeout | undefined;
 
@@ -37,6 +38,9 @@ export function createCompanyHub(companyId: string, needs: LiveNeeds): CompanyHu
     }
     const news = writeNews(changes, needs.hideStaffWords);
     for (const connection of connections) connection.tell(news);
+    if (!isHeartbeatDue) return;
+    isHeartbeatDue = false;
+    for (const connection of connections) connection.heartbeat(changes.cursor);
   };
 
   const schedule = (): void => {
@@ -60,6 +64,11 @@ export function createCompanyHub(companyId: string, needs: LiveNeeds): CompanyHu
     timer.unref();
   };
 
+  const ring = (): void => {
+    isRung = true;
+    schedule();
+  };
+
   return {
     add: async (connection) => {
       // A cursor that nobody moved since is too old to hand out.
@@ -75,12 +84,11 @@ export function createCompanyHub(companyId: string, needs: LiveNeeds): CompanyHu
       timer = undefined;
     },
     connections: () => connections,
-    ring: () => {
-      isRung = true;
-      schedule();
-    },
+    ring,
+    // Says that the screens are up to date, so it waits for a look at the database: without one they grow stale.
     heartbeat: () => {
-      if (cursor !== undefined) for (const connection of connections) connection.heartbeat(cursor);
+      isHeartbeatDue = true;
+      ring();
     },
     isEmpty: () => connections.size === 0,
   };
