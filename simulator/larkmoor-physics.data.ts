@@ -163,7 +163,7 @@ export const LARKMOOR_PHYSICS: Readonly<Record<string, LarkmoorPhysics>> = {
     staticFeet: 1,
     pipe: 0.0105,
     filter: 0.0045,
-    primeSeconds: 36,
+    primeSeconds: 26,
     restFill: 0.45,
     drainHours: 8,
     volts: 240,

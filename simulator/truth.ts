@@ -3,7 +3,7 @@ import type { Pump } from './pump.ts';
 
 /**
  * What was truly wrong, for scoring. `from` and `to` are the first and last instants at which the readings showed it
- * (null: it still stands). `required` = it showed for as long as a rule needs; otherwise a rule may speak or not.
+ * (null: it still stands), or where they never did, those of the fault itself. `required` = it showed for as long as a rule needs; otherwise a rule may speak or not.
  * `also` lists detectors that may speak about it beside the one named.
  */
 export type TruthRow = {
@@ -70,7 +70,7 @@ export function createTruthBook(): TruthBook {
         },
       };
     },
-    rows: () => sightings.flatMap(toRow).sort((a, b) => a.from - b.from),
+    rows: () => sightings.map(toRow).sort((a, b) => a.from - b.from),
   };
 }
 
@@ -92,22 +92,21 @@ function look(sighting: Sighting, at: number): void {
   sighting.days.add(Math.floor((at + pump.zone.offsetAt(at)) / DAY_MS));
 }
 
-function toRow(sighting: Sighting): TruthRow[] {
-  const { fault, pump, firstAt } = sighting;
-  if (firstAt === undefined) return [];
+function toRow(sighting: Sighting): TruthRow {
+  const { fault, pump, begunAt, endedAt, firstAt } = sighting;
   const { stretchMs = 0, stretches = 0, days = 0 } = fault.needs;
-  return [
-    {
-      s: pump.spec.serial,
-      fault: fault.slug,
-      detector: fault.detector,
-      cause: fault.causeOn?.(pump.spec) ?? fault.cause,
-      from: firstAt,
-      to: sighting.endedAt === null ? null : sighting.lastAt,
-      required: sighting.longestMs >= stretchMs && sighting.stretches >= stretches && sighting.days.size >= days,
-      also: fault.also,
-      begunAt: sighting.begunAt,
-      endedAt: sighting.endedAt,
-    },
-  ];
+  const wasSeen = firstAt !== undefined;
+  const isEnough = sighting.longestMs >= stretchMs && sighting.stretches >= stretches && sighting.days.size >= days;
+  return {
+    s: pump.spec.serial,
+    fault: fault.slug,
+    detector: fault.detector,
+    cause: fault.causeOn?.(pump.spec) ?? fault.cause,
+    from: firstAt ?? begunAt,
+    to: endedAt !== null && wasSeen ? sighting.lastAt : endedAt,
+    required: wasSeen && isEnough,
+    also: fault.also,
+    begunAt,
+    endedAt,
+  };
 }

@@ -12,7 +12,7 @@ export const dirtyFilter: Fault = {
   story: 'Nobody cleans the filter: the flow goes down day by day at the same speed.',
   hours: [9 * 24, 16 * 24],
   needs: { days: 5 },
-  also: ['too-little-water'],
+  also: ['too-little-water', 'energized-without-flow'],
   suits: ({ purpose, settings }) => purpose === 'filter' && settings.program.some((entry) => entry.rpm >= 1600),
   begin: (pump, at, until) => {
     const steps = Math.max(1, Math.floor((until - at) / (6 * HOUR_MS)));

@@ -9,7 +9,7 @@ export const energizedWithoutFlow: Fault = {
   cause: 'cell',
   causeOn: (spec) => findUnguarded(spec)?.kind ?? 'cell',
   story: 'The pump was stopped at the keypad, and the clock goes on feeding what needs its water.',
-  hours: [6, 28],
+  hours: [25, 30],
   needs: { stretchMs: 10 * MINUTE_MS },
   also: ['stopped', 'too-little-water', 'freezing'],
   suits: (spec) => spec.model.stopBeatsInputs && findUnguarded(spec) !== undefined,

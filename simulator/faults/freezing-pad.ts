@@ -21,7 +21,8 @@ export const freezingPad: Fault = {
     press(pump, { key: 'stop' }, at);
   },
   end: (pump, at) => press(pump, { key: 'resume' }, at),
-  shows: (pump, at) => pump.shaft.targetRpm === 0 && padCelsius(pump, at) <= 0,
+  // From the guard's limit on where there is a guard, else from the freezing point.
+  shows: (pump, at) => pump.shaft.targetRpm === 0 && padCelsius(pump, at) <= (pump.spec.settings.freeze?.celsius ?? 0),
 };
 
 function findColdest(pump: Pump, from: number, until: number): number {

@@ -6,7 +6,7 @@ export type Water = { fill: number; since: number; target: number; tauMs: number
 
 /** The suction side of one pad. */
 export type Suction = {
-  /** Seconds from rest to primed at full speed with everything in order. */
+  /** Seconds from a third full to primed at full speed, with everything in order. */
   readonly primeSeconds: number;
   /** How full it stays when it stands, and how fast it drains back. */
   readonly restFill: number;
@@ -62,8 +62,7 @@ export function aimWater(
 type Aim = { readonly target: number; readonly tauMs: number };
 
 function drawing(suction: Suction, trouble: SuctionTrouble, rpm: number, luck: number): Aim {
-  const startGap = FULL_TARGET - suction.restFill;
-  const tauSeconds = (suction.primeSeconds * luck) / Math.log(startGap / (FULL_TARGET - 0.98));
+  const tauSeconds = (suction.primeSeconds * luck) / Math.log((FULL_TARGET - 0.33) / (FULL_TARGET - 0.98));
   // Suction falls with the square of the speed; what is drawn, a little less steeply.
   const speed = Math.min(1, rpm / 3450) ** 1.6;
   const tauMs = (1000 * tauSeconds * trouble.slowness) / speed;

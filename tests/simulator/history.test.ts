@@ -12,7 +12,7 @@ const TO = MONDAY;
 
 /** Six days of the demo's month, in which links drop, power fails and clocks are wrong, for the first pumps of it. */
 function history(seed: string, pumps: number, latencyMs = 0): string[] {
-  const fleet = createDemoFleet({ seed, from: TO - 6 * DAY, to: TO, cadenceMs: 60_000, pumps });
+  const fleet = createDemoFleet({ seed, from: TO - 6 * DAY, to: TO, cadenceMs: 120_000, pumps });
   return [...generateHistory(fleet, { to: TO, latencyMs })].map(encodeArrival);
 }
 

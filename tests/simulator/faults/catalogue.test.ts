@@ -11,7 +11,7 @@ const HOUR = 3_600_000;
 const DAY = 24 * HOUR;
 /** Two days before the clocks change in most of the United States. */
 const BEFORE_CHANGE = Date.UTC(2026, 9, 30, 16);
-const SPECS = Array.from({ length: 80 }, (_, index) => inventPump('catalogue', index));
+const SPECS = Array.from({ length: 240 }, (_, index) => inventPump('catalogue', index));
 
 describe('the catalogue', () => {
   it('names each fault once, and detectors that exist', () => {

@@ -8,9 +8,9 @@ import {
   waterFill,
 } from '#simulator/physics/prime.ts';
 
-const SUCTION: Suction = { primeSeconds: 40, restFill: 0.4, drainHours: 6 };
+const SUCTION: Suction = { primeSeconds: 40, restFill: 0.33, drainHours: 6 };
 const HOUR = 3_600_000;
-const rested = (): Water => ({ fill: 0.4, since: 0, target: 0.4, tauMs: 1 });
+const rested = (): Water => ({ fill: 0.33, since: 0, target: 0.33, tauMs: 1 });
 
 function fillAfter(
   seconds: number,
@@ -24,7 +24,7 @@ function fillAfter(
 }
 
 describe('a pump that primes', () => {
-  it('fills from rest in about its prime time, and is then full', () => {
+  it('fills from a third in its prime time, and is then full', () => {
     expect(fillAfter(20)).toBeLessThan(0.9);
     expect(fillAfter(40)).toBeCloseTo(0.98, 2);
     expect(fillAfter(60)).toBe(1);
@@ -62,7 +62,7 @@ describe('a pump that primes', () => {
     aimWater(leaking, SUCTION, { ...createSuctionTrouble(), drainsBack: true }, 0, 0, 1);
 
     expect(waterFill(healthy, HOUR)).toBeGreaterThan(0.85);
-    expect(waterFill(healthy, 100 * HOUR)).toBeCloseTo(0.4, 2);
+    expect(waterFill(healthy, 100 * HOUR)).toBeCloseTo(0.33, 2);
     expect(waterFill(leaking, HOUR)).toBeCloseTo(0, 2);
   });
 
