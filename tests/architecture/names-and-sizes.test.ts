@@ -1,6 +1,9 @@
+import { existsSync } from 'node:fs';
+import { join, resolve } from 'node:path';
 import { describe, expect, it } from 'vitest';
 import { listSources, listTopNames, type ProjectFile } from '#tests/architecture/project-files.ts';
 
+const TOP_FOLDER = resolve(import.meta.dirname, '../..');
 const files = listSources();
 const paths = new Set(files.map(({ path }) => path));
 
@@ -35,7 +38,7 @@ describe('sizes', () => {
   });
 });
 
-const KEBAB = /^[a-z0-9]+(-[a-z0-9]+)*(\.(data|config|test|property\.test|bench))?\.(ts|tsx|mjs)$/;
+const KEBAB = /^[a-z0-9]+(-[a-z0-9]+)*(\.(data|config)|(\.[a-z-]+)?\.test)?\.(ts|tsx|mjs)$/;
 const VAGUE = /(^|[/-])(utils?|helpers?|common|misc|stuff)([./-]|$)/;
 
 const isWellNamed = (path: string) => {
@@ -51,6 +54,9 @@ const isWellNamed = (path: string) => {
 /** What a test says it is about: tests/server/db/migrate.property.test.ts → server/db/migrate. */
 const subjectOf = (path: string) =>
   /^tests\/((?:shared|server|src|simulator)\/.+?)(\.[a-z-]+)*\.test\.tsx?$/.exec(path)?.[1];
+
+/** Tests of what many files make together. */
+const WHOLE = /^tests\/src\/(pages|fake-api)\//;
 
 describe('names', () => {
   it('are in kebab case and say what is in the file', () => {
@@ -77,10 +83,9 @@ describe('names', () => {
   });
 
   it('of tests lie where the folder they are about lies', () => {
-    const folders = new Set([...paths].map((path) => path.split('/').slice(0, -1).join('/')));
     const astray = [...paths].filter((path) => {
       const subject = subjectOf(path);
-      return subject !== undefined && !folders.has(subject.split('/').slice(0, -1).join('/')) && !folders.has(subject);
+      return subject !== undefined && !existsSync(join(TOP_FOLDER, subject, '..')) && !WHOLE.test(path);
     });
     expect(astray).toEqual([]);
   });
