@@ -29,7 +29,10 @@ export type Backtest = {
  */
 export function createBacktest(contexts: readonly PumpContext[]): Backtest {
   const pads = new Map<string, Pad>(
-    contexts.map((context) => [context.pumpId, { serial: context.pumpId, fold: createPumpFold(context), waiting: 0, heardAt: Number.NEGATIVE_INFINITY }]),
+    contexts.map((context) => [
+      context.pumpId,
+      { serial: context.pumpId, fold: createPumpFold(context), waiting: 0, heardAt: Number.NEGATIVE_INFINITY },
+    ]),
   );
   const lines = createAlarmLines();
   const count: BacktestCount = { readings: 0, late: 0, unknownSerials: new Map() };

@@ -17,7 +17,10 @@ export type CompanyHub = {
 };
 
 /** Reads what changed once for all connections of a company; each gets what its person may see of it. */
-export function createCompanyHub(companyId: string, needs: LiveNeeds): CompanyHub {
+export function createCompanyHub(
+  companyId: string,
+  needs: Pick<LiveNeeds, 'readChanges' | 'hideStaffWords' | 'now' | 'log'>,
+): CompanyHub {
   const { now, log } = needs;
   const connections = new Set<LiveConnection>();
   let cursor: string | undefined;

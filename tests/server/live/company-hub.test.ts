@@ -34,7 +34,7 @@ const createHub = () =>
     hideStaffWords: (alarm) => alarm,
     now: () => Date.now(),
     log: pino({ level: 'silent' }),
-  } as Parameters<typeof createCompanyHub>[1]);
+  });
 
 beforeEach(() => vi.useFakeTimers());
 afterEach(() => {

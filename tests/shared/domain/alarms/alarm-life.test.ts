@@ -149,7 +149,9 @@ describe('setting an alarm aside', () => {
   });
 
   it('keeps an alarm quiet while suppressed by design or out of service', () => {
-    expect(escalatesAt(suppress(play(raised(0)), { at: 1, explainedBy: 'power-cut' }).record)).toBeUndefined();
+    const explained = suppress(play(raised(0)), { at: 1, explainedBy: 'power-cut' }).record;
+    expect(escalatesAt(explained)).toBeUndefined();
+    expect(escalatesAt(endSuppression(explained, 5 * MINUTE).record)).toBe(20 * MINUTE);
     const away = takeOutOfService(play(raised(0)), { by: 'ada', at: 1, reason: 'motor removed' });
     expect(away && escalatesAt(away.record)).toBeUndefined();
     expect(away && escalatesAt(returnToService(away.record, { by: 'ada', at: 5 * MINUTE }).record)).toBe(20 * MINUTE);
