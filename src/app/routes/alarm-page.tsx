@@ -55,7 +55,7 @@ function LoadedAlarm({ alarm }: { readonly alarm: AlarmDetail }) {
   useWatchedPumps([alarm.pumpId]);
   const about = [
     alarm.pumpName,
-    pump !== undefined && pump.street !== alarm.padName ? pump.street : null,
+    pump === undefined ? null : pump.street.replace(alarm.padName, '').replace(/^, /, ''),
     alarm.customerName,
     alarm.technicianName === null ? null : t('alarm.technician', { name: alarm.technicianName }),
   ].filter((part) => part !== null && part !== '');

@@ -15,23 +15,22 @@ import { StripSource } from '#src/features/pumps/strip-source.tsx';
 import { useNow } from '#src/hooks/use-now.ts';
 import { t } from '#src/lib/messages/t.ts';
 
-const headingOf = ({ urgent, soon, note, unacknowledged }: AlarmPage['totals']): string => {
-  if (unacknowledged > 0) return t('alarms.heading.waiting', { count: unacknowledged });
-  const open = urgent + soon + note;
-  return open === 0 ? t('alarms.heading.calm') : t('alarms.heading.seen', { count: open });
+const headingOf = ({ items, totals }: AlarmPage): string => {
+  if (totals.unacknowledged > 0) return t('alarms.heading.waiting', { count: totals.unacknowledged });
+  return items.length === 0 ? t('alarms.heading.calm') : t('alarms.heading.seen');
 };
 
 /** What needs somebody: alarms by priority with their evidence, and beside them what can wait for the next stop. */
 export function AlarmsPage() {
   const [search] = useSearchParams();
   const { filter } = useMemo(() => parseAlarmsAddress(search), [search]);
-  const { data } = useQuery(alarmQueries.totals());
+  const { data } = useQuery(alarmQueries.standing());
   const now = useNow(15_000);
   return (
     <div className="px-4 pb-10 sm:px-7">
       <div className="flex flex-col gap-3.5 pt-5 pb-3">
         <PageHeading title={t('alarms.page')}>
-          {data === undefined ? t('alarms.page') : <Figures text={headingOf(data.totals)} />}
+          {data === undefined ? t('alarms.page') : <Figures text={headingOf(data)} />}
         </PageHeading>
         <AlarmFilters />
       </div>

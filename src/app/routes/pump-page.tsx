@@ -31,7 +31,6 @@ import { PumpSkeleton } from './pump-skeleton.tsx';
 export function PumpPage() {
   const { pumpId = '' } = useParams();
   const { data: pump, isError, error, refetch } = useQuery(pumpQueries.detail(pumpId));
-  useWatchedPumps([pumpId]);
   if (pump !== undefined) return <LoadedPump pump={pump} />;
   return (
     <div className="px-4 py-5 sm:px-7">
@@ -55,6 +54,7 @@ function LoadedPump({ pump }: { readonly pump: PumpDetail }) {
   const day = useDay(pump.zone, now);
   const window = useMemo(() => ({ from: day.from, until: day.until }), [day.from, day.until]);
   const strip = useStrip(pump.pumpId, window);
+  useWatchedPumps([pump.pumpId]);
   return (
     <div className="mx-auto flex max-w-[90rem] flex-col gap-4 px-4 py-5 sm:px-7">
       <div>

@@ -12,10 +12,11 @@ export type AcknowledgeButtonProps = {
   readonly note?: string;
   /** As high as a gloved finger needs, and as wide as the page. */
   readonly touch?: boolean;
+  readonly look?: 'main' | 'plain';
 };
 
 /** Acknowledge; for five minutes after one has, the way back; else nothing. */
-export function AcknowledgeButton({ alarm, note = '', touch = false }: AcknowledgeButtonProps) {
+export function AcknowledgeButton({ alarm, note = '', touch = false, look = 'main' }: AcknowledgeButtonProps) {
   const acknowledge = useAcknowledge();
   const withdraw = useWithdraw();
   const { user } = useSession();
@@ -25,7 +26,7 @@ export function AcknowledgeButton({ alarm, note = '', touch = false }: Acknowled
   if (isWaiting(alarm)) {
     return (
       <Button
-        look="main"
+        look={look}
         touch={touch}
         className={wide}
         aria-label={t('alarm.acknowledgeNamed', words)}

@@ -37,6 +37,13 @@ export const alarmQueries = {
       queryFn: ({ signal }) =>
         call(alarmEndpoints.list, { query: { show: 'all', pumpId, sort: 'newest', limit: 30 }, signal }),
     }),
+  /** Whether any alarm stands at all; notes are not counted. */
+  standing: () =>
+    queryOptions({
+      queryKey: [KEY, 'standing'] as const,
+      queryFn: ({ signal }) =>
+        call(alarmEndpoints.list, { query: { show: 'open', alarmClass: 'alarm', limit: 1 }, signal }),
+    }),
   detail: (alarmId: string) =>
     queryOptions({
       queryKey: [KEY, 'detail', alarmId] as const,

@@ -9,7 +9,7 @@ import { t } from '#src/lib/messages/t.ts';
 import { ALARM_TONE } from './alarm-tone.ts';
 import { describeSpan, describeState, isWaiting } from './alarm-view.ts';
 import { EvidenceStrip, type StripSource } from './evidence-strip.tsx';
-import { listEvidence, listReasons } from './evidence-view.ts';
+import { listEvidence, listLikelyCauses } from './evidence-view.ts';
 
 export type EvidenceSheetProps = {
   readonly alarm: AlarmDetail;
@@ -24,7 +24,7 @@ export type EvidenceSheetProps = {
 export function EvidenceSheet({ alarm, words, now, StripSource, chart }: EvidenceSheetProps) {
   const format = useFormat();
   const tone = ALARM_TONE[alarm.priority];
-  const reasons = listReasons(alarm.evidence);
+  const causes = listLikelyCauses(alarm.evidence);
   return (
     <section aria-labelledby="what" className={`border bg-sheet ${tone.border}`}>
       <h2
@@ -40,14 +40,18 @@ export function EvidenceSheet({ alarm, words, now, StripSource, chart }: Evidenc
         <p className="text-17">
           <Figures text={words.meaning} />
         </p>
-        {reasons.length === 0 ? null : (
-          <ul className="list-disc pl-5">
-            {reasons.map((reason) => (
-              <li key={reason}>
-                <Figures text={reason} />
-              </li>
-            ))}
-          </ul>
+        {causes.length === 0 ? null : (
+          <div>
+            <h3 className="text-ink-2">{t('alarm.likely')}</h3>
+            <ol className="list-decimal pl-6 marker:font-figures">
+              {causes.map(({ cause, reason }) => (
+                <li key={cause}>
+                  <span className="font-medium">{cause}</span>
+                  <span className="text-ink-2">: {reason}</span>
+                </li>
+              ))}
+            </ol>
+          </div>
         )}
         <p className="text-ink-2">
           {describeSpan(alarm, format, now)} · {describeState(alarm, format, now)}

@@ -6,6 +6,7 @@ import { USUAL_TOP_RPM } from '#src/components/charts/strip/strip-metrics.ts';
 import type { StripState, StripWindow } from '#src/components/charts/strip/strip-run.ts';
 import { useElementWidth } from '#src/hooks/use-element-width.ts';
 import { t } from '#src/lib/messages/t.ts';
+import { unprimedSince } from '#src/lib/unprimed-since.ts';
 import { ALARM_TONE } from './alarm-tone.ts';
 import { evidenceWindow, whereOf } from './alarm-view.ts';
 
@@ -40,6 +41,7 @@ export function EvidenceStrip({ alarm, now, StripSource }: EvidenceStripProps) {
             window={window}
             now={now}
             tone={alarm.priority}
+            unprimedSince={unprimedSince(alarm)}
             topRpm={USUAL_TOP_RPM}
             zone={alarm.zone}
           />

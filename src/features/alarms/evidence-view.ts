@@ -52,8 +52,19 @@ export function listEvidence(evidence: Evidence, format: Format): (readonly [str
 export const usualWattsOf = ({ primedWatts, usualWatts }: Evidence): number | undefined =>
   [primedWatts, usualWatts].find((value): value is number => typeof value === 'number' && value > 0);
 
-/** The rule's own reasons, the most telling first; empty where it gives none. */
-export function listReasons({ because }: Evidence): string[] {
-  if (typeof because === 'string') return [because];
-  return Array.isArray(because) ? because.filter((reason): reason is string => typeof reason === 'string') : [];
+/** A cause the readings point to, and why. */
+export type LikelyCause = { readonly cause: string; readonly reason: string };
+
+const causeName = (slug: string): string => {
+  const key = `cause.${slug}`;
+  return isPlainKey(key) ? t(key) : spellOut(slug.replaceAll('-', ' '));
+};
+
+/** The causes a rule found likely, the likeliest first, each with its reason; empty where it ranks none. */
+export function listLikelyCauses({ causes, because }: Evidence): LikelyCause[] {
+  if (!Array.isArray(causes) || !Array.isArray(because)) return [];
+  return causes.flatMap((slug, index) => {
+    const reason = because[index];
+    return typeof slug === 'string' && typeof reason === 'string' ? [{ cause: causeName(slug), reason }] : [];
+  });
 }

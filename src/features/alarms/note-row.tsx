@@ -26,7 +26,7 @@ export function NoteRow({ alarm, now }: { readonly alarm: Alarm; readonly now: n
           {whereOf(alarm)} · {describeSpan(alarm, format, now)}
         </p>
       </div>
-      <AcknowledgeButton alarm={alarm} />
+      <AcknowledgeButton alarm={alarm} look="plain" />
     </article>
   );
 }

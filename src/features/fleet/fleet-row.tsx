@@ -9,6 +9,7 @@ import { type MarkKind, PriorityMark } from '#src/components/ui/priority-mark.ts
 import { useFormat } from '#src/hooks/use-format.ts';
 import { t } from '#src/lib/messages/t.ts';
 import { paths } from '#src/lib/paths.ts';
+import { unprimedSince } from '#src/lib/unprimed-since.ts';
 import { FLEET_COLUMNS } from './fleet-columns.ts';
 import { RowRunsDialog } from './row-runs-dialog.tsx';
 import { isElsewhere, viewRow } from './row-view.ts';
@@ -74,6 +75,7 @@ export const FleetRow = memo(function FleetRow(props: FleetRowProps) {
           window={window}
           now={now}
           tone={row.alarm?.priority ?? 'soon'}
+          unprimedSince={unprimedSince(row.alarm)}
           topRpm={Math.max(USUAL_TOP_RPM, row.settings.maxRpm)}
           zone={companyZone}
         />

@@ -9,6 +9,7 @@ import { Sheet } from '#src/components/ui/sheet.tsx';
 import { TableToggle } from '#src/components/ui/table-toggle.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
 import { t } from '#src/lib/messages/t.ts';
+import { unprimedSince } from '#src/lib/unprimed-since.ts';
 import { labelRun } from '#src/lib/why/label-run.ts';
 import { DayNav } from './day-nav.tsx';
 import { InstantLine } from './instant-line.tsx';
@@ -55,6 +56,7 @@ export function HomeStrip({ pump, strip, day, visibleFrom, now, cursor }: HomeSt
           zone={pump.zone}
           now={now}
           tone={pump.alarm?.priority ?? 'soon'}
+          unprimedSince={unprimedSince(pump.alarm)}
           topRpm={Math.max(USUAL_TOP_RPM, pump.settings.maxRpm)}
           labelOf={label}
           cursor={cursor}

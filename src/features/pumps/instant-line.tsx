@@ -31,7 +31,7 @@ export function InstantLine({ pump, strip, cursor, now, voice, idle }: InstantLi
     () => instantWords({ pump, strip, at, now, format, voice }),
     [pump, strip, at, now, format, voice],
   );
-  if (at === undefined && idle !== undefined) return <p className="min-h-13 pt-1 text-ink-2">{idle}</p>;
+  if (at === undefined && idle !== undefined) return <p className="min-h-8 pt-1 text-ink-2">{idle}</p>;
   return (
     <div className="min-h-13">
       <p className="figures flex flex-wrap items-baseline gap-x-3 font-semibold">

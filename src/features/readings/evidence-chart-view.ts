@@ -5,11 +5,14 @@ import type { ReadingWindow } from './reading-queries.ts';
 
 const STEP_MS = 5 * MINUTE_MS;
 
-/** An hour before an alarm's beginning and three after, as far as there is time yet; in steps, so that it stands still. */
+const BEFORE_MS = 10 * MINUTE_MS;
+const SHORTEST_MS = 30 * MINUTE_MS;
+
+/** From shortly before an alarm's beginning to three hours after, as far as there is time yet; in steps, so that it stands still. */
 export function chartAround(from: number, now: number): ReadingWindow {
-  const start = Math.floor((from - HOUR_MS) / STEP_MS) * STEP_MS;
+  const start = Math.floor((from - BEFORE_MS) / STEP_MS) * STEP_MS;
   const end = Math.ceil(Math.min(now, from + 3 * HOUR_MS) / STEP_MS) * STEP_MS;
-  return { from: start, until: Math.max(end, start + HOUR_MS) };
+  return { from: start, until: Math.max(end, start + SHORTEST_MS) };
 }
 
 /** Measured watts, with a dashed line where they usually are. */

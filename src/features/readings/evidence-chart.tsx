@@ -4,6 +4,7 @@ import { t } from '#src/lib/messages/t.ts';
 import { createStore } from '#src/lib/store.ts';
 import { chartAround, wattsBeside } from './evidence-chart-view.ts';
 import { readingQueries } from './reading-queries.ts';
+import { hasReadings } from './reading-view.ts';
 
 const TimeChart = lazy(async () => ({
   default: (await import('#src/components/charts/time-chart/time-chart.tsx')).TimeChart,
@@ -30,7 +31,7 @@ export function EvidenceChart({ pumpId, from, zone, now, usualWatts }: EvidenceC
   const window = useMemo(() => ({ from: around.from, until: around.until }), [around.from, around.until]);
   const { data } = useQuery(readingQueries.series(pumpId, window, now < window.until));
   const chart = useMemo(() => data && wattsBeside(data, usualWatts), [data, usualWatts]);
-  if (chart !== undefined && chart.times.length === 0) return null;
+  if (data !== undefined && !hasReadings(data)) return null;
   return (
     <figure>
       <figcaption className="pb-1 text-13 text-ink-2">

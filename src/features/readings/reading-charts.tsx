@@ -7,7 +7,7 @@ import { TableToggle } from '#src/components/ui/table-toggle.tsx';
 import { t } from '#src/lib/messages/t.ts';
 import { type ReadingWindow, readingQueries } from './reading-queries.ts';
 import { ReadingTable } from './reading-table.tsx';
-import { appendNow } from './reading-view.ts';
+import { appendNow, hasReadings } from './reading-view.ts';
 
 /** The chart library comes only when a chart is looked at. */
 const TimeChart = lazy(async () => ({
@@ -54,12 +54,12 @@ export function ReadingCharts({ pumpId, window, zone, now, growing, topRpm, curs
   const speed = useMemo(() => series && speedLines(series), [series]);
   const watts = useMemo(() => series && wattLines(series), [series]);
   if (isError) return <ErrorNotice error={error} onRetry={() => void refetch()} />;
+  if (series !== undefined && !hasReadings(series)) {
+    return <p className="px-5 py-4 text-ink-2">{t('pump.chart.empty')}</p>;
+  }
   const shared = { window, zone, cursor, height: HEIGHT };
   return (
     <div aria-busy={isPending} className="px-4 py-3 sm:px-5">
-      {series !== undefined && series.t.length === 0 ? (
-        <p className="pb-2 text-ink-2">{t('pump.chart.empty')}</p>
-      ) : null}
       <h3 className="pb-1 text-13 text-ink-2">
         {t('pump.chart.speed')}
         <span aria-hidden="true" className="ml-4 inline-block w-6 border-t-2 border-ink align-middle" />{' '}

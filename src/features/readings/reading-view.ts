@@ -19,6 +19,9 @@ export function appendNow(series: ReadingSeries, now: PumpNow | null, until: num
   };
 }
 
+/** Whether anything was read at all in the window: old readings are kept as runs only. */
+export const hasReadings = ({ watts }: ReadingSeries): boolean => watts.some((value) => value !== null);
+
 /** A quarter of an hour of readings, for the table behind the charts. Null where nothing was read. */
 export type ReadingRow = {
   readonly at: number;

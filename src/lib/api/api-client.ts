@@ -67,6 +67,8 @@ async function readAnswer<E extends Endpoint>(endpoint: E, response: Response): 
  */
 export async function call<E extends Endpoint>(endpoint: E, input: CallInput<E>): Promise<Answer<E>> {
   const given: CallInput<Endpoint> = input;
+  // An address that the contract does not know leads nowhere: the server need not be asked.
+  if (endpoint.params?.safeParse(given.params).success === false) throw new ApiError('not-found', endpoint.path);
   const query: Readonly<Record<string, QueryValue>> = given.query ?? {};
   const url = buildUrl(endpoint.path, given.params ?? {}, query);
   const init: RequestInit = { method: endpoint.method, headers: buildHeaders(endpoint, given) };

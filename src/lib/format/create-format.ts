@@ -1,7 +1,8 @@
 import type { Preferences } from '#shared/contract/http/session.ts';
-import { localTime } from '#shared/domain/time/local-time.ts';
+import { DAY_MINUTES, localTime } from '#shared/domain/time/local-time.ts';
 import { formatNumber, formatQuantity } from '#shared/units/format-quantity.ts';
 import type { Quantity } from '#shared/units/quantity-formats.data.ts';
+import { t } from '../messages/t.ts';
 import { formatSpan } from './format-span.ts';
 import { formatDay, formatMinuteOfDay, formatTime, formatZoneName, isTwelveHour } from './format-time.ts';
 
@@ -13,6 +14,7 @@ export type Format = ReturnType<typeof createFormat>;
 /** @example createFormat({ locale: 'en-US', preferences: { units: 'us', clock: 'locale' } }).rpm(1400) // '1,400 rpm' */
 export function createFormat({ locale, preferences: { units, clock } }: FormatOptions) {
   const style = { locale, clock };
+  const twelveHour = isTwelveHour(locale, clock);
   const number = (value: number, digits = 0) => formatNumber(value, digits, locale);
   const quantity = (value: number | null | undefined, kind: Quantity) =>
     formatQuantity(value, kind, { system: units, locale });
@@ -23,7 +25,7 @@ export function createFormat({ locale, preferences: { units, clock } }: FormatOp
   return {
     locale,
     units,
-    twelveHour: isTwelveHour(locale, clock),
+    twelveHour,
     number,
     /** Any quantity with its unit, kept in rpm, W, Wh, gpm, gallons, feet, psi or °C. */
     quantity,
@@ -31,7 +33,12 @@ export function createFormat({ locale, preferences: { units, clock } }: FormatOp
     watts: (value: number) => quantity(value, 'power'),
     time,
     timeWithSeconds: (at: number, zone: string) => formatTime(at, zone, { ...style, seconds: true }),
-    minuteOfDay: (minute: number) => formatMinuteOfDay(minute, style),
+    /** A clock's or program's time of day; the two ends of a twelve-hour day by their names. */
+    minuteOfDay: (minute: number) => {
+      const named =
+        minute % DAY_MINUTES === 0 ? t('strip.midnight') : minute === DAY_MINUTES / 2 ? t('strip.noon') : undefined;
+      return (twelveHour ? named : undefined) ?? formatMinuteOfDay(minute, style);
+    },
     day,
     dayWithYear: (at: number, zone: string) => formatDay(at, zone, locale, true),
     /** The time alone when it lies in today, else with its day. */

@@ -106,7 +106,8 @@ export class LiveSocket {
 
   #tick(): void {
     if (this.#socket?.readyState !== WebSocket.OPEN || this.#heardAt === undefined) return;
-    const verdict = judgeSilence(this.#needs.now() - this.#heardAt);
+    // Without a network a socket stays open and silent: no need to wait for the silence to grow.
+    const verdict = this.#needs.isOnline() ? judgeSilence(this.#needs.now() - this.#heardAt) : 'dead';
     if (verdict === 'stale') this.#needs.onPhase('stale', this.#heardAt);
     if (verdict !== 'dead') return;
     this.#leave();

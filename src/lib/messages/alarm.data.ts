@@ -2,10 +2,7 @@
 export const ALARM_MESSAGES = {
   'alarms.page': 'Alarms',
   'alarms.heading.calm': 'No alarm stands.',
-  'alarms.heading.seen': {
-    one: '{count} alarm stands, acknowledged.',
-    other: '{count} alarms stand, all acknowledged.',
-  },
+  'alarms.heading.seen': 'Every alarm that stands is acknowledged.',
   'alarms.heading.waiting': {
     one: '{count} alarm waits for an acknowledgement.',
     other: '{count} alarms wait for an acknowledgement.',
@@ -107,6 +104,12 @@ export const ALARM_MESSAGES = {
   'transition.out-of-service': 'taken out of service',
   'transition.returned-to-service': 'back in service',
   'transition.by': '{what}, by {name}',
+  'alarm.likely': 'Likely, from the readings alone',
+  'cause.air-leak': 'Air drawn in on the suction side',
+  'cause.water-low': 'Water low at the skimmer',
+  'cause.blocked': 'Suction blocked',
+  'cause.valve-shut': 'A valve shut',
+  'cause.drained-back': 'Water drained back while it stood',
   'evidence.tries': 'Tries',
   'evidence.loadShare': 'Load, of what is usual',
   'evidence.primedWatts': 'Watts when primed',

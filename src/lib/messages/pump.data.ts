@@ -25,7 +25,7 @@ export const PUMP_MESSAGES = {
   'pump.chart.watts': 'Watts',
   'pump.chart.measured': 'measured',
   'pump.chart.expected': 'expected',
-  'pump.chart.empty': 'No readings on this day.',
+  'pump.chart.empty': 'No single readings are kept of this day; the strip above shows its runs.',
   'pump.chart.coverage': 'Readings cover {share} % of the day so far.',
   'pump.chart.tableOf': 'Readings as a table, a quarter of an hour a row',
   'pump.chart.time': 'Time',

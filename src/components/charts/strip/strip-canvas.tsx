@@ -37,17 +37,17 @@ function measureLabel(text: string): number {
 
 /** The strip itself: one canvas, sharp at any density, in the theme's ink. It says nothing by itself: see Strip. */
 export function StripCanvas(props: StripCanvasProps) {
-  const { size, width, zone, labelOf, runs, planned, window, now, tone, topRpm } = props;
+  const { size, width, zone, labelOf, runs, planned, window, now, tone, topRpm, unprimedSince } = props;
   const canvas = useRef<HTMLCanvasElement>(null);
   const theme = useStore(themeStore);
   const fonts = useStore(fontStore);
   const metrics = STRIP_METRICS[size];
   const rules = useMemo(() => listRules(window, zone, width), [window, zone, width]);
   const picture = useMemo((): StripPicture => {
-    const layout = layoutStrip({ runs, planned, window, now, tone, topRpm }, width, metrics);
+    const layout = layoutStrip({ runs, planned, window, now, tone, topRpm, unprimedSince }, width, metrics);
     const labels = metrics.labelled && labelOf !== undefined ? placeLabels(layout, labelOf, measureLabel, width) : [];
     return { layout, rules, labels, metrics, width };
-  }, [runs, planned, window, now, tone, topRpm, width, metrics, labelOf, rules]);
+  }, [runs, planned, window, now, tone, topRpm, unprimedSince, width, metrics, labelOf, rules]);
 
   // Before the browser paints or prints: a page on its way to paper must not show last theme's ink.
   // biome-ignore lint/correctness/useExhaustiveDependencies: `fonts` is no input of the drawing, its arrival is a reason to draw again.

@@ -114,11 +114,15 @@ export function paintStrip(
   paintRules(pen, picture);
   for (const block of layout.blocks) paintFill(pen, block);
   paintPlanned(pen, picture);
-  layout.blocks.forEach((block, index) => {
-    paintPen(pen, block, layout.blocks[index - 1], metrics);
-    paintExpected(pen, block);
-    paintNumeral(pen, block);
-  });
+  // What is off its expected speed comes last: a try of seconds must not vanish under its neighbours' ink.
+  for (const marked of [false, true]) {
+    layout.blocks.forEach((block, index) => {
+      if ((block.tone !== undefined) !== marked) return;
+      paintPen(pen, block, layout.blocks[index - 1], metrics);
+      paintExpected(pen, block);
+      paintNumeral(pen, block);
+    });
+  }
   stroke(pen, colours.ink, 0.7, 0, metrics.base, width, metrics.base);
   paintLabels(pen, picture);
   if (layout.nowX !== undefined) stroke(pen, colours.ink, 1, layout.nowX, 0, layout.nowX, metrics.height);

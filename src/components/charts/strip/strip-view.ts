@@ -34,12 +34,15 @@ export type StripInput = {
   /** Colour of what is off the expected speed: the priority of the pump's alarm. */
   readonly tone: Priority;
   readonly topRpm: number;
+  /** Since when an alarm says that the pump does not prime: its primes from then on are off as well. */
+  readonly unprimedSince?: number | undefined;
 };
 
 /** A prime of two minutes is half a pixel on a day's row and must still be seen. */
 const NARROWEST = 1.5;
 
-const isMarked = ({ flags }: StripRun) => flags.includes('off-expected') || flags.includes('unprimed');
+const isMarked = ({ flags, source, from }: StripRun, unprimedSince = Number.POSITIVE_INFINITY) =>
+  flags.includes('off-expected') || flags.includes('unprimed') || (source === 'prime' && from >= unprimedSince);
 
 function layoutBlock(run: StripRun, input: StripInput, scale: StripScale, metrics: StripMetrics): StripBlock {
   const { window, now } = input;
@@ -57,7 +60,7 @@ function layoutBlock(run: StripRun, input: StripInput, scale: StripScale, metric
     height: metrics.base - y,
     texture,
     input: run.activeInput,
-    tone: isMarked(run) ? input.tone : undefined,
+    tone: isMarked(run, input.unprimedSince) ? input.tone : undefined,
     expectedY: off ? scale.y(run.expectedRpm) : undefined,
   };
 }

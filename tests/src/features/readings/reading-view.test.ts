@@ -62,11 +62,11 @@ it('has its numbers in a table, a quarter of an hour a row, the latest first, ga
 describe('the chart around an alarm', () => {
   const HOUR = 3_600_000;
 
-  it('begins an hour before and ends three after, or now', () => {
+  it('begins shortly before and ends three hours after, or now', () => {
     const from = 10 * HOUR;
-    expect(chartAround(from, 99 * HOUR)).toEqual({ from: 9 * HOUR, until: 13 * HOUR });
-    expect(chartAround(from, from + HOUR / 2)).toEqual({ from: 9 * HOUR, until: 10.5 * HOUR });
-    expect(chartAround(from, from).until).toBeGreaterThan(9 * HOUR);
+    expect(chartAround(from, 99 * HOUR)).toEqual({ from: 10 * HOUR - 600_000, until: 13 * HOUR });
+    expect(chartAround(from, from + HOUR / 2)).toEqual({ from: 10 * HOUR - 600_000, until: 10.5 * HOUR });
+    expect(chartAround(from, from).until - chartAround(from, from).from).toBe(HOUR / 2);
   });
 
   it('draws what would be usual only where that is known', () => {

@@ -98,6 +98,12 @@ describe('a block', () => {
     });
   });
 
+  it('takes the alarm’s colour where the alarm says that it does not prime', () => {
+    const prime = (from: number) => makeRun({ source: 'prime', from, to: from + HOUR });
+    const { blocks } = layout({ runs: [prime(0), prime(6 * HOUR)], tone: 'urgent', unprimedSince: 5 * HOUR });
+    expect(blocks.map(({ tone }) => tone)).toEqual([undefined, 'urgent']);
+  });
+
   it('stays on the paper whatever the readings say', () => {
     fc.assert(
       fc.property(
