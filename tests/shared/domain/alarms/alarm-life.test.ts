@@ -6,6 +6,7 @@ import { applySignal } from '#shared/domain/alarms/apply-signal.ts';
 import { escalatesAt, passTime } from '#shared/domain/alarms/escalate.ts';
 import {
   endShelf,
+  endSuppression,
   LONGEST_SHELF_MS,
   returnToService,
   shelve,
