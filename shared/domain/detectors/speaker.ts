@@ -39,7 +39,7 @@ export function findChange(speaker: Speaker, facts: Facts): AlarmSignal | undefi
   const found = wordsOf(speaker, finding);
   const at = nowOf(speaker, facts);
   standing.saidAt = at;
-  const words = found.cause === 'unknown' ? { ...found, cause: standing.cause } : found;
+  const words = found.cause.startsWith('unknown') ? { ...found, cause: standing.cause } : found;
   const { alarmClass, priority, cause } = standing;
   if (words.cause === cause && words.priority === priority && words.alarmClass === alarmClass) return undefined;
   Object.assign(standing, words);

@@ -1,3 +1,4 @@
+import { fitsSpeed } from '../control/speed-tolerance.ts';
 import type { Facts } from '../detectors/facts.ts';
 import { silenceLimitMs } from '../detectors/link/link-tracker.ts';
 import { DAY_MS, MINUTE_MS, weekdayOf } from '../time/local-time.ts';
@@ -25,10 +26,17 @@ export function foldReading(parts: PumpParts, { reading, single }: PumpEvent & {
   const before = seen ? previous.closedInputs : undefined;
   inputs.read({ at: reading.at, closed: reading.closedInputs, before, gap, elapsedMs, localDay, localMinute });
   load.read(reading, facts.control, gap ? 0 : elapsedMs, gap);
-  link.read(reading.at, seen ? previous.at : 0, gap);
+  link.read(reading.at, seen ? previous.at : 0, gap, isRunningOn(facts));
   parts.motorClock.read(facts);
   runs.push(reading, facts.control);
   if (isUnprimed(facts)) runs.flag('unprimed');
+}
+
+/** Turning, and not as a motor does that has just been switched on. */
+function isRunningOn({ reading, context, control }: Facts): boolean {
+  const { prime } = context.settings;
+  if (prime === null || control.standing || reading.reportedSource === 'prime') return false;
+  return reading.rpm > 0.9 * control.due.rpm && control.due.rpm > 0 && !fitsSpeed(reading.rpm, prime.rpm);
 }
 
 /** Every start is unprimed for a while; it says something once the prime is over, or after the pump had load. */

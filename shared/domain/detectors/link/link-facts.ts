@@ -17,6 +17,8 @@ export type LinkFacts = {
   bootedAt: number;
   /** Reconnected under the same boot, at its arrival; 0 = never. */
   resumedAt: number;
+  /** The device alone began anew, while the motor ran on, at its arrival; 0 = never. */
+  restartedAt: number;
   /** The last outages, oldest first. */
   outages: readonly Outage[];
   /** An outage ended with this reading. */

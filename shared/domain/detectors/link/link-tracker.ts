@@ -12,6 +12,7 @@ type LinkState = {
   boot: string;
   bootedAt: number;
   resumedAt: number;
+  restartedAt: number;
   /** A new boot since the last reading. */
   bootPending: boolean;
   outages: Json[];
@@ -26,6 +27,7 @@ const restingLink = (): LinkState => ({
   boot: '',
   bootedAt: 0,
   resumedAt: 0,
+  restartedAt: 0,
   bootPending: false,
   outages: [],
 });
@@ -42,8 +44,11 @@ export function silenceLimitMs({ intervalSeconds }: PumpContext): number {
 export type LinkTracker = {
   readonly facts: LinkFacts;
   readonly hear: (event: PumpEvent) => void;
-  /** A reading that is folded, after `hear`: `previousAt` is the device time of the one before it, 0 = none. */
-  readonly read: (at: number, previousAt: number, gap: boolean) => void;
+  /**
+   * A reading that is folded, after `hear`: `previousAt` is the device time of the one before it, 0 = none; `ranOn` =
+   * the motor turns at a speed other than its prime's, which it does not do just after power returned.
+   */
+  readonly read: (at: number, previousAt: number, gap: boolean, ranOn: boolean) => void;
   readonly save: () => Json;
 };
 
@@ -62,6 +67,7 @@ export function createLinkTracker(context: PumpContext, saved: unknown): LinkTra
     reportsBoots: false,
     bootedAt: 0,
     resumedAt: 0,
+    restartedAt: 0,
     outages: state.outages.flatMap(parseOutage),
     outageEnded: false,
   };
@@ -79,8 +85,14 @@ export function createLinkTracker(context: PumpContext, saved: unknown): LinkTra
       if (event.kind === 'status') hearStatus(state, event);
       publish(facts, state);
     },
-    read: (at, previousAt, gap) => {
+    read: (at, previousAt, gap, ranOn) => {
       facts.outageEnded = previousAt !== 0 && (gap || state.bootPending);
+      if (state.bootPending && ranOn) {
+        // The device began anew and the motor did not: it was no power cut.
+        state.restartedAt = state.bootedAt;
+        facts.restartedAt = state.bootedAt;
+        state.bootPending = false;
+      }
       if (facts.outageEnded) {
         const outage: Outage = { from: previousAt, to: at, booted: state.bootPending };
         facts.outages = [...facts.outages, outage].slice(-KEPT_OUTAGES);
@@ -116,6 +128,7 @@ function publish(facts: LinkFacts, state: LinkState): void {
   facts.reportsBoots = state.boot !== '';
   facts.bootedAt = state.bootedAt;
   facts.resumedAt = state.resumedAt;
+  facts.restartedAt = state.restartedAt;
 }
 
 function parseOutage(value: Json): Outage[] {

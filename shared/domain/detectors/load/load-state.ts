@@ -19,10 +19,14 @@ export type LoadState = {
   judgedRpm: number;
   judgedWatts: number;
   primedOnce: boolean;
+  /** Load came for a moment and went; and it went for good. */
+  brief: boolean;
   caught: boolean;
   /** 0 no, 1 yes, 2 not judged. */
   primed: number;
   primeSeconds: number;
+  /** Load over usual load of late, while it had load: 1 = as usual. */
+  lately: number;
   failedTries: number;
   firstTryAt: number;
   /** The stretch being learnt, not yet part of a band. */
@@ -49,9 +53,11 @@ export const restingLoad = (): LoadState => ({
   judgedRpm: 0,
   judgedWatts: 0,
   primedOnce: false,
+  brief: false,
   caught: false,
   primed: 2,
   primeSeconds: 0,
+  lately: 1,
   failedTries: 0,
   firstTryAt: 0,
   learningRpm: 0,

@@ -10,7 +10,7 @@ import { restingLoad } from './load-state.ts';
 import { createPrimeTeacher } from './prime-teacher.ts';
 import { HALFWAY_SHARE, primedWattsAt, ROUGH_SHARE } from './primed-watts.ts';
 import { forgetSmoothing, raggednessOf, smoothWatts } from './smooth-watts.ts';
-import { endTry, judgeLoad, startTry, type TryLimits } from './track-prime.ts';
+import { endTry, followLately, judgeLoad, startTry, type TryLimits, unloadedShare } from './track-prime.ts';
 
 const SPEED_STEP_RPM = 20;
 
@@ -69,7 +69,7 @@ export function createLoadTracker(context: PumpContext, limits: TryLimits, hot: 
     const estimate = estimateAt(reading.rpm);
     facts.basis = estimate.basis;
     facts.primedWatts = estimate.watts;
-    facts.unloadedBelow = estimate.unloadedBelow;
+    facts.unloadedBelow = unloadedShare(state, estimate.unloadedBelow);
     facts.usualRaggedness = estimate.usualRaggedness;
     facts.ratio = estimate.basis === 'none' ? Number.NaN : state.smoothWatts / estimate.watts;
     // While the shaft slows down its watts tell of the drive, not of the water: two readings at one speed are judged.
@@ -79,10 +79,12 @@ export function createLoadTracker(context: PumpContext, limits: TryLimits, hot: 
       state.judgedWatts = Math.round(state.smoothWatts);
     }
     if (isSettled && judgeLoad(state, reading.at, facts.ratio, facts.unloadedBelow) && state.startSeen) bump();
+    if (isSettled) followLately(state, facts.ratio, elapsedMs);
     if (teacher.follow(reading, control, state)) bump();
     if (learnReading(state, bands, reading, control, elapsedMs, facts)) bump();
   }
 
+  publish(facts, state);
   return {
     facts,
     read: (reading, control, elapsedMs, gap) => {
@@ -90,7 +92,7 @@ export function createLoadTracker(context: PumpContext, limits: TryLimits, hot: 
       if (reading.rpm > STANDSTILL_RPM) run(reading, control, elapsedMs, gap);
       else {
         if (state.running && keepLearning(state, bands)) bump();
-        endTry(state, reading.at, context.settings.prime?.seconds ?? 0, limits, facts.basis !== 'none');
+        endTry(state, reading.at, context.settings.prime?.seconds ?? 0, limits);
         facts.ratio = Number.NaN;
       }
       publish(facts, state);

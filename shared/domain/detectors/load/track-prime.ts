@@ -8,6 +8,8 @@ export type TryLimits = { readonly shortestTrySeconds: number; readonly longestT
 const SETTLED_MS = 20_000;
 /** Load that lasted less than this after a start was no prime, ms. */
 const CAUGHT_MS = 60_000;
+/** Load that only wavers about the limit was not lost. */
+const CLEARLY_BELOW = 0.1;
 /** A failed try is forgotten when no start follows within a day. */
 const TRY_MEMORY_MS = 86_400_000;
 
@@ -22,20 +24,21 @@ export function startTry(state: LoadState, at: number, seen: boolean): void {
   state.unloadedSince = 0;
   state.primedOnce = false;
   state.caught = false;
+  state.brief = false;
   state.primed = 2;
   state.primeSeconds = 0;
   forgetSmoothing(state);
 }
 
 /** The shaft stands. A try that was judged and never carried load counts as failed. */
-export function endTry(state: LoadState, at: number, primeSeconds: number, limits: TryLimits, judged: boolean): void {
+export function endTry(state: LoadState, at: number, primeSeconds: number, limits: TryLimits): void {
   if (!state.running) {
     if (state.stoppedAt === 0) state.stoppedAt = at;
     return;
   }
   const { shortestTrySeconds, longestTrySeconds } = limits;
   const enough = Math.min(longestTrySeconds, Math.max(shortestTrySeconds, primeSeconds)) * 1000;
-  if (judged && !state.primedOnce && state.unloadedSince !== 0 && at - state.startedAt >= enough) {
+  if (!state.primedOnce && state.unloadedSince !== 0 && at - state.startedAt >= enough) {
     state.failedTries += 1;
     if (state.firstTryAt === 0) state.firstTryAt = state.startedAt;
   }
@@ -46,6 +49,24 @@ export function endTry(state: LoadState, at: number, primeSeconds: number, limit
   state.unloadedSince = 0;
 }
 
+/** A basket fills and a filter clogs over minutes and hours: load that fell so slowly is no lost prime. */
+const LATELY_MS = 20 * 60_000;
+const LEAST_LATELY = 0.72;
+
+/**
+ * The share of its usual load below which a wet end moves air: of the load it had lately, where that has fallen
+ * slowly, but never under half.
+ */
+export function unloadedShare({ lately }: LoadState, share: number): number {
+  return share * Math.min(1, Math.max(LEAST_LATELY, lately));
+}
+
+/** Follows the load while there is one; elapsed ms. */
+export function followLately(state: LoadState, ratio: number, elapsedMs: number): void {
+  if (state.primed !== 1 || !(ratio > 0)) return;
+  state.lately += (elapsedMs / (elapsedMs + LATELY_MS)) * (ratio - state.lately);
+}
+
 /** Judges one reading after the ramp; answers whether this start has just been seen to prime. */
 export function judgeLoad(state: LoadState, at: number, ratio: number, unloadedBelow: number): boolean {
   if (!(ratio >= 0)) {
@@ -54,7 +75,8 @@ export function judgeLoad(state: LoadState, at: number, ratio: number, unloadedB
   }
   if (ratio < unloadedBelow) {
     // Load that came for a moment and went is no prime.
-    if (state.loadedSince !== 0 && at - state.loadedSince < CAUGHT_MS) {
+    if (state.loadedSince !== 0) state.brief = at - state.loadedSince < CAUGHT_MS;
+    if (state.brief && ratio < unloadedBelow - CLEARLY_BELOW) {
       state.caught = true;
       state.primedOnce = false;
     }

@@ -43,7 +43,7 @@ function takeEdge(state: State, facts: Facts, index: number, parameters: Paramet
     const move = moveOf(track);
     const cut = move === undefined ? 0 : cutMinutesOf(move, facts.link);
     track.shifted = isShifted(track, cut > 0 ? parameters.edgesAfterCut : parameters.edges, parameters);
-    if (track.shifted) track.cause = causeOf(track, facts, cut);
+    if (track.shifted) track.cause = causeOf(track, cut);
   }
 }
 
@@ -103,14 +103,11 @@ function moveOf(track: ShiftTrack) {
 }
 
 /** Known causes first; then a slow walk is drift, and a step is trippers that somebody moved. */
-function causeOf(track: ShiftTrack, { context }: Facts, cut: number): string {
+function causeOf(track: ShiftTrack, cut: number): string {
   const move = moveOf(track);
   if (move !== undefined && isDaylightSaving(move)) return 'daylight-saving';
   if (cut > 0) return 'power-cut';
-  if (track.walks) return 'drift';
-  const ownCircuit = context.inputs.find(({ number }) => number === track.input)?.circuit === 'own';
-  // A dial on a breaker of its own may have stood still without the pump's noticing.
-  return ownCircuit && shiftOf(track) > 0 ? 'unknown' : 'trippers-moved';
+  return track.walks ? 'drift' : 'trippers-moved';
 }
 
 function describe({ tracks }: State, facts: Facts): Finding {

@@ -1,10 +1,11 @@
-import { defineDetector, type Finding } from '../define-detector.ts';
+import { defineDetector, type Finding, type Spoken } from '../define-detector.ts';
 import type { RuleParameters } from '../detector-parameters.ts';
 import type { Facts } from '../facts.ts';
 import { ABNORMAL, type Judgement, NORMAL, UNJUDGED } from '../judgement.ts';
-import { rankPrimeCauses } from './prime-causes.ts';
+import { type PrimeCause, rankPrimeCauses } from './prime-causes.ts';
 
-type State = Record<string, never>;
+/** The cause that was found, how much spoke for it, and the start in which it was found. */
+type State = { cause: string; weight: number; startedAt: number };
 type Parameters = RuleParameters<'failed-prime'>;
 
 /**
@@ -36,14 +37,29 @@ function trySeconds(primeSeconds: number, { shortestTrySeconds, longestTrySecond
   return Math.min(longestTrySeconds, Math.max(shortestTrySeconds, primeSeconds));
 }
 
+/** A better sign may change the first finding, the same sign a little weaker or stronger does not. */
+const BETTER_BY = 1.5;
+
+function settleCause(state: State, { load }: Facts, ranked: readonly PrimeCause[], raised: boolean): string {
+  const [first] = ranked;
+  if (!raised || (first !== undefined && first.weight >= state.weight + BETTER_BY && load.primed === false)) {
+    state.cause = first?.cause ?? 'unknown';
+    state.weight = first?.weight ?? 0;
+    state.startedAt = load.startedAt;
+  }
+  // Load that came after all, in the same run and with nobody's help: it had the whole lift to draw.
+  const cameByItself = load.primed === true && load.startedAt === state.startedAt && state.cause === 'air-leak';
+  return cameByItself ? 'drained-back' : state.cause;
+}
+
 /** The figures of the last moment that was judged: a shaft that slows down after a try tells of nothing. */
-function describe(_: State, facts: Facts): Finding {
+function describe(state: State, facts: Facts, _: Parameters, { raised }: Spoken): Finding {
   const { load } = facts;
   const primedWatts = load.wattsAt(load.judgedRpm);
   const ranked = rankPrimeCauses(facts);
   const from = load.firstTryAt === 0 ? load.startedAt : load.firstTryAt;
   return {
-    cause: ranked[0]?.cause ?? 'unknown',
+    cause: settleCause(state, facts, ranked, raised),
     ...(from === 0 ? {} : { from }),
     evidence: {
       tries: load.failedTries + (load.running ? 1 : 0),
@@ -62,7 +78,8 @@ function describe(_: State, facts: Facts): Finding {
 export const failedPrime = defineDetector<'failed-prime', State>({
   detector: 'failed-prime',
   hears: ['reading'],
-  initial: () => ({}),
+  looksAgainOnReturn: true,
+  initial: () => ({ cause: 'unknown', weight: 0, startedAt: 0 }),
   judge,
   describe,
 });

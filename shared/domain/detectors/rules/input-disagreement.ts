@@ -18,7 +18,7 @@ function judge(state: State, facts: Facts): Judgement {
   if (control.standing || !control.rampOver || isPriming(facts)) return UNJUDGED;
   if (activeInput === 0) return stands('input-disagreement') ? UNJUDGED : NORMAL;
   if (isWinningInput(context.settings.inputs, closed, activeInput)) {
-    return stands('input-disagreement') && (closed & state.closed) !== state.closed ? UNJUDGED : NORMAL;
+    return stands('input-disagreement') && closed !== state.closed ? UNJUDGED : NORMAL;
   }
   const follows = fitsSpeed(rpm, inputSpeed(context.settings.inputs, activeInput));
   const obeysLower = (closed & (1 << (activeInput - 1))) !== 0;

@@ -1,6 +1,6 @@
 import type { InputDuty } from '#shared/domain/control/pump-context.ts';
 import { zoneOffsetAt } from '#shared/domain/time/zone-offset.ts';
-import { defineDetector, type Finding } from '../define-detector.ts';
+import { defineDetector, type Finding, type Spoken } from '../define-detector.ts';
 import type { RuleParameters } from '../detector-parameters.ts';
 import type { Facts } from '../facts.ts';
 import type { KnownWindow } from '../inputs/known-window.ts';
@@ -18,7 +18,7 @@ type Due = {
   misses: number;
   missedAt: number;
 };
-type State = { dues: Due[]; nextCheckAt: number; missing: number; changes: number };
+type State = { dues: Due[]; nextCheckAt: number; missing: number; all: boolean; changes: number };
 type Parameters = RuleParameters<'missing-input'>;
 
 const MINUTE_MS = 60_000;
@@ -163,14 +163,15 @@ function forgiveClosed(state: State, closedSince: readonly number[]): void {
   }
 }
 
-function describe(state: State, facts: Facts): Finding {
+function describe(state: State, facts: Facts, _: Parameters, { raised }: Spoken): Finding {
   const missed = state.dues.filter(({ misses }) => misses > 0);
   const worst = missed.find(({ input }) => (state.missing & (1 << (input - 1))) !== 0) ?? missed[0];
   const inputs = new Set(state.dues.map(({ input }) => input));
   const missedInputs = new Set(missed.map(({ input }) => input));
-  const all = inputs.size > 1 && missedInputs.size === inputs.size;
+  // One that comes back before the other does not change what kept both away.
+  state.all = (raised && state.all) || (inputs.size > 1 && missedInputs.size === inputs.size);
   return {
-    cause: all ? 'all-inputs' : 'one-input',
+    cause: state.all ? 'all-inputs' : 'one-input',
     ...(worst === undefined ? {} : { from: Math.min(...missed.map(({ missedAt }) => missedAt)) }),
     evidence: {
       input: worst?.input ?? null,
@@ -186,7 +187,7 @@ export const missingInput = defineDetector<'missing-input', State>({
   detector: 'missing-input',
   hears: ['reading'],
   learntVersion: ({ changes }) => changes,
-  initial: () => ({ dues: [], nextCheckAt: 0, missing: 0, changes: 0 }),
+  initial: () => ({ dues: [], nextCheckAt: 0, missing: 0, all: false, changes: 0 }),
   judge,
   delaySeconds: () => 0,
   describe,

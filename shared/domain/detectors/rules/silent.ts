@@ -37,11 +37,12 @@ function describe(_: State, facts: Facts, parameters: Parameters, { raised, from
 }
 
 /**
- * What came back tells: a new boot means lost power, the same boot or readings from the silence a lost link. While
+ * What came back tells: a new boot means lost power, unless the motor ran on meanwhile; the same boot or readings from the silence a lost link. While
  * nothing comes, a device still connected is at fault itself; else nobody can tell but the neighbours.
  */
 function causeOf({ link, reading }: Facts, since: number): string {
   if (link.lastWordAt > since) {
+    if (link.restartedAt > since) return 'device';
     if (link.bootedAt > since) return 'power';
     const toldOfSilence = reading.at > since && reading.at < link.heardSince - 60_000;
     return link.resumedAt > since || toldOfSilence ? 'link' : 'unknown';

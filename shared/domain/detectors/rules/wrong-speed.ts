@@ -1,7 +1,7 @@
 import { speedTolerance } from '#shared/domain/control/speed-tolerance.ts';
 import { inputSpeed, listClosedInputs } from '#shared/domain/control/winning-input.ts';
 import { isNearSuspectEdge } from '../clocks/motor-clock-tracker.ts';
-import { defineDetector, type Finding } from '../define-detector.ts';
+import { defineDetector, type Finding, type Spoken } from '../define-detector.ts';
 import type { RuleParameters } from '../detector-parameters.ts';
 import type { Facts } from '../facts.ts';
 import { ABNORMAL, type Judgement, NORMAL, UNJUDGED } from '../judgement.ts';
@@ -9,7 +9,7 @@ import { obeysOpenInput } from './unexpected-run.ts';
 import { followedInput, wrongSpeedCause } from './wrong-speed-cause.ts';
 
 /** Off the expected speed, and in which situation: only the same situation can show that it is cured. */
-type State = { off: boolean; situation: number };
+type State = { off: boolean; situation: number; cause: string };
 
 const OF_PROGRAM = 50;
 const OF_OTHERS = 51;
@@ -62,11 +62,13 @@ function delaySeconds(_: State, facts: Facts, parameters: RuleParameters<'wrong-
   return hidden ? parameters.withoutSourceSeconds : parameters.delaySeconds;
 }
 
-function describe(_: State, facts: Facts, parameters: RuleParameters<'wrong-speed'>): Finding {
+function describe(state: State, facts: Facts, parameters: RuleParameters<'wrong-speed'>, { raised }: Spoken): Finding {
   const { reading, control, context } = facts;
+  // What another situation looks like says nothing of this alarm's.
+  if (!raised || isSameSituation(state, facts)) state.cause = wrongSpeedCause(facts, parameters);
   const followed = followedInput(facts);
   return {
-    cause: wrongSpeedCause(facts, parameters),
+    cause: state.cause,
     evidence: {
       measuredRpm: reading.rpm,
       expectedRpm: control.due.rpm,
@@ -86,7 +88,7 @@ function describe(_: State, facts: Facts, parameters: RuleParameters<'wrong-spee
 export const wrongSpeed = defineDetector<'wrong-speed', State>({
   detector: 'wrong-speed',
   hears: ['reading'],
-  initial: () => ({ off: false, situation: 0 }),
+  initial: () => ({ off: false, situation: 0, cause: 'unknown-speed' }),
   judge,
   delaySeconds,
   describe,

@@ -31,13 +31,15 @@ describe('silent', () => {
   });
 
   it.each([
-    ['power', 'b2'],
-    ['link', 'b1'],
-  ])('learns %s from the boot that comes back', (cause, boot) => {
+    ['power', 'b2', { rpm: 0, reportedSource: 'off' as const }],
+    ['link', 'b1', {}],
+    ['device', 'b2', {}],
+  ])('learns %s from what comes back', (cause, boot, first) => {
     const player = connected();
     player.push({ kind: 'status', receivedAt: player.at, status: { state: 'lost', connection: 'c1' } });
     player.silence(2 * HOUR);
     player.push({ kind: 'status', receivedAt: player.at, status: online(boot, 'c2') });
+    player.play(10_000, first);
     player.play(20 * MINUTE, goodDay());
 
     expect(player.signals.find((signal) => signal.type === 'changed')).toMatchObject({ detector: 'silent', cause });
