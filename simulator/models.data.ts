@@ -80,5 +80,4 @@ export const MOTOR_DRIVES = {
   },
 } as const satisfies Record<string, MotorDrive>;
 
-export type WetEndModelName = keyof typeof WET_ENDS;
 export type MotorModelName = keyof typeof MOTOR_DRIVES;

@@ -2,7 +2,7 @@ import type { MotorSettings, ProgramEntry } from '#shared/domain/control/motor-s
 import { isJsonObject, type JsonObject, parseJsonText } from './json-text.ts';
 import { formatDays, formatMinuteOfDay, parseDays, parseMinuteOfDay } from './wall-time.ts';
 
-export type { MotorSettings, ProgramEntry };
+export type { MotorSettings };
 
 export const SETTINGS_FIELDS = ['inputs', 'program', 'prime', 'timed', 'freeze', 'max', 'min'] as const;
 export type SettingsField = (typeof SETTINGS_FIELDS)[number];

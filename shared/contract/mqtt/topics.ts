@@ -4,9 +4,6 @@ export const SERIAL_PATTERN = /^[A-Z0-9][A-Z0-9-]{5,31}$/;
 export const TOPIC_KINDS = ['readings', 'status', 'settings', 'notice'] as const;
 export type TopicKind = (typeof TOPIC_KINDS)[number];
 
-/** What a device publishes; `notice` is the one it listens to. */
-export const DEVICE_PUBLISHES: readonly TopicKind[] = ['readings', 'status', 'settings'];
-
 export type DeviceTopic = { readonly shard: number; readonly serial: string; readonly kind: TopicKind };
 
 const TOPIC_PATTERN = /^millrace\/v1\/([0-3][0-9a-f])\/([A-Z0-9][A-Z0-9-]{5,31})\/(readings|status|settings|notice)$/;

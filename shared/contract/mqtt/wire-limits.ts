@@ -25,6 +25,3 @@ export const REPORT_SPEED_STEP_RPM = 50;
 
 /** A contact must hold this long before the device believes it, ms. */
 export const CONTACT_DEBOUNCE_MS = 250;
-
-/** Seconds between the readings of a steady pump. */
-export const READING_INTERVAL_SECONDS = { min: 5, max: 60, usual: 10 } as const;
