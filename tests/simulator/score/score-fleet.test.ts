@@ -39,7 +39,7 @@ describe('createScoreFleet', () => {
 
   it('deals faults one at a time on a pump, after a week to learn, and leaves a third of the pumps well', () => {
     const { fleet, truth } = createScoreFleet(OPTIONS);
-    for (const member of fleet.members) member.advance(FROM + 40 * DAY, () => undefined);
+    for (const member of fleet.members) member.advance(FROM + 40 * DAY);
     const rows = truth.rows();
     const serials = new Set(rows.map(({ s }) => s));
 
