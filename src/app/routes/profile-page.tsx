@@ -1,5 +1,6 @@
 import { useNavigate } from 'react-router-dom';
 import { Button } from '#src/components/ui/button.tsx';
+import { FactList } from '#src/components/ui/fact-list.tsx';
 import { PageHeading } from '#src/components/ui/page-heading.tsx';
 import { Sheet } from '#src/components/ui/sheet.tsx';
 import { PreferencesForm } from '#src/features/session/preferences-form.tsx';
@@ -33,14 +34,9 @@ export function ProfilePage() {
     <div className="mx-auto flex max-w-4xl flex-col gap-5 px-4 py-6 sm:px-7">
       <PageHeading title={t('profile.page')}>{user.name}</PageHeading>
       <Sheet>
-        <dl className="grid grid-cols-[auto_1fr] gap-x-6 gap-y-1.5 px-5 py-4">
-          {facts.map(([name, value]) => (
-            <div key={name} className="contents">
-              <dt className="text-ink-2">{name}</dt>
-              <dd>{value}</dd>
-            </div>
-          ))}
-        </dl>
+        <div className="px-5 py-4">
+          <FactList facts={facts} />
+        </div>
       </Sheet>
       <Sheet
         id="preferences"

@@ -79,6 +79,7 @@ export const FleetRow = memo(function FleetRow(props: FleetRowProps) {
           topRpm={Math.max(USUAL_TOP_RPM, row.settings.maxRpm)}
           zone={companyZone}
         />
+        {strip.failed ? <p className="absolute top-1 left-2 text-13 text-ink-2">{t('strip.failed')}</p> : null}
         <CursorLine cursor={cursor} window={window} />
         <button
           type="button"

@@ -5,6 +5,7 @@ import { alignWindow, type TimeWindow } from './align-window.ts';
 import { loadStrip } from './load-strip.ts';
 
 const KEY = 'pumps';
+const FAILED_AGAIN_MS = 15_000;
 
 export const pumpQueries = {
   all: () => [KEY] as const,
@@ -26,6 +27,8 @@ export const pumpQueries = {
     return queryOptions({
       queryKey: [KEY, 'strip', pumpId, from, until] as const,
       queryFn: () => loadStrip(pumpId, { from, until }),
+      // A row of the wall has no button to try again with.
+      refetchInterval: ({ state }) => (state.status === 'error' ? FAILED_AGAIN_MS : false),
       placeholderData: keepPreviousData,
     });
   },

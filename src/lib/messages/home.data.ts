@@ -15,7 +15,6 @@ export const HOME_MESSAGES = {
   'home.today': 'Today at {pad}',
   'home.day': '{day} at {pad}',
   'home.which': 'Which pump',
-  'home.strip': 'How your pump ran',
   'home.strip.hint': 'Point at the strip, or move its time with the arrow keys, to see why your pump ran as it did.',
   'home.lately': 'What happened lately',
   'home.lately.none': 'Nothing out of the ordinary in the last week.',

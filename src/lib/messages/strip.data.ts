@@ -13,6 +13,7 @@ export const STRIP_MESSAGES = {
   'strip.expected': 'Expected rpm',
   'strip.watts': 'Watts',
   'strip.now': 'now',
+  'strip.failed': 'The runs could not be read. The page tries again by itself.',
   'strip.empty': 'No runs in this time.',
   'strip.cursor': 'Time under the cursor',
   'strip.source.program': 'Program',

@@ -146,7 +146,7 @@ describe('a row’s table', () => {
     await button.focus();
     await opened.page.keyboard.press('Enter');
     const dialog = opened.page.getByRole('dialog');
-    expect(await dialog.getByRole('row').count()).toBeGreaterThan(4);
+    await expect.poll(() => dialog.getByRole('row').count()).toBeGreaterThan(4);
     expect(await dialog.textContent()).toContain('Prime');
     await opened.page.keyboard.press('Escape');
     expect(await button.evaluate((element) => element === document.activeElement)).toBe(true);
