@@ -9,7 +9,7 @@ const DELAYS = [1_000, 2_000, 4_000, 8_000, 16_000, 30_000];
 /** A child that lived this long has got over whatever killed it. */
 const HEALTHY_AFTER_MS = 60_000;
 
-/** How often somebody who waits hears that nothing hangs. */
+/** How long somebody who waits hears nothing before they are told that nothing hangs. */
 const PATIENCE_MS = 15_000;
 
 /**
@@ -30,8 +30,12 @@ const PATIENCE_MS = 15_000;
  */
 export function keepRunning(plan, { onSpawn = () => undefined, delays = DELAYS } = {}) {
   const stopping = new AbortController();
+  let heardAt = performance.now();
   /** @param {string} text */
-  const tell = (text) => say(`  ${text}`);
+  const tell = (text) => {
+    heardAt = performance.now();
+    say(`  ${text}`);
+  };
   const begin = () => {
     const child = startChild(plan, tell);
     const started = performance.now();
@@ -60,9 +64,11 @@ export function keepRunning(plan, { onSpawn = () => undefined, delays = DELAYS }
 
   async function untilReady() {
     const began = performance.now();
+    let where = plan.logFile ? `; its log: ${plan.logFile}` : '';
     const patience = setInterval(() => {
-      const where = plan.logFile ? `; its log: ${plan.logFile}` : '';
-      tell(`${plan.name}: still working (${Math.round((performance.now() - began) / 1000)} s)${where}`);
+      if (performance.now() - heardAt < PATIENCE_MS) return;
+      say(`  ${plan.name}: still working (${Math.round((performance.now() - began) / 1000)} s)${where}`);
+      where = '';
     }, PATIENCE_MS);
     const end = await current.settled.finally(() => clearInterval(patience));
     if (end && !stopping.signal.aborted) throw refusal(`${plan.name} ${end.reason} before it was ready:\n${end.words}`);

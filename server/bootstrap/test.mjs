@@ -32,7 +32,8 @@ function runVitest(args, runFolder, life) {
   return new Promise((resolve) => {
     const child = spawn(process.execPath, [vitest, 'run', ...reports, ...args], {
       cwd: project,
-      env: { ...process.env, MILLRACE_TEST_RUN: runFolder },
+      // What a test leaves among the temporary files goes with the run.
+      env: { ...process.env, MILLRACE_TEST_RUN: runFolder, TMPDIR: runFolder },
       stdio: ['ignore', 'inherit', 'inherit'],
       detached: true,
     });
