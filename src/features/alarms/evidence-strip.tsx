@@ -4,6 +4,7 @@ import { StripAxis } from '#src/components/charts/strip/strip-axis.tsx';
 import { StripCanvas } from '#src/components/charts/strip/strip-canvas.tsx';
 import { USUAL_TOP_RPM } from '#src/components/charts/strip/strip-metrics.ts';
 import type { StripState, StripWindow } from '#src/components/charts/strip/strip-run.ts';
+import { withSilence } from '#src/components/charts/strip/with-silence.ts';
 import { useElementWidth } from '#src/hooks/use-element-width.ts';
 import { t } from '#src/lib/messages/t.ts';
 import { unprimedSince } from '#src/lib/unprimed-since.ts';
@@ -36,7 +37,7 @@ export function EvidenceStrip({ alarm, now, StripSource }: EvidenceStripProps) {
           <StripCanvas
             size="row"
             width={width}
-            runs={strip.runs ?? []}
+            runs={withSilence(strip.runs, alarm.detector === 'silent' && alarm.returnedAt === null ? alarm.from : null)}
             planned={strip.planned}
             window={window}
             now={now}

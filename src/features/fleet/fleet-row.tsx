@@ -1,10 +1,11 @@
-import { memo, useState } from 'react';
+import { memo, useMemo, useState } from 'react';
 import { Link } from 'react-router-dom';
 import type { PumpRow } from '#shared/contract/http/pumps.ts';
 import { StripCanvas } from '#src/components/charts/strip/strip-canvas.tsx';
 import { USUAL_TOP_RPM } from '#src/components/charts/strip/strip-metrics.ts';
 import type { StripState, StripWindow } from '#src/components/charts/strip/strip-run.ts';
 import { CursorLine, type CursorStore } from '#src/components/charts/strip/time-cursor.tsx';
+import { withSilence } from '#src/components/charts/strip/with-silence.ts';
 import { type MarkKind, PriorityMark } from '#src/components/ui/priority-mark.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
 import { t } from '#src/lib/messages/t.ts';
@@ -39,8 +40,9 @@ export const FleetRow = memo(function FleetRow(props: FleetRowProps) {
   const { row, strip, window, width, companyZone, now, cursor, continues } = props;
   const format = useFormat();
   const [table, setTable] = useState(false);
+  const runs = useMemo(() => withSilence(strip.runs, row.silentSince), [strip.runs, row.silentSince]);
   const view = viewRow(row, format, now);
-  const then = useInstantView(row, strip, cursor, now);
+  const then = useInstantView(row, runs, cursor, now);
   const name = row.pumpName === '' ? row.padName : `${row.padName}, ${row.pumpName}`;
   return (
     <div
@@ -70,7 +72,7 @@ export const FleetRow = memo(function FleetRow(props: FleetRowProps) {
         <StripCanvas
           size="row"
           width={width}
-          runs={strip.runs ?? []}
+          runs={runs}
           planned={strip.planned}
           window={window}
           now={now}
@@ -105,7 +107,7 @@ export const FleetRow = memo(function FleetRow(props: FleetRowProps) {
         />
       </div>
       {table ? (
-        <RowRunsDialog name={name} runs={strip.runs ?? []} zone={row.zone} now={now} onClose={() => setTable(false)} />
+        <RowRunsDialog name={name} runs={runs} zone={row.zone} now={now} onClose={() => setTable(false)} />
       ) : null}
     </div>
   );

@@ -1,6 +1,7 @@
 import { useSyncExternalStore } from 'react';
 import type { PumpRow } from '#shared/contract/http/pumps.ts';
-import { runAt, type StripState } from '#src/components/charts/strip/strip-run.ts';
+import type { Run } from '#shared/contract/http/runs.ts';
+import { runAt } from '#src/components/charts/strip/strip-run.ts';
 import type { CursorStore } from '#src/components/charts/strip/time-cursor.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
 import { whyThenShort } from '#src/lib/why/why.ts';
@@ -15,14 +16,14 @@ const NO_FIGURE = '–';
  */
 export function useInstantView(
   row: PumpRow,
-  strip: StripState,
+  runs: readonly Run[],
   cursor: CursorStore,
   now: number,
 ): InstantView | undefined {
   const format = useFormat();
   const run = useSyncExternalStore(cursor.subscribe, () => {
     const at = cursor.get();
-    return at === undefined || strip.runs === undefined ? undefined : runAt(strip.runs, at, now);
+    return at === undefined ? undefined : runAt(runs, at, now);
   });
   const at = cursor.get();
   if (run === undefined || at === undefined) return undefined;

@@ -1,4 +1,4 @@
-import { useCallback } from 'react';
+import { useCallback, useMemo } from 'react';
 import type { PumpRow } from '#shared/contract/http/pumps.ts';
 import type { Voice } from '#shared/domain/control/explain-options.ts';
 import { DayStrip } from '#src/components/charts/strip/day-strip.tsx';
@@ -6,6 +6,7 @@ import { RunTable } from '#src/components/charts/strip/run-table.tsx';
 import { type StripSize, USUAL_TOP_RPM } from '#src/components/charts/strip/strip-metrics.ts';
 import type { StripRun, StripState } from '#src/components/charts/strip/strip-run.ts';
 import type { CursorStore } from '#src/components/charts/strip/time-cursor.tsx';
+import { withSilence } from '#src/components/charts/strip/with-silence.ts';
 import { TableToggle } from '#src/components/ui/table-toggle.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
 import { t } from '#src/lib/messages/t.ts';
@@ -30,8 +31,9 @@ export type PumpDayProps = {
 };
 
 /** A pump's day: the strip, the sentence for the instant under the cursor, and the table behind it. */
-export function PumpDay({ pump, strip, day, now, cursor, size, voice, idle }: PumpDayProps) {
+export function PumpDay({ pump, strip: read, day, now, cursor, size, voice, idle }: PumpDayProps) {
   const format = useFormat();
+  const strip = useMemo(() => ({ ...read, runs: withSilence(read.runs, pump.silentSince) }), [read, pump.silentSince]);
   const label = useCallback((run: StripRun) => labelRun(run, pump, format), [pump, format]);
   const describe = (at: number) => {
     const { figures, why } = instantWords({ pump, strip, at, now, format, voice });
@@ -40,13 +42,13 @@ export function PumpDay({ pump, strip, day, now, cursor, size, voice, idle }: Pu
   };
   const name = nameOfPump(pump);
   const table = t('strip.tableOf', { name });
-  const shown = (strip.runs ?? []).filter(({ from, to }) => from < day.until && (to ?? now) > day.from);
+  const shown = strip.runs.filter(({ from, to }) => from < day.until && (to ?? now) > day.from);
   return (
-    <div aria-busy={strip.runs === undefined} className="flex flex-col gap-2 px-4 pt-4 pb-3 sm:px-5">
+    <div aria-busy={read.runs === undefined} className="flex flex-col gap-2 px-4 pt-4 pb-3 sm:px-5">
       <DayStrip
         size={size}
         scaled={voice === 'technician'}
-        runs={strip.runs ?? []}
+        runs={strip.runs}
         planned={strip.planned}
         window={day}
         zone={pump.zone}

@@ -25,9 +25,9 @@ export function StripAxis({ window, zone, width, clearOf }: StripAxisProps) {
     <div aria-hidden="true" className="figures relative h-full text-13 text-ink-2">
       {listTicks(window, zone, width, LABEL_APART)
         .filter(({ x }) => x + LABEL_APART / 2 < width && isClear(x))
-        .map(({ at, x, hour }) => (
+        .map(({ at, x, minute }) => (
           <span key={at} className="absolute bottom-1.5 whitespace-nowrap pl-1" style={{ left: x }}>
-            {axisLabel({ at, hour }, window, zone, format)}
+            {axisLabel({ at, minute }, window, zone, format)}
           </span>
         ))}
     </div>

@@ -51,7 +51,7 @@ function axes({ window, zone, format, colours, width }: ChartSetting): uPlot.Axi
   const ticks = listTicks(window, zone, width - CHART_GUTTER, LABEL_APART);
   const grid = { stroke: colours.rule, width: 1 };
   const common = { stroke: colours.ink, font: FONT, grid, ticks: { show: false } };
-  const hourOf = new Map(ticks.map(({ at, hour }) => [at / 1000, hour]));
+  const minuteOf = new Map(ticks.map(({ at, minute }) => [at / 1000, minute]));
   return [
     {
       ...common,
@@ -59,7 +59,9 @@ function axes({ window, zone, format, colours, width }: ChartSetting): uPlot.Axi
       align: 1,
       splits: () => ticks.map(({ at }) => at / 1000),
       values: (_, splits) =>
-        splits.map((second) => axisLabel({ at: second * 1000, hour: hourOf.get(second) ?? 1 }, window, zone, format)),
+        splits.map((second) =>
+          axisLabel({ at: second * 1000, minute: minuteOf.get(second) ?? 1 }, window, zone, format),
+        ),
     },
     { ...common, size: CHART_GUTTER, values: (_, splits) => splits.map((value) => format.number(value)) },
   ];

@@ -17,25 +17,30 @@ const usual = dayOf(11, 1);
 
 describe('ticks', () => {
   it('stand at whole local hours, as many as there is room for', () => {
-    expect(listTicks(usual, ZONE, 960, 80).map(({ hour }) => hour)).toEqual([
+    expect(listTicks(usual, ZONE, 960, 80).map(({ minute }) => minute / 60)).toEqual([
       0, 2, 4, 6, 8, 10, 12, 14, 16, 18, 20, 22,
     ]);
-    expect(listTicks(usual, ZONE, 300, 80).map(({ hour }) => hour)).toEqual([0, 12]);
+    expect(listTicks(usual, ZONE, 300, 80).map(({ minute }) => minute / 60)).toEqual([0, 12]);
   });
 
   it('are right on the day with 23 hours and on the one with 25', () => {
     const short = listTicks(dayOf(2, 8), ZONE, 920, 80);
     expect(short.at(-1)?.x).toBeCloseTo((21 / 23) * 920, 5);
     const long = listTicks(dayOf(10, 1), ZONE, 1000, 120);
-    expect(long.map(({ hour }) => hour)).toEqual([0, 3, 6, 9, 12, 15, 18, 21]);
+    expect(long.map(({ minute }) => minute / 60)).toEqual([0, 3, 6, 9, 12, 15, 18, 21]);
     expect(long[1]?.x).toBeCloseTo((4 / 25) * 1000, 5);
   });
 
   it('are midnights where the paper is a week long, and strong rules with them', () => {
     const week = { from: usual.from - 6 * 24 * HOUR, until: usual.until };
-    expect(listTicks(week, ZONE, 900, 84).every(({ hour }) => hour === 0)).toBe(true);
+    expect(listTicks(week, ZONE, 900, 84).every(({ minute }) => minute === 0)).toBe(true);
     expect(listRules(week, ZONE, 900).strong).toHaveLength(7);
-    expect(listRules(usual, ZONE, 900).strong.map(({ hour }) => hour)).toEqual([0, 6, 12, 18]);
+    expect(listRules(usual, ZONE, 900).strong.map(({ minute }) => minute / 60)).toEqual([0, 6, 12, 18]);
+  });
+
+  it('are minutes where the paper is short', () => {
+    const short = { from: usual.from + 23 * HOUR, until: usual.until };
+    expect(listTicks(short, ZONE, 400, 84).map(({ minute }) => minute)).toEqual([1380, 1395, 1410, 1425]);
   });
 
   it('are none for a zone that nobody knows', () => {
@@ -48,14 +53,14 @@ describe('a tick’s label', () => {
   const german = createFormat({ locale: 'de-DE', preferences: { units: 'si', clock: 'locale' } });
 
   it('says midnight and noon to those who count to twelve', () => {
-    expect(axisLabel({ at: usual.from, hour: 0 }, usual, ZONE, american)).toBe('midnight');
-    expect(axisLabel({ at: usual.from + 12 * HOUR, hour: 12 }, usual, ZONE, american)).toBe('noon');
-    expect(axisLabel({ at: usual.from, hour: 0 }, usual, ZONE, german)).toBe('00:00');
+    expect(axisLabel({ at: usual.from, minute: 0 }, usual, ZONE, american)).toBe('midnight');
+    expect(axisLabel({ at: usual.from + 12 * HOUR, minute: 720 }, usual, ZONE, american)).toBe('noon');
+    expect(axisLabel({ at: usual.from, minute: 0 }, usual, ZONE, german)).toBe('00:00');
   });
 
   it('names days where there are several', () => {
     const week = { from: usual.from - 6 * 24 * HOUR, until: usual.until };
-    expect(axisLabel({ at: usual.from, hour: 0 }, week, ZONE, american)).toBe('Tue, Dec 1');
+    expect(axisLabel({ at: usual.from, minute: 0 }, week, ZONE, american)).toBe('Tue, Dec 1');
   });
 });
 
