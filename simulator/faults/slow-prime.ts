@@ -7,7 +7,7 @@ export const slowPrime: Fault = {
   slug: 'slow-prime',
   detector: 'slow-prime',
   cause: null,
-  story: 'The lid seal is drying out: it primes still, but takes six times as long.',
+  story: 'The lid seal is drying out: it primes still, but takes many times as long.',
   hours: [6 * 24, 12 * 24],
   needs: { stretches: 7 },
   also: [],
@@ -18,9 +18,9 @@ export const slowPrime: Fault = {
     suction.drainHours < 12 &&
     suction.restFill < 0.6 &&
     suction.primeSeconds >= 15 &&
-    suction.primeSeconds * 10 < settings.prime.seconds,
+    slownessOf(settings, suction.primeSeconds) >= 4,
   begin: (pump, at) => {
-    pump.conditions.suction.slowness = 6.5;
+    pump.conditions.suction.slowness = slownessOf(pump.spec.settings, pump.spec.suction.primeSeconds);
     disturbWater(pump, at);
   },
   end: (pump, at) => {
@@ -34,4 +34,9 @@ export const slowPrime: Fault = {
 function standsEveryNight({ program }: PumpSpec['settings']): boolean {
   const minutes = program.map(({ fromMinute, toMinute }) => (toMinute - fromMinute + 1440) % 1440 || 1440);
   return program.length === 1 && (minutes[0] ?? 1440) <= 1100;
+}
+
+/** So slow that a prime takes seven tenths of the time it is given. */
+function slownessOf({ prime }: PumpSpec['settings'], primeSeconds: number): number {
+  return (0.7 * (prime?.seconds ?? 0)) / primeSeconds;
 }
