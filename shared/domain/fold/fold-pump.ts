@@ -46,17 +46,17 @@ export function createPumpFold(
   saved?: SavedPumpFold,
   parameters: DetectorParameters = resolveParameters(),
 ): PumpFold {
-  return foldOf(createPumpParts(context, parameters, saved), []);
+  return foldOf(context, createPumpParts(context, parameters, saved), []);
 }
 
-function foldOf(parts: PumpParts, pending: AlarmSignal[]): PumpFold {
+function foldOf(commissioned: PumpContext, made: PumpParts, pending: AlarmSignal[]): PumpFold {
   let signals = pending;
-  const { facts } = parts;
+  let parts = made;
   return {
     push: (event) => {
       const before = signals.length;
-      takeIn(parts, event);
-      parts.bank.judge(facts, signals);
+      if (takeIn(parts, event)) parts = createPumpParts(commissioned, parts.parameters, parts.save());
+      else parts.bank.judge(parts.facts, signals);
       // What an alarm speaks of is no part of what is usual.
       for (let index = before; index < signals.length; index += 1)
         if (signals[index]?.type === 'raised') parts.load.discard();
@@ -66,16 +66,17 @@ function foldOf(parts: PumpParts, pending: AlarmSignal[]): PumpFold {
       signals = [];
       return output;
     },
-    now: () => (parts.seen() ? pumpNow(facts) : undefined),
-    highWater: () => (parts.seen() ? facts.reading.at : undefined),
-    silentSince: () => silentSinceOf(facts),
+    now: () => (parts.seen() ? pumpNow(parts.facts) : undefined),
+    highWater: () => (parts.seen() ? parts.facts.reading.at : undefined),
+    silentSince: () => silentSinceOf(parts.facts),
     save: () => parts.save(),
     withContext: (context, parameters = parts.parameters) =>
-      foldOf(createPumpParts(context, parameters, parts.save()), signals),
+      foldOf(context, createPumpParts(context, parameters, parts.save()), signals),
   };
 }
 
-function takeIn(parts: PumpParts, event: PumpEvent): void {
+/** Takes an event into the facts; answers whether the device's pace turned out to be another than was thought. */
+function takeIn(parts: PumpParts, event: PumpEvent): boolean {
   const { facts, link, pad } = parts;
   link.hear(event);
   facts.kind = event.kind;
@@ -87,11 +88,16 @@ function takeIn(parts: PumpParts, event: PumpEvent): void {
     facts.onSiteEndedAt = pad.onSiteEndedAt();
   }
   if (event.kind === 'settings') parts.hearSettings(event.settings);
-  if (event.kind !== 'reading') return;
+  if (event.kind !== 'reading') return false;
   const late = parts.seen() && event.reading.at <= facts.reading.at;
   // A late reading corrects history elsewhere; here it only says that the device is there.
-  if (late) facts.kind = 'time';
-  else foldReading(parts, event);
+  if (late) {
+    facts.kind = 'time';
+    return false;
+  }
+  const previousAt = parts.seen() ? facts.reading.at : event.reading.at;
+  foldReading(parts, event);
+  return parts.pace.read(event.reading.at - previousAt);
 }
 
 function silentSinceOf({ link, receivedAt, context }: Facts): number | undefined {

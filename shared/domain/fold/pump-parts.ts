@@ -16,6 +16,7 @@ import { createRunFold, type RunFold } from '../runs/create-run-fold.ts';
 import { type ControlCopy, copyAnswer } from './control-copy.ts';
 import { createPadTracker, type PadTracker } from './pad-tracker.ts';
 import { restoreReading, saveReading } from './reading-memory.ts';
+import { createReadingPace, type ReadingPace } from './reading-pace.ts';
 import { CONTROL_BEFORE_READINGS, READING_BEFORE_READINGS } from './resting-facts.ts';
 import type { SavedPumpFold } from './saved-pump-fold.ts';
 import { restoreSettings, saveSettings } from './settings-memory.ts';
@@ -34,6 +35,7 @@ export type PumpParts = {
   readonly pad: PadTracker;
   readonly runs: RunFold;
   readonly bank: DetectorBank;
+  readonly pace: ReadingPace;
   /** The stretch of one zone offset that holds the last reading. */
   readonly zone: { from: number; to: number; offsetMinutes: number };
   /** There has been a reading. */
@@ -42,14 +44,19 @@ export type PumpParts = {
   readonly save: () => { readonly hot: Json; readonly learnt: Json; readonly learntVersion: number };
 };
 
+/** Raised when what the rules remember changes its form: what another version remembered is then learnt anew. */
+const RULES_VERSION = 1;
+
 /** Builds the parts under commissioned data from what was saved. */
 export function createPumpParts(
-  context: PumpContext,
+  commissioned: PumpContext,
   parameters: DetectorParameters,
   saved: SavedPumpFold | undefined,
 ): PumpParts {
   const hot = isRecord(saved?.hot) ? saved.hot : {};
   const learnt = isRecord(saved?.learnt) ? saved.learnt : {};
+  const pace = createReadingPace(commissioned, hot.pace);
+  const { context } = pace;
   const control = createControl(context, hot.control);
   const inputs = createInputTracker(context, hot.inputs, learnt.inputs);
   const load = createLoadTracker(context, parameters['failed-prime'], hot.load, learnt.load);
@@ -57,7 +64,12 @@ export function createPumpParts(
   const motorClock = createMotorClockTracker(context, control, hot.motorClock);
   const pad = createPadTracker(context, hot.pad);
   const runs = createRunFold(context, hot.runs);
-  const bank = createDetectorBank(DETECTOR_RULES, parameters, hot.detectors, learnt.detectors);
+  const bank = createDetectorBank(
+    DETECTOR_RULES,
+    parameters,
+    hot.rules === RULES_VERSION ? hot.detectors : undefined,
+    hot.rules === RULES_VERSION ? learnt.detectors : undefined,
+  );
   const before = restoreReading(hot.reading);
   const answer: ControlCopy = { ...CONTROL_BEFORE_READINGS };
   const answered = control.answer();
@@ -126,6 +138,7 @@ export function createPumpParts(
     pad,
     runs,
     bank,
+    pace,
     zone: { from: 0, to: 0, offsetMinutes: 0 },
     seen: () => facts.reading !== READING_BEFORE_READINGS,
     hearSettings: (settings) => {
@@ -145,6 +158,8 @@ export function createPumpParts(
         link: link.save(),
         motorClock: motorClock.save(),
         pad: pad.save(),
+        pace: pace.save(),
+        rules: RULES_VERSION,
         detectors: bank.saveHot(),
         reportsSource: facts.reportsSource,
       };
