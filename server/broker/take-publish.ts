@@ -20,12 +20,11 @@ export type TakePublishOptions = {
 export function createTakePublish(options: TakePublishOptions) {
   return (client: Client | null, packet: PublishPacket, callback: (error?: Error | null) => void): void => {
     const device = client === null ? undefined : options.registry.findByClient(client);
-    const settle: Settle = (error) => callback(error ?? null);
     packet.retain = false;
     // A will that the broker publishes because it is stopping itself says nothing about the device.
     const kind = device === undefined || options.isQuiet() ? undefined : findKind(device, packet, options.sayRefused);
-    if (device === undefined || kind === undefined) settle(new Error('not taken'));
-    else takeInTurn(options, device, kind, packet, settle);
+    if (device === undefined || kind === undefined) callback(new Error('not taken'));
+    else takeInTurn(options, device, kind, packet, callback);
   };
 }
 

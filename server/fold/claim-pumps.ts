@@ -11,6 +11,8 @@ import { createPumpSlot } from './pump-slot.ts';
  */
 const TAKE_OVER_PATIENCE_MS = 12_000;
 
+const SLOTS_A_TURN = 20;
+
 /** Takes every monitored pump that no living process folds; answers how many. */
 export async function takeFreePumps(context: FoldContext): Promise<number> {
   const states = await asMachine(context.pool, (_db, client) => claimFreePumps(client, context.epoch));
@@ -27,7 +29,9 @@ async function addSlots(context: FoldContext, states: readonly ClaimedState[]): 
   if (states.length === 0) return 0;
   const pumps = await context.listPumps(states.map(({ pumpId }) => pumpId));
   const byId = new Map(pumps.map((pump) => [pump.pumpId, pump]));
-  for (const state of states) {
+  for (const [index, state] of states.entries()) {
+    // Building a fold takes a moment: ten thousand of them must not stop everything else.
+    if (index % SLOTS_A_TURN === SLOTS_A_TURN - 1) await new Promise((resolve) => setImmediate(resolve));
     const pump = byId.get(state.pumpId);
     if (pump === undefined) continue;
     const notBefore = context.now() + (state.takenOver ? TAKE_OVER_PATIENCE_MS : 0);

@@ -11,8 +11,11 @@ import { tickPumps } from './tick-pumps.ts';
 
 /** Messages are folded together up to this many readings: beyond it a commit takes long and gains nothing. */
 const EVENTS_PER_COMMIT = 10_000;
-/** Between two commits, so that what comes in a trickle is committed in sips and not in drops. */
-const BETWEEN_COMMITS_MS = 40;
+/**
+ * Between two commits: so that what comes in a trickle is committed in sips and not in drops, and so that folding takes
+ * a third of the time at most while acknowledgements want the rest. Well under the second in which all is understood.
+ */
+const PAUSE_MS = { least: 40, most: 400, ofWork: 2 } as const;
 /** Late readings of a run that is still open are looked at again after this. */
 const LATE_AGAIN_MS = 5 * 60_000;
 
@@ -88,8 +91,11 @@ export function listFoldTasks(context: FoldContext, requests: FoldRequests): Fol
 async function foldNext(context: FoldContext, requests: FoldRequests): Promise<void> {
   // Before anything of theirs is folded from memory.
   doubtRequested(context, requests);
+  const from = performance.now();
   await foldMessages(context, context.queue.take(EVENTS_PER_COMMIT));
-  await new Promise((resolve) => setTimeout(resolve, BETWEEN_COMMITS_MS));
+  const worked = performance.now() - from;
+  const pause = Math.min(PAUSE_MS.most, Math.max(PAUSE_MS.least, worked * PAUSE_MS.ofWork));
+  await new Promise((resolve) => setTimeout(resolve, pause));
 }
 
 function doubtRequested(context: FoldContext, { doubted }: FoldRequests): void {

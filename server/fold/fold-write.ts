@@ -33,28 +33,43 @@ const STATE_EVERY_MS = 30_000;
 
 /**
  * Takes what a pump's fold put out. The state goes with it when there are signals, which must never be said twice, and
- * otherwise every half minute.
+ * otherwise every half minute; `whole` = in any case.
  */
-export function takeFoldWrite(slot: PumpSlot, at: number, output: FoldOutput = slot.fold.take()): FoldWrite {
-  const { fold } = slot;
-  const { runs, signals } = output;
-  const isDue = signals.length > 0 || at - slot.stateSavedAt >= STATE_EVERY_MS;
+export function takeFoldWrite(
+  slot: PumpSlot,
+  at: number,
+  { output = slot.fold.take(), whole = false }: { readonly output?: FoldOutput; readonly whole?: boolean } = {},
+): FoldWrite {
+  const { signals } = output;
+  const isDue = whole || signals.length > 0 || at - slot.stateSavedAt >= STATE_EVERY_MS;
   return {
     slot,
     state: isDue ? takeState(slot, at) : undefined,
-    now: fold.now(),
-    highWater: fold.highWater(),
+    now: slot.fold.now(),
+    highWater: slot.fold.highWater(),
     heardAt: slot.heardAt,
     silentSince: slot.silentSince,
-    runs,
+    runs: chooseRuns(slot, output.runs, isDue),
     signals,
   };
 }
 
-/** The same with the state in any case. */
-export function takeWholeWrite(slot: PumpSlot, at: number): FoldWrite {
-  const write = takeFoldWrite(slot, at);
-  return write.state === undefined ? { ...write, state: takeState(slot, at) } : write;
+/**
+ * Every reading changes the means of the open run a little. It is written when it opens, closes or is marked, and else
+ * with the state: twice a minute.
+ */
+function chooseRuns(slot: PumpSlot, runs: readonly Run[], isStateDue: boolean): Run[] {
+  const byStart = new Map(
+    [...(slot.heldRun === undefined ? [] : [slot.heldRun]), ...runs].map((run) => [run.from, run]),
+  );
+  const chosen = [...byStart.values()];
+  const last = chosen.at(-1);
+  const mark = last?.to === undefined && last !== undefined ? `${last.from} ${last.flags.join(' ')}` : undefined;
+  const isHeld = !isStateDue && chosen.length === 1 && mark !== undefined && mark === slot.writtenRunMark;
+  slot.heldRun = isHeld ? last : undefined;
+  if (isHeld) return [];
+  if (chosen.length > 0) slot.writtenRunMark = mark;
+  return chosen;
 }
 
 function takeState(slot: PumpSlot, at: number): SavedState {

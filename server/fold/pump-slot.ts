@@ -2,6 +2,7 @@ import type { CommissionedPump } from '#server/db/commissioned-pumps.ts';
 import { silenceLimitMs } from '#shared/domain/detectors/link/link-tracker.ts';
 import { createPumpFold, type PumpFold } from '#shared/domain/fold/fold-pump.ts';
 import type { PumpEvent } from '#shared/domain/fold/pump-event.ts';
+import type { Run } from '#shared/domain/runs/run.ts';
 import type { ClaimedState } from './claimed-state.ts';
 import { readHot } from './saved-hot.ts';
 
@@ -22,6 +23,9 @@ export type PumpSlot = {
   /** When the state was last written, ms; whether anything was folded since. */
   stateSavedAt: number;
   isStateOld: boolean;
+  /** The open run as it is, where that is not written yet, and what of an open run was written last. */
+  heldRun: Run | undefined;
+  writtenRunMark: string | undefined;
   heardAt: number | undefined;
   silentSince: number | undefined;
   connection: string | undefined;
@@ -48,6 +52,8 @@ export function createPumpSlot(pump: CommissionedPump, state: ClaimedState, notB
     // Not all pumps in the same half minute.
     stateSavedAt: notBefore - ((pump.pumpNumber * 7919) % 30_000),
     isStateOld: false,
+    heldRun: undefined,
+    writtenRunMark: undefined,
     heardAt: state.heardAt,
     silentSince: state.silentSince,
     connection: hot.connection,

@@ -3,7 +3,7 @@ import { commitFold } from './commit-fold.ts';
 import { fallBehind } from './fall-behind.ts';
 import type { FoldContext } from './fold-context.ts';
 import { setAside } from './fold-repository.ts';
-import { type FoldWrite, takeFoldWrite, takeWholeWrite } from './fold-write.ts';
+import { type FoldWrite, takeFoldWrite } from './fold-write.ts';
 import type { PumpSlot } from './pump-slot.ts';
 
 /** A write that failed is read anew after this, ms. */
@@ -27,7 +27,7 @@ export async function saveStates(context: FoldContext): Promise<void> {
   const now = context.now();
   const old = context.slots.list().filter(({ mode, isStateOld }) => mode === 'live' && isStateOld);
   for (let from = 0; from < old.length; from += STATES_A_COMMIT) {
-    const writes = old.slice(from, from + STATES_A_COMMIT).map((slot) => takeWholeWrite(slot, now));
+    const writes = old.slice(from, from + STATES_A_COMMIT).map((slot) => takeFoldWrite(slot, now, { whole: true }));
     await saveWrites(context, writes);
   }
 }

@@ -18,8 +18,8 @@ export async function tickPumps(context: FoldContext): Promise<void> {
     try {
       const wentSilent = tickSlot(slot, now, context.listeningSince);
       const output = slot.fold.take();
-      const isNews = wentSilent || output.signals.length > 0 || output.runs.length > 0;
-      if (isNews) writes.push(takeFoldWrite(slot, now, output));
+      const isNews = wentSilent || slot.isStateOld || output.signals.length > 0 || output.runs.length > 0;
+      if (isNews) writes.push(takeFoldWrite(slot, now, { output, whole: true }));
     } catch (error) {
       await quarantine(context, slot, error);
     }
