@@ -1,10 +1,9 @@
 import { checkMotorSettings } from '../control/check-motor-settings.ts';
-import type { MotorSettings, MotorTraits } from '../control/motor-settings.ts';
 import { checkTariff, type TariffFault } from '../energy/check-tariff.ts';
-import type { Tariff } from '../energy/tariff.ts';
-import { isSystemCurve, type SystemCurve } from '../hydraulics/system-curve.ts';
+import { isSystemCurve } from '../hydraulics/system-curve.ts';
 import { checkNumber, checkNumbers, type NumberFault } from '../refusal/check-number.ts';
 import type { Refusal } from '../refusal/refusal.ts';
+import type { AdviceRequest } from './advice-request.ts';
 import type { DailyWindow, PadNeeds } from './pad-needs.ts';
 
 type SettingsFault = ReturnType<typeof checkMotorSettings>[number]['reason'];
@@ -67,16 +66,7 @@ function checkNeeds(needs: PadNeeds): Refusal<RequestFault>[] {
  *
  * @example checkAdviceRequest({ …request, month: 12 }) // [{ reason: 'too-large', field: 'month', allowed: 'a whole number from 0 up to 11' }]
  */
-export function checkAdviceRequest(request: {
-  readonly settings: MotorSettings;
-  readonly traits: MotorTraits;
-  readonly system: SystemCurve;
-  readonly needs: PadNeeds;
-  readonly entryLimit: number;
-  readonly speedStepRpm?: number | undefined;
-  readonly tariff: Tariff;
-  readonly month: number;
-}): Refusal<RequestFault>[] {
+export function checkAdviceRequest(request: AdviceRequest): Refusal<RequestFault>[] {
   const system = isSystemCurve(request.system)
     ? []
     : [{ reason: 'not-a-system-curve' as const, field: 'system', allowed: 'static head -100 to 300 ft and k above 0' }];
@@ -89,6 +79,9 @@ export function checkAdviceRequest(request: {
     ]),
     ...system,
     ...checkNeeds(request.needs),
+    ...(request.otherKwhByPeriod ?? []).flatMap((kwh, period) =>
+      checkNumber(kwh, { field: `otherKwhByPeriod[${period}]`, unit: 'kWh', least: 0 }),
+    ),
     ...checkTariff(request.tariff),
   ];
 }

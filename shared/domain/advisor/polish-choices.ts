@@ -1,20 +1,8 @@
 import { countChoices, type EntryProblem } from './entry-problem.ts';
 import { meetsNeeds, type Trace, traceChoices } from './follow-bound.ts';
-
-/** A stretch of slots under one choice. */
-type Stretch = { readonly from: number; readonly to: number; readonly choice: number };
+import { listStretches } from './list-stretches.ts';
 
 const MOST_ROUNDS = 200;
-
-function listStretches(choices: readonly number[]): Stretch[] {
-  const stretches: { from: number; to: number; choice: number }[] = [];
-  choices.forEach((choice, slot) => {
-    const last = stretches.at(-1);
-    if (last !== undefined && last.choice === choice) last.to = slot + 1;
-    else stretches.push({ from: slot, to: slot + 1, choice });
-  });
-  return stretches;
-}
 
 const paint = (choices: readonly number[], from: number, to: number, choice: number): number[] =>
   choices.map((one, slot) => (slot >= from && slot < to ? choice : one));

@@ -1,23 +1,12 @@
 import type { ProgramEntry } from '../control/motor-settings.ts';
 import { DAY_MINUTES } from '../time/local-time.ts';
+import { listStretches } from './list-stretches.ts';
 import { GRID_MINUTES } from './pad-needs.ts';
 import type { SpeedOption } from './speed-option.ts';
 
 /** Seven flags, Monday first. @example dayFlags([0, 6]) // [true, false, false, false, false, false, true] */
 export const dayFlags = (weekdays: readonly number[]): boolean[] =>
   Array.from({ length: 7 }, (_, weekday) => weekdays.includes(weekday));
-
-type Stretch = { from: number; to: number; choice: number };
-
-function listStretches(choices: readonly number[]): Stretch[] {
-  const stretches: Stretch[] = [];
-  choices.forEach((choice, slot) => {
-    const last = stretches.at(-1);
-    if (last !== undefined && last.choice === choice) last.to = slot + 1;
-    else stretches.push({ from: slot, to: slot + 1, choice });
-  });
-  return stretches;
-}
 
 /**
  * The program entries that a day's choices on the grid (0 = off, then the speeds in order) come to, for some weekdays.

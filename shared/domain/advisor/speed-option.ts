@@ -17,7 +17,7 @@ const unknownLossWatts = (curve: WetEndCurve, rpm: number): number =>
  * Where the system asks for less than the wet end's curve knows of, it is taken at the curve's end: at least that much
  * water. A pump that cannot lift the static head moves none. undefined for bad numbers.
  *
- * @example speedOptionAt(curve, { staticFeet: 0, k: 0.0125 }, 1700) // { rpm: 1700, gpm: 33.9, watts: 219 }
+ * @example speedOptionAt(curve, { staticFeet: 0, k: 0.0125 }, 1700) // { rpm: 1700, gpm: 33.9, watts: 246 }
  */
 export function speedOptionAt(curve: WetEndCurve, system: SystemCurve, rpm: number): SpeedOption | undefined {
   const duty = findDutyPoint(curve, rpm, system);
@@ -33,7 +33,7 @@ export function speedOptionAt(curve: WetEndCurve, system: SystemCurve, rpm: numb
  * both of these, with flow and watts on the pad's system curve. Speeds that move no water are left out. Empty for
  * speeds or a step that are not above 0.
  *
- * @example listSpeedOptions(curve, { staticFeet: 0, k: 0.0125 }, 600, 3450)[0] // { rpm: 600, gpm: 11.97, watts: 16.6 }
+ * @example listSpeedOptions(curve, { staticFeet: 0, k: 0.0125 }, 600, 3450)[0] // { rpm: 600, gpm: 11.97, watts: 36 }
  */
 export function listSpeedOptions(
   curve: WetEndCurve,

@@ -273,6 +273,8 @@ describe('what the advisor refuses', () => {
       { needs: needs({ quiet: [{ days: EVERY_DAY.slice(1), fromMinute: 0, toMinute: 60, maximumRpm: 900 }] }) },
       'needs.quiet[0].days',
     ],
+    ['other use that is no number', { otherKwhByPeriod: [Number.NaN] }, 'otherKwhByPeriod[0]'],
+    ['a keypad step of nothing', { speedStepRpm: 0 }, 'speedStepRpm'],
     ['a system that cannot be', { system: { staticFeet: 0, k: 0 } }, 'system'],
     [
       'a program of no length',

@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { CAUSE_WEIGHTS } from '#shared/domain/causes/cause-weights.data.ts';
-import { CAUSE_WORDS } from '#shared/domain/causes/cause-words.data.ts';
+import { CAUSE_WORDS, SIGN_WORDS } from '#shared/domain/causes/cause-words.data.ts';
 import { listFindings, rankCauses } from '#shared/domain/causes/rank-causes.ts';
 import { SIGNS, type Signs } from '#shared/domain/causes/sign.ts';
 import { DETECTORS } from '#shared/domain/detectors/detector.ts';
@@ -152,5 +152,7 @@ describe('likely causes', () => {
 
     expect(new Set(rules.map(({ cause }) => cause))).toEqual(new Set(Object.keys(CAUSE_WORDS)));
     expect(new Set(rules.flatMap(({ signs }) => Object.keys(signs)))).toEqual(new Set(SIGNS));
+    const sentences = SIGNS.flatMap((sign) => SIGN_WORDS[sign]);
+    expect(new Set(sentences).size).toBe(2 * SIGNS.length);
   });
 });
