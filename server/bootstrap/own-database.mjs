@@ -7,6 +7,7 @@ import { obtainPostgres } from './obtain-postgres.mjs';
 import { listPortTroubles } from './ports.mjs';
 import { prepareDatabase } from './prepare-database.mjs';
 import { waitUntil } from './process-table.mjs';
+import { rotateLog } from './programs.mjs';
 import { refusal, say, wordsFor } from './say.mjs';
 
 /** How often the database is looked after, in ms. It is no child of ours, so its death is not reported to us. */
@@ -63,6 +64,7 @@ export async function startOwnDatabase({ dataFolder, pgPort: port }, secrets, li
     say('Stopping PostgreSQL');
     await stopCluster(cluster.folder, { hurry: life.hurry });
   });
+  rotateLog(cluster.logFile);
   await startOrTakeOver(cluster, port);
   life.leaveIfStopping();
   const databaseUrl = await prepareDatabase({ programs, port, secrets });
