@@ -1,6 +1,8 @@
+import { readFileSync } from 'node:fs';
 import { fileURLToPath } from 'node:url';
 import tailwindcss from '@tailwindcss/vite';
 import react from '@vitejs/plugin-react';
+import type { Plugin } from 'vite';
 import { defineConfig, type ViteUserConfig } from 'vitest/config';
 
 /** One repository-relative place, as an absolute path. */
@@ -19,8 +21,24 @@ const project = (name: string, include: string[], more: object = {}): Project =>
   test: { name, include, environment: 'node', ...more },
 });
 
+/** Parts of the schema library that write JSON Schema: only the server's interface description needs them. */
+const JSON_SCHEMA_WRITER =
+  /[\\/]zod[\\/]v4[\\/]core[\\/](?:json-schema-processors|json-schema-generator|to-json-schema)\.js$/;
+
+/** Leaves the JSON Schema writer out of the client, whose schemas hold on to it and never use it: 5 kB of the first load. */
+const withoutJsonSchemaWriter: Plugin = {
+  name: 'without-json-schema-writer',
+  apply: 'build',
+  enforce: 'pre',
+  load: (id) => {
+    if (!JSON_SCHEMA_WRITER.test(id)) return null;
+    const names = readFileSync(id, 'utf8').matchAll(/^export (?:const|function|class) (\w+)/gm);
+    return [...names].map(([, name]) => `export const ${name} = () => undefined;`).join('\n');
+  },
+};
+
 export default defineConfig({
-  plugins: [react(), tailwindcss()],
+  plugins: [react(), tailwindcss(), withoutJsonSchemaWriter],
   // The script before the first paint and the mark: files that the page names itself.
   publicDir: 'src/static',
   build: {
@@ -29,6 +47,12 @@ export default defineConfig({
     // Fonts stay files: the Content-Security-Policy allows no data: sources.
     assetsInlineLimit: 0,
     modulePreload: { polyfill: false },
+    rolldownOptions: {
+      // No package that the client uses does anything by being read: what nobody calls may go.
+      treeshake: { propertyReadSideEffects: false, unknownGlobalSideEffects: false },
+      // Packages change seldom: one file that a browser keeps over our own releases. The chart library comes by itself.
+      output: { codeSplitting: { groups: [{ name: 'packages', test: /node_modules[\\/](?!uplot)/ }] } },
+    },
   },
   server: {
     port: 4320,
@@ -46,7 +70,7 @@ export default defineConfig({
       project('pure', ['tests/{shared,simulator,src}/**/*.test.{ts,tsx}']),
       project('server', ['tests/server/**/*.test.ts'], { globalSetup: withPostgres }),
       project('e2e', ['tests/e2e/**/*.test.ts'], {
-        globalSetup: withPostgres,
+        globalSetup: ['./tests/e2e/share-product.ts'],
         fileParallelism: false,
         testTimeout: 120_000,
       }),
