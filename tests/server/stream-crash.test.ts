@@ -2,7 +2,7 @@ import { once } from 'node:events';
 import type { AddressInfo } from 'node:net';
 import { simpleParser } from 'mailparser';
 import { SMTPServer } from 'smtp-server';
-import { afterAll, beforeAll, expect, it } from 'vitest';
+import { afterAll, beforeAll, expect, it, vi } from 'vitest';
 import { listCommissionedPumps } from '#server/db/commissioned-pumps.ts';
 import { migrateDatabase } from '#server/db/migrate.ts';
 import { createPools, type Pools } from '#server/db/pools.ts';
@@ -24,6 +24,7 @@ import { querySuperuser } from '#tests/support/test-stream.ts';
  * with a fold of the same readings that nobody disturbed.
  */
 const PUMPS = 12;
+const BETWEEN_KILLS = 300;
 const MINUTE = 60_000;
 const JUDGED = ['wrong-speed', 'stopped'];
 const ALWAYS = [true, true, true, true, true, true, true];
@@ -119,10 +120,13 @@ it('killed over and over, the watch keeps every acknowledged reading and loses o
   const day = makeDay(begin);
   const pumps = company.pumps.slice(0, PUMPS);
   const devices = pumps.map((pump) => startStubbornDevice(mqttPort, pump, day, { everyMs: 45 }));
+  const countAcknowledged = () => devices.reduce((sum, { acknowledged }) => sum + acknowledged.size, 0);
   try {
     const kill = [server, postgres, worker, server, postgres];
     for (const victim of kill) {
-      await new Promise((resolve) => setTimeout(resolve, 1500));
+      // In the middle of the load: some hundred more readings were acknowledged since the last one came back.
+      const before = countAcknowledged();
+      await vi.waitFor(() => expect(countAcknowledged()).toBeGreaterThan(before + BETWEEN_KILLS), { timeout: 60_000 });
       await victim.killHard();
       await victim.start();
     }
