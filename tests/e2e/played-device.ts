@@ -79,34 +79,36 @@ function findSecret(dataFolder: string, serial: string): string {
   return device.secret;
 }
 
+/** The pump whose device it is, as far as a prime goes. */
+export type Primer = { readonly primeSeconds: number; readonly programRpm: number };
+
+const PRIME_RPM = 3200;
 const SECOND_MS = 1000;
-const PRIME_SECONDS = 180;
-const UNLOADED_SECONDS = 480;
 const EVERY_SECONDS = 10;
+/** The rule speaks three minutes past the prime. */
+const PAST_PRIME_SECONDS = 180;
 /** What a pump draws that moves air, W. */
-const DRY_WATTS = 210;
+const DRY_WATTS = { prime: 430, program: 52 };
 
 /**
- * What a device has stored of a start that never carried load: three minutes of prime, then its program's speed on
- * air until `until`, ms. Told in one message it is a failed prime at once.
+ * A start that never carries load and has just become a failed prime: what went before is what the device had stored,
+ * and the reading that tips it is of now.
  */
-export function tellFailedPrime(until: number, programRpm: number): WireReading[] {
-  const from = until - UNLOADED_SECONDS * SECOND_MS;
-  const standing = [{ t: from - EVERY_SECONDS * SECOND_MS, rpm: 0, w: 6, src: 'off' as const }];
-  const count = UNLOADED_SECONDS / EVERY_SECONDS;
-  return [
-    ...standing,
-    ...Array.from({ length: count + 1 }, (_, index) => {
-      const isPriming = index * EVERY_SECONDS < PRIME_SECONDS;
-      const jitter = index % 3;
-      return isPriming
-        ? { t: from + index * EVERY_SECONDS * SECOND_MS, rpm: 3200 + jitter, w: 430 + jitter, src: 'prime' as const }
-        : {
-            t: from + index * EVERY_SECONDS * SECOND_MS,
-            rpm: programRpm + jitter,
-            w: DRY_WATTS / 4 + jitter,
-            src: 'program' as const,
-          };
-    }),
-  ];
+export async function failToPrime(device: PlayedDevice, { primeSeconds, programRpm }: Primer): Promise<void> {
+  const now = Date.now();
+  const seconds = primeSeconds + PAST_PRIME_SECONDS;
+  const from = now - seconds * SECOND_MS;
+  const readings: WireReading[] = [{ t: from - EVERY_SECONDS * SECOND_MS, rpm: 0, w: 6, src: 'off' }];
+  for (let second = 0; second < seconds; second += EVERY_SECONDS) {
+    const isPriming = second < primeSeconds;
+    const jitter = (second / EVERY_SECONDS) % 3;
+    readings.push({
+      t: from + second * SECOND_MS,
+      rpm: (isPriming ? PRIME_RPM : programRpm) + jitter,
+      w: (isPriming ? DRY_WATTS.prime : DRY_WATTS.program) + jitter,
+      src: isPriming ? 'prime' : 'program',
+    });
+  }
+  await device.publish(readings);
+  await device.publish([{ t: Date.now(), rpm: programRpm, w: DRY_WATTS.program, src: 'program' }]);
 }

@@ -8,14 +8,14 @@ import { launchBrowser } from '#tests/support/browser.ts';
 import { listMails, waitForMail } from './caught-mail.ts';
 import { killChild, takeDatabaseAway, takeMailServerAway } from './outage.ts';
 import { type Desk, MANAGER, openSignedIn } from './people.ts';
-import { type PlayedDevice, playDevice, tellFailedPrime } from './played-device.ts';
+import { failToPrime, type PlayedDevice, playDevice } from './played-device.ts';
 import { openProduct } from './product.ts';
 import { waitUntilDrawn } from './screens.ts';
 import { tick } from './ticking.ts';
 
 /** Pumps that nobody simulates, each for one thing. */
-const UNMAILED = { serial: 'MR-000206', pad: 'Pebble Drive 90', programRpm: 1450 };
-const MISSED = { serial: 'MR-000308', pad: 'Windmill Yard 1', programRpm: 1250 };
+const UNMAILED = { serial: 'MR-000206', pad: 'Pebble Drive 90', primeSeconds: 150, programRpm: 1450 };
+const MISSED = { serial: 'MR-000308', pad: 'Windmill Yard 1', primeSeconds: 240, programRpm: 1250 };
 const TICKING = { serial: 'MR-000302', pad: 'Cistern Lane 29' };
 const BACK_WITHIN_MS = 120_000;
 const DAY_MS = 86_400_000;
@@ -74,7 +74,7 @@ describe('the mail server, when it is killed', () => {
     await live(page).waitFor();
     const outage = await takeMailServerAway(product);
     const device = await play(UNMAILED.serial);
-    await device.publish(tellFailedPrime(Date.now(), UNMAILED.programRpm));
+    await failToPrime(device, UNMAILED);
     await page.getByRole('article').filter({ hasText: UNMAILED.pad }).getByText('Did not prime').first().waitFor();
     expect(await waitUntil(() => outage.tries() > 0, BACK_WITHIN_MS)).toBe(true);
     await outage.end();
@@ -144,7 +144,7 @@ describe('the server process, when it is killed', () => {
     await Promise.all([live(runs).waitFor(), live(alarms).waitFor()]);
 
     const killed = await killChild(product, 'node');
-    const told = other.publish(tellFailedPrime(Date.now(), MISSED.programRpm));
+    const told = failToPrime(other, MISSED);
     await runs
       .getByText(/not live/)
       .first()

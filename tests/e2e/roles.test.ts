@@ -3,7 +3,7 @@ import { afterAll, beforeAll, describe, expect, inject, it } from 'vitest';
 import { launchBrowser } from '#tests/support/browser.ts';
 import { isFocusVisible, tabTo } from './keyboard.ts';
 import { type Desk, HOMEOWNER, MANAGER, openDesk, signIn, TECHNICIAN } from './people.ts';
-import { type PlayedDevice, playDevice, tellFailedPrime } from './played-device.ts';
+import { failToPrime, type PlayedDevice, playDevice } from './played-device.ts';
 import { openProduct } from './product.ts';
 import { examineScreen, waitUntilDrawn } from './screens.ts';
 import { gatherTroubles } from './watched-page.ts';
@@ -11,7 +11,7 @@ import { gatherTroubles } from './watched-page.ts';
 /** A pump that nobody simulates: its program runs all day. The test makes it fail to prime. */
 const PAD = 'Paddock View 56';
 const SERIAL = 'MR-000309';
-const PROGRAM_RPM = 1750;
+const PRIMER = { primeSeconds: 180, programRpm: 1750 };
 const LOOKS_LONG_MS = 300_000;
 
 const product = openProduct(inject('productPlace'));
@@ -23,7 +23,7 @@ let pumpPath: string;
 beforeAll(async () => {
   [browser] = await Promise.all([launchBrowser(), product.start()]);
   device = await playDevice(product, SERIAL);
-  await device.publish(tellFailedPrime(Date.now(), PROGRAM_RPM));
+  await failToPrime(device, PRIMER);
   const { page, close } = await openAs(MANAGER);
   await page.goto('/alarms');
   const row = page.getByRole('article').filter({ hasText: PAD });
