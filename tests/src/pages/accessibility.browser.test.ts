@@ -3,7 +3,7 @@ import { describe, expect, it } from 'vitest';
 import type { Role } from '#shared/contract/primitives.ts';
 import { fakeId } from '#tests/src/fake-api/fake-id.ts';
 import { listAxeViolations } from '#tests/support/browser.ts';
-import { createPageBench } from './page-bench.ts';
+import { createPageBench, eventually } from './page-bench.ts';
 
 const bench = createPageBench();
 
@@ -89,7 +89,7 @@ it('moves nothing for those who asked for less motion', async () => {
 it('is light ink on paper when it is printed from a dark screen', async () => {
   const page = await open(SCREENS[1]!, { theme: 'dark' });
   await page.emulateMedia({ media: 'print' });
-  await expect.poll(() => page.evaluate(() => document.documentElement.dataset.theme)).toBe('light');
+  await eventually(() => page.evaluate(() => document.documentElement.dataset.theme)).toBe('light');
   expect(await page.getByRole('navigation', { name: 'Pages' }).count()).toBe(0);
   expect(
     await page

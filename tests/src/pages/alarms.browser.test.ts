@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { changeAlarm } from '#tests/src/fake-api/fake-handlers.ts';
 import { fakeId } from '#tests/src/fake-api/fake-id.ts';
-import { createPageBench } from './page-bench.ts';
+import { createPageBench, eventually } from './page-bench.ts';
 
 const bench = createPageBench();
 const PRIME = fakeId('alarm', 1);
@@ -58,7 +58,7 @@ describe('the alarms page', () => {
   it('tells a screen reader of an alarm raised meanwhile, once and politely', async () => {
     const opened = await bench.open('/alarms', { role: 'manager' });
     await opened.page.getByRole('article').first().waitFor();
-    await expect.poll(() => opened.state.sockets.size).toBe(1);
+    await eventually(() => opened.state.sockets.size).toBe(1);
     changeAlarm(opened.state, PRIME, { raisedAt: opened.state.now() });
     await opened.page
       .locator('[aria-live=polite]')
@@ -68,9 +68,9 @@ describe('the alarms page', () => {
 
   it('is narrowed by its address, and says when nothing fits', async () => {
     const { page } = await bench.open('/alarms?priority=urgent', { role: 'manager' });
-    await expect.poll(() => page.getByRole('region', { name: 'Alarms' }).getByRole('article').count()).toBe(1);
+    await eventually(() => page.getByRole('region', { name: 'Alarms' }).getByRole('article').count()).toBe(1);
     await page.getByRole('searchbox').fill('nowhere');
-    await expect.poll(() => new URL(page.url()).search).toBe('?priority=urgent&q=nowhere');
+    await eventually(() => new URL(page.url()).search).toBe('?priority=urgent&q=nowhere');
     await page.getByRole('region', { name: 'Alarms' }).getByText('None matches.').waitFor();
   });
 
@@ -107,7 +107,7 @@ describe('an alarm’s page, on a phone', () => {
     await now.waitFor();
     const pump = state.pumps[0]!;
     pump.detail = { ...pump.detail, now: { ...pump.detail.now!, rpm: 3450, watts: 1444, expectedRpm: 3450 } };
-    await expect.poll(() => state.sockets.size).toBe(1);
+    await eventually(() => state.sockets.size).toBe(1);
     changeAlarm(state, PRIME, {});
     await now.getByText('3,450').first().waitFor();
     await now.getByText('1,444').waitFor();

@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { changeAlarm } from '#tests/src/fake-api/fake-handlers.ts';
 import { fakeId } from '#tests/src/fake-api/fake-id.ts';
 import { broadcast } from '#tests/src/fake-api/fake-state.ts';
-import { createPageBench, type Opened } from './page-bench.ts';
+import { createPageBench, eventually, type Opened } from './page-bench.ts';
 
 const bench = createPageBench();
 const rows = ({ page }: Opened) => page.getByRole('list', { name: 'Wall of pumps' }).getByRole('listitem');
@@ -39,7 +39,7 @@ describe('the wall', () => {
 
   it('draws ink where pumps ran, and the time of now in the company’s zone', async () => {
     const opened = await openWall();
-    await expect.poll(() => inkOf(opened, 'Quarry Lane 18')).toBeGreaterThan(500);
+    await eventually(() => inkOf(opened, 'Quarry Lane 18')).toBeGreaterThan(500);
     expect(await opened.page.getByRole('slider').textContent()).toBe('7:30\u00a0PM');
   });
 
@@ -52,7 +52,7 @@ describe('the wall', () => {
     const opened = await openWall();
     const pump = opened.state.pumps.find(({ detail }) => detail.padName === 'Saltern Way 12')!;
     pump.detail = { ...pump.detail, now: { ...pump.detail.now!, rpm: 2345, watts: 987 } };
-    await expect.poll(() => opened.state.sockets.size).toBe(1);
+    await eventually(() => opened.state.sockets.size).toBe(1);
     const { pumpId, now, heardAt } = pump.detail;
     broadcast(opened.state, {
       type: 'news',
@@ -71,7 +71,7 @@ describe('the wall', () => {
       opened.state.calls
         .filter((call) => call.startsWith('GET /api/strips'))
         .flatMap((call) => decodeURIComponent(call).match(/00000001-[\w-]+/g) ?? []);
-    await expect.poll(() => asked().length).toBeGreaterThan(10);
+    await eventually(() => asked().length).toBeGreaterThan(10);
     expect(asked().length).toBeLessThan(80);
   });
 });
@@ -82,9 +82,9 @@ describe('ten thousand pumps', () => {
     for (let step = 0; step < 6; step += 1) {
       await opened.page.mouse.move(700, 600);
       await opened.page.mouse.wheel(0, 3000);
-      await expect.poll(() => rows(opened).count()).toBeLessThan(50);
+      await eventually(() => rows(opened).count()).toBeLessThan(50);
     }
-    await expect.poll(() => opened.state.calls.filter((call) => call.includes('cursor=')).length).toBeGreaterThan(0);
+    await eventually(() => opened.state.calls.filter((call) => call.includes('cursor=')).length).toBeGreaterThan(0);
     const place = Number(await rows(opened).last().getAttribute('aria-posinset'));
     expect(place).toBeGreaterThan(100);
     expect(await rows(opened).last().getAttribute('aria-setsize')).toBe('10000');
@@ -119,7 +119,7 @@ describe('the address', () => {
   it('holds search, filter and time, so that a link shows the same to a colleague', async () => {
     const opened = await openWall();
     await opened.page.getByRole('searchbox').fill('weir');
-    await expect.poll(() => rows(opened).count()).toBe(2);
+    await eventually(() => rows(opened).count()).toBe(2);
     await opened.page.getByRole('link', { name: '7 d' }).click();
     await opened.page.getByRole('link', { name: '‹ earlier' }).click();
     await opened.page.getByRole('heading', { level: 1, name: /^Fleet, .* to Mon, Nov 30$/ }).waitFor();
@@ -127,15 +127,15 @@ describe('the address', () => {
     expect(new URL(link).search).toBe('?q=weir&range=7d&day=2026-11-30');
     await opened.page.goto(link);
     await opened.page.getByRole('heading', { level: 1, name: /^Fleet, .* to Mon, Nov 30$/ }).waitFor();
-    await expect.poll(() => rows(opened).count()).toBe(2);
+    await eventually(() => rows(opened).count()).toBe(2);
   });
 
   it('narrows by a total and widens by the same click', async () => {
     const opened = await openWall();
     await opened.page.getByRole('link', { name: /urgent/ }).click();
-    await expect.poll(() => rows(opened).count()).toBe(1);
+    await eventually(() => rows(opened).count()).toBe(1);
     await opened.page.getByRole('link', { name: /urgent/ }).click();
-    await expect.poll(() => rows(opened).count()).toBeGreaterThan(5);
+    await eventually(() => rows(opened).count()).toBeGreaterThan(5);
   });
 });
 
@@ -146,7 +146,7 @@ describe('a row’s table', () => {
     await button.focus();
     await opened.page.keyboard.press('Enter');
     const dialog = opened.page.getByRole('dialog');
-    await expect.poll(() => dialog.getByRole('row').count()).toBeGreaterThan(4);
+    await eventually(() => dialog.getByRole('row').count()).toBeGreaterThan(4);
     expect(await dialog.textContent()).toContain('Prime');
     await opened.page.keyboard.press('Escape');
     expect(await button.evaluate((element) => element === document.activeElement)).toBe(true);
@@ -162,7 +162,7 @@ describe('the order', () => {
     await opened.page.getByRole('button', { name: 'The order has changed. Sort again' }).waitFor();
     expect(await rows(opened).nth(1).textContent()).toContain('Quarry Lane 18');
     await opened.page.getByRole('button', { name: 'The order has changed. Sort again' }).click();
-    await expect.poll(() => rows(opened).nth(1).textContent()).not.toContain('Quarry Lane 18');
+    await eventually(() => rows(opened).nth(1).textContent()).not.toContain('Quarry Lane 18');
   });
 });
 
@@ -207,13 +207,11 @@ describe('when something is wrong', () => {
     await opened.page.context().setOffline(true);
     socket?.terminate();
     await opened.page.getByText('No connection to Millrace.').waitFor();
-    await expect
-      .poll(() =>
-        row(opened, 'Tern Court 4')
-          .locator('canvas')
-          .evaluate((canvas) => getComputedStyle(canvas).opacity),
-      )
-      .toBe('0.45');
+    await eventually(() =>
+      row(opened, 'Tern Court 4')
+        .locator('canvas')
+        .evaluate((canvas) => getComputedStyle(canvas).opacity),
+    ).toBe('0.45');
     const alarm = opened.state.pumps[0]!.alarm!;
     opened.state.pumps[0]!.detail = {
       ...opened.state.pumps[0]!.detail,

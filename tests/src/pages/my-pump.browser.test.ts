@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { createPageBench } from './page-bench.ts';
+import { createPageBench, eventually } from './page-bench.ts';
 
 const bench = createPageBench();
 
@@ -54,7 +54,7 @@ describe('a homeowner’s page', () => {
     await page.getByLabel(/^SI/).check();
     await page.getByText(/Now: 19:3\d, 4\.4 °C/).waitFor();
     await page.getByLabel('Dark', { exact: true }).check();
-    await expect.poll(() => page.evaluate(() => document.documentElement.dataset.theme)).toBe('dark');
+    await eventually(() => page.evaluate(() => document.documentElement.dataset.theme)).toBe('dark');
     await page.getByText('Saved.').waitFor();
     expect(state.preferences).toEqual({ units: 'si', clock: '24', theme: 'dark' });
     await page.reload();

@@ -18,6 +18,10 @@ export type OpenOptions = {
   readonly prepare?: (state: FakeState) => void;
 };
 
+/** An expectation that a busy machine may take a while to meet. */
+export const eventually = <Value>(read: () => Value | Promise<Value>) =>
+  expect.poll(read, { timeout: 20_000, interval: 50 });
+
 /** What a browser reports of refusals that a test provokes on purpose. */
 const PROVOKED =
   /status of (401|403|404|409|429|500|503)|ERR_INTERNET_DISCONNECTED|ERR_CONNECTION_REFUSED|WebSocket connection to/;

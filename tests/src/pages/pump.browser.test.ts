@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { fakeId } from '#tests/src/fake-api/fake-id.ts';
-import { createPageBench } from './page-bench.ts';
+import { createPageBench, eventually } from './page-bench.ts';
 
 const bench = createPageBench();
 const QUARRY = `/pumps/${fakeId('pump', 2)}`;
@@ -28,7 +28,7 @@ describe('a pump’s page', () => {
     await page.getByRole('img', { name: 'Watts' }).locator('canvas').waitFor();
     await page.getByText('Readings as a table').click();
     const readings = page.getByRole('table').filter({ hasText: 'lowest to highest' });
-    await expect.poll(() => readings.getByRole('row').count()).toBeGreaterThan(70);
+    await eventually(() => readings.getByRole('row').count()).toBeGreaterThan(70);
     await page.getByText('Runs of Quarry Lane 18').click();
     expect(await page.getByRole('table').filter({ hasText: 'Commanded by' }).textContent()).toContain('Input 1');
   });
@@ -37,11 +37,11 @@ describe('a pump’s page', () => {
     const { page } = await bench.open(QUARRY, { role: 'manager' });
     const chart = page.getByRole('img', { name: 'Watts' });
     await chart.locator('.u-over').hover({ position: { x: 400, y: 60 } });
-    await expect
-      .poll(() => page.getByRole('slider').evaluate((handle) => handle.classList.contains('bg-focus')))
-      .toBe(true);
+    await eventually(() => page.getByRole('slider').evaluate((handle) => handle.classList.contains('bg-focus'))).toBe(
+      true,
+    );
     const line = page.getByRole('img', { name: 'Speed, rpm' }).locator('.u-cursor-x');
-    await expect.poll(() => line.evaluate((element) => element.getBoundingClientRect().left)).toBeGreaterThan(300);
+    await eventually(() => line.evaluate((element) => element.getBoundingClientRect().left)).toBeGreaterThan(300);
   });
 
   it('goes day by day, and a link to a day is that day', async () => {

@@ -63,7 +63,11 @@ it('sends somebody whose session has ended to the sign-in, and back after it', a
   const { page, state } = await bench.open('/fleet', { role: 'manager' });
   await page.getByText('Tern Court 4').first().waitFor();
   state.role = undefined;
-  await page.getByRole('link', { name: 'Alarms' }).click();
+  // The page may find out by itself before anybody clicks.
+  await page
+    .getByRole('link', { name: 'Alarms' })
+    .click({ timeout: 2000 })
+    .catch(() => undefined);
   await page.getByRole('heading', { name: 'Sign in to the watch desk' }).waitFor();
   expect(new URL(page.url()).searchParams.get('to')).toMatch(/^\/(alarms|fleet)/);
 });
