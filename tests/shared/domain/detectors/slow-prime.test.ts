@@ -1,13 +1,13 @@
 import { describe, expect, it } from 'vitest';
 import { createPlayer, MINUTE, type Player, SECOND } from './pump-player.ts';
 
-/** One start a day that takes so long to carry load; the rest of the day in coarse steps. */
+/** One start a day that takes so long to carry load; the rest of the day at the recorded pace. */
 function startAfter(player: Player, day: number, seconds: number): void {
-  player.playUntil(day, 360, {}, 2 * MINUTE);
+  player.playUntil(day, 360, {}, 10 * SECOND);
   player.play(seconds * SECOND, { load: 0.35 });
   player.play(5 * MINUTE, {});
-  player.playUntil(day, 400, {}, MINUTE);
-  player.playUntil(day + 1, 0, { rpm: 0, reportedSource: 'stop' }, 2 * MINUTE);
+  player.playUntil(day, 400, {}, 10 * SECOND);
+  player.playUntil(day + 1, 0, { rpm: 0, reportedSource: 'stop' }, 10 * SECOND);
 }
 
 function play(seconds: readonly number[]): Player {
