@@ -106,11 +106,11 @@ function doubtRequested(context: FoldContext, { doubted }: FoldRequests): void {
   doubted.clear();
 }
 
+/** Asked of the database even for pumps we hold: another process may have taken one that now comes back. */
 async function ownRequested(context: FoldContext, { owned }: FoldRequests): Promise<void> {
-  const pumpIds = [...owned].filter((pumpId) => context.slots.find(pumpId) === undefined);
+  const pumpIds = [...owned];
   await takePumps(context, pumpIds);
   for (const pumpId of pumpIds) owned.delete(pumpId);
-  for (const pumpId of owned) if (context.slots.find(pumpId) !== undefined) owned.delete(pumpId);
 }
 
 const isAnyRecommissioned = ({ recommissioned }: FoldRequests) => recommissioned === 'all' || recommissioned.size > 0;

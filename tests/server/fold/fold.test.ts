@@ -300,6 +300,13 @@ describe('two servers', () => {
     const runs = await query('select source from runs where pump_id = $1 order by from_at', pump.pumpId);
     expect(runs.length).toBe(2);
     device.socket.destroy();
+    // Back to the first server, which still believes that it folds the pump.
+    await send(pump, every10s(NOON, NOON + MINUTE, stopped));
+    now += 13_000;
+    await expect
+      .poll(() => query('select high_water from pump_states where pump_id = $1', pump.pumpId), { timeout: 15_000 })
+      .toEqual([{ high_water: new Date(NOON + MINUTE - 10_000) }]);
+    expect((await query('select from alarms where pump_id = $1', pump.pumpId)).length).toBe(1);
     await second.stop();
     now = NOON;
   });
