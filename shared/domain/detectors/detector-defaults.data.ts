@@ -78,6 +78,7 @@ export const DETECTOR_DEFAULTS = {
     withoutSourceSeconds: 14_400,
     hotMarginCelsius: 5,
     powerLimitShare: 0.9,
+    overloadShare: 1.3,
     lowVoltsShare: 0.9,
   },
   'stuck-input': {

@@ -1,8 +1,9 @@
 import type { Control } from '#shared/domain/control/create-control.ts';
 import type { PumpContext } from '#shared/domain/control/pump-context.ts';
-import { DAY_MINUTES } from '#shared/domain/time/local-time.ts';
 import type { Facts } from '../facts.ts';
 import { type Json, restoreState, saveChanges } from '../plain-state.ts';
+import { latenessOf, type ProgramEdge, programEdges } from './program-edges.ts';
+import { type ProgramWatch, watchProgram } from './watch-program.ts';
 
 /** What is known of the motor's own clock. */
 export type MotorClockFacts = {
@@ -21,11 +22,13 @@ export type MotorClockFacts = {
   goodZoneMinutes: number;
 };
 
-/** `late` = minutes by which the last edges came after the program's, newest last. */
-/** `good` = instant, offset and zone of the last right look. */
+/**
+ * `late` = minutes by which the last edges came after the program's, newest last; `good` = instant, offset and zone of
+ * the last right look.
+ */
 type Memory = {
   late: number[];
-  wasStanding: boolean;
+  watch: ProgramWatch;
   offset: number | null;
   suspect: number;
   zone: number | null;
@@ -34,7 +37,7 @@ type Memory = {
 
 const restingMemory = (): Memory => ({
   late: [],
-  wasStanding: true,
+  watch: { speed: null, leftAt: 0, leftMinute: 0 },
   offset: null,
   suspect: 0,
   zone: null,
@@ -48,9 +51,6 @@ const AGREE_MINUTES = 10;
 const RIGHT_MINUTES = 15;
 const SHORTEST_CUT_MINUTES = 15;
 const MOST_SUSPECT_MINUTES = 720;
-/** Inputs must have been open for this long, or the motor was following them, ms. */
-const OPEN_FOR_MS = 600_000;
-const WEEK_MINUTES = 7 * DAY_MINUTES;
 
 /** Learns a motor clock's offset from the times at which it starts and ends its program. */
 export type MotorClockTracker = {
@@ -67,6 +67,7 @@ export type MotorClockTracker = {
 export function createMotorClockTracker(context: PumpContext, control: Control, saved: unknown): MotorClockTracker {
   const memory = restoreState(restingMemory(), saved);
   const edges = programEdges(context);
+  const { watch } = memory;
   const facts: MotorClockFacts = {
     offsetMinutes: memory.offset ?? 0,
     basis: memory.offset === null ? 'none' : 'edges',
@@ -83,16 +84,12 @@ export function createMotorClockTracker(context: PumpContext, control: Control, 
     memory.good[2] = facts.goodZoneMinutes = zone;
   }
 
-  function takeEdge(minute: number, among: readonly number[], { now, zoneOffsetMinutes }: Facts): void {
-    let nearest: number | undefined;
-    for (const edge of among) {
-      const late = weekDifference(edge, minute);
-      if (nearest === undefined || Math.abs(late) < Math.abs(nearest)) nearest = late;
-    }
-    if (nearest === undefined || Math.abs(nearest) > FARTHEST_MINUTES) return;
-    if (Math.abs(nearest + (memory.offset ?? 0)) <= AGREE_MINUTES) memory.suspect = 0;
-    noteGood(now, 0 - nearest, zoneOffsetMinutes);
-    memory.late = [...memory.late, Math.round(nearest * 10) / 10].slice(-EDGES);
+  function takeEdge(edge: ProgramEdge, { now, zoneOffsetMinutes }: Facts): void {
+    const late = latenessOf(edges, edge);
+    if (late === undefined || Math.abs(late) > FARTHEST_MINUTES) return;
+    if (Math.abs(late + (memory.offset ?? 0)) <= AGREE_MINUTES) memory.suspect = 0;
+    noteGood(now, 0 - late, zoneOffsetMinutes);
+    memory.late = [...memory.late, Math.round(late * 10) / 10].slice(-EDGES);
     const spread = Math.max(...memory.late) - Math.min(...memory.late);
     if (memory.late.length < EDGES || spread > AGREE_MINUTES) return;
     const middle = memory.late.toSorted((left, right) => left - right)[1] ?? 0;
@@ -104,9 +101,7 @@ export function createMotorClockTracker(context: PumpContext, control: Control, 
   return {
     facts,
     read: (known) => {
-      const { reading, control: answer, inputs, gap, now, localWeekday, localMinute } = known;
-      const turned = memory.wasStanding !== answer.standing && !gap;
-      memory.wasStanding = answer.standing;
+      const { reading, control: answer, now } = known;
       if (reading.motorClockMinute !== undefined && answer.motorClockKnown) {
         facts.offsetMinutes = answer.motorClockOffsetMinutes;
         facts.basis = 'says';
@@ -115,9 +110,8 @@ export function createMotorClockTracker(context: PumpContext, control: Control, 
         return;
       }
       suspect(memory, known);
-      if (turned && isOfProgram(reading.reportedSource) && areOpen(reading.closedInputs, inputs.lastOffAt, now)) {
-        takeEdge(localWeekday * DAY_MINUTES + localMinute, answer.standing ? edges.stops : edges.starts, known);
-      }
+      const edge = watchProgram(watch, known);
+      if (edge !== undefined) takeEdge(edge, known);
       facts.offsetMinutes = memory.offset ?? 0;
       facts.basis = memory.offset === null ? 'none' : 'edges';
       facts.suspectMinutes = memory.suspect;
@@ -152,41 +146,4 @@ export function isNearSuspectEdge({ motorClock, control, now }: Facts): boolean 
   const { programEdgeBefore, programEdgeAfter } = control;
   if (programEdgeBefore !== undefined && now - programEdgeBefore < near) return true;
   return programEdgeAfter !== undefined && programEdgeAfter - now < near;
-}
-
-function isOfProgram(source: Facts['reading']['reportedSource']): boolean {
-  return source === undefined || source === 'program' || source === 'prime' || source === 'off';
-}
-
-function areOpen(closed: number, lastOffAt: readonly number[], now: number): boolean {
-  return closed === 0 && lastOffAt.every((at) => now - at >= OPEN_FOR_MS);
-}
-
-/** Minutes of the week, Monday first, at which the program as a whole begins and ends. */
-function programEdges({ settings }: PumpContext): {
-  readonly starts: readonly number[];
-  readonly stops: readonly number[];
-} {
-  const due = new Uint8Array(WEEK_MINUTES);
-  for (const { days, fromMinute, toMinute } of settings.program) {
-    const lasts = toMinute > fromMinute ? toMinute - fromMinute : toMinute + DAY_MINUTES - fromMinute;
-    days.forEach((on, weekday) => {
-      if (!on) return;
-      for (let minute = 0; minute < lasts; minute += 1)
-        due[(weekday * DAY_MINUTES + fromMinute + minute) % WEEK_MINUTES] = 1;
-    });
-  }
-  const starts: number[] = [];
-  const stops: number[] = [];
-  for (let minute = 0; minute < WEEK_MINUTES; minute += 1) {
-    const before = due[(minute + WEEK_MINUTES - 1) % WEEK_MINUTES];
-    if (due[minute] === 1 && before === 0) starts.push(minute);
-    if (due[minute] === 0 && before === 1) stops.push(minute);
-  }
-  return { starts, stops };
-}
-
-function weekDifference(from: number, to: number): number {
-  const forward = (((to - from) % WEEK_MINUTES) + WEEK_MINUTES) % WEEK_MINUTES;
-  return forward > WEEK_MINUTES / 2 ? forward - WEEK_MINUTES : forward;
 }

@@ -10,6 +10,11 @@ const SETTLED_MS = 20_000;
 const CAUGHT_MS = 60_000;
 /** Load that only wavers about the limit was not lost. */
 const CLEARLY_BELOW = 0.1;
+/**
+ * A pump that was seen without load needs this much more to count as loaded: at a low speed a shut valve draws nearly
+ * as much as an open one.
+ */
+const CLEARLY_ABOVE = 1.18;
 /** A failed try is forgotten when no start follows within a day. */
 const TRY_MEMORY_MS = 86_400_000;
 
@@ -73,7 +78,7 @@ export function judgeLoad(state: LoadState, at: number, ratio: number, unloadedB
     state.primed = 2;
     return false;
   }
-  if (ratio < unloadedBelow) {
+  if (ratio < (state.primed === 0 ? unloadedBelow * CLEARLY_ABOVE : unloadedBelow)) {
     // Load that came for a moment and went is no prime.
     if (state.loadedSince !== 0) state.brief = at - state.loadedSince < CAUGHT_MS;
     if (state.brief && ratio < unloadedBelow - CLEARLY_BELOW) {

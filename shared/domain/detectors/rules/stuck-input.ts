@@ -10,12 +10,14 @@ import { ABNORMAL, type Judgement, NORMAL } from '../judgement.ts';
 
 /**
  * Of the input that is closed longest past its off time: its number and when it should have opened. `since`, `offDue`
- * and `waits` (minutes to wait after it) list that for every input; `tripper` remembers inputs that ran through one off time and opened at another.
+ * and `waits` (minutes to wait after it) list that for every input, `onTimeAt` when each last closed on time; `tripper`
+ * marks the inputs that ran through one off time and opened at another.
  */
 type State = {
   since: number[];
   offDue: number[];
   waits: number[];
+  onTimeAt: number[];
   input: number;
   offAt: number;
   cause: string;
@@ -28,6 +30,7 @@ const BY_HAND_MINUTES = 45;
 /** A dial that is off moves its whole window; further than this it is another window. */
 const FARTHEST_SHIFT_MINUTES = 360;
 const AT_TRIPPER_MINUTES = 20;
+const RIGHT_TODAY_MS = 20 * 3_600_000;
 
 function judge(state: State, facts: Facts, parameters: Parameters): Judgement {
   const { inputs, now } = facts;
@@ -47,7 +50,8 @@ function judge(state: State, facts: Facts, parameters: Parameters): Judgement {
   if (state.input !== worst || !facts.stands('stuck-input')) state.cause = causeOf(facts, worst, state);
   state.input = worst;
   state.offAt = state.offDue[worst - 1] ?? now;
-  if (state.cause === 'unknown' && hasPassedTwoTrippers(facts, worst)) state.cause = 'switch-welded';
+  // A lever goes back at the next tripper, and a contact whose tripper is missing opens at the one after it.
+  if (hasPassedTripper(state, facts, worst, parameters)) state.cause = 'switch-welded';
   return ABNORMAL;
 }
 
@@ -60,28 +64,34 @@ function follow(state: State, facts: Facts, index: number, since: number, parame
     state.offDue[index] = 0;
     return;
   }
-  const byHand = isByHand(facts, index, since, parameters);
+  const byHand = isByHand(state, facts, index, since, parameters);
+  if (!byHand && isOnTime(facts, index)) state.onTimeAt[index] = since;
   state.offDue[index] = byHand ? since : offDueAt(facts, index, since);
   if (byHand) state.waits[index] = parameters.byHandMinutes;
 }
 
-/** Closed at an hour of no window, by a dial that cannot be off by that much, and no window opens soon. */
-function isByHand(
-  { inputs, context, localDay }: Facts,
-  index: number,
-  since: number,
-  { byHandMinutes }: Parameters,
-): boolean {
+/**
+ * Closed at an hour of no window, by a dial that was right today or cannot be off by that much, and no window opens
+ * soon.
+ */
+function isByHand(state: State, facts: Facts, index: number, since: number, { byHandMinutes }: Parameters): boolean {
+  const { inputs, context, localDay } = facts;
   const windows = inputs.windows[index] ?? [];
   const minute = inputs.onMinute[index] ?? 0;
   const opened = nearestWindow(windows, minute);
-  if (inputs.edgeSeen[index] !== true || opened === undefined) return false;
-  if (Math.abs(opened.missedBy) <= FARTHEST_SHIFT_MINUTES || windows.some((window) => holds(window, minute)))
+  if (inputs.edgeSeen[index] !== true || opened === undefined || windows.some((window) => holds(window, minute)))
     return false;
+  const rightToday = since - (state.onTimeAt[index] ?? 0) < RIGHT_TODAY_MS;
+  if (!rightToday && Math.abs(opened.missedBy) <= FARTHEST_SHIFT_MINUTES) return false;
   return windows.every((window) => {
     const opens = nextOpening(window, context.zone, localDay, since);
     return opens === undefined || opens - since > byHandMinutes * MINUTE_MS;
   });
+}
+
+function isOnTime({ inputs }: Facts, index: number): boolean {
+  const opened = nearestWindow(inputs.windows[index] ?? [], inputs.onMinute[index] ?? 0);
+  return opened !== undefined && Math.abs(opened.missedBy) <= BY_HAND_MINUTES;
 }
 
 function holds(window: KnownWindow, minute: number): boolean {
@@ -128,11 +138,16 @@ function causeOf(facts: Facts, input: number, { tripper }: State): string {
   return byHand && !facts.stands('clock-shift') ? 'lever-left-on' : 'unknown';
 }
 
-/** It stayed closed past two different off trippers: the trippers are there, the contact does not open. */
-function hasPassedTwoTrippers({ inputs, context, localDay, now }: Facts, input: number): boolean {
+/**
+ * It stayed closed past an off tripper that is known to be there: the second of two different ones; or, put on by
+ * hand, a whole day in which the dial went round. The trippers are there and the contact does not open.
+ */
+function hasPassedTripper(state: State, facts: Facts, input: number, { alarmAfterMinutes }: Parameters): boolean {
+  const { inputs, context, localDay, now } = facts;
+  if (state.cause === 'lever-left-on') return now - state.offAt >= alarmAfterMinutes * MINUTE_MS;
   const since = inputs.closedSince[input - 1] ?? 0;
   const windows = inputs.windows[input - 1] ?? [];
-  if (windows.length < 2) return false;
+  if (state.cause !== 'unknown' || windows.length < 2) return false;
   const passed = windows.filter((window) => {
     const closes = nextClosing(window, context.zone, localDay - 1, since);
     return closes !== undefined && now > closes + AT_TRIPPER_MINUTES * MINUTE_MS;
@@ -172,6 +187,7 @@ export const stuckInput = defineDetector<'stuck-input', State>({
     since: perInput(() => 0),
     offDue: perInput(() => 0),
     waits: perInput(() => 0),
+    onTimeAt: perInput(() => 0),
     input: 0,
     offAt: 0,
     cause: 'unknown',

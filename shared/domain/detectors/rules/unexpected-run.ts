@@ -77,12 +77,14 @@ function causeOf(
   parameters: RuleParameters<'unexpected-run'>,
 ): string {
   const says = reading.reportedSource;
-  if (says !== undefined && says !== 'program') return 'unknown';
   const known = context.settings.program.some((entry) => fitsSpeed(reading.rpm, entry.rpm));
-  if (!known) return says === 'program' ? 'program-changed' : 'unknown';
-  if (control.motorClockKnown) return 'program-changed';
+  // Without a word from the motor, a speed of the program at the wrong hour is all there is to go by.
+  if (says !== 'program' && (says !== undefined || !known)) return 'unknown';
+  if (!known) return 'program-changed';
+  if (control.motorClockKnown) return says === 'program' ? 'program-changed' : 'unknown';
   if (state.startMissedBy === null) return 'unknown';
-  return Math.abs(state.startMissedBy) <= parameters.sameClockMinutes ? 'program-changed' : 'motor-clock';
+  if (Math.abs(state.startMissedBy) > parameters.sameClockMinutes) return 'motor-clock';
+  return says === 'program' ? 'program-changed' : 'unknown';
 }
 
 export const unexpectedRun = defineDetector<'unexpected-run', State>({

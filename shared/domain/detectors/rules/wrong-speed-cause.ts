@@ -38,7 +38,10 @@ function isHot({ reading, context }: Facts, { hotMarginCelsius }: RuleParameters
   return driveCelsius !== undefined && driveCelsius >= context.traits.driveHotCelsius - hotMarginCelsius;
 }
 
-/** It draws about what the full speed would draw and still does not reach it, or the supply is too low for it. */
+/**
+ * It draws about what the full speed would draw and still does not reach it, or far more than this speed usually
+ * does; or the supply is too low for it.
+ */
 function isAtPowerLimit(
   { reading, control, context, load }: Facts,
   parameters: RuleParameters<'wrong-speed'>,
@@ -47,5 +50,7 @@ function isAtPowerLimit(
   const { nominalVolts } = context;
   if (volts !== undefined && nominalVolts !== undefined && volts < parameters.lowVoltsShare * nominalVolts) return true;
   const full = load.wattsAt(control.due.rpm);
-  return full > 0 && watts >= parameters.powerLimitShare * full;
+  if (full > 0 && watts >= parameters.powerLimitShare * full) return true;
+  const usual = load.wattsAt(reading.rpm);
+  return usual > 0 && watts >= parameters.overloadShare * usual;
 }

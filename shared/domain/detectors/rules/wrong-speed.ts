@@ -62,10 +62,16 @@ function delaySeconds(_: State, facts: Facts, parameters: RuleParameters<'wrong-
   return hidden ? parameters.withoutSourceSeconds : parameters.delaySeconds;
 }
 
+/** A motor that ignores an input follows another one while that is closed too: the first explains both. */
+function betterCause(known: string, found: string): string {
+  return known === 'unknown-speed' || (known === 'follows-lower-input' && found === 'ignores-input') ? found : known;
+}
+
 function describe(state: State, facts: Facts, parameters: RuleParameters<'wrong-speed'>, { raised }: Spoken): Finding {
   const { reading, control, context } = facts;
   // What another situation looks like says nothing of this alarm's.
-  if (!raised || isSameSituation(state, facts)) state.cause = wrongSpeedCause(facts, parameters);
+  if (!raised) state.cause = wrongSpeedCause(facts, parameters);
+  else if (isSameSituation(state, facts)) state.cause = betterCause(state.cause, wrongSpeedCause(facts, parameters));
   const followed = followedInput(facts);
   return {
     cause: state.cause,
