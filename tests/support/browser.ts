@@ -7,6 +7,8 @@ const LAUNCH = {
   executablePath: '/usr/bin/chromium',
   args: [
     '--no-sandbox',
+    // A container's /dev/shm may be too small for a page; it takes temporary files then.
+    '--disable-dev-shm-usage',
     '--disable-gpu',
     '--disable-quic',
     '--disable-sync',
