@@ -13,6 +13,7 @@ import { writeReadings } from './load-readings.ts';
 import { fillDatabase } from './watch.ts';
 
 const READINGS_PER_SECOND = 1000;
+const WARM_UP_SECONDS = 5;
 const SECONDS = 25;
 const PROBE_EVERY_MS = 97;
 const ON_SCREEN = 100;
@@ -44,6 +45,7 @@ export const socketLatency: Bench = {
     const load = await startLoad({ port: ports.mqtt, devices: others, readingsPerMessage: 1, window: 1 });
     const watcher = await openLiveWatcher({ httpPort: ports.http, publicUrl: PUBLIC_URL }, MANAGER);
     try {
+      await load.run({ seconds: WARM_UP_SECONDS, messagesPerSecond: READINGS_PER_SECOND });
       const lateness: number[] = [];
       const sentAt = new Map<number, number>();
       watcher.watch(onScreen, (id, at) => {
