@@ -6,10 +6,19 @@ import { connectedDevices } from './connected-devices.ts';
 import { foldLag } from './fold-lag.ts';
 import { formatTable } from './format-table.ts';
 import { ingestForty, ingestOne } from './ingest-ratio.ts';
+import { publishToPixel } from './publish-to-pixel.ts';
 import { socketLatency } from './socket-latency.ts';
 
 /** `npm run bench [-- --only name]`: a table to standard error, JSON to standard output, 1 when a limit is missed. */
-const BENCHES: readonly Bench[] = [clientBytes, ingestOne, ingestForty, foldLag, socketLatency, connectedDevices];
+const BENCHES: readonly Bench[] = [
+  clientBytes,
+  ingestOne,
+  ingestForty,
+  foldLag,
+  socketLatency,
+  publishToPixel,
+  connectedDevices,
+];
 
 const { values } = parseArgs({ options: { only: { type: 'string', multiple: true } } });
 const wanted = values.only;
