@@ -148,15 +148,25 @@ export const CAUSE_WEIGHTS: Readonly<Record<Detector, readonly CauseWeight[]>> =
     weigh('back-to-factory-settings', 1, { 'new-boot': [3, 0.7], 'fault-code': [2, 1] }),
   ],
   'energized-without-flow': [
-    weigh('failed-prime', 4, { 'air-from-the-start': [3, 1], 'lid-opened': [2, 1] }),
-    weigh('keypad-stop', 3, { 'our-visit': [2, 0.9], 'fault-code': [0.4, 1] }),
-    weigh('fault', 2, { 'fault-code': [6, 0.5] }),
+    weigh('failed-prime', 4, { standing: [0.1, 4], 'air-from-the-start': [3, 1], 'lid-opened': [2, 1] }),
+    weigh('keypad-stop', 3, { standing: [2, 0.1], 'our-visit': [2, 0.9], 'fault-code': [0.4, 1] }),
+    weigh('fault', 2, { standing: [2, 0.1], 'fault-code': [6, 0.5] }),
     weigh('no-flow-interlock', 1),
   ],
   'too-little-water': [
-    weigh('short-hours', 5, { slow: [0.7, 1], 'clocks-shifted': [1.2, 1], 'power-cut': [1.5, 1] }),
-    weigh('dirty-filter', 3, { slow: [3, 0.8], 'psi-high': [4, 0.7], 'filter-cleaned': [0.3, 1.2] }),
-    weigh('slow-program', 2, { 'our-visit': [1.5, 1] }),
+    weigh('short-hours', 5, {
+      'flow-too-low': [0.2, 2],
+      slow: [0.7, 1],
+      'clocks-shifted': [1.2, 1],
+      'power-cut': [1.5, 1],
+    }),
+    weigh('dirty-filter', 3, {
+      'flow-too-low': [3, 0.4],
+      slow: [3, 0.8],
+      'psi-high': [4, 0.7],
+      'filter-cleaned': [0.3, 1.2],
+    }),
+    weigh('slow-program', 2, { 'flow-too-low': [3, 0.4], 'our-visit': [1.5, 1] }),
   ],
   freezing: [
     weigh('stopped-by-hand', 4, { 'our-visit': [1.5, 1], 'fault-code': [0.4, 1] }),
@@ -165,10 +175,15 @@ export const CAUSE_WEIGHTS: Readonly<Record<Detector, readonly CauseWeight[]>> =
     weigh('should-be-winterized', 1),
   ],
   'supply-voltage': [
-    weigh('utility', 4, { 'neighbours-too': [6, 0.5], 'power-cut': [2, 1], heat: [1.5, 1] }),
-    weigh('bad-connection', 3, { 'neighbours-too': [0.3, 1.2], slow: [2, 1], sudden: [1.2, 1] }),
-    weigh('wire-too-thin', 2, { 'neighbours-too': [0.3, 1], 'our-visit': [1.2, 1] }),
-    weigh('wrong-nominal', 1, { 'our-visit': [2, 0.9] }),
+    weigh('utility', 4, { 'high-voltage': [3, 1], 'neighbours-too': [6, 0.5], 'power-cut': [2, 1], heat: [1.5, 1] }),
+    weigh('bad-connection', 3, {
+      'high-voltage': [0.3, 1],
+      'neighbours-too': [0.3, 1.2],
+      slow: [2, 1],
+      sudden: [1.2, 1],
+    }),
+    weigh('wire-too-thin', 2, { 'high-voltage': [0.1, 1], 'neighbours-too': [0.3, 1], 'our-visit': [1.2, 1] }),
+    weigh('wrong-nominal', 1, { 'high-voltage': [1.5, 1], 'our-visit': [2, 0.9] }),
   ],
   'drive-fault': [
     weigh('supply', 3, { 'low-voltage': [4, 0.7], 'power-cut': [3, 0.9], 'neighbours-too': [2, 1] }),

@@ -125,7 +125,10 @@ export const SIGN_WORDS: Readonly<Record<Sign, readonly [present: string, absent
   'at-night-only': ['At night only', 'Not at night only'],
   'drive-hot': ['The drive is hot', 'The drive is not hot'],
   'low-voltage': ['The supply voltage is low', 'The supply voltage is right'],
+  'high-voltage': ['The supply voltage is high', 'The supply voltage is not high'],
   'new-boot': ['It lost power and came back', 'It did not lose power'],
   'fault-code': ['The drive shows a fault code', 'No fault code'],
   'same-time-each-day': ['At the same time each day', 'Not at one time of day'],
+  standing: ['The shaft stands', 'The shaft turns'],
+  'flow-too-low': ['The flow is too low while it runs', 'The flow is enough while it runs'],
 };

@@ -29,9 +29,12 @@ export const SIGNS = [
   'at-night-only',
   'drive-hot',
   'low-voltage',
+  'high-voltage',
   'new-boot',
   'fault-code',
   'same-time-each-day',
+  'standing',
+  'flow-too-low',
 ] as const;
 export type Sign = (typeof SIGNS)[number];
 

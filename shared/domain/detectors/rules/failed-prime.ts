@@ -2,7 +2,7 @@ import { defineDetector, type Finding, type Spoken } from '../define-detector.ts
 import type { RuleParameters } from '../detector-parameters.ts';
 import type { Facts } from '../facts.ts';
 import { ABNORMAL, type Judgement, NORMAL, UNJUDGED } from '../judgement.ts';
-import { type PrimeCause, rankPrimeCauses } from './prime-causes.ts';
+import { isNearShutOff, type PrimeCause, rankPrimeCauses } from './prime-causes.ts';
 
 /** The cause that was found, how much spoke for it, and the start in which it was found. */
 type State = { cause: string; weight: number; startedAt: number };
@@ -67,6 +67,8 @@ function describe(state: State, facts: Facts, _: Parameters, { raised }: Spoken)
       watts: load.judgedWatts,
       primedWatts: Math.round(primedWatts),
       loadShare: primedWatts > 0 ? Math.round((load.judgedWatts / primedWatts) * 100) / 100 : null,
+      loadCameAndWent: load.caught,
+      ...(facts.context.wetEnd === undefined ? {} : { wattsOfNoFlow: isNearShutOff(facts) }),
       knownFrom: load.basis,
       stoodMinutes: Math.round(load.stoodSeconds / 60),
       causes: ranked.map(({ cause }) => cause),

@@ -44,7 +44,8 @@ export function rankPrimeCauses(facts: Facts): readonly PrimeCause[] {
   return causes.filter(({ weight }) => weight > 0).sort((left, right) => right.weight - left.weight);
 }
 
-function isNearShutOff({ load, context }: Facts): boolean {
+/** Whether the watts are those of a full wet end that moves no water; false without a model. */
+export function isNearShutOff({ load, context }: Facts): boolean {
   const { wetEnd } = context;
   if (wetEnd === undefined) return false;
   const shut = wetEnd.points.filter(({ gpm }) => gpm === 0);
