@@ -1,6 +1,6 @@
 import { createZone } from '#simulator/clocks/zone.ts';
 import { listLarkmoorPumps } from '#simulator/larkmoor.ts';
-import { createPump, type Pump } from '#simulator/pump.ts';
+import { createPump } from '#simulator/pump.ts';
 import type { PumpSpec } from '#simulator/pump-spec.ts';
 import { createVirtualPump, type News, type VirtualPump } from '#simulator/virtual-pump.ts';
 
@@ -30,5 +30,3 @@ export function play(member: VirtualPump, until: number): News[] {
 export function readingsOf(news: readonly News[]) {
   return news.flatMap((item) => (item.kind === 'reading' ? [item.reading] : []));
 }
-
-export type { Pump };

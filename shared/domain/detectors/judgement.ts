@@ -5,12 +5,3 @@ export const ABNORMAL = 1;
 export const UNJUDGED = 2;
 
 export type Judgement = typeof NORMAL | typeof ABNORMAL | typeof UNJUDGED;
-
-/**
- * A yes or no as a judgement.
- *
- * @example judged(true) // ABNORMAL
- */
-export function judged(abnormal: boolean): Judgement {
-  return abnormal ? ABNORMAL : NORMAL;
-}
