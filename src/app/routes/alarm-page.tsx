@@ -7,8 +7,8 @@ import { ErrorNotice } from '#src/components/ui/error-notice.tsx';
 import { PageHeading } from '#src/components/ui/page-heading.tsx';
 import { AcknowledgePanel } from '#src/features/alarms/acknowledge-panel.tsx';
 import { AlarmHistory } from '#src/features/alarms/alarm-history.tsx';
+import { whereOf } from '#src/features/alarms/alarm-names.ts';
 import { alarmQueries } from '#src/features/alarms/alarm-queries.ts';
-import { whereOf } from '#src/features/alarms/alarm-view.ts';
 import { Cautions } from '#src/features/alarms/cautions.tsx';
 import { EvidenceSheet } from '#src/features/alarms/evidence-sheet.tsx';
 import { usualWattsOf } from '#src/features/alarms/evidence-view.ts';
@@ -20,7 +20,7 @@ import { EvidenceChart } from '#src/features/readings/evidence-chart.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
 import { useNow } from '#src/hooks/use-now.ts';
 import { useWatchedPumps } from '#src/hooks/use-watched-pumps.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import { paths } from '#src/lib/paths.ts';
 
 /** What a mail's link opens: one alarm, on a phone held in one hand in the sun. */

@@ -13,7 +13,7 @@ import { parseAlarmsAddress } from '#src/features/alarms/alarms-address.ts';
 import { NoteRow } from '#src/features/alarms/note-row.tsx';
 import { StripSource } from '#src/features/pumps/strip-source.tsx';
 import { useNow } from '#src/hooks/use-now.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 
 const headingOf = ({ items, totals }: AlarmPage): string => {
   if (totals.unacknowledged > 0) return t('alarms.heading.waiting', { count: totals.unacknowledged });

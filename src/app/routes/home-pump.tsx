@@ -16,7 +16,7 @@ import { useFormat } from '#src/hooks/use-format.ts';
 import { useNow } from '#src/hooks/use-now.ts';
 import { useSession } from '#src/hooks/use-session.ts';
 import { useWatchedPumps } from '#src/hooks/use-watched-pumps.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import { createStore } from '#src/lib/store.ts';
 
 const WEEK_MS = 7 * 86_400_000;

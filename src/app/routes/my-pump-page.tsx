@@ -7,7 +7,7 @@ import { PageHeading } from '#src/components/ui/page-heading.tsx';
 import { nameOfPump } from '#src/features/pumps/pump-heading.ts';
 import { pumpQueries } from '#src/features/pumps/pump-queries.ts';
 import { useSession } from '#src/hooks/use-session.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import { paths } from '#src/lib/paths.ts';
 import { HomePump } from './home-pump.tsx';
 import { PumpSkeleton } from './pump-skeleton.tsx';

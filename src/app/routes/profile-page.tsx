@@ -8,7 +8,7 @@ import { useSignOut } from '#src/features/session/use-sign-out.ts';
 import { useFormat } from '#src/hooks/use-format.ts';
 import { useNow } from '#src/hooks/use-now.ts';
 import { useSession } from '#src/hooks/use-session.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import { paths } from '#src/lib/paths.ts';
 
 /** An example of a temperature that both units show differently, °C. */

@@ -2,8 +2,9 @@ import type { Alarm } from '#shared/contract/http/alarms.ts';
 import { Button } from '#src/components/ui/button.tsx';
 import { useNow } from '#src/hooks/use-now.ts';
 import { useSession } from '#src/hooks/use-session.ts';
-import { t } from '#src/lib/messages/t.ts';
-import { isWaiting, mayUndo, titleOf, whereOf } from './alarm-view.ts';
+import { t } from '#src/lib/messages/page-words.ts';
+import { titleOf, whereOf } from './alarm-names.ts';
+import { isWaiting, mayUndo } from './alarm-view.ts';
 import { useAcknowledge } from './use-acknowledge.ts';
 import { useWithdraw } from './use-withdraw.ts';
 

@@ -1,6 +1,6 @@
 import { useId, useState } from 'react';
 import type { Alarm } from '#shared/contract/http/alarms.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import { AcknowledgeButton } from './acknowledge-button.tsx';
 import { isWaiting } from './alarm-view.ts';
 

@@ -5,7 +5,7 @@ import { Folded } from '#src/components/ui/folded.tsx';
 import { PriorityMark } from '#src/components/ui/priority-mark.tsx';
 import { SearchField } from '#src/components/ui/search-field.tsx';
 import { Select } from '#src/components/ui/select.tsx';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import type { AlarmFilter } from './alarm-queries.ts';
 import { ALARM_SHOWS, ALARM_SORTS, changeAlarmsAddress, parseAlarmsAddress } from './alarms-address.ts';
 

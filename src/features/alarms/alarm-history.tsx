@@ -2,7 +2,7 @@ import type { AlarmDetail } from '#shared/contract/http/alarms.ts';
 import { alarmTitle } from '#shared/domain/wording/alarm-title.ts';
 import { Sheet } from '#src/components/ui/sheet.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
-import { isPlainKey, t } from '#src/lib/messages/t.ts';
+import { isPlainKey, t } from '#src/lib/messages/page-words.ts';
 
 const wordOf = (kind: string): string => {
   const key = `transition.${kind}`;

@@ -3,7 +3,7 @@ import type { Alarm } from '#shared/contract/http/alarms.ts';
 import { Button } from '#src/components/ui/button.tsx';
 import { ErrorNotice } from '#src/components/ui/error-notice.tsx';
 import { Notice } from '#src/components/ui/notice.tsx';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import type { AlarmFilter } from './alarm-queries.ts';
 import { isNarrowed } from './alarms-address.ts';
 import { useAlarmList } from './use-alarm-list.ts';

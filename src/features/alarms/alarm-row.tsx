@@ -3,11 +3,12 @@ import type { Alarm } from '#shared/contract/http/alarms.ts';
 import { alarmWords } from '#shared/domain/wording/alarm-words.ts';
 import { PriorityMark } from '#src/components/ui/priority-mark.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import { paths } from '#src/lib/paths.ts';
 import { AcknowledgeButton } from './acknowledge-button.tsx';
+import { titleOf, whereOf } from './alarm-names.ts';
 import { ALARM_TONE } from './alarm-tone.ts';
-import { describeSpan, describeState, isWaiting, titleOf, whereOf } from './alarm-view.ts';
+import { describeSpan, describeState, isWaiting } from './alarm-view.ts';
 import { EvidenceStrip, type StripSource } from './evidence-strip.tsx';
 
 export type AlarmRowProps = { readonly alarm: Alarm; readonly now: number; readonly StripSource: StripSource };

@@ -4,8 +4,8 @@ import { t } from '#src/lib/messages/t.ts';
 import { serverNow } from '#src/lib/server-clock.ts';
 import { createStore } from '#src/lib/store.ts';
 import { writeAlarm } from './alarm-cache.ts';
+import { titleOf, whereOf } from './alarm-names.ts';
 import { alarmQueries } from './alarm-queries.ts';
-import { titleOf, whereOf } from './alarm-view.ts';
 
 /** The last alarm that was raised while one watched, as a sentence; empty before the first. */
 export const raisedNow = createStore('');

@@ -1,12 +1,6 @@
 import type { Alarm } from '#shared/contract/http/alarms.ts';
-import { alarmTitle } from '#shared/domain/wording/alarm-title.ts';
 import type { Format } from '#src/lib/format/create-format.ts';
-import { t } from '#src/lib/messages/t.ts';
-
-export const titleOf = ({ detector, cause, evidence }: Alarm): string => alarmTitle(detector, cause, evidence);
-
-export const whereOf = ({ padName, pumpName }: Alarm): string =>
-  pumpName === '' ? padName : t('alarm.where', { pad: padName, pump: pumpName });
+import { t } from '#src/lib/messages/page-words.ts';
 
 /** Since when it stands, or from when to when it stood, in the pad's time. */
 export function describeSpan({ from, returnedAt, zone, count }: Alarm, format: Format, now: number): string {

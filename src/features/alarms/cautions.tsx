@@ -1,5 +1,5 @@
 import { CAUTIONS, DISCLAIMER, TASKS, type Task } from '#shared/domain/wording/cautions.data.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 
 /** The tasks up to and including one: whoever touches a wire also opens things and looks. */
 const tasksUpTo = (task: Task): readonly Task[] => TASKS.slice(0, TASKS.indexOf(task) + 1);

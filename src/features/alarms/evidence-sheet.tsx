@@ -5,7 +5,7 @@ import { FactList } from '#src/components/ui/fact-list.tsx';
 import { Figures } from '#src/components/ui/figures.tsx';
 import { PriorityMark } from '#src/components/ui/priority-mark.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import { ALARM_TONE } from './alarm-tone.ts';
 import { describeSpan, describeState, isWaiting } from './alarm-view.ts';
 import { EvidenceStrip, type StripSource } from './evidence-strip.tsx';

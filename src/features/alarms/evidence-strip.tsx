@@ -6,10 +6,11 @@ import { USUAL_TOP_RPM } from '#src/components/charts/strip/strip-metrics.ts';
 import type { StripState, StripWindow } from '#src/components/charts/strip/strip-run.ts';
 import { withSilence } from '#src/components/charts/strip/with-silence.ts';
 import { useElementWidth } from '#src/hooks/use-element-width.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import { unprimedSince } from '#src/lib/unprimed-since.ts';
+import { whereOf } from './alarm-names.ts';
 import { ALARM_TONE } from './alarm-tone.ts';
-import { evidenceWindow, whereOf } from './alarm-view.ts';
+import { evidenceWindow } from './alarm-view.ts';
 
 /** Brings the runs of one pump; given by the page, since runs belong to another feature. */
 export type StripSource = ComponentType<{

@@ -2,7 +2,7 @@ import type { Alarm } from '#shared/contract/http/alarms.ts';
 import { formatDuration } from '#shared/domain/wording/format-duration.ts';
 import type { Format } from '#src/lib/format/create-format.ts';
 import { listClosed } from '#src/lib/list-closed.ts';
-import { isPlainKey, t } from '#src/lib/messages/t.ts';
+import { isPlainKey, t } from '#src/lib/messages/page-words.ts';
 
 type Evidence = Alarm['evidence'];
 

@@ -1,6 +1,6 @@
 import type { Look } from '#shared/domain/wording/alarm-wording.data.ts';
 import { Sheet } from '#src/components/ui/sheet.tsx';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 
 /** What to look at, in order, before anything is switched off. */
 export function LookFirst({ look }: { readonly look: readonly Look[] }) {

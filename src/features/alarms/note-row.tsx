@@ -4,8 +4,9 @@ import { PriorityMark } from '#src/components/ui/priority-mark.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
 import { paths } from '#src/lib/paths.ts';
 import { AcknowledgeButton } from './acknowledge-button.tsx';
+import { titleOf, whereOf } from './alarm-names.ts';
 import { ALARM_TONE } from './alarm-tone.ts';
-import { describeSpan, isWaiting, titleOf, whereOf } from './alarm-view.ts';
+import { describeSpan, isWaiting } from './alarm-view.ts';
 
 /** One note of the work list, in two lines. */
 export function NoteRow({ alarm, now }: { readonly alarm: Alarm; readonly now: number }) {

@@ -2,10 +2,11 @@ import { Link } from 'react-router-dom';
 import { PriorityMark } from '#src/components/ui/priority-mark.tsx';
 import { Sheet } from '#src/components/ui/sheet.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import { paths } from '#src/lib/paths.ts';
 import { AlarmList } from './alarm-list.tsx';
-import { describeSpan, describeState, isWaiting, titleOf } from './alarm-view.ts';
+import { titleOf } from './alarm-names.ts';
+import { describeSpan, describeState, isWaiting } from './alarm-view.ts';
 
 export type PumpAlarmsProps = {
   readonly pumpId: string;

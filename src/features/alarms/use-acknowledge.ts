@@ -3,12 +3,13 @@ import { type Alarm, alarmEndpoints } from '#shared/contract/http/alarms.ts';
 import { useSession } from '#src/hooks/use-session.ts';
 import { call } from '#src/lib/api/api-client.ts';
 import { describeError } from '#src/lib/api/describe-error.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import { showNotice } from '#src/lib/notices.ts';
 import { serverNow } from '#src/lib/server-clock.ts';
 import { writeAlarm } from './alarm-cache.ts';
+import { titleOf, whereOf } from './alarm-names.ts';
 import { alarmQueries } from './alarm-queries.ts';
-import { acknowledgedBy, titleOf, whereOf } from './alarm-view.ts';
+import { acknowledgedBy } from './alarm-view.ts';
 import { useWithdraw } from './use-withdraw.ts';
 
 export type Acknowledgement = { readonly alarm: Alarm; readonly note?: string };

@@ -4,7 +4,7 @@ import type { Alarm } from '#shared/contract/http/alarms.ts';
 import { alarmWords } from '#shared/domain/wording/alarm-words.ts';
 import { useFormat } from '#src/hooks/use-format.ts';
 import type { Format } from '#src/lib/format/create-format.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import { alarmQueries } from './alarm-queries.ts';
 
 export type AlarmEvent = { readonly at: number; readonly text: string };

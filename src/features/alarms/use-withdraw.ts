@@ -2,11 +2,11 @@ import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { type Alarm, alarmEndpoints } from '#shared/contract/http/alarms.ts';
 import { call } from '#src/lib/api/api-client.ts';
 import { describeError } from '#src/lib/api/describe-error.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import { showNotice } from '#src/lib/notices.ts';
 import { writeAlarm } from './alarm-cache.ts';
+import { titleOf, whereOf } from './alarm-names.ts';
 import { alarmQueries } from './alarm-queries.ts';
-import { titleOf, whereOf } from './alarm-view.ts';
 
 /** Takes one's own acknowledgement back. */
 export function useWithdraw() {

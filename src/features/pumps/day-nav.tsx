@@ -1,6 +1,6 @@
 import { Link } from 'react-router-dom';
 import { chipClass } from '#src/components/ui/chip.tsx';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import { dayQuery, type ShownDay } from './use-day.ts';
 
 export type DayNavProps = {

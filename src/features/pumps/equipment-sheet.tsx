@@ -2,7 +2,7 @@ import type { PumpDetail } from '#shared/contract/http/pumps.ts';
 import { DataTable } from '#src/components/ui/data-table.tsx';
 import { Sheet } from '#src/components/ui/sheet.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 
 type Equipment = PumpDetail['equipment'][number];
 

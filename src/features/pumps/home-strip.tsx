@@ -3,7 +3,7 @@ import type { StripState } from '#src/components/charts/strip/strip-run.ts';
 import type { CursorStore } from '#src/components/charts/strip/time-cursor.tsx';
 import { Sheet } from '#src/components/ui/sheet.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import { DayNav } from './day-nav.tsx';
 import { PumpDay } from './pump-day.tsx';
 import type { ShownDay } from './use-day.ts';

@@ -1,7 +1,7 @@
 import type { PumpRow } from '#shared/contract/http/pumps.ts';
 import { alarmWords } from '#shared/domain/wording/alarm-words.ts';
 import type { Format } from '#src/lib/format/create-format.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import { whatComes } from '#src/lib/why/what-comes.ts';
 import { whyNow } from '#src/lib/why/why.ts';
 import { conditionOf } from './pump-heading.ts';

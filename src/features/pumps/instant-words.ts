@@ -3,7 +3,7 @@ import type { Voice } from '#shared/domain/control/explain-options.ts';
 import { runAt, type StripState } from '#src/components/charts/strip/strip-run.ts';
 import { describeSource } from '#src/components/charts/strip/strip-words.ts';
 import type { Format } from '#src/lib/format/create-format.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import { whyNow, whyThen } from '#src/lib/why/why.ts';
 
 /** What is said of one instant: the figures measured then, and why. */

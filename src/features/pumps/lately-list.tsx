@@ -1,7 +1,7 @@
 import { Figures } from '#src/components/ui/figures.tsx';
 import { Sheet } from '#src/components/ui/sheet.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import type { LatelyEvent } from './lately-view.ts';
 
 export type LatelyListProps = {

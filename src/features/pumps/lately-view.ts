@@ -1,6 +1,6 @@
 import type { Run, RunSourceName } from '#shared/contract/http/runs.ts';
 import { formatSpan } from '#src/lib/format/format-span.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 
 /** Something worth telling a homeowner, when it began, in their words. */
 export type LatelyEvent = { readonly at: number; readonly text: string };

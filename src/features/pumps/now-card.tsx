@@ -7,7 +7,7 @@ import { Sheet } from '#src/components/ui/sheet.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
 import { useNow } from '#src/hooks/use-now.ts';
 import { listClosed } from '#src/lib/list-closed.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import { whyNow } from '#src/lib/why/why.ts';
 import { conditionOf } from './pump-heading.ts';
 

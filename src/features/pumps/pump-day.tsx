@@ -9,7 +9,7 @@ import type { CursorStore } from '#src/components/charts/strip/time-cursor.tsx';
 import { withSilence } from '#src/components/charts/strip/with-silence.ts';
 import { TableToggle } from '#src/components/ui/table-toggle.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import { unprimedSince } from '#src/lib/unprimed-since.ts';
 import { labelRun } from '#src/lib/why/label-run.ts';
 import { InstantLine } from './instant-line.tsx';

@@ -1,7 +1,7 @@
 import type { PumpNow, PumpRow } from '#shared/contract/http/pumps.ts';
 import { fitsSpeed, STANDSTILL_RPM } from '#shared/domain/control/speed-tolerance.ts';
 import type { Format } from '#src/lib/format/create-format.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 
 /** Pad and pump as one name; a pad with a single, unnamed pump is enough by itself. */
 export const nameOfPump = ({ padName, pumpName }: Pick<PumpRow, 'padName' | 'pumpName'>): string =>

@@ -3,7 +3,7 @@ import { DataTable } from '#src/components/ui/data-table.tsx';
 import { FactList } from '#src/components/ui/fact-list.tsx';
 import { Sheet } from '#src/components/ui/sheet.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import { describeDays, listSettings } from './settings-view.ts';
 
 type Entry = PumpDetail['settings']['program'][number];

@@ -1,6 +1,6 @@
 import type { PumpDetail } from '#shared/contract/http/pumps.ts';
 import type { Format } from '#src/lib/format/create-format.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 
 const WEEKDAYS = '1111100';
 const WEEKEND = '0000011';

@@ -3,7 +3,7 @@ import type { PumpDetail } from '#shared/contract/http/pumps.ts';
 import { FactList } from '#src/components/ui/fact-list.tsx';
 import { Sheet } from '#src/components/ui/sheet.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import { paths } from '#src/lib/paths.ts';
 
 /** Motor, wet end, device, pool, and who is responsible. What was never recorded says so. */

@@ -3,7 +3,7 @@ import { DataTable } from '#src/components/ui/data-table.tsx';
 import { Sheet } from '#src/components/ui/sheet.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
 import type { Format } from '#src/lib/format/create-format.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import { describeDays } from './settings-view.ts';
 
 type Wired = PumpDetail['inputs'][number];

@@ -1,6 +1,6 @@
 import type { ReadingSeries } from '#shared/contract/http/pumps.ts';
 import { HOUR_MS, MINUTE_MS } from '#shared/domain/time/local-time.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import type { ReadingWindow } from './reading-queries.ts';
 
 const STEP_MS = 5 * MINUTE_MS;

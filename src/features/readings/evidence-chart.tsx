@@ -1,6 +1,6 @@
 import { useQuery } from '@tanstack/react-query';
 import { lazy, Suspense, useMemo, useState } from 'react';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import { createStore } from '#src/lib/store.ts';
 import { chartAround, wattsBeside } from './evidence-chart-view.ts';
 import { readingQueries } from './reading-queries.ts';

@@ -4,7 +4,7 @@ import type { PumpNow, ReadingSeries } from '#shared/contract/http/pumps.ts';
 import type { CursorStore } from '#src/components/charts/strip/time-cursor.tsx';
 import { ErrorNotice } from '#src/components/ui/error-notice.tsx';
 import { TableToggle } from '#src/components/ui/table-toggle.tsx';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import { type ReadingWindow, readingQueries } from './reading-queries.ts';
 import { ReadingTable } from './reading-table.tsx';
 import { appendNow, hasReadings } from './reading-view.ts';

@@ -1,7 +1,7 @@
 import type { ReadingSeries } from '#shared/contract/http/pumps.ts';
 import { DataTable } from '#src/components/ui/data-table.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import { type ReadingRow, tableRows } from './reading-view.ts';
 
 /** The charts' numbers, a quarter of an hour a row. */

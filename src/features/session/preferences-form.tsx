@@ -1,7 +1,7 @@
 import type { Preferences } from '#shared/contract/http/session.ts';
 import { Choice } from '#src/components/ui/choice.tsx';
 import { describeError } from '#src/lib/api/describe-error.ts';
-import { t } from '#src/lib/messages/t.ts';
+import { t } from '#src/lib/messages/page-words.ts';
 import { useUpdatePreferences } from './use-update-preferences.ts';
 
 /** Units, theme and clock. Each choice is kept as soon as it is made. */

@@ -28,4 +28,6 @@ export const SHELL_MESSAGES = {
   'mark.note': 'note',
   'mark.silent': 'silent',
   'mark.unacknowledged': '{what}, unacknowledged',
+  'alarm.where': '{pad}, {pump}',
+  'alarm.raisedNow': 'New {priority} alarm: {title}, {where}.',
 } as const;

@@ -48,6 +48,13 @@ describe('the first load', () => {
     expect(scripts.filter((name) => name.startsWith('time-chart'))).toEqual([]);
   });
 
+  it('brings no words that only later pages say', () => {
+    const scripts = [...reach(find('fleet-page')), ...named('js').flatMap((name) => [...reach(name)])];
+    expect(scripts.filter((name) => read(name).includes('pump.wiring.none'))).toEqual([]);
+    const all = readdirSync(assets).filter((name) => name.endsWith('.js'));
+    expect(all.some((name) => read(name).includes('pump.wiring.none'))).toBe(true);
+  });
+
   it('has no script of its own in the page, so that the strictest policy holds', () => {
     expect(page()).not.toMatch(/<script(?![^>]*\bsrc=)/);
     expect(page()).not.toMatch(/\son\w+=|style=/);

@@ -1,6 +1,7 @@
 import { QueryClient } from '@tanstack/react-query';
 import { describe, expect, it } from 'vitest';
 import { writeAlarm } from '#src/features/alarms/alarm-cache.ts';
+import { titleOf, whereOf } from '#src/features/alarms/alarm-names.ts';
 import { alarmQueries } from '#src/features/alarms/alarm-queries.ts';
 import {
   acknowledgedBy,
@@ -9,8 +10,6 @@ import {
   evidenceWindow,
   isWaiting,
   mayUndo,
-  titleOf,
-  whereOf,
 } from '#src/features/alarms/alarm-view.ts';
 import { changeAlarmsAddress, isNarrowed, parseAlarmsAddress } from '#src/features/alarms/alarms-address.ts';
 import { listEvidence, listLikelyCauses, usualWattsOf } from '#src/features/alarms/evidence-view.ts';

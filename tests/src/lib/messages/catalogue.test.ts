@@ -2,7 +2,7 @@ import { readdirSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { parseSync } from 'vite';
 import { describe, expect, it } from 'vitest';
-import { CATALOGUE } from '#src/lib/messages/catalogue.ts';
+import type { Messages } from '#src/lib/messages/create-words.ts';
 import { fillMessage } from '#src/lib/messages/fill-message.ts';
 
 const ROOT = join(import.meta.dirname, '../../../..');
@@ -11,6 +11,15 @@ const listFiles = (folder: string): string[] =>
   readdirSync(join(ROOT, folder), { withFileTypes: true }).flatMap((entry) =>
     entry.isDirectory() ? listFiles(`${folder}/${entry.name}`) : [`${folder}/${entry.name}`],
   );
+
+const MESSAGES = join(ROOT, 'src/lib/messages');
+
+/** Every catalogue file: those of the first load and those that come with their pages. */
+const catalogues: readonly Messages[] = await Promise.all(
+  readdirSync(MESSAGES)
+    .filter((file) => file.endsWith('.data.ts'))
+    .map(async (file) => Object.assign({}, ...Object.values(await import(join(MESSAGES, file))))),
+);
 
 const sources = listFiles('src')
   .filter((file) => /\.tsx?$/.test(file) && !file.includes('/messages/'))
@@ -50,15 +59,21 @@ function listSpoken(file: string, text: string): string[] {
 }
 
 describe('the catalogue', () => {
+  it('has each key once', () => {
+    const keys = catalogues.flatMap((catalogue) => Object.keys(catalogue));
+    expect(keys.length).toBeGreaterThan(300);
+    expect(keys.filter((key, index) => keys.indexOf(key) !== index)).toEqual([]);
+  });
+
   it('has no message that nothing says', () => {
-    const unsaid = Object.keys(CATALOGUE).filter(
-      (key) => !everything.includes(`'${key}'`) && !prefixes.some((prefix) => key.startsWith(prefix)),
-    );
+    const unsaid = catalogues
+      .flatMap(Object.keys)
+      .filter((key) => !everything.includes(`'${key}'`) && !prefixes.some((prefix) => key.startsWith(prefix)));
     expect(unsaid).toEqual([]);
   });
 
   it('has no empty message, and the same places in both plural forms', () => {
-    for (const [key, message] of Object.entries(CATALOGUE)) {
+    for (const [key, message] of catalogues.flatMap((catalogue) => Object.entries(catalogue))) {
       const forms: string[] = typeof message === 'string' ? [message] : [message.one, message.other];
       expect(
         forms.every((form) => form.trim() !== ''),
