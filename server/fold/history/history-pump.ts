@@ -32,7 +32,7 @@ const TAKE_EVERY_EVENTS = 200;
 
 /**
  * A pump whose history is told at a cadence of its own. In a history every alarm that returned was seen by the
- * technician of its pad, as it would have been: what is left is what stands.
+ * technician of its pad, as it would have been, and one that was explained away is over: what is left is what stands.
  */
 export function createHistoryPump(
   pump: CommissionedPump,
@@ -67,7 +67,7 @@ export function createHistoryPump(
       return;
     }
     if (signal.type === 'cleared') see(alarm, Math.min(alarm.record.raisedAt + SEEN_AFTER_MS, signal.at));
-    note(alarm, applySignal(alarm.record, signal));
+    note(alarm, applySignal(alarm.record, signal.type === 'cleared' ? { ...signal, evidence: {} } : signal));
     if (!isOpen(alarm.record)) open.delete(signal.detector);
   };
   const gather = (): void => {

@@ -5,7 +5,7 @@ export const WITHDRAW_WITHIN_MS = 5 * 60_000;
 
 /**
  * Marks an alarm as seen by a person. It never clears a condition: an active alarm stays, a returned one becomes
- * history. Repeating it changes nothing.
+ * history; one that was latched for chattering is released. Repeating it changes nothing.
  *
  * @example acknowledge(active, { by: 'user-1', at: 1000, note: null }).record.state // 'acknowledged'
  */
@@ -20,9 +20,10 @@ export function acknowledge(
     acknowledgedAt: act.at,
     acknowledgedBy: act.by,
     acknowledgementNote: act.note,
+    releasedLatch: record.state === 'latched',
     recentReturns: [],
   };
-  return makeStep(next, 'acknowledged', act.at, act.by, act.note);
+  return makeStep(next, next.releasedLatch ? 'latch-released' : 'acknowledged', act.at, act.by, act.note);
 }
 
 /**
@@ -38,7 +39,8 @@ export function withdrawAcknowledgement(
     return undefined;
   const next: AlarmRecord = {
     ...record,
-    state: record.active ? 'unacknowledged' : 'returned',
+    state: record.releasedLatch ? 'latched' : record.active ? 'unacknowledged' : 'returned',
+    releasedLatch: false,
     acknowledgedAt: null,
     acknowledgedBy: null,
     acknowledgementNote: null,

@@ -6,6 +6,15 @@ import type { AlarmClass, Detector, Evidence, Priority } from '../detectors/dete
  */
 export type AlarmState = 'unacknowledged' | 'acknowledged' | 'returned' | 'latched' | 'normal';
 
+/** Who is to look after an alarm instead of the pad's own technician; `told` = their mail has been written. */
+export type Assignment = { readonly to: string; readonly by: string; readonly at: number; readonly told: boolean };
+
+/** The recorded answer that an alarm called for nothing; it teaches the rule's backtest. */
+export type Answer = { readonly by: string; readonly at: number; readonly note: string | null };
+
+/** A note somebody worked off: what they found, in words, and its cause where it is one that is weighed. */
+export type Done = { readonly by: string; readonly at: number; readonly found: string; readonly cause: string | null };
+
 export type Shelf = { readonly by: string; readonly reason: string; readonly at: number; readonly until: number };
 
 /** One alarm of a pump and detector as it stands. Instants in ms; `by` is the id of a person. */
@@ -33,6 +42,13 @@ export type AlarmRecord = {
   /** Suppressed by design: what explains it. */
   readonly suppressedBy: string | null;
   readonly outOfService: { readonly by: string; readonly reason: string; readonly at: number } | null;
+  readonly assignment: Assignment | null;
+  /** "Nothing to do", about its last raising. */
+  readonly answer: Answer | null;
+  /** A note that was worked off. While the condition still holds it is watched, so that it is not forgotten. */
+  readonly done: Done | null;
+  /** The last acknowledgement released a latch: withdrawing it latches again. */
+  readonly releasedLatch: boolean;
   /** The last returns, newest last, at most three: what latches a chattering alarm. */
   readonly recentReturns: readonly number[];
 };
@@ -45,6 +61,14 @@ export const TRANSITION_KINDS = [
   'latched',
   'acknowledged',
   'acknowledgement-withdrawn',
+  'latch-released',
+  'assigned',
+  'unassigned',
+  'nothing-to-do',
+  'nothing-to-do-withdrawn',
+  'done',
+  'done-withdrawn',
+  'still-stands',
   'escalated',
   're-alarmed',
   'shelved',
@@ -72,6 +96,9 @@ export type AlarmStep = { readonly record: AlarmRecord; readonly transition: Ala
 
 /** Whether an alarm is open: at most one per pump and detector. */
 export const isOpen = (record: AlarmRecord): boolean => record.state !== 'normal';
+
+/** Whether its detector's signals still concern it: open, or worked off while its condition holds. */
+export const isWatched = (record: AlarmRecord): boolean => isOpen(record) || (record.done !== null && record.active);
 
 /** Whether anyone should be called: neither shelved, suppressed by design nor out of service. */
 export const isAnnounced = (record: AlarmRecord): boolean =>

@@ -1,5 +1,7 @@
 import type { AlarmSignal } from '../detectors/detector.ts';
-import { type AlarmRecord, type AlarmStep, isOpen, makeStep, noStep } from './alarm-record.ts';
+import { type AlarmRecord, type AlarmStep, isWatched, makeStep, noStep } from './alarm-record.ts';
+import { applyToDone } from './apply-to-done.ts';
+import { explanationOf, isExplanation } from './explanation.ts';
 
 type Raised = Extract<AlarmSignal, { type: 'raised' }>;
 type Changed = Extract<AlarmSignal, { type: 'changed' }>;
@@ -19,9 +21,10 @@ const PRIORITY_RANK = { urgent: 3, soon: 2, note: 1 } as const;
  * @example applySignal(undefined, raised)?.record.state // 'unacknowledged'
  */
 export function applySignal(current: AlarmRecord | undefined, signal: AlarmSignal): AlarmStep | undefined {
-  const open = current !== undefined && isOpen(current) ? current : undefined;
+  const open = current !== undefined && isWatched(current) ? current : undefined;
   if (signal.type === 'raised') return open === undefined ? raiseNew(signal) : raiseAgain(open, signal);
   if (open === undefined) return undefined;
+  if (open.done !== null) return applyToDone(open, signal);
   return signal.type === 'changed' ? change(open, signal) : clear(open, signal);
 }
 
@@ -46,14 +49,21 @@ function raiseNew(signal: Raised): AlarmStep {
     shelf: null,
     suppressedBy: null,
     outOfService: null,
+    assignment: null,
+    answer: null,
+    done: null,
+    releasedLatch: false,
     recentReturns: [],
   };
   return makeStep(record, 'raised', signal.at);
 }
 
-/** Raised again before its return was acknowledged: the same alarm, counted; a latched one stays latched. */
+/**
+ * Raised again before its return was acknowledged: the same alarm, counted; a latched one stays latched. What explained
+ * it does so no longer, and an answer was about the time before.
+ */
 function raiseAgain(open: AlarmRecord, signal: Raised): AlarmStep {
-  if (open.active) return change(open, { ...signal, type: 'changed' });
+  if (open.active && open.done === null) return change(open, { ...signal, type: 'changed' });
   const record: AlarmRecord = {
     ...open,
     alarmClass: signal.alarmClass,
@@ -64,6 +74,10 @@ function raiseAgain(open: AlarmRecord, signal: Raised): AlarmStep {
     evidence: signal.evidence,
     returnedAt: null,
     count: open.count + 1,
+    suppressedBy: isExplanation(open.suppressedBy) ? null : open.suppressedBy,
+    answer: null,
+    done: null,
+    releasedLatch: false,
     waitingSince: open.state === 'latched' ? open.waitingSince : signal.at,
     escalatedAt: open.state === 'latched' ? open.escalatedAt : null,
   };
@@ -89,9 +103,17 @@ function change(open: AlarmRecord, signal: Changed): AlarmStep {
   return makeStep(record, 'changed', signal.at);
 }
 
-/** A note needs no acknowledgement: its return is history at once. */
+/**
+ * A note needs no acknowledgement: its return is history at once. One that is hushed because something explains it has
+ * not returned: it is suppressed by design until the explanation ends (`endExplanation`) or its detector speaks again.
+ */
 function clear(open: AlarmRecord, signal: Cleared): AlarmStep {
   if (!open.active) return noStep(open);
+  const explanation = explanationOf(signal.evidence);
+  if (explanation !== undefined) {
+    const hushed: AlarmRecord = { ...open, active: false, returnedAt: signal.at, suppressedBy: explanation };
+    return makeStep(hushed, 'suppressed', signal.at, null, explanation);
+  }
   const recentReturns = [...open.recentReturns, signal.at].slice(-CHATTERING_RETURNS);
   const oldest = recentReturns[0] ?? signal.at;
   const chatters = recentReturns.length === CHATTERING_RETURNS && signal.at - oldest <= CHATTERING_WINDOW_MS;

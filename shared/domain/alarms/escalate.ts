@@ -1,5 +1,6 @@
 import type { Priority } from '../detectors/detector.ts';
 import { type AlarmRecord, type AlarmStep, isAnnounced, makeStep } from './alarm-record.ts';
+import { checkCure } from './apply-to-done.ts';
 
 const MINUTE_MS = 60_000;
 const HOUR_MS = 60 * MINUTE_MS;
@@ -18,10 +19,14 @@ export const RE_ALARM_AFTER_MS: Readonly<Record<Priority, number | undefined>> =
   note: undefined,
 };
 
-/** When an alarm escalates if nobody acknowledges it; undefined where it never will. */
+/**
+ * When an alarm escalates if nobody acknowledges it; undefined where it never will. One that chatters waits as any
+ * other: that its condition comes and goes makes it no less urgent.
+ */
 export function escalatesAt(record: AlarmRecord): number | undefined {
   const within = ACKNOWLEDGE_WITHIN_MS[record.priority];
-  const waits = record.state === 'unacknowledged' && record.escalatedAt === null && record.alarmClass === 'alarm';
+  const unseen = record.state === 'unacknowledged' || record.state === 'latched';
+  const waits = unseen && record.escalatedAt === null && record.alarmClass === 'alarm';
   return within !== undefined && waits && isAnnounced(record) ? record.waitingSince + within : undefined;
 }
 
@@ -33,11 +38,13 @@ export function reAlarmsAt(record: AlarmRecord): number | undefined {
 }
 
 /**
- * What time alone does to an alarm: it escalates, asks again, or its shelf ends. Undefined where nothing is due.
+ * What time alone does to an alarm: it escalates, asks again, its shelf ends, or a note that was worked off proves not
+ * to be cured. Undefined where nothing is due.
  *
  * @example passTime(waiting, waiting.waitingSince + 15 * 60_000)?.transition?.kind // 'escalated' (urgent)
  */
 export function passTime(record: AlarmRecord, at: number): AlarmStep | undefined {
+  if (record.done !== null) return checkCure(record, at);
   if (record.shelf !== null && at >= record.shelf.until) {
     return makeStep({ ...record, shelf: null, waitingSince: at }, 'shelf-ended', at);
   }
