@@ -1,6 +1,7 @@
 import { sql } from 'drizzle-orm';
 import {
   boolean,
+  check,
   foreignKey,
   index,
   integer,
@@ -13,6 +14,7 @@ import {
   uuid,
 } from 'drizzle-orm/pg-core';
 import type { AlarmClass, Detector, Evidence, Priority } from '#shared/domain/detectors/detector.ts';
+import type { AreaKind } from '#shared/domain/fold/area/area-signal.ts';
 import { companyId, id, instant, xid8 } from './columns.ts';
 import { pads } from './pads.ts';
 import { appReads, machineWorks, millraceApp, ofVisiblePumpSince, staffOnly } from './policies.ts';
@@ -21,14 +23,22 @@ import { users } from './users.ts';
 
 export type AlarmState = 'unacknowledged' | 'acknowledged' | 'returned' | 'latched' | 'normal';
 
-/** What a detector raised (ISA-18.2). At most one open a pump and detector; `normal` = returned and acknowledged: history. */
+/**
+ * What a detector raised (ISA-18.2). At most one open a pump and detector; `normal` = returned and acknowledged: history.
+ * An alarm that speaks for several pumps has no pump of its own, but the key that the area fold gave it.
+ */
 export const alarms = pgTable(
   'alarms',
   {
     id: id(),
     companyId: companyId(),
-    pumpId: uuid('pump_id').notNull(),
-    padId: uuid('pad_id').notNull(),
+    pumpId: uuid('pump_id'),
+    padId: uuid('pad_id'),
+    groupKey: text('group_key'),
+    groupKind: text('group_kind').$type<AreaKind>(),
+    groupArea: text('group_area'),
+    /** The alarm that speaks for this one. */
+    coveredBy: uuid('covered_by'),
     detector: text().$type<Detector>().notNull(),
     alarmClass: text('alarm_class').$type<AlarmClass>().notNull(),
     priority: text().$type<Priority>().notNull(),
@@ -78,9 +88,20 @@ export const alarms = pgTable(
       columns: [table.companyId, table.shelvedBy],
       foreignColumns: [users.companyId, users.id],
     }),
+    foreignKey({
+      name: 'alarms_covered_by_fkey',
+      columns: [table.companyId, table.coveredBy],
+      foreignColumns: [table.companyId, table.id],
+    }),
+    check(
+      'alarms_pump_or_group',
+      sql`(pump_id is null) = (group_key is not null) and (pump_id is null) = (pad_id is null) and (pump_id is null) = (group_kind is not null)`,
+    ),
     unique('alarms_company_id_id_key').on(table.companyId, table.id),
     unique('alarms_pump_detector_from_key').on(table.pumpId, table.detector, table.fromAt),
     uniqueIndex('alarms_open_key').on(table.pumpId, table.detector).where(sql`state <> 'normal'`),
+    uniqueIndex('alarms_open_group_key').on(table.companyId, table.groupKey).where(sql`state <> 'normal'`),
+    index('alarms_covered_index').on(table.coveredBy).where(sql`covered_by is not null`),
     index('alarms_open_index').on(table.companyId, table.priority).where(sql`state <> 'normal'`),
     index('alarms_raised_index').on(table.companyId, table.raisedAt),
     index('alarms_changed_index').on(table.companyId, table.changedIn),

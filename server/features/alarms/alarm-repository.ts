@@ -12,7 +12,8 @@ const parseRecord = (value: unknown): AlarmRecord => value as AlarmRecord;
 
 export type LockedAlarm = {
   readonly id: string;
-  readonly pumpId: string;
+  /** null = it speaks for several pumps. */
+  readonly pumpId: string | null;
   readonly record: AlarmRecord;
   readonly version: number;
 };
@@ -60,12 +61,14 @@ export async function saveStep(context: Context, alarm: LockedAlarm, { record, t
     evidence: transition.evidence,
   });
   await recordAct(context, { action: `alarm.${transition.kind}`, subjectKind: 'alarm', subjectId: alarm.id });
-  await db.execute(sql`select pg_notify('millrace_live', ${alarm.pumpId})`);
+  await db.execute(sql`select pg_notify('millrace_live', ${alarm.pumpId ?? ''})`);
 }
 
 /** Whether another alarm of the same pump and detector is open: two at once cannot be. */
 export async function isOpenAgain({ db, actor }: Context, alarm: LockedAlarm): Promise<boolean> {
   const { detector } = alarm.record;
+  // Every alarm that speaks for several pumps has a key of its own.
+  if (alarm.pumpId === null) return false;
   const sameKey = and(
     eq(alarms.companyId, actor.companyId),
     eq(alarms.pumpId, alarm.pumpId),

@@ -1,7 +1,7 @@
 import type { PumpEvent } from '../fold/pump-event.ts';
 import type { AlarmClass, Evidence, Priority } from './detector.ts';
 import type { FoldedDetector } from './detector-defaults.data.ts';
-import type { DetectorParameters, RuleParameters } from './detector-parameters.ts';
+import type { DetectorFigures, DetectorParameters, RuleParameters } from './detector-parameters.ts';
 import type { Facts } from './facts.ts';
 import type { Judgement } from './judgement.ts';
 import { type PlainState, restoreState, saveChanges } from './plain-state.ts';
@@ -69,7 +69,8 @@ export function defineDetector<Name extends FoldedDetector, State extends PlainS
   rule: DetectorRule<Name, State>,
 ): DetectorFactory {
   return (parameters, saved) => {
-    const figures = parameters[rule.detector];
+    const all: DetectorFigures = parameters;
+    const figures = all[rule.detector];
     const initial = rule.initial();
     const state = restoreState(rule.initial(), saved);
     const fixed = fixedDelays(figures);

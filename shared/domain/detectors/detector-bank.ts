@@ -21,7 +21,12 @@ export type DetectorBank = {
   readonly saveLearnt: () => Json;
 };
 
-type Slot = Speaker & { readonly explainedBy: readonly Slot[]; readonly waitsFor: readonly Slot[] };
+type Slot = Speaker & {
+  /** Somebody switched the rule off. */
+  readonly isOff: boolean;
+  readonly explainedBy: readonly Slot[];
+  readonly waitsFor: readonly Slot[];
+};
 
 /** An alarm that stands is looked at again this often. */
 const LOOK_AGAIN_MS = 60_000;
@@ -55,6 +60,10 @@ export function createDetectorBank(
           current = slot;
           const judgement = slot.instance.judge(facts);
           const { onset, raisedAt } = slot.standing;
+          if (slot.isOff) {
+            hush(slot, facts, signals);
+            continue;
+          }
           if (judgement !== ABNORMAL && onset === 0 && raisedAt === 0) continue;
           settle(slot, judgement, facts, signals);
         }
@@ -83,7 +92,8 @@ function createSlots(
     const { standing, state } = recordOf(hot[name]);
     const instance = factory(parameters, learnt[name] ?? state);
     const restored = restoreState(restingStanding(), standing);
-    made.set(name, { instance, standing: restored, explainedBy: [], waitsFor: [] });
+    const { enabled = true, priority } = parameters.choices?.[instance.detector] ?? {};
+    made.set(name, { instance, standing: restored, priority, isOff: !enabled, explainedBy: [], waitsFor: [] });
   }
   const find = (detector: Detector): Slot[] => {
     const slot = made.get(detector);
@@ -129,6 +139,12 @@ function hushedBy(slot: Slot, facts: Facts): Evidence | undefined {
   const explainer = slot.explainedBy.find((other) => other.standing.raisedAt !== 0);
   if (explainer !== undefined) return { consequenceOf: explainer.instance.detector };
   return PAD_STATE_MUTES[facts.padState].includes(slot.instance.detector) ? { padState: facts.padState } : undefined;
+}
+
+/** A rule that is switched off goes on learning; what stood is over. */
+function hush(slot: Slot, facts: Facts, signals: AlarmSignal[]): void {
+  if (slot.standing.raisedAt !== 0) signals.push(clearSignal(slot, facts, { ruleOff: true }));
+  rest(slot.standing);
 }
 
 function settle(slot: Slot, judgement: Judgement, facts: Facts, signals: AlarmSignal[]): void {

@@ -1,9 +1,19 @@
+import type { Priority } from './detector.ts';
 import { DETECTOR_DEFAULTS, type DetectorDefaults, type FoldedDetector } from './detector-defaults.data.ts';
 
 /** One rule's figures; units are in the names. */
 export type RuleParameters<Name extends FoldedDetector> = { readonly [Key in keyof DetectorDefaults[Name]]: number };
 
-export type DetectorParameters = { readonly [Name in FoldedDetector]: RuleParameters<Name> };
+/** Whether a rule speaks at all, and with which usual priority. */
+export type RuleChoice = { readonly enabled?: boolean; readonly priority?: Priority };
+export type RuleChoices = { readonly [Name in FoldedDetector]?: RuleChoice };
+
+export type DetectorFigures = { readonly [Name in FoldedDetector]: RuleParameters<Name> };
+
+export type DetectorParameters = DetectorFigures & {
+  /** Only where somebody chose otherwise. */
+  readonly choices?: RuleChoices;
+};
 
 /** What a company, a motor model or a pump sets otherwise. */
 export type DetectorOverrides = { readonly [Name in FoldedDetector]?: Partial<RuleParameters<Name>> };
@@ -14,7 +24,7 @@ export type DetectorOverrides = { readonly [Name in FoldedDetector]?: Partial<Ru
  *
  * @example resolveParameters({ stopped: { delaySeconds: 600 } }).stopped.delaySeconds // 600
  */
-export function resolveParameters(...overrides: readonly (DetectorOverrides | undefined)[]): DetectorParameters {
+export function resolveParameters(...overrides: readonly (DetectorOverrides | undefined)[]): DetectorFigures {
   const resolved: Record<string, Record<string, number>> = {};
   for (const [name, defaults] of Object.entries(DETECTOR_DEFAULTS)) resolved[name] = { ...defaults };
   for (const override of overrides) {
@@ -31,6 +41,6 @@ function applyFigures(target: Record<string, number> | undefined, figures: objec
 }
 
 /** Every name and key comes from the defaults, which is what the type says. */
-function parseResolved(resolved: Record<string, Record<string, number>>): DetectorParameters {
-  return resolved as DetectorParameters;
+function parseResolved(resolved: Record<string, Record<string, number>>): DetectorFigures {
+  return resolved as DetectorFigures;
 }

@@ -1,11 +1,16 @@
 import type { DetectorInstance, Finding } from './define-detector.ts';
-import type { AlarmClass, AlarmSignal, Evidence, Priority } from './detector.ts';
+import { type AlarmClass, type AlarmSignal, type Evidence, PRIORITIES, type Priority } from './detector.ts';
 import { DETECTOR_CLASSES } from './detector-classes.data.ts';
 import type { Facts } from './facts.ts';
 import type { Standing } from './standing.ts';
 
 /** One detector of one pump, and how far its alarm has come. */
-export type Speaker = { readonly instance: DetectorInstance; readonly standing: Standing };
+export type Speaker = {
+  readonly instance: DetectorInstance;
+  readonly standing: Standing;
+  /** What somebody chose as its usual priority. */
+  readonly priority: Priority | undefined;
+};
 
 type Words = { readonly alarmClass: AlarmClass; readonly priority: Priority; readonly cause: string };
 
@@ -13,9 +18,21 @@ type Words = { readonly alarmClass: AlarmClass; readonly priority: Priority; rea
 export const nowOf = ({ instance }: Speaker, facts: Facts): number =>
   instance.byArrival ? facts.receivedAt : facts.now;
 
-function wordsOf({ instance }: Speaker, { alarmClass, priority, cause }: Finding): Words {
-  const usual = DETECTOR_CLASSES[instance.detector];
-  return { alarmClass: alarmClass ?? usual.alarmClass, priority: priority ?? usual.priority, cause };
+function wordsOf(speaker: Speaker, { alarmClass, priority, cause }: Finding): Words {
+  const usual = DETECTOR_CLASSES[speaker.instance.detector];
+  const found = priority ?? usual.priority;
+  return {
+    alarmClass: alarmClass ?? usual.alarmClass,
+    priority: choosePriority(found, usual.priority, speaker.priority),
+    cause,
+  };
+}
+
+/** A choice replaces the usual priority; a worse one that the rule finds by itself (frost, hours of standing) stays. */
+function choosePriority(found: Priority, usual: Priority, chosen: Priority | undefined): Priority {
+  if (chosen === undefined) return found;
+  if (found === usual) return chosen;
+  return PRIORITIES.indexOf(chosen) < PRIORITIES.indexOf(found) ? chosen : found;
 }
 
 /** Raises the alarm, and says so. */

@@ -6,7 +6,7 @@ import { createFreshDatabase, getWorkerDatabase } from '#tests/support/test-data
 const WITHOUT_TENANT_KEY = ['companies', 'readings', 'sign_in_attempts', 'listening_periods'];
 
 /** Tables the app role must not even be granted. */
-const MACHINE_ONLY = ['refresh_tokens', 'sign_in_attempts', 'mail_states', 'listening_periods'];
+const MACHINE_ONLY = ['refresh_tokens', 'sign_in_attempts', 'mail_states', 'listening_periods', 'area_states'];
 
 const open = async (url: string) => {
   const client = new pg.Client({ connectionString: url });
