@@ -60,6 +60,11 @@ export const alarms = pgTable(
     suppressed: boolean().notNull().default(false),
     outOfService: boolean('out_of_service').notNull().default(false),
     latched: boolean().notNull().default(false),
+    /** Who was given it instead of the pad's technician. */
+    assignedTo: uuid('assigned_to'),
+    /** When a note was worked off, and the cause it was found to have, where it is one that is weighed. */
+    doneAt: instant('done_at'),
+    doneCause: text('done_cause'),
     count: integer().notNull().default(1),
     /** The state machine's own record, opaque here. */
     record: jsonb().$type<unknown>().notNull(),
@@ -89,6 +94,11 @@ export const alarms = pgTable(
       foreignColumns: [users.companyId, users.id],
     }),
     foreignKey({
+      name: 'alarms_assigned_to_fkey',
+      columns: [table.companyId, table.assignedTo],
+      foreignColumns: [users.companyId, users.id],
+    }),
+    foreignKey({
       name: 'alarms_covered_by_fkey',
       columns: [table.companyId, table.coveredBy],
       foreignColumns: [table.companyId, table.id],
@@ -102,6 +112,8 @@ export const alarms = pgTable(
     uniqueIndex('alarms_open_key').on(table.pumpId, table.detector).where(sql`state <> 'normal'`),
     uniqueIndex('alarms_open_group_key').on(table.companyId, table.groupKey).where(sql`state <> 'normal'`),
     index('alarms_covered_index').on(table.coveredBy).where(sql`covered_by is not null`),
+    index('alarms_uncured_index').on(table.doneAt).where(sql`done_at is not null and returned_at is null`),
+    index('alarms_found_index').on(table.companyId, table.detector).where(sql`done_cause is not null`),
     index('alarms_open_index').on(table.companyId, table.priority).where(sql`state <> 'normal'`),
     index('alarms_raised_index').on(table.companyId, table.raisedAt),
     index('alarms_changed_index').on(table.companyId, table.changedIn),
