@@ -2,11 +2,26 @@ import type { AlarmSignal, Detector, Priority } from '../detectors/detector.ts';
 import type { Json } from '../detectors/plain-state.ts';
 import { type AreaLedger, createAreaLedger } from './area/area-ledger.ts';
 import type { AreaSignal } from './area/area-signal.ts';
-import { type AreaAlarm, type AreaState, type Member, restoreAreaState, saveAreaState } from './area/area-state.ts';
+import {
+  AREA_KINDS,
+  type AreaAlarm,
+  type AreaState,
+  listOpenPumps,
+  type Member,
+  openKey,
+  restoreAreaState,
+  saveAreaState,
+} from './area/area-state.ts';
 import { listOwnLinkDrops } from './area/own-link.ts';
 
 /** Where a pump stands among the company's others. */
 export type AreaPump = { readonly pumpId: string; readonly padId: string; readonly area?: string | undefined };
+
+export type AreaStanding = {
+  readonly key: string;
+  readonly pumpIds: readonly string[];
+  readonly open: readonly string[];
+};
 
 /** A second fold, over the pumps of one company: what befalls several of them at once is one alarm. */
 export type AreaFold = {
@@ -21,6 +36,10 @@ export type AreaFold = {
   take(): AreaSignal[];
   /** The key of the alarm that speaks for this pump's alarm; undefined where it speaks for itself. */
   coveredBy(pumpId: string, detector: Detector): string | undefined;
+  /** Pumps that are watched no longer leave their alarms; `pumpIds` are all that are. */
+  keep(pumpIds: ReadonlySet<string>, at: number): void;
+  /** The alarms that stand, with the pumps they spoke for and those of which something still stands. */
+  standing(): readonly AreaStanding[];
   save(): Json;
 };
 
@@ -52,15 +71,22 @@ export function createAreaFold(saved?: unknown): AreaFold {
       if (signal.type === 'cleared') ledger.leave(pumpId, ['daylight-saving'], signal.detector, at);
       else if (signal.detector === 'silent') silenceRaised(parts, member, signal.priority, at);
       else if (signal.cause === 'daylight-saving') shiftRaised(parts, member, signal, at);
+      else ledger.leave(pumpId, ['daylight-saving'], signal.detector, at);
     },
     take: ledger.take,
     coveredBy: (pumpId, detector) => findCovering(state, pumpId, detector)?.key,
+    keep: (pumpIds, at) => {
+      const gone = state.alarms.flatMap(listOpenPumps).filter((pumpId) => !pumpIds.has(pumpId));
+      for (const pumpId of gone) ledger.leave(pumpId, AREA_KINDS, undefined, at);
+    },
+    standing: () =>
+      state.alarms.map((alarm) => ({ key: alarm.key, pumpIds: [...alarm.pumpIds], open: listOpenPumps(alarm) })),
     save: () => saveAreaState(state),
   };
 }
 
 function findCovering({ alarms }: AreaState, pumpId: string, detector: Detector): AreaAlarm | undefined {
-  return alarms.find((alarm) => alarm.detector === detector && alarm.open.includes(pumpId));
+  return alarms.find(({ open }) => open.includes(openKey(pumpId, detector)));
 }
 
 function hear(parts: Parts, pump: AreaPump, silentSince: number | undefined, at: number): void {
@@ -81,14 +107,14 @@ function hear(parts: Parts, pump: AreaPump, silentSince: number | undefined, at:
 function fellSilent({ state, ledger }: Parts, member: Member, at: number): void {
   const standing = state.alarms.find(({ kind }) => kind === 'own-link');
   if (standing !== undefined && isNear(standing.from, member)) {
-    ledger.join(standing, member.pumpId, 'note', at);
+    ledger.join(standing, member.pumpId, { detector: 'silent', priority: 'note' }, at);
     return;
   }
   const dropped = listOwnLinkDrops(state, member);
   if (dropped.length === 0) return;
   const from = Math.min(...dropped.map(({ silentSince }) => silentSince));
   ledger.raise(
-    { kind: 'own-link', detector: 'silent', cause: 'link', area: '', from, priority: 'urgent' },
+    { kind: 'own-link', detector: 'silent', cause: 'own-link', area: '', from, priority: 'urgent' },
     dropped,
     at,
   );
@@ -103,7 +129,7 @@ function silenceRaised({ state, ledger }: Parts, member: Member, priority: Prior
   );
   const standing = findCovering(state, pumpId, 'silent') ?? near;
   if (standing !== undefined) {
-    ledger.join(standing, pumpId, priority, at);
+    ledger.join(standing, pumpId, { detector: 'silent', priority }, at);
     return;
   }
   const together = [...state.members.values()].filter(
@@ -117,10 +143,9 @@ function silenceRaised({ state, ledger }: Parts, member: Member, priority: Prior
 type Raised = Extract<AlarmSignal, { type: 'raised' | 'changed' }>;
 
 function shiftRaised({ state, ledger }: Parts, member: Member, { detector, from, priority }: Raised, at: number): void {
-  const list = state.alarms.find(
-    (alarm) => alarm.kind === 'daylight-saving' && alarm.detector === detector && at - alarm.raisedAt <= SEASON_MS,
-  );
-  if (list !== undefined) ledger.join(list, member.pumpId, priority, at);
+  // Wall clocks and motors' own clocks alike: whoever drives out sets both.
+  const list = state.alarms.find(({ kind, raisedAt }) => kind === 'daylight-saving' && at - raisedAt <= SEASON_MS);
+  if (list !== undefined) ledger.join(list, member.pumpId, { detector, priority }, at);
   else
     ledger.raise(
       { kind: 'daylight-saving', detector, cause: 'daylight-saving', area: '', from, priority },

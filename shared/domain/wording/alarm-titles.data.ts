@@ -106,6 +106,7 @@ export const ALARM_TITLES: Readonly<Record<Detector, DetectorTitles>> = {
         'A time clock stood still in a power cut',
       ],
       'daylight-saving': [
+        '{pads} pads still have last season’s time',
         'Time clock {input} still has last season’s time',
         'A time clock still has last season’s time',
       ],
@@ -120,7 +121,7 @@ export const ALARM_TITLES: Readonly<Record<Detector, DetectorTitles>> = {
         'Motor clock {minutes:duration} {direction} since a power cut',
         'The motor’s clock lost time in a power cut',
       ],
-      'daylight-saving': ['Motor clock still has last season’s time', 'Motor clock still has last season’s time'],
+      'daylight-saving': ['{pads} pads still have last season’s time', 'Motor clock still has last season’s time'],
       drift: ['Motor clock drifts, now {minutes:duration} {direction}', 'The motor’s clock drifts'],
     },
   },
@@ -161,7 +162,12 @@ export const ALARM_TITLES: Readonly<Record<Detector, DetectorTitles>> = {
   silent: {
     titles: ['No word for {minutes:duration}', 'No word from the device'],
     causes: {
-      power: ['No word: the power may be out there', 'No word: the power may be out'],
+      power: [
+        '{pads} pads in {area} went quiet together',
+        'No word: the power may be out there',
+        'No word: the power may be out',
+      ],
+      'own-link': ['{pumps} devices dropped at once: our own link', 'No word: our own link is down'],
       link: ['No word for {minutes:duration}: its link is down', 'No word: its link is down'],
       device: ['No word for {minutes:duration}: the device itself?', 'No word: the device itself?'],
     },

@@ -285,7 +285,10 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     task: 'look',
     causes: {
       'power-cut': {},
-      'daylight-saving': {},
+      'daylight-saving': {
+        meaning: 'The hour has changed and clocks were not set: what they switch is an hour off.',
+        look: [{ what: 'Every clock on the pad: dial, timer, the drive’s own', why: 'One visit sets them all' }],
+      },
       drift: {},
       'trippers-moved': {},
     },
@@ -297,7 +300,10 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     task: 'look',
     causes: {
       'power-cut': {},
-      'daylight-saving': {},
+      'daylight-saving': {
+        meaning: 'The hour has changed and clocks were not set: what they switch is an hour off.',
+        look: [{ what: 'Every clock on the pad: dial, timer, the drive’s own', why: 'One visit sets them all' }],
+      },
       drift: {},
     },
   },
@@ -420,6 +426,28 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     causes: {
       power: {
         meaning: 'Neighbours went quiet at the same time: the power may be out there.',
+        homeowner: 'Pumps near yours went quiet at the same time: the power may be out in your area.',
+        look: [
+          {
+            what: 'Power company’s word on an outage there',
+            why: 'Nothing at the pads needs a visit before it is back',
+          },
+          {
+            what: 'Time clocks, once the power is back',
+            why: 'A dial stands still in an outage and is slow by its length from then on',
+          },
+        ],
+      },
+      'own-link': {
+        meaning: 'Devices of many areas dropped within two minutes: look at our end first. The pumps run as always.',
+        homeowner: 'Our own connection is down. Your pump runs as always; we will see it again soon.',
+        look: [
+          {
+            what: 'This server’s network and the port devices connect to',
+            why: 'One cable or rule cuts off all of them',
+          },
+          { what: 'The mobile network or provider that the devices share', why: 'An outage there looks the same' },
+        ],
       },
       link: {},
       device: {},

@@ -1,7 +1,7 @@
 import type { Detector, Priority } from '#shared/domain/detectors/detector.ts';
 import { DETECTOR_CLASSES } from '#shared/domain/detectors/detector-classes.data.ts';
 import type { AreaKind, AreaSignal } from './area-signal.ts';
-import type { AreaAlarm, AreaState, Member } from './area-state.ts';
+import { type AreaAlarm, type AreaState, isOfPump, listOpenPumps, type Member, openKey } from './area-state.ts';
 
 /** Our own link is back once no more than this share of the devices it took is still silent. */
 const LINK_BACK_SHARE = 0.2;
@@ -16,10 +16,13 @@ export type AreaCause = {
   readonly priority: Priority;
 };
 
+/** What of a pump an alarm speaks for. */
+export type Condition = { readonly detector: Detector; readonly priority: Priority };
+
 /** The alarms that stand for several pumps, and what is said of them. */
 export type AreaLedger = {
   readonly raise: (cause: AreaCause, members: readonly Member[], at: number) => void;
-  readonly join: (alarm: AreaAlarm, pumpId: string, priority: Priority, at: number) => void;
+  readonly join: (alarm: AreaAlarm, pumpId: string, condition: Condition, at: number) => void;
   /** A pump's own condition is over, for alarms of one of the kinds and, where given, one detector. */
   readonly leave: (pumpId: string, kinds: readonly AreaKind[], detector: Detector | undefined, at: number) => void;
   readonly take: () => AreaSignal[];
@@ -28,28 +31,32 @@ export type AreaLedger = {
 export function createAreaLedger(state: AreaState): AreaLedger {
   let signals: AreaSignal[] = [];
   const say = (type: AreaSignal['type'], alarm: AreaAlarm, at: number): void => {
-    signals.push(signalOf(type, alarm, at));
+    signals.push(signalOf(type, alarm, state, at));
   };
   return {
     raise: (cause, members, at) => {
       const pumpIds = members.map(({ pumpId }) => pumpId);
       const key = `${cause.kind}:${cause.area}:${cause.from}`;
-      const alarm: AreaAlarm = { ...cause, key, raisedAt: at, pumpIds, open: [...pumpIds] };
+      const open = pumpIds.map((pumpId) => openKey(pumpId, cause.detector));
+      const alarm: AreaAlarm = { ...cause, key, raisedAt: at, pumpIds, open };
       state.alarms.push(alarm);
       say('raised', alarm, at);
     },
-    join: (alarm, pumpId, priority, at) => {
+    join: (alarm, pumpId, { detector, priority }, at) => {
       const worse = RANK[priority] > RANK[alarm.priority];
       const known = alarm.pumpIds.includes(pumpId);
-      if (!alarm.open.includes(pumpId)) alarm.open.push(pumpId);
+      const own = openKey(pumpId, detector);
+      if (!alarm.open.includes(own)) alarm.open.push(own);
       if (!known) alarm.pumpIds.push(pumpId);
       if (worse) alarm.priority = priority;
       if (worse || !known) say('changed', alarm, at);
     },
     leave: (pumpId, kinds, detector, at) => {
       for (const alarm of state.alarms) {
-        const concerns = kinds.includes(alarm.kind) && (detector === undefined || alarm.detector === detector);
-        if (concerns) alarm.open = alarm.open.filter((id) => id !== pumpId);
+        if (!kinds.includes(alarm.kind)) continue;
+        alarm.open = alarm.open.filter((own) =>
+          detector === undefined ? !isOfPump(own, pumpId) : own !== openKey(pumpId, detector),
+        );
       }
       const over = state.alarms.filter(isOver);
       for (const alarm of over) say('cleared', alarm, at);
@@ -67,8 +74,9 @@ function isOver({ kind, open, pumpIds }: AreaAlarm): boolean {
   return open.length <= (kind === 'own-link' ? LINK_BACK_SHARE * pumpIds.length : 0);
 }
 
-function signalOf(type: AreaSignal['type'], alarm: AreaAlarm, at: number): AreaSignal {
-  const { key, kind, detector, priority, cause, area, pumpIds, open, from } = alarm;
+function signalOf(type: AreaSignal['type'], alarm: AreaAlarm, { members }: AreaState, at: number): AreaSignal {
+  const { key, kind, detector, priority, cause, area, pumpIds, from } = alarm;
+  const pads = new Set(pumpIds.map((pumpId) => members.get(pumpId)?.padId ?? pumpId));
   return {
     type,
     key,
@@ -81,6 +89,11 @@ function signalOf(type: AreaSignal['type'], alarm: AreaAlarm, at: number): AreaS
     pumpIds: [...pumpIds],
     from,
     at,
-    evidence: { pumps: pumpIds.length, stillStanding: open.length },
+    evidence: {
+      pumps: pumpIds.length,
+      pads: pads.size,
+      stillStanding: listOpenPumps(alarm).length,
+      ...(area === '' ? {} : { area }),
+    },
   };
 }

@@ -5,7 +5,7 @@ import type { AreaKind } from './area-signal.ts';
 /** A pump among its neighbours; `silentSince` = its last word, ms, 0 while it is heard. */
 export type Member = { readonly pumpId: string; padId: string; area: string; silentSince: number };
 
-/** An alarm that speaks for several pumps; `open` are those whose own condition still stands. */
+/** An alarm that speaks for several pumps; `open` names the pumps and detectors whose own condition still stands. */
 export type AreaAlarm = {
   readonly key: string;
   readonly kind: AreaKind;
@@ -21,7 +21,17 @@ export type AreaAlarm = {
 
 export type AreaState = { readonly members: Map<string, Member>; alarms: AreaAlarm[] };
 
-const KINDS: readonly AreaKind[] = ['area-silence', 'daylight-saving', 'own-link'];
+export const AREA_KINDS: readonly AreaKind[] = ['area-silence', 'daylight-saving', 'own-link'];
+
+/** One condition of one pump, as an alarm that speaks for several keeps it. */
+export const openKey = (pumpId: string, detector: Detector): string => `${pumpId} ${detector}`;
+
+export const isOfPump = (own: string, pumpId: string): boolean => own.startsWith(`${pumpId} `);
+
+/** The pumps of which something still stands, in order of joining. */
+export const listOpenPumps = ({ open }: Pick<AreaAlarm, 'open'>): readonly string[] => [
+  ...new Set(open.map((own) => own.slice(0, own.lastIndexOf(' ')))),
+];
 
 /** The state as plain JSON. */
 export function saveAreaState({ members, alarms }: AreaState): Json {
@@ -53,7 +63,7 @@ function parseMember(value: unknown): Member[] {
 function parseAlarm(value: unknown): AreaAlarm[] {
   if (!isRecord(value)) return [];
   const { key, area, from, raisedAt, cause, pumpIds, open } = value;
-  const kind = KINDS.find((one) => one === value.kind);
+  const kind = AREA_KINDS.find((one) => one === value.kind);
   const detector = DETECTORS.find((one) => one === value.detector);
   const priority = PRIORITIES.find((one) => one === value.priority);
   if (kind === undefined || detector === undefined || priority === undefined) return [];

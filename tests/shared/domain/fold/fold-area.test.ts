@@ -97,6 +97,34 @@ describe('the fold over pumps', () => {
     expect(fold.take().at(-1)?.type).toBe('cleared');
   });
 
+  it('puts the motors’ own clocks on the same list, and a pump stays on it until both of its clocks are right', () => {
+    const fold = createAreaFold();
+    fleet(fold, names('North', 3));
+    fold.push('North-0', shifted(HOUR), HOUR);
+    fold.push('North-0', { ...shifted(HOUR), detector: 'motor-clock' } as AlarmSignal, HOUR);
+    const key = fold.take()[0]?.key;
+    expect(fold.coveredBy('North-0', 'motor-clock')).toBe(key);
+    expect(fold.standing()).toEqual([{ key, pumpIds: ['North-0'], open: ['North-0'] }]);
+
+    fold.push('North-0', { type: 'cleared', detector: 'clock-shift', at: 2 * HOUR, evidence: {} }, 2 * HOUR);
+    expect(fold.take()).toEqual([]);
+    expect(fold.coveredBy('North-0', 'clock-shift')).toBeUndefined();
+    fold.push('North-0', { type: 'cleared', detector: 'motor-clock', at: 3 * HOUR, evidence: {} }, 3 * HOUR);
+    expect(fold.take()).toMatchObject([{ type: 'cleared', key }]);
+  });
+
+  it('lets a pump go that nobody watches any more', () => {
+    const fold = createAreaFold();
+    fleet(fold, names('North', 3));
+    for (const name of names('North', 2)) fold.hear(pump(name), HOUR, HOUR);
+    fold.push('North-0', silent(HOUR, 2 * HOUR), 2 * HOUR);
+    expect(fold.take()).toMatchObject([{ evidence: { pumps: 2, pads: 2, stillStanding: 2, area: 'North' } }]);
+    fold.keep(new Set(['North-0', 'North-2']), 3 * HOUR);
+    expect(fold.standing()).toMatchObject([{ open: ['North-0'] }]);
+    fold.keep(new Set(['North-2']), 3 * HOUR);
+    expect(fold.take()).toMatchObject([{ type: 'cleared' }]);
+  });
+
   it('blames our own link when over a fifth of the devices drop within two minutes, all over the place', () => {
     const fold = createAreaFold();
     const all = [...names('North', 15), ...names('South', 15)];
