@@ -7,6 +7,7 @@ import { hashDeviceSecret } from './broker/device-credential.ts';
 import type { Pools } from './db/pools.ts';
 import { openDatabase } from './db/transaction.ts';
 import type { Environment } from './env.ts';
+import { mountAlarmHealthRoutes } from './features/alarm-health/index.ts';
 import { mountAlarmRoutes } from './features/alarms/index.ts';
 import { mountChangeRoutes } from './features/changes/index.ts';
 import { mountDeviceRoutes } from './features/devices/index.ts';
@@ -82,6 +83,7 @@ export function createContainer({ env, pools, log, now, watch, clientFolder }: C
       mountFleetRoutes(mount);
       mountPumpRoutes(mount);
       mountAlarmRoutes(mount);
+      mountAlarmHealthRoutes(mount);
       mountDeviceRoutes(mount, { hashSecret: (secret) => hashDeviceSecret(deviceKey, secret) });
       mountChangeRoutes(mount);
     },

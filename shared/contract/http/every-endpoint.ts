@@ -1,3 +1,4 @@
+import { alarmHealthEndpoints } from './alarm-health.ts';
 import { alarmEndpoints } from './alarms.ts';
 import { changeEndpoints } from './changes.ts';
 import { deviceEndpoints } from './devices.ts';
@@ -12,6 +13,7 @@ export const EVERY_ENDPOINT: readonly Endpoint[] = [
   ...Object.values(sessionEndpoints),
   ...Object.values(pumpEndpoints),
   ...Object.values(alarmEndpoints),
+  ...Object.values(alarmHealthEndpoints),
   ...Object.values(deviceEndpoints),
   ...Object.values(changeEndpoints),
 ];

@@ -1,0 +1,1 @@
+export { mountAlarmHealthRoutes } from './alarm-health-routes.ts';
