@@ -1,10 +1,13 @@
 import { deriveRoleUrl } from './db/database-roles.ts';
 import { createPools } from './db/pools.ts';
+import { announceAssignments } from './jobs/announce-assignments.ts';
 import { cleanUpTables } from './jobs/clean-up-tables.ts';
+import { endExplanations } from './jobs/end-explanations.ts';
 import { escalateAlarms } from './jobs/escalate-alarms.ts';
 import { keepPartitions } from './jobs/keep-partitions.ts';
 import { createLeadership } from './jobs/leadership.ts';
 import { createScheduler } from './jobs/scheduler.ts';
+import { silenceSetAside } from './jobs/silence-set-aside.ts';
 import { createDoorbell } from './live/doorbell.ts';
 import { createSmtpTransport } from './mail/mail-transport.ts';
 import { createOutboxSender } from './mail/outbox-sender.ts';
@@ -31,7 +34,7 @@ await runProgram('worker', async ({ env, log, progress, atEnd }) => {
   atEnd(sender.stop);
 
   const scheduler = createScheduler({
-    jobs: [escalateAlarms, keepPartitions, cleanUpTables],
+    jobs: [silenceSetAside, escalateAlarms, endExplanations, announceAssignments, keepPartitions, cleanUpTables],
     context: { pool: machine, publicUrl: env.publicUrl, now: Date.now, log },
     leadership: createLeadership(machineUrl),
   });

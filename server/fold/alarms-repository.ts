@@ -1,6 +1,8 @@
 import type pg from 'pg';
 import { newId } from '#server/db/new-id.ts';
-import type { AlarmRecord, AlarmTransition } from '#shared/domain/alarms/alarm-record.ts';
+import type { AlarmTransition } from '#shared/domain/alarms/alarm-record.ts';
+import { CURED_WITHIN_MS } from '#shared/domain/alarms/apply-to-done.ts';
+import { readRecord } from '#shared/domain/alarms/read-record.ts';
 import type { AlarmChange, OpenAlarm } from './alarm-change.ts';
 
 type Database = Pick<pg.ClientBase, 'query'>;
@@ -13,34 +15,36 @@ type Row = {
   readonly record: unknown;
 };
 
-/** A record is written by `saveAlarmChanges` alone and by the verbs of people, which go through the same state machine. */
-function parseRecord(value: unknown): AlarmRecord {
-  return value as AlarmRecord;
-}
-
 const toOpenAlarm = (row: Row): OpenAlarm => ({
   alarmId: row.id,
   companyId: row.company_id,
   pumpId: row.pump_id,
   padId: row.pad_id,
-  record: parseRecord(row.record),
+  record: readRecord(row.record),
 });
 
-/** The open alarms of some pumps, locked: a person who acknowledges one meanwhile waits, or we do. */
+/**
+ * The open alarms of some pumps, and the notes that were worked off while their condition holds, locked: a person who
+ * acknowledges one meanwhile waits, or we do.
+ */
 export async function lockOpenAlarms(database: Database, pumpIds: readonly string[]): Promise<OpenAlarm[]> {
   const { rows } = await database.query<Row>(
     `select id, company_id, pump_id, pad_id, record from alarms
-     where pump_id = any($1::uuid[]) and state <> 'normal' order by id for update`,
+     where pump_id = any($1::uuid[]) and (state <> 'normal' or done_at is not null and returned_at is null)
+     order by id for update`,
     [pumpIds],
   );
   return rows.map(toOpenAlarm);
 }
 
-/** Open alarms that time alone may change (escalation, re-alarm, the end of a shelf), as they stand. */
-export async function listWaitingAlarms(database: Database): Promise<OpenAlarm[]> {
+/** Alarms that time alone may change (escalation, re-alarm, the end of a shelf, a cure that did not come), as they stand. */
+export async function listWaitingAlarms(database: Database, now: number): Promise<OpenAlarm[]> {
   const { rows } = await database.query<Row>(
     `select id, company_id, pump_id, pad_id, record from alarms
-     where state <> 'normal' and (alarm_class = 'alarm' and priority <> 'note' or shelved_until is not null)`,
+     where state <> 'normal' and (alarm_class = 'alarm' and priority <> 'note' or shelved_until is not null)
+     union all select id, company_id, pump_id, pad_id, record from alarms
+     where done_at <= $1 and returned_at is null and state = 'normal'`,
+    [new Date(now - CURED_WITHIN_MS)],
   );
   return rows.map(toOpenAlarm);
 }
@@ -49,7 +53,8 @@ export async function listWaitingAlarms(database: Database): Promise<OpenAlarm[]
 export async function lockAlarms(database: Database, alarmIds: readonly string[]): Promise<OpenAlarm[]> {
   const { rows } = await database.query<Row>(
     `select id, company_id, pump_id, pad_id, record from alarms
-     where id = any($1::uuid[]) and state <> 'normal' order by id for update`,
+     where id = any($1::uuid[]) and (state <> 'normal' or done_at is not null and returned_at is null)
+     order by id for update`,
     [alarmIds],
   );
   return rows.map(toOpenAlarm);
@@ -67,18 +72,19 @@ export async function listNewestStarts(database: Database, pumpIds: readonly str
 
 const COLUMNS = `alarm_class, priority, state, cause, evidence, from_at, raised_at, returned_at, acknowledged_at,
   acknowledged_by, acknowledgement_note, escalated_at, shelved_until, shelved_by, shelved_reason, suppressed,
-  out_of_service, latched, count, record`;
+  out_of_service, latched, assigned_to, done_at, done_cause, count, record`;
 
 const VALUES = `g.alarm_class, g.priority, g.state, g.cause, g.evidence, to_timestamp(g.from_at / 1000),
   to_timestamp(g.raised_at / 1000), to_timestamp(g.returned_at / 1000), to_timestamp(g.acknowledged_at / 1000),
   g.acknowledged_by, g.acknowledgement_note, to_timestamp(g.escalated_at / 1000), to_timestamp(g.shelved_until / 1000),
-  g.shelved_by, g.shelved_reason, g.suppressed, g.out_of_service, g.latched, g.count, g.record`;
+  g.shelved_by, g.shelved_reason, g.suppressed, g.out_of_service, g.latched, g.assigned_to, to_timestamp(g.done_at / 1000),
+  g.done_cause, g.count, g.record`;
 
 const GIVEN = `json_to_recordset($1::json) as g(id uuid, company_id uuid, pump_id uuid, pad_id uuid, detector text, steps int,
   alarm_class text, priority text, state text, cause text, evidence jsonb, from_at float8, raised_at float8,
   returned_at float8, acknowledged_at float8, acknowledged_by uuid, acknowledgement_note text, escalated_at float8,
   shelved_until float8, shelved_by uuid, shelved_reason text, suppressed boolean, out_of_service boolean,
-  latched boolean, count int, record jsonb)`;
+  latched boolean, assigned_to uuid, done_at float8, done_cause text, count int, record jsonb)`;
 
 const INSERT = `insert into alarms (id, company_id, pump_id, pad_id, detector, version, ${COLUMNS})
   select g.id, g.company_id, g.pump_id, g.pad_id, g.detector, greatest(g.steps, 1), ${VALUES} from ${GIVEN}`;
@@ -126,6 +132,9 @@ function toColumns({ alarmId, companyId, pumpId, padId, record, transitions }: A
     suppressed: record.suppressedBy !== null,
     out_of_service: record.outOfService !== null,
     latched: record.state === 'latched',
+    assigned_to: record.assignment?.to,
+    done_at: record.done?.at,
+    done_cause: record.done?.cause,
     count: record.count,
     record,
   };

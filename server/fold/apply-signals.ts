@@ -1,5 +1,5 @@
 import { newId } from '#server/db/new-id.ts';
-import { type AlarmRecord, isOpen } from '#shared/domain/alarms/alarm-record.ts';
+import { type AlarmRecord, isOpen, isWatched } from '#shared/domain/alarms/alarm-record.ts';
 import { applySignal } from '#shared/domain/alarms/apply-signal.ts';
 import type { AlarmSignal } from '#shared/domain/detectors/detector.ts';
 import { type AlarmChange, alarmKey, type OpenAlarm } from './alarm-change.ts';
@@ -26,7 +26,9 @@ export const BACKLOG_AFTER_MS = 2 * 60_000;
  * clears in one go is history at once: by the time anybody could have been called there was nothing left to do.
  */
 export function applySignals(pumps: readonly PumpSignals[], before: AlarmsBefore, now: number): AlarmChange[] {
-  const current = new Map(before.open.map((alarm) => [alarmKey(alarm.pumpId, alarm.record.detector), changeOf(alarm)]));
+  // A note that was worked off stands back behind one that is open.
+  const known = before.open.toSorted((a, b) => Number(isOpen(a.record)) - Number(isOpen(b.record)));
+  const current = new Map(known.map((alarm) => [alarmKey(alarm.pumpId, alarm.record.detector), changeOf(alarm)]));
   const changed = new Set<AlarmChange>();
   for (const pump of pumps) {
     for (const signal of pump.signals) {
@@ -34,7 +36,7 @@ export function applySignals(pumps: readonly PumpSignals[], before: AlarmsBefore
       const known = current.get(key);
       const step = applySignal(known?.record, signal);
       if (step?.transition === undefined) continue;
-      const isGoingOn = known !== undefined && isOpen(known.record);
+      const isGoingOn = known !== undefined && isWatched(known.record);
       const change = isGoingOn ? known : addChange(pump, step.record, now - signal.at > BACKLOG_AFTER_MS);
       change.record = isGoingOn ? step.record : startApart(step.record, before.newestStarts.get(key));
       change.transitions.push(step.transition);

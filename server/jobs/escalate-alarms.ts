@@ -7,13 +7,16 @@ import { announceAlarms } from '#server/mail/announce-alarms.ts';
 import { passTime } from '#shared/domain/alarms/escalate.ts';
 import type { Job, JobContext } from './job.ts';
 
-/** What time alone does to alarms: they escalate to the manager, ask again, come back from the shelf. */
+/**
+ * What time alone does to alarms: they escalate to the manager, ask again, come back from the shelf; a note that was
+ * worked off comes back when its condition still holds a week later.
+ */
 export const escalateAlarms: Job = {
   name: 'escalate alarms',
   everyMs: 2_000,
   run: async (context) => {
     const now = context.now();
-    const waiting = await listWaitingAlarms(context.pool);
+    const waiting = await listWaitingAlarms(context.pool, now);
     const due = waiting.filter(({ record }) => passTime(record, now)?.transition !== undefined);
     if (due.length === 0) return;
     const alarmIds = due.map(({ alarmId }) => alarmId);

@@ -1,4 +1,6 @@
 import type { AlarmRecord } from '#shared/domain/alarms/alarm-record.ts';
+import { explainAlarm } from '#shared/domain/causes/explain-alarm.ts';
+import type { FoundCounts } from '#shared/domain/causes/rank-causes.ts';
 import { alarmWords } from '#shared/domain/wording/alarm-words.ts';
 import { CAUTIONS } from '#shared/domain/wording/cautions.data.ts';
 import { formatDuration } from '#shared/domain/wording/format-duration.ts';
@@ -18,6 +20,8 @@ export type MailSection = {
   readonly meaning: string;
   readonly facts: readonly { readonly name: string; readonly value: string }[];
   readonly evidence: readonly { readonly name: string; readonly value: string }[];
+  /** The likeliest first, each with what speaks for and against it; `guess` = nothing singles one out. */
+  readonly likely: { readonly guess: boolean; readonly causes: readonly MailCause[] };
   readonly look: readonly { readonly what: string; readonly why: string }[];
   readonly cautionTitle: string;
   readonly cautions: readonly string[];
@@ -27,12 +31,16 @@ export type MailSection = {
 /** One alarm's mail as it is frozen: a mail that gathers several puts their sections one under another. */
 export type ComposedMail = { readonly subject: string; readonly text: string; readonly html: string };
 
+export type MailCause = { readonly name: string; readonly check: string; readonly reasons: readonly string[] };
+
 export type MailMatter = {
   readonly alarmId: string;
   readonly record: AlarmRecord;
   readonly place: MailPlace;
   readonly announcement: Announcement;
   readonly publicUrl: string;
+  /** How often this company found each cause of the alarm's detector. */
+  readonly found?: FoundCounts | undefined;
 };
 
 const PRIORITY_WORDS = { urgent: 'Urgent', soon: 'Soon', note: 'Note' } as const;
@@ -48,7 +56,7 @@ export function composeAlarmMail(matter: MailMatter): ComposedMail {
   };
 }
 
-function describeSection({ alarmId, record, place, announcement, publicUrl }: MailMatter): MailSection {
+function describeSection({ alarmId, record, place, announcement, publicUrl, found }: MailMatter): MailSection {
   const words = alarmWords(record.detector, record.cause, record.evidence);
   return {
     priority: PRIORITY_WORDS[record.priority],
@@ -57,10 +65,31 @@ function describeSection({ alarmId, record, place, announcement, publicUrl }: Ma
     meaning: words.meaning,
     facts: listFacts(record, place),
     evidence: describeEvidence(record.evidence, place.zone),
+    likely: listLikely(record, place, found),
     look: words.look,
     cautionTitle: CAUTIONS[words.task].title,
     cautions: words.cautions,
     link: `${publicUrl}/alarms/${alarmId}`,
+  };
+}
+
+/** As many as one reads standing at a pad. */
+const MOST_CAUSES = 3;
+
+function listLikely(record: AlarmRecord, { zone }: MailPlace, found: FoundCounts | undefined): MailSection['likely'] {
+  const { causes, certain } = explainAlarm(record, zone, found);
+  const listed = causes.filter(({ standing }) => standing !== 'unlikely').slice(0, MOST_CAUSES);
+  return {
+    guess: !certain,
+    causes: listed.map(({ name, check, reasonsFor, reasonsAgainst, found: times, calls }) => ({
+      name,
+      check,
+      reasons: [
+        ...reasonsFor.map((reason) => `for it: ${reason}`),
+        ...reasonsAgainst.map((reason) => `against it: ${reason}`),
+        ...(times > 0 ? [`found in ${times} of ${calls} of our own cases`] : []),
+      ],
+    })),
   };
 }
 
@@ -82,6 +111,7 @@ function findLead(record: AlarmRecord, reason: Announcement['reason']): string |
     return `Nobody has acknowledged this alarm for ${waited}.`;
   }
   if (reason === 'raised-again') return 'This alarm came back before anybody acknowledged that it had gone.';
+  if (reason === 'assigned') return 'This was given to you.';
   if (reason === 'worse') return 'This alarm became more pressing.';
   if (reason === 're-alarmed') return 'This alarm was acknowledged and its condition still stands.';
   return reason === 'shelf-ended'

@@ -61,3 +61,14 @@ const toPlace = (row: Row): MailPlace => ({
   technician: row.technician === null ? undefined : toPerson(row.technician),
   managers: row.managers.map(toPerson),
 });
+
+/** Some people who may be written to, by id; whoever has left is not among them. */
+export async function listMailPersons(
+  database: Pick<pg.ClientBase, 'query'>,
+  userIds: readonly string[],
+): Promise<Map<string, MailPerson>> {
+  if (userIds.length === 0) return new Map();
+  const text = 'select id, name, email from users where id = any($1::uuid[]) and disabled_at is null';
+  const { rows } = await database.query<PersonRow>(text, [userIds]);
+  return new Map(rows.map((row) => [row.id, toPerson(row)]));
+}

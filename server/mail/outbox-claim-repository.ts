@@ -20,6 +20,10 @@ export type ClaimedMail = {
 export const LEASE_SECONDS = 60;
 const GROUPS_A_CLAIM = 20;
 
+/** What was set aside since it was written calls nobody: its mails wait to be withdrawn. */
+const NOT_SET_ASIDE = `not exists (select from alarms a where a.id = m.alarm_id
+  and (a.shelved_until is not null or a.suppressed or a.out_of_service))`;
+
 /**
  * Takes what is due, whole groups at a time; what another worker holds is passed over. A worker that dies lets its
  * lease run out, and the mail is sent again under the same Message-ID.
@@ -27,12 +31,14 @@ const GROUPS_A_CLAIM = 20;
 export async function claimMails(database: Database, now: number): Promise<ClaimedMail[]> {
   const { rows } = await database.query<Omit<ClaimedMail, 'dueAt'> & { readonly due_at: number }>(
     `with due as (
-       select distinct to_address, due_at from outbox_mails
+       select distinct to_address, due_at from outbox_mails m
        where sent_at is null and failed_at is null and due_at <= $1 and (leased_until is null or leased_until <= $1)
+         and ${NOT_SET_ASIDE}
        order by due_at limit $2),
      locked as (
        select m.id from outbox_mails m join due using (to_address, due_at)
        where m.sent_at is null and m.failed_at is null and (m.leased_until is null or m.leased_until <= $1)
+         and ${NOT_SET_ASIDE}
        order by m.id for update of m skip locked)
      update outbox_mails m set leased_until = $1::timestamptz + make_interval(secs => $3), attempts = m.attempts + 1
      from locked where m.id = locked.id

@@ -1,5 +1,6 @@
-import type { MailSection } from './compose-alarm-mail.ts';
+import type { MailCause, MailSection } from './compose-alarm-mail.ts';
 import { escapeHtml } from './escape-html.ts';
+import { LIKELY_TITLES } from './likely-titles.ts';
 
 const INK = '#1c2a33';
 const QUIET = '#51626d';
@@ -16,6 +17,7 @@ export function writeSectionHtml(section: MailSection): string {
     table(section.facts),
     `<p style="margin:12px 0">${escapeHtml(section.meaning)}</p>`,
     part('What speaks for it', section.evidence.length === 0 ? '' : table(section.evidence)),
+    part(LIKELY_TITLES[section.likely.guess ? 'guess' : 'certain'], items('ol', section.likely.causes.map(causeItem))),
     part('Look at first', items('ol', section.look.map(lookItem))),
     part(section.cautionTitle, items('ul', section.cautions.map(escapeHtml))),
     `<p style="margin:18px 0 0"><a href="${escapeHtml(section.link)}" style="display:inline-block;padding:11px 18px;`,
@@ -26,6 +28,11 @@ export function writeSectionHtml(section: MailSection): string {
 
 const lookItem = ({ what, why }: { readonly what: string; readonly why: string }) =>
   `${escapeHtml(what)} <span style="color:${QUIET}">(${escapeHtml(why)})</span>`;
+
+const causeItem = ({ name, check, reasons }: MailCause) =>
+  [`<strong>${escapeHtml(name)}</strong>`, ...[...reasons, `tell by: ${check}`].map(quietLine)].join('');
+
+const quietLine = (text: string) => `<br><span style="color:${QUIET}">${escapeHtml(text)}</span>`;
 
 function table(rows: readonly { readonly name: string; readonly value: string }[]): string {
   const cells = rows.map(

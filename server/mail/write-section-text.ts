@@ -1,4 +1,5 @@
-import type { MailSection } from './compose-alarm-mail.ts';
+import type { MailCause, MailSection } from './compose-alarm-mail.ts';
+import { LIKELY_TITLES } from './likely-titles.ts';
 
 /** One alarm as plain text. */
 export function writeSectionText(section: MailSection): string {
@@ -11,6 +12,7 @@ export function writeSectionText(section: MailSection): string {
       'What speaks for it',
       section.evidence.map(({ name, value }) => `- ${name}: ${value}`),
     ),
+    list(LIKELY_TITLES[section.likely.guess ? 'guess' : 'certain'], section.likely.causes.map(causeLines)),
     list(
       'Look at first',
       section.look.map(({ what, why }, index) => `${index + 1}. ${what} (${why})`),
@@ -27,3 +29,6 @@ export function writeSectionText(section: MailSection): string {
 function list(title: string, lines: readonly string[]): string | undefined {
   return lines.length === 0 ? undefined : `${title}\n${lines.join('\n')}`;
 }
+
+const causeLines = ({ name, check, reasons }: MailCause, index: number): string =>
+  [`${index + 1}. ${name}`, ...reasons.map((reason) => `   ${reason}`), `   tell by: ${check}`].join('\n');

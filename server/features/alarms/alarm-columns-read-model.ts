@@ -4,7 +4,9 @@ import { sql } from 'drizzle-orm';
 export const alarmColumns = sql`
   a.id, a.pump_id as "pumpId", a.pad_id as "padId", pad.name as "padName", p.name as "pumpName",
   customer.name as "customerName", pad.area, pad.zone, a.record, seen.name as "acknowledgedByName",
-  shelver.name as "shelvedByName", technician.name as "technicianName", a.version`;
+  shelver.name as "shelvedByName", assignee.name as "assigneeName", technician.name as "technicianName",
+  answerer.name as "answeredByName", worker.name as "doneByName", stopper.name as "outOfServiceByName",
+  pad.stop_weekday as "stopWeekday", a.version`;
 
 /** The customer is whoever owns the pad now. */
 export const alarmFrom = sql`alarms a
@@ -14,4 +16,8 @@ export const alarmFrom = sql`alarms a
   left join customers customer on customer.id = owner.customer_id
   left join users technician on technician.id = pad.technician_id
   left join users seen on seen.id = a.acknowledged_by
-  left join users shelver on shelver.id = a.shelved_by`;
+  left join users shelver on shelver.id = a.shelved_by
+  left join users assignee on assignee.id = a.assigned_to
+  left join users answerer on answerer.id = (a.record -> 'answer' ->> 'by')::uuid
+  left join users worker on worker.id = (a.record -> 'done' ->> 'by')::uuid
+  left join users stopper on stopper.id = (a.record -> 'outOfService' ->> 'by')::uuid`;

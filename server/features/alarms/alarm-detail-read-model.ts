@@ -23,7 +23,8 @@ async function selectAlarms(db: Transaction, condition: SQL, limit: number): Pro
 /** Every change of an alarm, oldest first. */
 export async function listTransitions(db: Transaction, alarmId: string): Promise<AlarmDetail['transitions']> {
   const { rows } = await db.execute<AlarmDetail['transitions'][number]>(sql`
-    select (extract(epoch from t.at) * 1000)::float8 as at, t.kind, coalesce(t.by_name, u.name) as by, t.note, t.priority, t.cause
+    select (extract(epoch from t.at) * 1000)::float8 as at, t.kind, coalesce(t.by_name, u.name) as by, t.note, t.priority,
+      t.cause, t.evidence
     from alarm_transitions t left join users u on u.id = t.by_user_id
     where t.alarm_id = ${alarmId} order by t.at, t.id`);
   return rows;
@@ -40,4 +41,13 @@ export async function listMails(db: Transaction, alarmId: string): Promise<Alarm
     queuedAt: Math.round(row.queuedAt),
     sentAt: row.sentAt === null ? null : Math.round(row.sentAt),
   }));
+}
+
+/** How often each cause was found where a case of this detector was worked off, in the person's company. */
+export async function countFoundCauses(db: Transaction, alarmId: string): Promise<Readonly<Record<string, number>>> {
+  const { rows } = await db.execute<{ cause: string; times: number }>(sql`
+    select f.done_cause as cause, count(*)::int as times from alarms f
+    join alarms a on a.company_id = f.company_id and a.detector = f.detector and a.id = ${alarmId}
+    where f.done_cause is not null group by f.done_cause`);
+  return Object.fromEntries(rows.map(({ cause, times }) => [cause, times]));
 }

@@ -29,23 +29,30 @@ export const SORT_SHAPES: Readonly<Record<Sort, readonly ('number' | 'string')[]
   name: ['string', 'number', 'string'],
 };
 
+/** Set aside by a person or by design: it calls nobody. */
+const isSetAside = sql`(a.shelved_until is not null or a.suppressed or a.out_of_service)`;
+
 const SHOWN: Readonly<Record<AlarmsQuery['show'], SQL>> = {
-  open: sql`a.state <> 'normal'`,
-  unacknowledged: sql`a.state in ('unacknowledged', 'returned', 'latched')`,
+  open: sql`a.state <> 'normal' and not ${isSetAside}`,
+  unacknowledged: sql`a.state in ('unacknowledged', 'returned', 'latched') and not ${isSetAside}`,
   shelved: sql`a.state <> 'normal' and a.shelved_until is not null`,
+  suppressed: sql`a.state <> 'normal' and a.suppressed`,
+  'out-of-service': sql`a.state <> 'normal' and a.out_of_service`,
+  standing: sql`a.state <> 'normal'`,
   history: sql`a.state = 'normal'`,
   all: sql`true`,
 };
 
 const like = (text: string) => `%${text.replaceAll(/[\\%_]/g, '\\$&')}%`;
 
-function conditions(query: AlarmsQuery): SQL {
+function conditions(query: AlarmsQuery, userId: string): SQL {
   const all = [SHOWN[query.show]];
   if (query.alarmClass !== undefined) all.push(sql`a.alarm_class = ${query.alarmClass}`);
   if (query.priority !== undefined) all.push(sql`a.priority = ${query.priority}`);
   if (query.detector !== undefined) all.push(sql`a.detector = ${query.detector}`);
   if (query.pumpId !== undefined) all.push(sql`a.pump_id = ${query.pumpId}`);
   if (query.area !== undefined) all.push(sql`pad.area = ${query.area}`);
+  if (query.whose === 'mine') all.push(sql`coalesce(a.assigned_to, pad.technician_id) = ${userId}`);
   if (query.q !== undefined && query.q !== '') {
     const pattern = like(query.q);
     all.push(
@@ -59,7 +66,7 @@ function conditions(query: AlarmsQuery): SQL {
 export async function listAlarmRows(
   db: Transaction,
   query: AlarmsQuery,
-  after: SortKeys | undefined,
+  { after, userId }: { readonly after: SortKeys | undefined; readonly userId: string },
 ): Promise<ListedAlarm[]> {
   const keys = sql.join([...SORT_KEYS[query.sort]], sql`, `);
   const beyond =
@@ -71,16 +78,21 @@ export async function listAlarmRows(
         )})`;
   const { rows } = await db.execute<ListedAlarm>(sql`
     select ${alarmColumns}, json_build_array(${keys}) as keys from ${alarmFrom}
-    where ${conditions(query)}${beyond} order by ${keys} limit ${query.limit + 1}`);
+    where ${conditions(query, userId)}${beyond} order by ${keys} limit ${query.limit + 1}`);
   return rows;
 }
 
-/** How many open alarms the person may see, by priority, and how many wait for an acknowledgement. */
+/** How many open alarms by priority, and notes, the person may see; what was set aside is counted apart. */
 export async function countOpenAlarms(db: Transaction): Promise<AlarmPage['totals']> {
   const { rows } = await db.execute<AlarmPage['totals']>(sql`
-    select count(*) filter (where priority = 'urgent')::int as urgent, count(*) filter (where priority = 'soon')::int as soon,
-      count(*) filter (where priority = 'note')::int as note,
-      count(*) filter (where alarm_class = 'alarm' and state in ('unacknowledged', 'returned', 'latched'))::int as unacknowledged
-    from alarms where state <> 'normal'`);
-  return rows[0] ?? { urgent: 0, soon: 0, note: 0, unacknowledged: 0 };
+    select count(*) filter (where calls and priority = 'urgent')::int as urgent,
+      count(*) filter (where calls and priority <> 'urgent')::int as soon,
+      count(*) filter (where alarm_class = 'note' and not set_aside)::int as note,
+      count(*) filter (where calls and state in ('unacknowledged', 'returned', 'latched'))::int as unacknowledged,
+      count(*) filter (where shelved_until is not null)::int as shelved,
+      count(*) filter (where suppressed)::int as suppressed,
+      count(*) filter (where out_of_service)::int as "outOfService"
+    from (select a.*, ${isSetAside} as set_aside, a.alarm_class = 'alarm' and not ${isSetAside} as calls
+      from alarms a where a.state <> 'normal') open`);
+  return rows[0] ?? { urgent: 0, soon: 0, note: 0, unacknowledged: 0, shelved: 0, suppressed: 0, outOfService: 0 };
 }

@@ -6,9 +6,7 @@ import { alarmTransitions } from '#server/db/schema/alarm-transitions.ts';
 import { alarms } from '#server/db/schema/alarms.ts';
 import { notFound } from '#server/errors.ts';
 import type { AlarmRecord, AlarmStep } from '#shared/domain/alarms/alarm-record.ts';
-
-/** The column holds what the alarm state machine wrote, nothing else. */
-const parseRecord = (value: unknown): AlarmRecord => value as AlarmRecord;
+import { readRecord } from '#shared/domain/alarms/read-record.ts';
 
 export type LockedAlarm = {
   readonly id: string;
@@ -26,7 +24,7 @@ export async function getAlarmForUpdate({ db, actor }: Context, alarmId: string)
     .where(and(eq(alarms.companyId, actor.companyId), eq(alarms.id, alarmId)))
     .for('update');
   if (row === undefined) throw notFound('alarm');
-  return { ...row, record: parseRecord(row.record) };
+  return { ...row, record: readRecord(row.record) };
 }
 
 const toDate = (at: number | null): Date | null => (at === null ? null : new Date(at));
@@ -43,6 +41,15 @@ export async function saveStep(context: Context, alarm: LockedAlarm, { record, t
       acknowledgedAt: toDate(record.acknowledgedAt),
       acknowledgedBy: record.acknowledgedBy,
       acknowledgementNote: record.acknowledgementNote,
+      escalatedAt: toDate(record.escalatedAt),
+      shelvedUntil: toDate(record.shelf?.until ?? null),
+      shelvedBy: record.shelf?.by ?? null,
+      shelvedReason: record.shelf?.reason ?? null,
+      suppressed: record.suppressedBy !== null,
+      outOfService: record.outOfService !== null,
+      assignedTo: record.assignment?.to ?? null,
+      doneAt: toDate(record.done?.at ?? null),
+      doneCause: record.done?.cause ?? null,
       record,
       version: alarm.version + 1,
     })

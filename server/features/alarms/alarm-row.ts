@@ -13,6 +13,13 @@ export type AlarmRow = {
   readonly record: AlarmRecord;
   readonly acknowledgedByName: string | null;
   readonly shelvedByName: string | null;
+  readonly assigneeName: string | null;
+  /** The pad's own. */
   readonly technicianName: string | null;
+  readonly answeredByName: string | null;
+  readonly doneByName: string | null;
+  readonly outOfServiceByName: string | null;
+  /** 1 = Monday to 7; null = not on a route. */
+  readonly stopWeekday: number | null;
   readonly version: number;
 };

@@ -7,10 +7,10 @@ import { presentAlarm } from './present-alarm.ts';
 /** One page of the alarms the person may see. */
 export async function listAlarms({ db, actor, now }: Context, query: AlarmsQuery): Promise<AlarmPage> {
   const after = decodeCursor(query.cursor, SORT_SHAPES[query.sort]);
-  const rows = await listAlarmRows(db, query, after);
+  const rows = await listAlarmRows(db, query, { after, userId: actor.userId });
   const page = toPage(rows, query.limit, (row) => row.keys);
   return {
-    items: page.items.map((row) => presentAlarm(row, actor)),
+    items: page.items.map((row) => presentAlarm(row, actor, now)),
     nextCursor: page.nextCursor,
     totals: await countOpenAlarms(db),
     serverNow: now,

@@ -1,5 +1,9 @@
 import type { Actor } from '#server/context.ts';
 import type { Alarm } from '#shared/contract/http/alarms.ts';
+import type { AlarmRecord } from '#shared/domain/alarms/alarm-record.ts';
+import { partsOf } from '#shared/domain/alarms/explanation.ts';
+import { readRecord } from '#shared/domain/alarms/read-record.ts';
+import { nextWeekday } from '#shared/domain/time/next-weekday.ts';
 import type { AlarmRow } from './alarm-row.ts';
 
 /** Evidence as the contract has it: lists that may be changed by whoever gets them. */
@@ -15,14 +19,21 @@ export const hideStaffWords = (alarm: Alarm): Alarm => ({
   acknowledgedBy: null,
   acknowledgementNote: null,
   shelvedBy: null,
+  shelvedReason: null,
+  outOfServiceSince: alarm.outOfServiceSince === null ? null : { ...alarm.outOfServiceSince, by: null, reason: null },
+  answer: alarm.answer === null ? null : { ...alarm.answer, by: null, note: null },
+  done: alarm.done === null ? null : { ...alarm.done, by: null, found: null },
+  assignedTo: null,
 });
 
 /** An alarm as the person may read it. */
-export const presentAlarm = (row: AlarmRow, { role }: Pick<Actor, 'role'>): Alarm =>
-  role === 'homeowner' ? hideStaffWords(presentForStaff(row)) : presentForStaff(row);
+export function presentAlarm(row: AlarmRow, { role }: Pick<Actor, 'role'>, now: number): Alarm {
+  const alarm = presentForStaff(row, now);
+  return role === 'homeowner' ? hideStaffWords(alarm) : alarm;
+}
 
-function presentForStaff(row: AlarmRow): Alarm {
-  const { record } = row;
+function presentForStaff(row: AlarmRow, now: number): Alarm {
+  const record = readRecord(row.record);
   return {
     id: row.id,
     pumpId: row.pumpId,
@@ -46,11 +57,33 @@ function presentForStaff(row: AlarmRow): Alarm {
     acknowledgedBy: row.acknowledgedByName,
     acknowledgementNote: record.acknowledgementNote,
     escalatedAt: record.escalatedAt,
-    shelvedUntil: record.shelf?.until ?? null,
-    shelvedBy: row.shelvedByName,
-    suppressed: record.suppressedBy !== null,
-    outOfService: record.outOfService !== null,
-    technicianName: row.technicianName,
+    ...presentSetAside(record, row),
+    ...presentAnswers(record, row),
+    assignedTo:
+      record.assignment === null || row.assigneeName === null
+        ? null
+        : { id: record.assignment.to, name: row.assigneeName },
+    technicianName: row.assigneeName ?? row.technicianName,
+    nextStopOn: row.stopWeekday === null ? null : (nextWeekday(row.zone, row.stopWeekday, now) ?? null),
     version: row.version,
   };
 }
+
+function presentSetAside({ shelf, suppressedBy, outOfService }: AlarmRecord, row: AlarmRow) {
+  const explanation = partsOf(suppressedBy);
+  return {
+    shelvedUntil: shelf?.until ?? null,
+    shelvedBy: row.shelvedByName,
+    shelvedReason: shelf?.reason ?? null,
+    suppressed: suppressedBy !== null,
+    suppressedBy: explanation === undefined ? null : { padState: null, detector: null, ...explanation },
+    outOfService: outOfService !== null,
+    outOfServiceSince:
+      outOfService === null ? null : { at: outOfService.at, by: row.outOfServiceByName, reason: outOfService.reason },
+  };
+}
+
+const presentAnswers = ({ answer, done }: AlarmRecord, row: AlarmRow) => ({
+  answer: answer === null ? null : { at: answer.at, by: row.answeredByName, note: answer.note },
+  done: done === null ? null : { at: done.at, by: row.doneByName, found: done.found, cause: done.cause },
+});

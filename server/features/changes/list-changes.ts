@@ -33,7 +33,7 @@ export async function listChanges({ db, actor, now }: Asking, since: string): Pr
     complete: true,
     pumps: pumps.map(presentPumpLive),
     runs: runs.map((row) => ({ pumpId: row.pumpId, run: presentRun(row) })),
-    alarms: alarms.map((row) => presentAlarm(row, actor)),
+    alarms: alarms.map((row) => presentAlarm(row, actor, now)),
     serverNow: now,
   };
 }

@@ -11,6 +11,9 @@ export const Evidence = z.record(
   z.union([z.number(), z.string(), z.boolean(), z.null(), z.array(z.union([z.number(), z.string()]))]),
 );
 
+/** What a person did about an alarm; `by` is their name, null for readers who may not know it. */
+const Deed = { at: Instant, by: z.string().nullable() };
+
 export const Alarm = z.object({
   id: Id,
   pumpId: Id,
@@ -37,9 +40,22 @@ export const Alarm = z.object({
   escalatedAt: Instant.nullable(),
   shelvedUntil: Instant.nullable(),
   shelvedBy: z.string().nullable(),
+  shelvedReason: z.string().nullable(),
   suppressed: z.boolean(),
+  /** What explains it, where it is one of the pump's own: its pad's state, or another of its alarms. */
+  suppressedBy: z.object({ padState: z.string().nullable(), detector: z.enum(DETECTORS).nullable() }).nullable(),
   outOfService: z.boolean(),
+  outOfServiceSince: z.object({ ...Deed, reason: z.string().nullable() }).nullable(),
+  /** "Nothing to do", about its last raising. */
+  answer: z.object({ ...Deed, note: z.string().nullable() }).nullable(),
+  /** A note that was worked off, with what was found. */
+  done: z.object({ ...Deed, found: z.string().nullable(), cause: z.string().nullable() }).nullable(),
+  /** Who was given it instead of the pad's technician. */
+  assignedTo: z.object({ id: Id, name: z.string() }).nullable(),
+  /** Whom it goes to: who was given it, else the pad's technician. */
   technicianName: z.string().nullable(),
+  /** The day of the pad's next stop, where it is on a route: today or later, in the pad's zone. */
+  nextStopOn: z.iso.date().nullable(),
   /** Ends the run of versions of this alarm: pass it as If-Match. */
   version: z.number().int(),
 });
@@ -52,6 +68,8 @@ export const AlarmTransition = z.object({
   note: z.string().nullable(),
   priority: z.enum(PRIORITIES),
   cause: z.string(),
+  /** How the alarm's figures stood then. */
+  evidence: Evidence,
 });
 
 export const AlarmMail = z.object({
@@ -62,20 +80,64 @@ export const AlarmMail = z.object({
   attempts: z.number().int(),
 });
 
+/** One cause in its place, in words: what it is, how a technician tells, what speaks for and against it. */
+export const RankedCause = z.object({
+  cause: z.string(),
+  name: z.string(),
+  check: z.string(),
+  standing: z.enum(['likely', 'possible', 'unlikely']),
+  /** The rule itself named it from the readings. */
+  detectorSays: z.boolean(),
+  reasonsFor: z.array(z.string()),
+  reasonsAgainst: z.array(z.string()),
+  /** Of so many closed cases of this company, so many found it. */
+  found: z.number().int(),
+  calls: z.number().int(),
+});
+export type RankedCause = z.infer<typeof RankedCause>;
+
+export const RankedCauses = z.object({
+  /** The likeliest first. */
+  causes: z.array(RankedCause),
+  /** Whether readings or closed cases single one out; where not, the first is a guess and is to be called one. */
+  certain: z.boolean(),
+  restsOn: z.array(z.enum(['signs', 'closed-calls', 'starting-guess'])),
+});
+export type RankedCauses = z.infer<typeof RankedCauses>;
+
 export const AlarmDetail = Alarm.extend({
+  /** Null for readers who are told in plain words only. */
+  likely: RankedCauses.nullable(),
   transitions: z.array(AlarmTransition),
   mails: z.array(AlarmMail),
   serverNow: Instant,
 });
 export type AlarmDetail = z.infer<typeof AlarmDetail>;
 
+/**
+ * Which alarms a list shows. `open` and `unacknowledged` leave out what was set aside; `standing` is all that is not
+ * history; `history` has worked-off notes too.
+ */
+export const ALARM_SHOWS = [
+  'open',
+  'unacknowledged',
+  'shelved',
+  'suppressed',
+  'out-of-service',
+  'standing',
+  'history',
+  'all',
+] as const;
+
 export const AlarmsQuery = z.object({
-  show: z.enum(['open', 'unacknowledged', 'shelved', 'history', 'all']).default('open'),
+  show: z.enum(ALARM_SHOWS).default('open'),
   alarmClass: z.enum(['alarm', 'note']).optional(),
   priority: z.enum(PRIORITIES).optional(),
   detector: z.enum(DETECTORS).optional(),
   pumpId: Id.optional(),
   area: z.string().max(60).optional(),
+  /** Only those that go to whoever asks. */
+  whose: z.enum(['mine']).optional(),
   q: z.string().trim().max(100).optional(),
   sort: z.enum(['worst', 'newest', 'oldest', 'name']).default('worst'),
   ...pageQuery(200, 100),
@@ -83,12 +145,18 @@ export const AlarmsQuery = z.object({
 export type AlarmsQuery = z.infer<typeof AlarmsQuery>;
 
 export const AlarmPage = pageOf(Alarm).extend({
-  /** Open alarms and notes the person may see, whatever the filter. */
+  /**
+   * Open alarms by priority and open notes the person may see, whatever the filter: those that were set aside are
+   * counted apart. `unacknowledged` = alarms that wait for somebody; a note waits for nobody.
+   */
   totals: z.object({
     urgent: z.number().int(),
     soon: z.number().int(),
     note: z.number().int(),
     unacknowledged: z.number().int(),
+    shelved: z.number().int(),
+    suppressed: z.number().int(),
+    outOfService: z.number().int(),
   }),
   serverNow: Instant,
 });

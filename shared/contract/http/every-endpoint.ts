@@ -1,3 +1,4 @@
+import { alarmActEndpoints } from './alarm-acts.ts';
 import { alarmHealthEndpoints } from './alarm-health.ts';
 import { alarmEndpoints } from './alarms.ts';
 import { changeEndpoints } from './changes.ts';
@@ -13,6 +14,7 @@ export const EVERY_ENDPOINT: readonly Endpoint[] = [
   ...Object.values(sessionEndpoints),
   ...Object.values(pumpEndpoints),
   ...Object.values(alarmEndpoints),
+  ...Object.values(alarmActEndpoints),
   ...Object.values(alarmHealthEndpoints),
   ...Object.values(deviceEndpoints),
   ...Object.values(changeEndpoints),

@@ -1,10 +1,13 @@
+import { presentLikely } from '#server/features/alarms/present-likely.ts';
 import type { DemoPad, DemoPump } from '#shared/contract/demo/demo-company.ts';
 import { LARKMOOR } from '#shared/contract/demo/larkmoor.data.ts';
 import type { Alarm, AlarmDetail } from '#shared/contract/http/alarms.ts';
 import type { PumpDetail, PumpNow } from '#shared/contract/http/pumps.ts';
 import type { Run } from '#shared/contract/http/runs.ts';
+import { explainAlarm } from '#shared/domain/causes/explain-alarm.ts';
 import type { PlannedRun } from '#shared/domain/control/plan.ts';
 import { DAY_MS, HOUR_MS } from '#shared/domain/time/local-time.ts';
+import { nextWeekday } from '#shared/domain/time/next-weekday.ts';
 import { FAKE_FAULTS, type FakeFault } from './fake-faults.data.ts';
 import { fakeId } from './fake-id.ts';
 import { planFakePump, runFakePump } from './fake-runs.ts';
@@ -58,12 +61,28 @@ function alarmOf(fault: FakeFault, number: number, detail: PumpDetail, now: numb
     escalatedAt: null,
     shelvedUntil: null,
     shelvedBy: null,
+    shelvedReason: null,
     suppressed: false,
+    suppressedBy: null,
     outOfService: false,
+    outOfServiceSince: null,
+    answer: null,
+    done: null,
+    assignedTo: null,
     technicianName: detail.technicianName,
+    nextStopOn: nextWeekday(detail.zone, 4, now) ?? null,
+    likely: presentLikely(explainAlarm({ ...fault, from }, detail.zone)),
     version: 1,
     transitions: [
-      { at: from + 4 * 60_000, kind: 'raised', by: null, note: null, priority: fault.priority, cause: fault.cause },
+      {
+        at: from + 4 * 60_000,
+        kind: 'raised',
+        by: null,
+        note: null,
+        priority: fault.priority,
+        cause: fault.cause,
+        evidence: { ...fault.evidence },
+      },
     ],
     mails: [
       {

@@ -1,12 +1,15 @@
 import type { z } from 'zod';
 import { ERROR_STATUS, type ErrorCode } from '#shared/contract/errors.ts';
+import { type AlarmAct, alarmActEndpoints } from '#shared/contract/http/alarm-acts.ts';
 import { type Alarm, alarmEndpoints } from '#shared/contract/http/alarms.ts';
 import { changeEndpoints } from '#shared/contract/http/changes.ts';
 import type { Endpoint } from '#shared/contract/http/endpoint.ts';
 import { type PumpDetail, type PumpRow, pumpEndpoints } from '#shared/contract/http/pumps.ts';
 import { sessionEndpoints } from '#shared/contract/http/session.ts';
-import { alarmTitle } from '#shared/domain/wording/alarm-words.ts';
+import { changeByAct } from './fake-alarm-acts.ts';
+import { listFakeAlarms } from './fake-alarm-list.ts';
 import { type FakePump, markOf } from './fake-fleet.ts';
+import { fakeId } from './fake-id.ts';
 import { readingsOf } from './fake-readings.ts';
 import { broadcast, type FakeState, sessionOf, visiblePumps } from './fake-state.ts';
 
@@ -119,39 +122,6 @@ const stripOf = (pump: FakePump, from: number, until: number, now: number) => ({
   planned: pump.planned.filter((run) => run.to > now && run.from < until).map(({ because: _, ...run }) => run),
 });
 
-function listAlarms(state: FakeState, query: Input<typeof alarmEndpoints.list>['query']) {
-  const open = visiblePumps(state).flatMap(({ alarm }) => alarm ?? []);
-  const shown: Readonly<Record<string, (alarm: Alarm) => boolean>> = {
-    open: ({ state: at }) => at !== 'normal',
-    unacknowledged: ({ acknowledgedAt }) => acknowledgedAt === null,
-    shelved: ({ shelvedUntil }) => shelvedUntil !== null,
-    history: ({ state: at }) => at === 'normal',
-    all: () => true,
-  };
-  const text = query.q?.toLowerCase() ?? '';
-  const items = open
-    .filter((alarm) => shown[query.show]?.(alarm) === true)
-    .filter((alarm) => query.alarmClass === undefined || alarm.alarmClass === query.alarmClass)
-    .filter((alarm) => query.priority === undefined || alarm.priority === query.priority)
-    .filter((alarm) => query.pumpId === undefined || alarm.pumpId === query.pumpId)
-    .filter((alarm) =>
-      `${alarm.padName} ${alarmTitle(alarm.detector, alarm.cause, alarm.evidence)}`.toLowerCase().includes(text),
-    )
-    .sort((a, b) => RANK[a.priority] - RANK[b.priority] || b.from - a.from);
-  const count = (keep: (alarm: Alarm) => boolean) => open.filter(keep).length;
-  return {
-    items: items.slice(0, query.limit),
-    nextCursor: null,
-    totals: {
-      urgent: count(({ priority }) => priority === 'urgent'),
-      soon: count(({ priority }) => priority === 'soon'),
-      note: count(({ priority }) => priority === 'note'),
-      unacknowledged: count(({ acknowledgedAt, alarmClass }) => acknowledgedAt === null && alarmClass === 'alarm'),
-    },
-    serverNow: state.now(),
-  };
-}
-
 /** Changes an alarm and tells every open page, as the real server does. */
 export function changeAlarm(state: FakeState, alarmId: string, change: Partial<Alarm>): Alarm {
   const { pump, alarm } = findAlarmed(state, alarmId);
@@ -168,6 +138,17 @@ export function changeAlarm(state: FakeState, alarmId: string, change: Partial<A
   });
   return pump.alarm;
 }
+
+const FAKE_TECHNICIANS = [
+  { id: fakeId('user', 2), name: 'Joss Aldane', openAlarms: 3 },
+  { id: fakeId('user', 3), name: 'Wren Tallow', openAlarms: 0 },
+];
+
+const actOn = (state: FakeState, alarmId: string, act: AlarmAct): Alarm => {
+  const { alarm } = findAlarmed(state, alarmId);
+  const who = { name: requireSession(state).user.name, at: state.now(), technicians: FAKE_TECHNICIANS };
+  return changeAlarm(state, alarmId, changeByAct(alarm, act, who));
+};
 
 export const FAKE_HANDLERS: readonly FakeHandler[] = [
   handle(sessionEndpoints.create, (state, { body }) => signIn(state, body.email, body.password)),
@@ -196,27 +177,22 @@ export const FAKE_HANDLERS: readonly FakeHandler[] = [
   handle(pumpEndpoints.readings, (state, { params, query }) =>
     readingsOf(findPump(state, params.pumpId).runs, query, state.now()),
   ),
-  handle(alarmEndpoints.list, (state, { query }) => listAlarms(state, query)),
+  handle(alarmEndpoints.list, (state, { query }) => listFakeAlarms(state, query)),
   handle(alarmEndpoints.read, (state, { params }) => ({
     ...findAlarmed(state, params.alarmId).alarm,
     serverNow: state.now(),
   })),
   handle(alarmEndpoints.acknowledge, (state, { params, body }) =>
-    changeAlarm(state, params.alarmId, {
-      state: 'acknowledged',
-      acknowledgedAt: state.now(),
-      acknowledgedBy: requireSession(state).user.name,
-      acknowledgementNote: body.note ?? null,
-    }),
+    actOn(state, params.alarmId, { kind: 'acknowledge', ...body }),
   ),
   handle(alarmEndpoints.withdrawAcknowledgement, (state, { params }) =>
-    changeAlarm(state, params.alarmId, {
-      state: 'unacknowledged',
-      acknowledgedAt: null,
-      acknowledgedBy: null,
-      acknowledgementNote: null,
-    }),
+    actOn(state, params.alarmId, { kind: 'withdraw-acknowledgement' }),
   ),
+  handle(alarmActEndpoints.technicians, () => ({ items: FAKE_TECHNICIANS })),
+  handle(alarmActEndpoints.actOnMany, (state, { body }) => ({
+    done: body.acts.map(({ alarmId, act }) => actOn(state, alarmId, act)),
+    refused: [],
+  })),
   handle(changeEndpoints.list, (state) => ({
     cursor: String(state.cursor),
     complete: true,

@@ -124,7 +124,7 @@ describe('news of an alarm', () => {
     const page = {
       items: [alarm],
       nextCursor: null,
-      totals: { urgent: 1, soon: 0, note: 0, unacknowledged: 1 },
+      totals: { urgent: 1, soon: 0, note: 0, unacknowledged: 1, shelved: 0, suppressed: 0, outOfService: 0 },
       serverNow: NOW,
     };
     client.setQueryData(list, { pages: [page], pageParams: [undefined] });
