@@ -3,6 +3,7 @@ import { DAY_MINUTES, localTime } from '#shared/domain/time/local-time.ts';
 import { formatNumber, formatQuantity } from '#shared/units/format-quantity.ts';
 import type { Quantity } from '#shared/units/quantity-formats.data.ts';
 import { t } from '../messages/t.ts';
+import { formatMoney } from './format-money.ts';
 import { formatSpan } from './format-span.ts';
 import { formatDay, formatMinuteOfDay, formatTime, formatZoneName, isTwelveHour } from './format-time.ts';
 
@@ -31,6 +32,10 @@ export function createFormat({ locale, preferences: { units, clock } }: FormatOp
     quantity,
     rpm: (value: number) => quantity(value, 'speed'),
     watts: (value: number) => quantity(value, 'power'),
+    /** Decimal text of a currency; a dash where there is none. */
+    money: (amount: string | null | undefined, currency: string | null) => formatMoney(amount, currency, locale),
+    /** A price of a unit, to a thousandth of a cent. */
+    price: (amount: string | null | undefined, currency: string | null) => formatMoney(amount, currency, locale, true),
     time,
     timeWithSeconds: (at: number, zone: string) => formatTime(at, zone, { ...style, seconds: true }),
     /** A clock's or program's time of day; the two ends of a twelve-hour day by their names. */
