@@ -15,6 +15,7 @@ export function useLive(): void {
   const client = useQueryClient();
   useEffect(() => {
     const reloadAll = () => void client.invalidateQueries({ predicate: ({ queryKey }) => queryKey[0] !== 'session' });
+    const reloadFailed = () => void client.invalidateQueries({ predicate: ({ state }) => state.status === 'error' });
     // Some networks let no socket through: then the page asks now and then.
     const timer = setInterval(() => {
       if (liveLink.get().phase !== 'live' && navigator.onLine) reloadAll();
@@ -23,6 +24,7 @@ export function useLive(): void {
       listChanges: (since) => call(changeEndpoints.list, { query: { since } }),
       apply: (news) => applyNews(client, LIVE_TABLES, news),
       reloadAll,
+      reloadFailed,
       setServerNow,
     });
     return () => {

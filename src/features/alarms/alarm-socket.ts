@@ -1,5 +1,6 @@
 import type { Alarm } from '#shared/contract/http/alarms.ts';
 import type { LiveTable } from '#src/lib/live/live-table.ts';
+import { readAgain } from '#src/lib/live/read-again.ts';
 import { t } from '#src/lib/messages/t.ts';
 import { serverNow } from '#src/lib/server-clock.ts';
 import { createStore } from '#src/lib/store.ts';
@@ -32,6 +33,6 @@ export const alarmNews: LiveTable = {
       writeAlarm(client, alarm);
       announce(alarm);
     }
-    void client.invalidateQueries({ queryKey: alarmQueries.all() });
+    readAgain(client, { queryKey: alarmQueries.all() });
   },
 };

@@ -1,6 +1,7 @@
 import type { InfiniteData } from '@tanstack/react-query';
 import type { FleetPage, PumpLive, PumpRow } from '#shared/contract/http/pumps.ts';
 import type { LiveTable } from '#src/lib/live/live-table.ts';
+import { readAgain, readUnderwayAgain } from '#src/lib/live/read-again.ts';
 import { fleetQueries } from './fleet-queries.ts';
 import { orderNews } from './order-news.ts';
 
@@ -25,7 +26,8 @@ export const fleetNews: LiveTable = {
     client.setQueriesData<FleetPages>({ queryKey: fleetQueries.lists() }, (data) => data && patchRows(data, news));
   },
   alarms: (client) => {
-    void client.invalidateQueries({ queryKey: fleetQueries.totals({}).queryKey.slice(0, 2) });
+    readAgain(client, { queryKey: fleetQueries.totals({}).queryKey.slice(0, 2) });
+    readUnderwayAgain(client, fleetQueries.lists());
     orderNews.set(orderNews.get() + 1);
   },
 };

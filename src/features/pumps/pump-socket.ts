@@ -1,5 +1,6 @@
 import type { FleetPage, PumpDetail, PumpLive, Strip } from '#shared/contract/http/pumps.ts';
 import type { LiveTable } from '#src/lib/live/live-table.ts';
+import { readUnderwayAgain } from '#src/lib/live/read-again.ts';
 import { pumpQueries } from './pump-queries.ts';
 import { upsertRun } from './upsert-run.ts';
 
@@ -20,7 +21,12 @@ export const pumpNews: LiveTable = {
       client.setQueriesData<Strip>({ queryKey: pumpQueries.strips(pumpId) }, (strip) =>
         strip === undefined ? strip : { ...strip, runs: upsertRun(strip.runs, run) },
       );
+      // A run that has ended is not told of again.
+      readUnderwayAgain(client, pumpQueries.strips(pumpId));
     }
+  },
+  alarms: (client, alarms) => {
+    for (const { pumpId } of alarms) readUnderwayAgain(client, pumpQueries.detail(pumpId).queryKey);
   },
 };
 

@@ -5,7 +5,10 @@ import { createLiveNews, type LiveNewsDependencies } from './live-news.ts';
 import { LiveSocket } from './live-socket.ts';
 import { watchedPumps } from './watched-pumps.ts';
 
-export type LiveNeeds = Pick<LiveNewsDependencies, 'listChanges' | 'apply' | 'reloadAll' | 'setServerNow'>;
+export type LiveNeeds = Pick<
+  LiveNewsDependencies,
+  'listChanges' | 'apply' | 'reloadAll' | 'reloadFailed' | 'setServerNow'
+>;
 
 const openSocket = (): WebSocket => new WebSocket(LIVE_PATH);
 

@@ -21,6 +21,7 @@ function setUp() {
   let answer: (changes: Changes) => void = () => undefined;
   let refuse: (error: Error) => void = () => undefined;
   let reloads = 0;
+  let retries = 0;
   let flush: () => void = () => undefined;
   const hear = createLiveNews({
     listChanges: (since) => {
@@ -34,6 +35,9 @@ function setUp() {
     reloadAll: () => {
       reloads += 1;
     },
+    reloadFailed: () => {
+      retries += 1;
+    },
     setServerNow: () => undefined,
     defer: (run) => {
       flush = run;
@@ -45,6 +49,7 @@ function setUp() {
     applied,
     asked,
     reloads: () => reloads,
+    retries: () => retries,
     flush: () => flush(),
     answer: async (changes: Partial<Changes>) => {
       answer({ cursor: '100', complete: true, pumps: [], runs: [], alarms: [], serverNow: 1, ...changes });
@@ -113,4 +118,46 @@ it('moves its cursor with heartbeats, but never past frames that still wait', ()
   live.hear({ type: 'heartbeat', serverNow: 1, cursor: '50' });
   live.hear(hello('60'));
   expect(live.asked).toEqual(['10']);
+});
+
+it('closes the gap once more when the connection broke again before the answer', async () => {
+  const live = setUp();
+  live.hear(hello('10'));
+  live.hear(hello('20'));
+  live.hear(hello('300'));
+  expect(live.asked).toEqual(['10']);
+  await live.answer({ cursor: '200', pumps: [pump(5)] });
+  expect(live.asked).toEqual(['10', '200']);
+  await live.answer({ cursor: '310', pumps: [pump(8)] });
+  expect(live.applied.map(({ pumps }) => pumps[0]?.heardAt)).toEqual([5, 8]);
+  live.hear(hello('400'));
+  expect(live.asked).toEqual(['10', '200', '310']);
+});
+
+it('tries a gap that could not be closed again with the next heartbeat, from where it began', async () => {
+  const live = setUp();
+  live.hear(hello('10'));
+  live.hear(hello('20'));
+  await live.refuse();
+  live.hear(news('25', 3));
+  live.flush();
+  expect(live.applied.map(({ pumps }) => pumps[0]?.heardAt)).toEqual([3]);
+  live.hear({ type: 'heartbeat', serverNow: 1, cursor: '30' });
+  expect(live.asked).toEqual(['10', '10']);
+  await live.answer({ cursor: '30', pumps: [pump(4)] });
+  expect(live.applied.at(-1)?.pumps).toEqual([pump(4)]);
+  live.hear({ type: 'heartbeat', serverNow: 1, cursor: '40' });
+  live.hear(hello('50'));
+  expect(live.asked).toEqual(['10', '10', '40']);
+});
+
+it('lets what failed during a break be read again once the gap is closed', async () => {
+  const live = setUp();
+  live.hear(hello('10'));
+  live.hear(hello('20'));
+  await live.refuse();
+  expect(live.retries()).toBe(0);
+  live.hear(hello('30'));
+  await live.answer({});
+  expect(live.retries()).toBe(1);
 });
