@@ -13,7 +13,7 @@ import { runs } from '#server/db/schema/runs.ts';
 import { asMachine, type Transaction } from '#server/db/transaction.ts';
 import type { AlarmRecord } from '#shared/domain/alarms/alarm-record.ts';
 import { applySignal } from '#shared/domain/alarms/apply-signal.ts';
-import type { Detector, Priority } from '#shared/domain/detectors/detector.ts';
+import type { AlarmClass, Detector, Priority } from '#shared/domain/detectors/detector.ts';
 import type { PumpNow } from '#shared/domain/fold/fold-output.ts';
 
 type PumpKey = { companyId: string; padId: string; number: number };
@@ -29,6 +29,7 @@ export type TestAlarm = {
   readonly detector?: Detector;
   readonly priority?: Priority;
   readonly state?: AlarmState;
+  readonly alarmClass?: AlarmClass;
 };
 
 /** The record of an alarm as its state machine raises it, put into a state. */
@@ -37,9 +38,10 @@ function recordOf({
   detector = 'failed-prime',
   priority = 'urgent',
   state,
+  alarmClass = 'alarm',
 }: TestAlarm): AlarmRecord {
   const [at, cause, evidence] = [from.getTime(), 'air-leak', { primeWatts: 310 }];
-  const raised = { type: 'raised', detector, alarmClass: 'alarm', priority, from: at, at, cause, evidence } as const;
+  const raised = { type: 'raised', detector, alarmClass, priority, from: at, at, cause, evidence } as const;
   const record = applySignal(undefined, raised)?.record;
   if (record === undefined) throw new Error('a raised signal raises an alarm');
   return state === undefined ? record : { ...record, state, active: state !== 'normal' && state !== 'returned' };

@@ -16,9 +16,9 @@ export type ActInput = { readonly alarmId: string; readonly act: AlarmAct; reado
 export async function actOnAlarm(context: Context, { alarmId, act, ifMatch }: ActInput): Promise<Alarm> {
   const { actor, now } = context;
   requireMayAct(actor, act.kind);
-  const name = act.kind === 'assign' ? (await getTechnician(context, act.technicianId)).name : '';
   const alarm = await getAlarmForUpdate(context, alarmId);
   requireVersion(ifMatch, alarm.version);
+  const name = act.kind === 'assign' ? (await getTechnician(context, act.technicianId)).name : '';
   const outcome = takeAct(alarm.record, { by: actor.userId, at: now, name }, act);
   if ('refusal' in outcome) throw conflict(outcome.refusal);
   const comesBack = !isOpen(alarm.record) && isOpen(outcome.step.record);

@@ -86,8 +86,8 @@ export async function listAlarmRows(
 export async function countOpenAlarms(db: Transaction): Promise<AlarmPage['totals']> {
   const { rows } = await db.execute<AlarmPage['totals']>(sql`
     select count(*) filter (where calls and priority = 'urgent')::int as urgent,
-      count(*) filter (where calls and priority <> 'urgent')::int as soon,
-      count(*) filter (where alarm_class = 'note' and not set_aside)::int as note,
+      count(*) filter (where calls and priority = 'soon')::int as soon,
+      count(*) filter (where not set_aside and (alarm_class = 'note' or priority = 'note'))::int as note,
       count(*) filter (where calls and state in ('unacknowledged', 'returned', 'latched'))::int as unacknowledged,
       count(*) filter (where shelved_until is not null)::int as shelved,
       count(*) filter (where suppressed)::int as suppressed,

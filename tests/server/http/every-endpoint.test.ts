@@ -41,7 +41,16 @@ const bodyFor = ({ path, method, body }: Endpoint) => {
   if (body === undefined) return undefined;
   if (path === '/api/devices') return { serial: `T${crypto.randomUUID().slice(0, 8).toUpperCase()}` };
   if (path === '/api/session' && method === 'POST') return { email: 'nobody@company.example', password: 'wrong' };
-  return {};
+  return BODIES[path] ?? {};
+};
+
+/** What some endpoints cannot do without. */
+const BODIES: Readonly<Record<string, unknown>> = {
+  '/api/alarms/:alarmId/shelf': { until: Date.now() + 3_600_000, reason: 'a part is ordered' },
+  '/api/alarms/:alarmId/out-of-service': { reason: 'the pool is being rebuilt' },
+  '/api/alarms/:alarmId/assignment': { technicianId: crypto.randomUUID() },
+  '/api/alarms/:alarmId/done': { found: 'set the clock' },
+  '/api/alarms/acts': { acts: [{ alarmId: crypto.randomUUID(), act: { kind: 'acknowledge' } }] },
 };
 
 const call = (endpoint: Endpoint, params: Record<string, string>, as?: TestPerson) => {
