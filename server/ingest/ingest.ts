@@ -110,8 +110,11 @@ function createDecoder(options: IngestOptions, counts: { refused: number }) {
       const due = notice(serial, decoded.refusal.count, decoded.refusal.reason, receivedAt);
       if (due !== undefined) options.sendNotice(serial, due);
     }
-    const touchesDevice = receivedAt - (touchedAt.get(serial) ?? 0) >= TOUCH_INTERVAL_MS;
+    const isWill = decoded.status?.state === 'lost';
+    const touchesDevice = !isWill && receivedAt - (touchedAt.get(serial) ?? 0) >= TOUCH_INTERVAL_MS;
     if (touchesDevice) touchedAt.set(serial, receivedAt);
+    // A device that speaks after its will is there again, from its first word on.
+    if (isWill) touchedAt.delete(serial);
     return { device, receivedAt, decoded, touchesDevice, settle };
   };
 }

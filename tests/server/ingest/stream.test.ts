@@ -191,6 +191,13 @@ describe('messages of one device', () => {
     expect(await state()).toBe('online');
     second.socket.destroy();
     await expect.poll(state).toBe('lost');
+    const third = await signIn(pump, will(connections[1]!));
+    const at = recent();
+    send(third, pump.serial, 'readings', JSON.stringify([{ t: at, rpm: 1700, in: 0, act: 0, w: 400 }]));
+    await third.next('puback');
+    // It said nothing of a new connection, and yet it is there.
+    expect(await state()).toBe('online');
+    third.socket.destroy();
   });
 });
 

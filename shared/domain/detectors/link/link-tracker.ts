@@ -79,8 +79,11 @@ export function createLinkTracker(context: PumpContext, saved: unknown): LinkTra
       if (event.kind === 'listening') state.listeningSince = event.receivedAt;
       if (event.kind === 'reading' || event.kind === 'status' || event.kind === 'settings') {
         if (event.receivedAt - state.lastWordAt > limitMs) state.heardSince = event.receivedAt;
-        if (!(event.kind === 'status' && event.status.state === 'lost'))
+        if (!(event.kind === 'status' && event.status.state === 'lost')) {
           state.lastWordAt = Math.max(state.lastWordAt, event.receivedAt);
+          // Speaks after its will, without having said that it is back: it is there.
+          if (state.connection === 'lost') state.connection = 'online';
+        }
       }
       if (event.kind === 'status') hearStatus(state, event);
       publish(facts, state);

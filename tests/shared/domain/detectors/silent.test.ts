@@ -46,6 +46,15 @@ describe('silent', () => {
     expect(player.standing('silent')).toBeUndefined();
   });
 
+  it('takes a device that speaks after its will for there, and silent again when it stops', () => {
+    const player = connected();
+    player.push({ kind: 'status', receivedAt: player.at, status: { state: 'lost', connection: 'c1' } });
+    player.play(5 * MINUTE, goodDay());
+    player.silence(2 * HOUR);
+
+    expect(player.standing('silent')?.cause).toBe('device');
+  });
+
   it('blames the device where it is connected and says nothing', () => {
     const player = connected();
     player.silence(2 * HOUR);
