@@ -3,7 +3,7 @@ import { checkTariff } from './check-tariff.ts';
 import type { HourUsage } from './hour-usage.ts';
 import type { Micros } from './money.ts';
 import { priceDemand } from './price-demand.ts';
-import { type MonthUse, type PricingOptions, priceEnergy } from './price-energy.ts';
+import { type MonthUse, type PricingOptions, priceSoundEnergy } from './price-energy.ts';
 import type { Tariff } from './tariff.ts';
 
 /** An hour of a day with the watt-hours of its largest quarter: what a demand price goes by. */
@@ -49,6 +49,8 @@ export const periodName = ({ periodNames }: Pick<Tariff, 'periodNames'>, period:
 const quartersOf = ({ hours }: DayUse): HourUsage[] =>
   hours.map((hour) => ({ ...hour, to: hour.from + QUARTER_MS, wattHours: hour.quarterWattHours }));
 
+const hasDemand = ({ demand, flatDemand }: Tariff): boolean => demand !== undefined || flatDemand !== undefined;
+
 /** Demand by day: each line of a stretch falls on the first day that reached it. */
 function layDemand(term: DayTerm, days: readonly DayUse[]): Map<number, Micros> {
   const byDay = new Map<number, Micros>();
@@ -91,20 +93,19 @@ function unpriced(day: DayUse): PricedDay {
 }
 
 function priceStretch(term: DayTerm, days: readonly DayUse[], options: PricingOptions): PricedDay[] {
-  const demand = layDemand(term, days);
+  const demand = hasDemand(term.tariff) ? layDemand(term, days) : new Map<number, Micros>();
   let carried: MonthUse | undefined;
   return days.map((day) => {
-    const priced = priceEnergy(term.tariff, day.hours, { ...options, carried });
-    if (!priced.ok) return unpriced(day);
-    carried = priced.value.carried;
+    const priced = priceSoundEnergy(term.tariff, day.hours, { ...options, carried });
+    carried = priced.carried;
     const kwhByPeriod = term.tariff.energy.periods.map(() => 0);
     const energyMicrosByPeriod = term.tariff.energy.periods.map(() => 0);
-    for (const { period, kwh, micros } of priced.value.lines) {
+    for (const { period, kwh, micros } of priced.lines) {
       kwhByPeriod[period] = kwh;
       energyMicrosByPeriod[period] = micros;
     }
     const demandMicros = demand.get(day.epochDay) ?? 0;
-    const { micros, kwh } = priced.value;
+    const { micros, kwh } = priced;
     return {
       epochDay: day.epochDay,
       term,
@@ -120,7 +121,7 @@ function priceStretch(term: DayTerm, days: readonly DayUse[], options: PricingOp
 /**
  * Prices local days in order, each under the tariff in force on it: tiers go by the use of the calendar month so far, the
  * month's demand falls on the day of its peak. Days of a month priced in parts cost what the month costs, so pass whole
- * calendar months. Where the tariff changes within a month, tiers and demand begin anew with it. A day without a tariff, or
+ * calendar months; energy is finite and from 0. Where the tariff changes within a month, tiers and demand begin anew with it. A day without a tariff, or
  * under one with a hole, has no price.
  *
  * @example priceDays(days, [{ id, tariff, fromDay: undefined, toDay: undefined }])[0]?.micros // 1_240_000

@@ -98,7 +98,19 @@ export function priceEnergy(
   options: PricingOptions = {},
 ): Outcome<PricedEnergy, PricingFault> {
   const faults = checkPricing(tariff, usage, options);
-  if (faults.length > 0) return refused(faults);
+  return faults.length > 0 ? refused(faults) : accepted(priceSoundEnergy(tariff, usage, options));
+}
+
+/**
+ * The same for a tariff and a use that were checked before: what prices many days of one tariff checks them once.
+ *
+ * @example checkTariff(tariff).length === 0 && priceSoundEnergy(tariff, usage).micros // 61_596_000
+ */
+export function priceSoundEnergy(
+  tariff: Tariff,
+  usage: readonly UsedHour[],
+  options: PricingOptions = {},
+): PricedEnergy {
   const sums = sumMonths(tariff, usage, options.carried);
   const lines = sums.flatMap((sum) => priceMonth(tariff, sum, options.otherKwhByPeriod ?? []));
   const last = sums.at(-1);
@@ -106,10 +118,10 @@ export function priceEnergy(
     last === undefined
       ? options.carried
       : { month: last.month, kwhByPeriod: last.kwh.map((kwh, period) => kwh + (last.before[period] ?? 0)) };
-  return accepted({
+  return {
     lines,
     kwh: lines.reduce((sum, line) => sum + line.kwh, 0),
     micros: lines.reduce((sum, line) => sum + line.micros, 0),
     carried,
-  });
+  };
 }

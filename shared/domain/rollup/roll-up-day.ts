@@ -1,4 +1,4 @@
-import { listLocalSlices } from '../energy/local-slices.ts';
+import { listDayHours } from '../energy/day-hours.ts';
 import type { Run } from '../runs/run.ts';
 import type { LocalDay } from '../time/local-days.ts';
 import { MINUTE_MS } from '../time/local-time.ts';
@@ -73,7 +73,7 @@ export function rollUpDay(
     const known = Math.max(0, Math.min(five.to, upTo) - five.from);
     five.sourceMs[NO_DATA] = Math.max(0, known - five.coveredMs);
   }
-  const hours = listLocalSlices(zone, day.from, day.to, 60).map(({ from, to, hour }): HourSums => {
+  const hours = listDayHours(zone, day).map(({ from, to, hour }): HourSums => {
     const own = fives.slice(Math.round((from - day.from) / FIVE_MS), Math.round((to - day.from) / FIVE_MS));
     return { ...mergeSlices(from, to, own), quarterWattHours: findLargestQuarter(own), hour };
   });
