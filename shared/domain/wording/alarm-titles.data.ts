@@ -3,7 +3,8 @@ import type { Detector } from '../detectors/detector.ts';
 /**
  * The titles of one detector's alarms: the first whose `{places}` the evidence can fill is taken, a known cause's own
  * before the detector's. A place is `{name}` for a number or word, `{name:duration}` for minutes, `{name:percent}` for
- * a share of 1. They stand apart from the other words because a fleet's wall needs them and nothing else.
+ * a share of 1, `{name#pad|pads}` for a count with its noun. They stand apart from the other words because a fleet's
+ * wall needs them and nothing else.
  */
 export type DetectorTitles = {
   readonly titles: readonly string[];
@@ -57,7 +58,7 @@ export const ALARM_TITLES: Readonly<Record<Detector, DetectorTitles>> = {
       'switch-failing': ['Input {input} chatters: worn switch?', 'An input chatters: worn switch?'],
     },
   },
-  'failed-prime': { titles: ['Did not prime, {tries} tries', 'Did not prime'], causes: {} },
+  'failed-prime': { titles: ['Did not prime, {tries#try|tries}', 'Did not prime'], causes: {} },
   'slow-prime': {
     titles: ['Takes {usualRatio} times its usual time to prime', 'Takes longer and longer to prime'],
     causes: {},
@@ -106,7 +107,7 @@ export const ALARM_TITLES: Readonly<Record<Detector, DetectorTitles>> = {
         'A time clock stood still in a power cut',
       ],
       'daylight-saving': [
-        '{pads} pads still have last season’s time',
+        '{pads#pad still has|pads still have} last season’s time',
         'Time clock {input} still has last season’s time',
         'A time clock still has last season’s time',
       ],
@@ -121,7 +122,10 @@ export const ALARM_TITLES: Readonly<Record<Detector, DetectorTitles>> = {
         'Motor clock {minutes:duration} {direction} since a power cut',
         'The motor’s clock lost time in a power cut',
       ],
-      'daylight-saving': ['{pads} pads still have last season’s time', 'Motor clock still has last season’s time'],
+      'daylight-saving': [
+        '{pads#pad still has|pads still have} last season’s time',
+        'Motor clock still has last season’s time',
+      ],
       drift: ['Motor clock drifts, now {minutes:duration} {direction}', 'The motor’s clock drifts'],
     },
   },
@@ -131,7 +135,10 @@ export const ALARM_TITLES: Readonly<Record<Detector, DetectorTitles>> = {
   },
   'keypad-hold': { titles: ['On manual for {minutes:duration}', 'Left on manual'], causes: {} },
   'settings-changed': {
-    titles: ['{changes} settings differ from the commissioned ones', 'Settings differ from the commissioned ones'],
+    titles: [
+      '{changes#setting differs|settings differ} from the commissioned ones',
+      'Settings differ from the commissioned ones',
+    ],
     causes: {},
   },
   'energized-without-flow': {
@@ -143,7 +150,7 @@ export const ALARM_TITLES: Readonly<Record<Detector, DetectorTitles>> = {
     },
   },
   'too-little-water': {
-    titles: ['Turns over {turnovers} times a day, {target} wanted', 'Moves too little water for this pool'],
+    titles: ['Turns over {turnovers#time|times} a day, {target} wanted', 'Moves too little water for this pool'],
     causes: {
       'short-hours': ['Runs too few hours: {turnovers} of {target} turnovers', 'Runs too few hours for this pool'],
       'low-flow': ['Flow too low: {turnovers} of {target} turnovers', 'Flow too low for this pool'],
@@ -163,11 +170,11 @@ export const ALARM_TITLES: Readonly<Record<Detector, DetectorTitles>> = {
     titles: ['No word for {minutes:duration}', 'No word from the device'],
     causes: {
       power: [
-        '{pads} pads in {area} went quiet together',
+        '{pads#pad|pads} in {area} went quiet together',
         'No word: the power may be out there',
         'No word: the power may be out',
       ],
-      'own-link': ['{pumps} devices dropped at once: our own link', 'No word: our own link is down'],
+      'own-link': ['{pumps#device|devices} dropped at once: our own link', 'No word: our own link is down'],
       link: ['No word for {minutes:duration}: its link is down', 'No word: its link is down'],
       device: ['No word for {minutes:duration}: the device itself?', 'No word: the device itself?'],
     },

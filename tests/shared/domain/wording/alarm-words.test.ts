@@ -18,6 +18,7 @@ describe('words of an alarm', () => {
 
   it('counts tries where the evidence has them', () => {
     expect(alarmTitle('failed-prime', 'air-leak', { tries: 3 })).toBe('Did not prime, 3 tries');
+    expect(alarmTitle('failed-prime', 'air-leak', { tries: 1 })).toBe('Did not prime, 1 try');
     expect(alarmTitle('failed-prime', 'air-leak', {})).toBe('Did not prime');
   });
 
