@@ -1,21 +1,29 @@
+import { AHEAD_LIMIT_MS } from '#shared/contract/mqtt/wire-limits.ts';
 import type { PumpContext } from '#shared/domain/control/pump-context.ts';
-import { createPumpFold, type PumpFold } from '#shared/domain/fold/fold-pump.ts';
+import { createPumpFold } from '#shared/domain/fold/fold-pump.ts';
 import type { PumpEvent } from '#shared/domain/fold/pump-event.ts';
 import { type AlarmLine, createAlarmLines } from './alarm-lines.ts';
+import { createAreaLines, type FoldedPad, foldedPad } from './area-lines.ts';
 
 /** Arrival time is told to every pad when it has advanced this far: silence is judged in minutes. */
 const TELL_TIME_EVERY_MS = 30_000;
+/** Where no line comes for longer, time goes on in steps: minutes at first, then quarters of an hour. */
+const FINE_STEP_MS = 60_000;
+const FINE_FOR_MS = 2 * 3_600_000;
+const COARSE_STEP_MS = 15 * 60_000;
 
 /** How often a pad's outputs are gathered, in its own events: runs are of no interest here. */
 const TAKE_EVERY_EVENTS = 64;
 
-type Pad = { readonly serial: string; readonly fold: PumpFold; waiting: number; heardAt: number };
+const MOST_UNKNOWN = 1000;
+
+type Pad = FoldedPad & { readonly inputs: number; waiting: number; heardAt: number };
 
 export type BacktestCount = { readings: number; late: number; unknownSerials: Map<string, number> };
 
 export type Backtest = {
-  /** Takes one event in order of arrival; false where no pad has this serial. */
-  readonly take: (serial: string, event: PumpEvent) => boolean;
+  /** Takes one event in order of arrival; answers why it was refused, undefined where it was not. */
+  readonly take: (serial: string, event: PumpEvent) => string | undefined;
   /** Alarms that will not change any more, in order of raising. */
   readonly settled: () => AlarmLine[];
   /** Ends it and gives what is left. */
@@ -23,25 +31,28 @@ export type Backtest = {
   readonly count: () => BacktestCount;
 };
 
+const createPad = (context: PumpContext): Pad => ({
+  ...foldedPad(context, createPumpFold(context)),
+  inputs: context.traits.inputCount,
+  waiting: 0,
+  heardAt: Number.NEGATIVE_INFINITY,
+});
+
 /**
  * The same fold that runs live, over events in order of arrival; `pumpId` of each context is the serial.
  * Memory holds one state a pad and the alarms not yet given out.
  */
 export function createBacktest(contexts: readonly PumpContext[]): Backtest {
-  const pads = new Map<string, Pad>(
-    contexts.map((context) => [
-      context.pumpId,
-      { serial: context.pumpId, fold: createPumpFold(context), waiting: 0, heardAt: Number.NEGATIVE_INFINITY },
-    ]),
-  );
+  const pads = new Map<string, Pad>(contexts.map((context) => [context.pumpId, createPad(context)]));
   const lines = createAlarmLines();
+  const areas = createAreaLines(lines);
   const count: BacktestCount = { readings: 0, late: 0, unknownSerials: new Map() };
   let toldAt: number | undefined;
   let lastArrival = 0;
 
-  const gather = (pad: Pad): void => {
+  const gather = (pad: Pad, at: number): void => {
     pad.waiting = 0;
-    lines.take(pad.serial, pad.fold.take().signals);
+    for (const signal of pad.fold.take().signals) areas.take(pad, signal, at);
   };
 
   const tellTime = (receivedAt: number): void => {
@@ -50,37 +61,46 @@ export function createBacktest(contexts: readonly PumpContext[]): Backtest {
       if (receivedAt - pad.heardAt >= TELL_TIME_EVERY_MS) {
         pad.fold.push({ kind: toldAt === undefined ? 'listening' : 'time', receivedAt });
       }
-      gather(pad);
+      gather(pad, receivedAt);
+      areas.hear(pad, receivedAt);
     }
     toldAt = receivedAt;
+  };
+
+  /** A rule that counts time speaks when its time has come, not when the next line does. */
+  const advance = (to: number): void => {
+    const quietFrom = toldAt ?? to;
+    for (let at = quietFrom; at < to; ) {
+      at += at - quietFrom < FINE_FOR_MS ? FINE_STEP_MS : COARSE_STEP_MS;
+      if (at < to) tellTime(at);
+    }
+    tellTime(to);
   };
 
   const push = (pad: Pad, event: PumpEvent): void => {
     if (event.kind === 'reading') {
       count.readings += 1;
       const highWater = pad.fold.highWater();
-      if (highWater !== undefined && event.reading.at <= highWater) {
-        count.late += 1;
-        return;
-      }
+      if (highWater !== undefined && event.reading.at <= highWater) count.late += 1;
     }
     pad.fold.push(event);
-    pad.heardAt = event.receivedAt;
+    pad.heardAt = Math.max(pad.heardAt, event.receivedAt);
     pad.waiting += 1;
-    if (pad.waiting >= TAKE_EVERY_EVENTS) gather(pad);
+    if (pad.waiting >= TAKE_EVERY_EVENTS) gather(pad, lastArrival);
   };
 
   return {
     take: (serial, event) => {
       lastArrival = Math.max(lastArrival, event.receivedAt);
-      if (toldAt === undefined || lastArrival - toldAt >= TELL_TIME_EVERY_MS) tellTime(lastArrival);
+      if (toldAt === undefined || lastArrival - toldAt >= TELL_TIME_EVERY_MS) advance(lastArrival);
       const pad = pads.get(serial);
       if (pad === undefined) {
-        count.unknownSerials.set(serial, (count.unknownSerials.get(serial) ?? 0) + 1);
-        return false;
+        countUnknown(count.unknownSerials, serial);
+        return undefined;
       }
-      push(pad, event);
-      return true;
+      const refusal = event.kind === 'reading' ? refusalOf(pad, event) : undefined;
+      if (refusal === undefined) push(pad, event);
+      return refusal;
     },
     settled: () => (toldAt === undefined ? [] : lines.settled(toldAt)),
     end: () => {
@@ -89,4 +109,17 @@ export function createBacktest(contexts: readonly PumpContext[]): Backtest {
     },
     count: () => count,
   };
+}
+
+/** Counts by serial, as long as there are not so many that the file is of another fleet. */
+function countUnknown(times: Map<string, number>, serial: string): void {
+  const key = times.has(serial) || times.size < MOST_UNKNOWN ? serial : 'any other';
+  times.set(key, (times.get(key) ?? 0) + 1);
+}
+
+/** What the broker refuses by what it knows of the pump and of the time. */
+function refusalOf({ inputs }: Pad, { reading, receivedAt }: PumpEvent & { kind: 'reading' }): string | undefined {
+  if (reading.at > receivedAt + AHEAD_LIMIT_MS) return 'ahead';
+  if (reading.closedInputs >= 1 << inputs) return 'in-beyond-model';
+  return reading.activeInput > inputs ? 'act-beyond-model' : undefined;
 }

@@ -28,7 +28,7 @@ const AFTERWARDS_MS = 6 * 3_600_000;
 const BEFORE_MS = 10 * 60_000;
 
 const covers = (row: TruthRow, alarm: AlarmLine): boolean =>
-  row.s === alarm.s &&
+  (row.s === alarm.s || alarm.pads?.includes(row.s) === true) &&
   alarm.raised >= row.begunAt - BEFORE_MS &&
   alarm.raised <= (row.endedAt ?? Number.POSITIVE_INFINITY) + AFTERWARDS_MS;
 
