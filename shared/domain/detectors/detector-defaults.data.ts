@@ -57,6 +57,23 @@ export const DETECTOR_DEFAULTS = {
     raggedShare: 0.12,
     raggedTimesUsual: 4,
   },
+  'low-load': {
+    delaySeconds: 1800,
+    offDelaySeconds: 600,
+    deadbandShare: 0.25,
+    // Of the watts, at once; of the flow, by the median of three days.
+    suddenShare: 0.2,
+    noteShare: 0.3,
+    alarmShare: 0.4,
+  },
+  'high-load': {
+    delaySeconds: 7200,
+    offDelaySeconds: 600,
+    deadbandShare: 0.25,
+    aboveShare: 0.15,
+    farAboveShare: 0.3,
+    farAboveSeconds: 1200,
+  },
   'motor-clock': { offMinutes: 15, clockSeconds: 3600, edges: 3, deadbandMinutes: 3.75, offDelaySeconds: 600 },
   'clock-shift': {
     shiftMinutes: 15,
@@ -78,6 +95,7 @@ export const DETECTOR_DEFAULTS = {
     withoutSourceSeconds: 14_400,
     hotMarginCelsius: 5,
     powerLimitShare: 0.9,
+    limitOverUsual: 1.08,
     overloadShare: 1.3,
     lowVoltsShare: 0.9,
   },

@@ -3,7 +3,8 @@ import type { RuleParameters } from '../detector-parameters.ts';
 import type { Facts } from '../facts.ts';
 import { ABNORMAL, type Judgement, NORMAL, UNJUDGED } from '../judgement.ts';
 
-type State = { ragged: boolean; dry: boolean };
+/** `wasDry` = dry since this alarm's condition began: water that comes back is ragged too. */
+type State = { ragged: boolean; dry: boolean; wasDry: boolean };
 type Parameters = RuleParameters<'loss-of-prime'>;
 
 /** Ragged watts are air only where they are also lower than usual. */
@@ -19,6 +20,7 @@ function judge(state: State, facts: Facts, parameters: Parameters): Judgement {
   // A model alone cannot tell a lost prime from a pump that differs from it; it may judge the prime, seen from zero.
   if (!load.primedOnce || (control.offExpected && !facts.stands('loss-of-prime'))) return UNJUDGED;
   state.dry = load.primed === false;
+  state.wasDry = state.dry || (state.wasDry && facts.stands('loss-of-prime'));
   const usual = Math.max(parameters.raggedShare, parameters.raggedTimesUsual * load.usualRaggedness);
   state.ragged = load.basis === 'band' && !hasRaggedDuty(facts) && load.ratio < RAGGED_BELOW && load.raggedness > usual;
   if (context.padState === 'drained') return UNJUDGED;
@@ -36,7 +38,7 @@ function hasRaggedDuty({ context, reading }: Facts): boolean {
 function describe(state: State, facts: Facts, _: Parameters, { onset }: Spoken): Finding {
   const { load, reading, now } = facts;
   return {
-    cause: state.dry ? 'sudden' : 'ragged',
+    cause: state.wasDry ? 'sudden' : 'ragged',
     evidence: {
       rpm: Math.round(reading.rpm),
       watts: Math.round(load.watts),
@@ -54,7 +56,7 @@ const isSlow = ({ control }: Facts, { fastRpm }: Parameters): boolean => control
 export const lossOfPrime = defineDetector<'loss-of-prime', State>({
   detector: 'loss-of-prime',
   hears: ['reading'],
-  initial: () => ({ ragged: false, dry: false }),
+  initial: () => ({ ragged: false, dry: false, wasDry: false }),
   judge,
   delaySeconds: (_, facts, parameters) =>
     isSlow(facts, parameters) ? parameters.slowDelaySeconds : parameters.delaySeconds,

@@ -39,18 +39,20 @@ function isHot({ reading, context }: Facts, { hotMarginCelsius }: RuleParameters
 }
 
 /**
- * It draws about what the full speed would draw and still does not reach it, or far more than this speed usually
- * does; or the supply is too low for it.
+ * It draws about what the full speed would draw and still does not reach it, and clearly more than its own speed
+ * usually does, or far more than that; or the supply is too low for it. Single readings are too noisy to tell.
  */
 function isAtPowerLimit(
   { reading, control, context, load }: Facts,
   parameters: RuleParameters<'wrong-speed'>,
 ): boolean {
-  const { volts, watts } = reading;
+  const { volts } = reading;
   const { nominalVolts } = context;
+  const { watts } = load;
   if (volts !== undefined && nominalVolts !== undefined && volts < parameters.lowVoltsShare * nominalVolts) return true;
-  const full = load.wattsAt(control.due.rpm);
-  if (full > 0 && watts >= parameters.powerLimitShare * full) return true;
   const usual = load.wattsAt(reading.rpm);
-  return usual > 0 && watts >= parameters.overloadShare * usual;
+  if (usual > 0 && watts >= parameters.overloadShare * usual) return true;
+  const full = load.wattsAt(control.due.rpm);
+  const isLoaded = usual > 0 && watts >= parameters.limitOverUsual * usual;
+  return isLoaded && full > 0 && watts >= parameters.powerLimitShare * full;
 }
