@@ -5,6 +5,7 @@ export const LAZY_PAGES = {
   pump: { Component: async () => (await import('./routes/pump-page.tsx')).PumpPage },
   alarms: { Component: async () => (await import('./routes/alarms-page.tsx')).AlarmsPage },
   alarm: { Component: async () => (await import('./routes/alarm-page.tsx')).AlarmPage },
+  alarmHealth: { Component: async () => (await import('./routes/alarm-health-page.tsx')).AlarmHealthPage },
   myPump: { Component: async () => (await import('./routes/my-pump-page.tsx')).MyPumpPage },
   profile: { Component: async () => (await import('./routes/profile-page.tsx')).ProfilePage },
 } as const;

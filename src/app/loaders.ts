@@ -27,7 +27,16 @@ export function createLoaders(client: QueryClient) {
     if (user.role === 'homeowner') throw new ApiError('forbidden', 'staff only');
   };
 
+  const requireManager = async (request: Request): Promise<void> => {
+    const { user } = await requireSession(request);
+    if (user.role !== 'manager') throw new ApiError('forbidden', 'managers only');
+  };
+
   return {
+    managers: async ({ request }: LoaderFunctionArgs) => {
+      await requireManager(request);
+      return null;
+    },
     session: async ({ request }: LoaderFunctionArgs) => {
       await requireSession(request);
       return null;

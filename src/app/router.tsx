@@ -27,6 +27,7 @@ export function createRouter(client: QueryClient) {
             { path: 'fleet', loader: load.fleet, lazy: LAZY_PAGES.fleet },
             { path: 'pumps/:pumpId', loader: load.pump, lazy: LAZY_PAGES.pump },
             { path: 'alarms', loader: load.alarms, lazy: LAZY_PAGES.alarms },
+            { path: 'alarms/health', loader: load.managers, lazy: LAZY_PAGES.alarmHealth },
             { path: 'alarms/:alarmId', loader: load.alarm, lazy: LAZY_PAGES.alarm },
             { path: 'my-pump', loader: load.myPump, lazy: LAZY_PAGES.myPump },
             { path: 'profile', lazy: LAZY_PAGES.profile },

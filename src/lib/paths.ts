@@ -15,6 +15,7 @@ export const paths = {
     withQuery(`/pumps/${encodeURIComponent(pumpId)}`, query),
   alarms: (query: Readonly<Record<string, string | undefined>> = {}) => withQuery('/alarms', query),
   alarm: (alarmId: string) => `/alarms/${encodeURIComponent(alarmId)}`,
+  alarmHealth: (query: Readonly<Record<string, string | undefined>> = {}) => withQuery('/alarms/health', query),
   myPump: (pumpId?: string) => withQuery('/my-pump', { pump: pumpId }),
   profile: () => '/profile',
 } as const;

@@ -5,7 +5,14 @@ import type { Quantity } from '#shared/units/quantity-formats.data.ts';
 import { t } from '../messages/t.ts';
 import { formatMoney } from './format-money.ts';
 import { formatSpan } from './format-span.ts';
-import { formatDay, formatMinuteOfDay, formatTime, formatZoneName, isTwelveHour } from './format-time.ts';
+import {
+  formatDay,
+  formatDayOfMonth,
+  formatMinuteOfDay,
+  formatTime,
+  formatZoneName,
+  isTwelveHour,
+} from './format-time.ts';
 
 export type FormatOptions = { readonly locale: string; readonly preferences: Pick<Preferences, 'units' | 'clock'> };
 
@@ -45,6 +52,8 @@ export function createFormat({ locale, preferences: { units, clock } }: FormatOp
       return (twelveHour ? named : undefined) ?? formatMinuteOfDay(minute, style);
     },
     day,
+    /** The day of the month and the month alone, for a chart's foot. */
+    dayOfMonth: (at: number, zone: string) => formatDayOfMonth(at, zone, locale),
     dayWithYear: (at: number, zone: string) => formatDay(at, zone, locale, true),
     /** The time alone when it lies in today, else with its day. */
     moment: (at: number, zone: string, now: number) =>

@@ -69,6 +69,14 @@ export function formatDay(at: number, zone: string, locale: string, withYear = f
   );
 }
 
+/**
+ * The calendar day at a pad without its weekday.
+ *
+ * @example formatDayOfMonth(Date.UTC(2026, 11, 1), 'UTC', 'en-US') // 'Dec 1'
+ */
+export const formatDayOfMonth = (at: number, zone: string, locale: string): string =>
+  plainSpaces(formatterFor(locale, { timeZone: zone, day: 'numeric', month: 'short' }).format(at));
+
 /** The zone's name at an instant, as people there say it: "Mountain Standard Time". */
 export function formatZoneName(at: number, zone: string, locale: string): string {
   const parts = formatterFor(locale, { timeZone: zone, timeZoneName: 'long' }).formatToParts(at);

@@ -1,12 +1,14 @@
 import type { z } from 'zod';
 import { ERROR_STATUS, type ErrorCode } from '#shared/contract/errors.ts';
 import { type AlarmAct, alarmActEndpoints } from '#shared/contract/http/alarm-acts.ts';
+import { alarmHealthEndpoints } from '#shared/contract/http/alarm-health.ts';
 import { type Alarm, alarmEndpoints } from '#shared/contract/http/alarms.ts';
 import { changeEndpoints } from '#shared/contract/http/changes.ts';
 import type { Endpoint } from '#shared/contract/http/endpoint.ts';
 import { type PumpDetail, type PumpRow, pumpEndpoints } from '#shared/contract/http/pumps.ts';
 import { sessionEndpoints } from '#shared/contract/http/session.ts';
 import { changeByAct } from './fake-alarm-acts.ts';
+import { fakeAlarmHealth } from './fake-alarm-health.ts';
 import { listFakeAlarms } from './fake-alarm-list.ts';
 import { type FakePump, markOf } from './fake-fleet.ts';
 import { fakeId } from './fake-id.ts';
@@ -193,6 +195,7 @@ export const FAKE_HANDLERS: readonly FakeHandler[] = [
     done: body.acts.map(({ alarmId, act }) => actOn(state, alarmId, act)),
     refused: [],
   })),
+  handle(alarmHealthEndpoints.read, (state) => fakeAlarmHealth(state.now(), state.pumps)),
   handle(changeEndpoints.list, (state) => ({
     cursor: String(state.cursor),
     complete: true,

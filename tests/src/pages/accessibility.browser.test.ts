@@ -15,6 +15,7 @@ const SCREENS: readonly Screen[] = [
   { name: 'pump', path: `/pumps/${fakeId('pump', 2)}`, role: 'manager', ready: 'Motor, wet end, device' },
   { name: 'alarms', path: '/alarms', role: 'manager', ready: 'Did not prime, 3 tries' },
   { name: 'alarm', path: `/alarms/${fakeId('alarm', 1)}`, role: 'technician', ready: 'Look first, power stays on' },
+  { name: 'alarm health', path: '/alarms/health', role: 'manager', ready: 'What repeats most' },
   { name: 'my pump', path: '/my-pump', role: 'homeowner', ready: 'What happened lately' },
   { name: 'profile', path: '/profile', role: 'manager', ready: 'How you read Millrace' },
   { name: 'no such page', path: '/nowhere', role: 'manager', ready: 'No such page' },
