@@ -4,6 +4,7 @@ import { silenceLimitMs } from '../detectors/link/link-tracker.ts';
 import { DAY_MS, MINUTE_MS, weekdayOf } from '../time/local-time.ts';
 import { offsetSpanAt } from '../time/zone-offset.ts';
 import { followAnswer } from './control-copy.ts';
+import { isTryOver, tryBefore } from './mark-unprimed.ts';
 import type { PumpEvent } from './pump-event.ts';
 import type { PumpParts } from './pump-parts.ts';
 
@@ -14,6 +15,7 @@ export function foldReading(parts: PumpParts, { reading, single }: PumpEvent & {
   const previous = facts.reading;
   const elapsedMs = seen ? reading.at - previous.at : 0;
   const gap = elapsedMs > silenceLimitMs(facts.context);
+  const started = tryBefore(facts);
   facts.now = reading.at;
   facts.reading = reading;
   facts.single = single;
@@ -28,6 +30,7 @@ export function foldReading(parts: PumpParts, { reading, single }: PumpEvent & {
   load.read(reading, facts.control, gap ? 0 : elapsedMs, gap);
   link.read(reading.at, seen ? previous.at : 0, gap, isRunningOn(facts));
   parts.motorClock.read(facts);
+  if (isTryOver(facts, started)) runs.flag('unprimed');
   runs.push(reading, facts.control);
   if (isUnprimed(facts)) runs.flag('unprimed');
 }

@@ -9,8 +9,8 @@ import type { PumpEvent } from '#shared/domain/fold/pump-event.ts';
 import type { Run } from '#shared/domain/runs/run.ts';
 import { CONTEXT, createPlayer, goodDay, HOUR, MINUTE, MONDAY } from '../detectors/pump-player.ts';
 
-/** A day and a half with a failed prime, a silence and a visit in it, as events. */
-function recordedEvents(): PumpEvent[] {
+/** What a player is given, as events. */
+function record(play: (player: ReturnType<typeof createPlayer>) => void): PumpEvent[] {
   const events: PumpEvent[] = [];
   const player = createPlayer();
   const { push } = player.fold;
@@ -18,17 +18,31 @@ function recordedEvents(): PumpEvent[] {
     events.push(event);
     push(event);
   };
-  player.playUntil(0, 360, {});
-  player.play(20 * MINUTE, { load: 0.35 });
-  player.playUntil(0, 620, goodDay());
-  player.play(10 * MINUTE, { closedInputs: 1, activeInput: 0, rpm: 1700, reportedSource: 'program' });
-  player.silence(2 * HOUR);
-  player.push({ kind: 'on-site', receivedAt: player.at, on: true });
-  player.play(30 * MINUTE, { rpm: 0, reportedSource: 'stop' });
-  player.push({ kind: 'on-site', receivedAt: player.at, on: false });
-  player.playUntil(1, 700, goodDay());
+  play(player);
   return events;
 }
+
+/** A pump that is switched on at six in the morning, runs so long with that load and is switched off. */
+const startOf = (lasts: number, load: number): PumpEvent[] =>
+  record((player) => {
+    player.playUntil(0, 360, {});
+    player.play(lasts, { load });
+    player.play(5 * MINUTE, { rpm: 0, reportedSource: 'off' });
+  });
+
+/** A day and a half with a failed prime, a silence and a visit in it. */
+const recordedEvents = (): PumpEvent[] =>
+  record((player) => {
+    player.playUntil(0, 360, {});
+    player.play(20 * MINUTE, { load: 0.35 });
+    player.playUntil(0, 620, goodDay());
+    player.play(10 * MINUTE, { closedInputs: 1, activeInput: 0, rpm: 1700, reportedSource: 'program' });
+    player.silence(2 * HOUR);
+    player.push({ kind: 'on-site', receivedAt: player.at, on: true });
+    player.play(30 * MINUTE, { rpm: 0, reportedSource: 'stop' });
+    player.push({ kind: 'on-site', receivedAt: player.at, on: false });
+    player.playUntil(1, 700, goodDay());
+  });
 
 function foldAll(events: readonly PumpEvent[], restartAfter: ReadonlySet<number>) {
   const signals: AlarmSignal[] = [];
@@ -64,6 +78,17 @@ describe('the fold of a pump', () => {
       }),
       { numRuns: 12 },
     );
+  });
+
+  it.each([
+    ['a try that was given up when its prime time was over', 3 * MINUTE, 0.35, ['prime unprimed']],
+    ['a prime that came', 3 * MINUTE, 1, ['prime']],
+    ['a try that was cut short', MINUTE, 0.35, ['prime']],
+    ['a pump that runs on without load', 6 * MINUTE, 0.35, ['prime unprimed', 'program unprimed']],
+  ])('marks %s as what it is', (_, lasts, load, marks) => {
+    const { runs } = foldAll(startOf(lasts, load), new Set());
+    const turning = runs.filter(({ source }) => source === 'prime' || source === 'program');
+    expect(turning.map(({ source, flags }) => [source, ...flags].join(' '))).toEqual(marks);
   });
 
   it('tells what it was made to tell', () => {
