@@ -170,13 +170,16 @@ describe('the server process, when it is killed', () => {
     const open = await ask<AlarmPage>('/api/alarms?alarmClass=alarm&show=open');
     expect(await readAlarmIds(alarms)).toEqual(open.items.map(({ id }) => id).sort());
 
+    // Stored is not yet understood: every turn is a run once the last of them is.
+    const window = `from=${began - DAY_MS}&until=${Date.now() + DAY_MS}`;
+    const listKept = async () => (await ask<{ runs: Run[] }>(`/api/pumps/${pumpId}/runs?${window}`)).runs;
+    const countNew = async () => (await listKept()).filter(({ from }) => from >= began).length;
+    await expect.poll(countNew, { timeout: BACK_WITHIN_MS, interval: 500 }).toBe(ticking.turns());
+    const kept = await listKept();
     const fresh = await openRuns(pumpId);
     const isAlike = async () => JSON.stringify(await readRuns(runs)) === JSON.stringify(await readRuns(fresh));
     await waitUntil(isAlike, BACK_WITHIN_MS);
     expect(await readRuns(runs)).toEqual(await readRuns(fresh));
-    const window = `from=${began - DAY_MS}&until=${Date.now() + DAY_MS}`;
-    const kept = await ask<{ runs: Run[] }>(`/api/pumps/${pumpId}/runs?${window}`);
-    expect(await readRuns(runs)).toHaveLength(kept.runs.length);
-    expect(kept.runs.filter(({ from }) => from >= began)).toHaveLength(ticking.turns());
+    expect(await readRuns(runs)).toHaveLength(kept.length);
   }, 400_000);
 });
