@@ -24,6 +24,8 @@ export type StreamOptions = {
   readonly doorbell: Doorbell;
   readonly log: Logger;
   readonly now: () => number;
+  /** The clock whose jumps mean that the process stood still; `now` where nobody moves that by hand. */
+  readonly wallClock?: () => number;
   /** How long each message took from its arrival until what it means was committed, ms. */
   readonly onFolded?: (lagsMs: readonly number[]) => void;
 };
@@ -58,7 +60,13 @@ export function createStream(options: StreamOptions): Stream {
   const { machine, doorbell, log, now } = options;
   const parts = createParts(options);
   const { broker, ingest, fold, pools } = parts;
-  const listening = createListening({ pool: machine, onTick: fold.tick, onGap: fold.listenAgain, now, log });
+  const listening = createListening({
+    pool: machine,
+    onTick: fold.tick,
+    onGap: fold.listenAgain,
+    now: options.wallClock ?? now,
+    log,
+  });
   let sweeper: NodeJS.Timeout | undefined;
   let isUp = false;
   return {

@@ -4,8 +4,9 @@ import type { AlarmRecord, AlarmTransition } from '#shared/domain/alarms/alarm-r
 export type AlarmChange = {
   readonly alarmId: string;
   readonly companyId: string;
-  readonly pumpId: string;
-  readonly padId: string;
+  /** null = it speaks for several pumps, on several pads. */
+  readonly pumpId: string | null;
+  readonly padId: string | null;
   readonly isNew: boolean;
   record: AlarmRecord;
   readonly transitions: AlarmTransition[];
@@ -17,10 +18,10 @@ export type AlarmChange = {
 export type OpenAlarm = {
   readonly alarmId: string;
   readonly companyId: string;
-  readonly pumpId: string;
-  readonly padId: string;
+  readonly pumpId: string | null;
+  readonly padId: string | null;
   readonly record: AlarmRecord;
 };
 
 /** The key under which at most one alarm is open. */
-export const alarmKey = (pumpId: string, detector: string): string => `${pumpId} ${detector}`;
+export const alarmKey = (pumpId: string | null, detector: string): string => `${pumpId} ${detector}`;

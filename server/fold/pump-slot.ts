@@ -28,6 +28,8 @@ export type PumpSlot = {
   writtenRunMark: string | undefined;
   heardAt: number | undefined;
   silentSince: number | undefined;
+  /** The same as it is stored: what the fold over the company's pumps has been told. */
+  storedSilentSince: number | undefined;
   connection: string | undefined;
   lateAt: number[];
   /** Late readings are next looked at then, ms. */
@@ -56,6 +58,7 @@ export function createPumpSlot(pump: CommissionedPump, state: ClaimedState, notB
     writtenRunMark: undefined,
     heardAt: state.heardAt,
     silentSince: state.silentSince,
+    storedSilentSince: state.silentSince,
     connection: hot.connection,
     lateAt: [...hot.lateAt],
     lateDueAt: 0,

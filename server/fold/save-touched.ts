@@ -39,7 +39,7 @@ export async function saveWrites(context: FoldContext, writes: readonly FoldWrit
     const { written, alarms, mails } = await commitFold(context, writes);
     for (const write of writes) afterWrite(context, write, written.has(write.slot.pump.pumpId));
     const changed = writes.filter(({ slot }) => written.has(slot.pump.pumpId));
-    const alarmed = alarms.map(({ pumpId }) => pumpId);
+    const alarmed = alarms.flatMap(({ pumpId }) => pumpId ?? []);
     context.onNews({ pumpIds: [...new Set([...changed.map(({ slot }) => slot.pump.pumpId), ...alarmed])], mails });
   } catch (error) {
     const fault = classifyDatabaseFault(error);
@@ -49,7 +49,8 @@ export async function saveWrites(context: FoldContext, writes: readonly FoldWrit
   }
 }
 
-function afterWrite(context: FoldContext, { slot, state }: FoldWrite, isWritten: boolean): void {
+function afterWrite(context: FoldContext, { slot, state, silentSince }: FoldWrite, isWritten: boolean): void {
+  if (isWritten) slot.storedSilentSince = silentSince;
   if (state !== undefined && isWritten) slot.isStateOld = false;
   if (state?.learnt !== undefined && isWritten) slot.learntVersion = state.learnt.version;
   if (!isWritten) {

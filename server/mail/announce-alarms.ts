@@ -3,11 +3,14 @@ import type pg from 'pg';
 import { newId } from '#server/db/new-id.ts';
 import type { AlarmRecord, AlarmTransition } from '#shared/domain/alarms/alarm-record.ts';
 import { planMail } from '#shared/domain/alarms/plan-mail.ts';
+import type { FoundCounts } from '#shared/domain/causes/rank-causes.ts';
 import { type Announcement, chooseAnnouncement } from './choose-announcement.ts';
 import { composeAlarmMail } from './compose-alarm-mail.ts';
+import { foundKey, listFoundCauses } from './found-causes-repository.ts';
+import { listAlarmPlaces, placeKey } from './list-alarm-places.ts';
 import { findMailHoursBegin } from './mail-hours.ts';
 import type { MailPerson, MailPlace } from './mail-place.ts';
-import { listMailPlaces } from './mail-places-repository.ts';
+import { listMailPersons } from './mail-places-repository.ts';
 import { lockMailMemory, type MailMemory, saveMailMemory } from './mail-states-repository.ts';
 import { enqueueMails, type OutboxMail } from './outbox-repository.ts';
 
@@ -15,8 +18,9 @@ import { enqueueMails, type OutboxMail } from './outbox-repository.ts';
 export type AnnouncedAlarm = {
   readonly alarmId: string;
   readonly companyId: string;
-  readonly pumpId: string;
-  readonly padId: string;
+  /** null = it speaks for several pumps. */
+  readonly pumpId: string | null;
+  readonly padId: string | null;
   readonly record: AlarmRecord;
   readonly transitions: readonly AlarmTransition[];
   /** Raised from a backlog: its mail waits a little, in case the rest of the backlog clears it. */
@@ -30,6 +34,7 @@ type Matter = {
   readonly announcement: Announcement;
   readonly place: MailPlace;
   readonly person: MailPerson;
+  readonly found: FoundCounts | undefined;
 };
 
 /** Long enough for the rest of a backlog to be folded. */
@@ -49,11 +54,29 @@ export async function announceAlarms(
     return announcement === undefined ? [] : [{ alarm, announcement }];
   });
   if (worth.length === 0) return 0;
-  const places = await listMailPlaces(client, [...new Set(worth.map(({ alarm }) => alarm.pumpId))]);
+  const places = await listAlarmPlaces(
+    client,
+    worth.map(({ alarm }) => alarm),
+  );
+  const assignees = await listMailPersons(
+    client,
+    worth.flatMap(({ alarm }) => alarm.record.assignment?.to ?? []),
+  );
+  const found = await listFoundCauses(
+    client,
+    worth.map(({ alarm: { companyId, record } }) => ({ companyId, detector: record.detector })),
+  );
   const matters: Matter[] = worth.flatMap(({ alarm, announcement }) => {
-    const place = places.get(alarm.pumpId);
+    const place = places.get(placeKey(alarm));
     if (place === undefined) return [];
-    return listRecipients(place, announcement).map((person) => ({ alarm, announcement, place, person }));
+    const assignee = assignees.get(alarm.record.assignment?.to ?? '');
+    return listRecipients(place, assignee, announcement).map((person) => ({
+      alarm,
+      announcement,
+      place,
+      person,
+      found: found.get(foundKey(alarm.companyId, alarm.record.detector)),
+    }));
   });
   const memory = await lockMailMemory(client, matters.flatMap(listSubjects));
   const mails = matters.map((matter) => planOne(matter, memory, options));
@@ -62,9 +85,17 @@ export async function announceAlarms(
   return mails.length;
 }
 
-/** The technician responsible for the pad; the managers when nobody acknowledged, or when there is no technician. */
-function listRecipients({ technician, managers }: MailPlace, { reason }: Announcement): readonly MailPerson[] {
-  return reason === 'escalated' || technician === undefined ? managers : [technician];
+/**
+ * Who was given the alarm, else the technician responsible for the pad; the managers when nobody acknowledged, or when
+ * there is no technician.
+ */
+function listRecipients(
+  { technician, managers }: MailPlace,
+  assignee: MailPerson | undefined,
+  { reason }: Announcement,
+): readonly MailPerson[] {
+  const responsible = assignee ?? technician;
+  return reason === 'escalated' || responsible === undefined ? managers : [responsible];
 }
 
 const listSubjects = ({ alarm: { companyId }, place, person }: Matter) => [
@@ -73,7 +104,7 @@ const listSubjects = ({ alarm: { companyId }, place, person }: Matter) => [
 ];
 
 function planOne(matter: Matter, memory: MailMemory, { publicUrl, now }: AnnounceOptions): OutboxMail {
-  const { alarm, announcement, place, person } = matter;
+  const { alarm, announcement, place, person, found } = matter;
   const padMemory = memory.pads.get(place.padId) ?? {};
   const plan = planMail({
     at: alarm.isBacklog ? now + BACKLOG_PATIENCE_MS : now,
@@ -86,7 +117,7 @@ function planOne(matter: Matter, memory: MailMemory, { publicUrl, now }: Announc
   memory.persons.set(person.userId, plan.person);
   const { alarmId, companyId } = alarm;
   const { transition } = announcement;
-  const composed = composeAlarmMail({ alarmId, record: alarm.record, place, announcement, publicUrl });
+  const composed = composeAlarmMail({ alarmId, record: alarm.record, place, announcement, publicUrl, found });
   const key = createHash('sha256').update(`${alarmId} ${transition} ${person.address}`).digest('hex').slice(0, 40);
   return {
     id: newId(now),

@@ -78,7 +78,7 @@ export async function withdrawMails(
     `with withdrawn as (
        delete from outbox_mails where alarm_id = any($1::uuid[]) and attempts = 0 and due_at > to_timestamp($2::float8 / 1000)
        returning id, alarm_id, company_id, recipient_user_id, due_at)
-     select w.alarm_id, w.company_id, a.pad_id, w.recipient_user_id, date_part('epoch', w.due_at) * 1000 as due_at,
+     select w.alarm_id, w.company_id, coalesce(a.pad_id, a.id) as pad_id, w.recipient_user_id, date_part('epoch', w.due_at) * 1000 as due_at,
        exists (select from outbox_mails m where m.alarm_id = w.alarm_id
          and (m.attempts > 0 or m.due_at <= to_timestamp($2::float8 / 1000))) as is_heard,
        exists (select from outbox_mails m where m.recipient_user_id = w.recipient_user_id and m.due_at = w.due_at

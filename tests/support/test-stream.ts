@@ -18,8 +18,14 @@ export type TestStream = {
   readonly stop: () => Promise<void>;
 };
 
-/** The real stream on a database of a test's own: broker, ingest and fold, on a free port. */
-export async function startTestStream(databaseUrl: string, { now = Date.now } = {}): Promise<TestStream> {
+/**
+ * The real stream on a database of a test's own: broker, ingest and fold, on a free port. A test that moves `now` by
+ * hours while seconds pass gives the true clock as `wallClock`: otherwise the server takes it that it stood still.
+ */
+export async function startTestStream(
+  databaseUrl: string,
+  { now = Date.now, wallClock = now }: { readonly now?: () => number; readonly wallClock?: () => number } = {},
+): Promise<TestStream> {
   const log = pino({ level: process.env.TEST_LOG ?? 'silent' });
   const pools = createPools(databaseUrl, { onError: () => undefined, sizes: { app: 2, machine: 4 } });
   const doorbell = createDoorbell({ databaseUrl: deriveRoleUrl(databaseUrl, 'millrace_machine'), log });
@@ -34,6 +40,7 @@ export async function startTestStream(databaseUrl: string, { now = Date.now } = 
     doorbell,
     log,
     now,
+    wallClock,
   });
   const port = await stream.start();
   await doorbell.start();

@@ -121,6 +121,8 @@ function clear(open: AlarmRecord, signal: Cleared): AlarmStep {
   if (open.state === 'latched' || chatters) {
     return makeStep({ ...rest, state: 'latched' }, open.state === 'latched' ? 'returned' : 'latched', signal.at);
   }
-  const finished = open.state === 'acknowledged' || open.alarmClass === 'note';
+  // Another alarm spoke for it: nobody was called, and nobody has to answer.
+  const isCovered = open.suppressedBy !== null;
+  const finished = open.state === 'acknowledged' || open.alarmClass === 'note' || isCovered;
   return makeStep({ ...rest, state: finished ? 'normal' : 'returned' }, 'returned', signal.at);
 }
