@@ -10,6 +10,7 @@ import {
 } from '#shared/domain/control/pump-context.ts';
 import { isKnownZone } from '#shared/domain/time/is-known-zone.ts';
 import { Serial } from '../http/devices.ts';
+import { isJsonObject, type JsonObject } from '../mqtt/json-text.ts';
 import { readSettings } from '../mqtt/settings.ts';
 import { parseDays, parseMinuteOfDay } from '../mqtt/wall-time.ts';
 import { toPumpContext } from './to-pump-context.ts';
@@ -26,8 +27,14 @@ const days = z.unknown().transform((value, context) => {
   return flags ?? [];
 });
 
+/** Only a prime, a timed run and freeze protection can be off; null elsewhere says no more than a missing field. */
+const withoutNullLimits = (fields: JsonObject): JsonObject =>
+  Object.fromEntries(
+    Object.entries(fields).filter(([name, field]) => field !== null || ['prime', 'timed', 'freeze'].includes(name)),
+  );
+
 const settings = z.unknown().transform((value, context) => {
-  const decoded = readSettings(value);
+  const decoded = readSettings(isJsonObject(value) ? withoutNullLimits(value) : value);
   if (decoded.kind === 'refused') {
     context.addIssue({
       code: 'custom',
@@ -115,6 +122,14 @@ const serialOf = (value: unknown): string | undefined => {
 const wordsOf = (error: z.ZodError): string =>
   error.issues.map((issue) => `${issue.path.join('.') || 'pad'}: ${issue.message}`).join('; ');
 
+/** Null means what a missing field does; in a motor's settings it has a meaning of its own. */
+function withoutNulls(value: unknown, key = ''): unknown {
+  if (key === 'settings' || typeof value !== 'object' || value === null) return value;
+  if (Array.isArray(value)) return value.map((element) => withoutNulls(element));
+  const fields = Object.entries(value).filter(([, field]) => field !== null);
+  return Object.fromEntries(fields.map(([name, field]) => [name, withoutNulls(field, name)]));
+}
+
 /**
  * Reads the pads of a backtest. One bad pad is named and skipped, a serial that comes twice keeps its first; undefined
  * where the value is no array at all. `pumpId` of each context is the serial.
@@ -126,7 +141,7 @@ export function readPadFile(value: unknown): PadFile | undefined {
   const pads = new Map<string, PumpContext>();
   const faults: { index: number; serial: string | undefined; message: string }[] = [];
   for (const [index, element] of value.entries()) {
-    const parsed = BacktestPad.safeParse(element);
+    const parsed = BacktestPad.safeParse(withoutNulls(element));
     if (!parsed.success) faults.push({ index, serial: serialOf(element), message: wordsOf(parsed.error) });
     else if (pads.has(parsed.data.serial))
       faults.push({ index, serial: parsed.data.serial, message: 'serial: stands twice' });

@@ -16,15 +16,14 @@ export type MotorClockFacts = {
    * which a motor does not know. 0 where it shows its own time.
    */
   suspectMinutes: number;
-  /** When it was last seen to be right within a quarter of an hour, ms, 0 = never; its offset and the pad's zone then. */
+  /** When it was last seen to be right within a quarter of an hour, ms, 0 = never, and its offset then. */
   goodAt: number;
   goodOffsetMinutes: number;
-  goodZoneMinutes: number;
 };
 
 /**
- * `late` = minutes by which the last edges came after the program's, newest last; `good` = instant, offset and zone of
- * the last right look.
+ * `late` = minutes by which the last edges came after the program's, newest last; `good` = instant and offset of the
+ * last right look.
  */
 type Memory = {
   late: number[];
@@ -41,7 +40,7 @@ const restingMemory = (): Memory => ({
   offset: null,
   suspect: 0,
   zone: null,
-  good: [0, 0, 0],
+  good: [0, 0],
 });
 
 /** Edges this far off another one of their kind are no edges of the program. */
@@ -74,21 +73,19 @@ export function createMotorClockTracker(context: PumpContext, control: Control, 
     suspectMinutes: memory.suspect,
     goodAt: memory.good[0] ?? 0,
     goodOffsetMinutes: memory.good[1] ?? 0,
-    goodZoneMinutes: memory.good[2] ?? 0,
   };
 
-  function noteGood(at: number, offset: number, zone: number): void {
+  function noteGood(at: number, offset: number): void {
     if (Math.abs(offset) > RIGHT_MINUTES) return;
     memory.good[0] = facts.goodAt = at;
     memory.good[1] = facts.goodOffsetMinutes = offset;
-    memory.good[2] = facts.goodZoneMinutes = zone;
   }
 
-  function takeEdge(edge: ProgramEdge, { now, zoneOffsetMinutes }: Facts): void {
+  function takeEdge(edge: ProgramEdge, { now }: Facts): void {
     const late = latenessOf(edges, edge);
     if (late === undefined || Math.abs(late) > FARTHEST_MINUTES) return;
     if (Math.abs(late + (memory.offset ?? 0)) <= AGREE_MINUTES) memory.suspect = 0;
-    noteGood(now, 0 - late, zoneOffsetMinutes);
+    noteGood(now, 0 - late);
     memory.late = [...memory.late, Math.round(late * 10) / 10].slice(-EDGES);
     const spread = Math.max(...memory.late) - Math.min(...memory.late);
     if (memory.late.length < EDGES || spread > AGREE_MINUTES) return;
@@ -106,7 +103,7 @@ export function createMotorClockTracker(context: PumpContext, control: Control, 
         facts.offsetMinutes = answer.motorClockOffsetMinutes;
         facts.basis = 'says';
         facts.suspectMinutes = 0;
-        noteGood(now, facts.offsetMinutes, known.zoneOffsetMinutes);
+        noteGood(now, facts.offsetMinutes);
         return;
       }
       suspect(memory, known);

@@ -1,3 +1,4 @@
+import { zoneOffsetAt } from '#shared/domain/time/zone-offset.ts';
 import { cutMinutesOf, isDaylightSaving } from '../clocks/shift-cause.ts';
 import { defineDetector, type Finding } from '../define-detector.ts';
 import type { RuleParameters } from '../detector-parameters.ts';
@@ -28,12 +29,12 @@ function judge(state: State, facts: Facts, parameters: Parameters): Judgement {
   return ABNORMAL;
 }
 
-function causeOf({ motorClock, zoneOffsetMinutes, link, now }: Facts): string {
-  const { offsetMinutes, goodAt, goodOffsetMinutes, goodZoneMinutes } = motorClock;
+function causeOf({ motorClock, zoneOffsetMinutes, link, now, context }: Facts): string {
+  const { offsetMinutes, goodAt, goodOffsetMinutes } = motorClock;
   if (goodAt === 0) return 'unknown';
-  // The first reading after a cut may still show the old time.
+  // The first reading after a cut or a shift may still show the old time.
   const since = goodAt - JUST_BACK_MS;
-  const wallMinutes = zoneOffsetMinutes - goodZoneMinutes;
+  const wallMinutes = zoneOffsetMinutes - (zoneOffsetAt(context.zone, since) ?? zoneOffsetMinutes);
   const move = { lateMinutes: 0 - offsetMinutes, goodAt: since, badAt: now, wallMinutes };
   if (isDaylightSaving(move)) return 'daylight-saving';
   if (cutMinutesOf(move, link) > 0) return 'power-cut';
