@@ -38,6 +38,10 @@ const wordsOf = (signal: Exclude<AlarmSignal, { type: 'cleared' }>): Words => ({
   evidence: signal.evidence,
 });
 
+/** An alarm is over when its condition is, not when that has lasted for the off-delay. */
+const normalSince = ({ evidence, at }: Extract<AlarmSignal, { type: 'cleared' }>): number =>
+  typeof evidence.normalSince === 'number' ? evidence.normalSince : at;
+
 const byRaising = (one: AlarmLine, other: AlarmLine): number => one.raised - other.raised;
 
 export function createAlarmLines(): AlarmLines {
@@ -61,7 +65,7 @@ export function createAlarmLines(): AlarmLines {
     take: (serial, signal) => {
       const key = lineKey(serial, signal.detector);
       const line = standing.get(key);
-      if (signal.type === 'cleared') close(key, signal.at);
+      if (signal.type === 'cleared') close(key, normalSince(signal));
       else if (signal.type === 'raised') {
         const { detector, from, at } = signal;
         const { class: alarmClass, priority, cause, evidence } = wordsOf(signal);

@@ -6,8 +6,8 @@ import type { Facts } from './facts.ts';
 const KEEP_MS = 60_000;
 
 /**
- * Answers whether a reading's speed is the one that the settings reported by the motor call for. Without a report it
- * never is.
+ * Answers whether a reading's speed, standstill included, is the one that the settings reported by the motor call for.
+ * Without a report it never is.
  *
  * @example facts.fitsReported = createReportedFit(facts);
  */
@@ -32,6 +32,6 @@ export function createReportedFit(facts: Facts): () => boolean {
     }
     const primeRpm = { ...context.settings, ...reportedSettings }.prime?.rpm;
     if (primeRpm !== undefined && reading.reportedSource === 'prime' && fitsSpeed(reading.rpm, primeRpm)) return true;
-    return dueRpm > 0 && fitsSpeed(reading.rpm, dueRpm);
+    return control.standing ? dueRpm === 0 : dueRpm > 0 && fitsSpeed(reading.rpm, dueRpm);
   };
 }

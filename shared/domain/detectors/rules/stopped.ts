@@ -13,6 +13,8 @@ function judge(_: State, facts: Facts): Judgement {
   if (!control.standing) return NORMAL;
   const { due } = control;
   if (due.rpm > 0 && due.source !== 'freeze') {
+    // It stands because its program was changed: that is said already.
+    if (stands('settings-changed') && facts.fitsReported()) return NORMAL;
     return control.winningInput === 0 && isNearSuspectEdge(facts) ? UNJUDGED : ABNORMAL;
   }
   // Where nothing is due a standing shaft says nothing: only one that turns ends the alarm.
