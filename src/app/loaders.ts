@@ -2,7 +2,7 @@ import type { QueryClient } from '@tanstack/react-query';
 import { type LoaderFunctionArgs, redirect } from 'react-router-dom';
 import type { Session } from '#shared/contract/http/session.ts';
 import { alarmQueries } from '#src/features/alarms/alarm-queries.ts';
-import { parseAlarmsAddress } from '#src/features/alarms/alarms-address.ts';
+import { alarmListFilter, parseAlarmsAddress, workListFilter } from '#src/features/alarms/alarms-address.ts';
 import { parseFleetAddress } from '#src/features/fleet/fleet-address.ts';
 import { fleetQueries } from '#src/features/fleet/fleet-queries.ts';
 import { pumpQueries } from '#src/features/pumps/pump-queries.ts';
@@ -58,8 +58,8 @@ export function createLoaders(client: QueryClient) {
     },
     alarms: async ({ request }: LoaderFunctionArgs) => {
       const { filter } = parseAlarmsAddress(new URL(request.url).searchParams);
-      void client.prefetchInfiniteQuery(alarmQueries.list({ ...filter, alarmClass: 'alarm' }));
-      void client.prefetchInfiniteQuery(alarmQueries.list({ ...filter, alarmClass: 'note' }));
+      void client.prefetchInfiniteQuery(alarmQueries.list(alarmListFilter(filter)));
+      void client.prefetchInfiniteQuery(alarmQueries.list(workListFilter(filter)));
       await requireStaff(request);
       return null;
     },

@@ -5,14 +5,17 @@ import { alarmWords } from '#shared/domain/wording/alarm-words.ts';
 import { buttonClass } from '#src/components/ui/button.tsx';
 import { ErrorNotice } from '#src/components/ui/error-notice.tsx';
 import { PageHeading } from '#src/components/ui/page-heading.tsx';
-import { AcknowledgePanel } from '#src/features/alarms/acknowledge-panel.tsx';
 import { AlarmHistory } from '#src/features/alarms/alarm-history.tsx';
 import { whereOf } from '#src/features/alarms/alarm-names.ts';
 import { alarmQueries } from '#src/features/alarms/alarm-queries.ts';
+import { describeNextStop } from '#src/features/alarms/alarm-view.ts';
+import { AnswerPanel } from '#src/features/alarms/answer-panel.tsx';
 import { Cautions } from '#src/features/alarms/cautions.tsx';
 import { EvidenceSheet } from '#src/features/alarms/evidence-sheet.tsx';
 import { usualWattsOf } from '#src/features/alarms/evidence-view.ts';
+import { LikelySheet } from '#src/features/alarms/likely-sheet.tsx';
 import { LookFirst } from '#src/features/alarms/look-first.tsx';
+import { MembersSheet } from '#src/features/alarms/members-sheet.tsx';
 import { NowCard } from '#src/features/pumps/now-card.tsx';
 import { pumpQueries } from '#src/features/pumps/pump-queries.ts';
 import { StripSource } from '#src/features/pumps/strip-source.tsx';
@@ -47,17 +50,21 @@ export function AlarmPage() {
   );
 }
 
+const NO_PUMPS: readonly string[] = [];
+
 function LoadedAlarm({ alarm }: { readonly alarm: AlarmDetail }) {
   const format = useFormat();
   const now = useNow(15_000);
   const words = alarmWords(alarm.detector, alarm.cause, alarm.evidence);
-  const { data: pump } = useQuery(pumpQueries.detail(alarm.pumpId));
-  useWatchedPumps([alarm.pumpId]);
+  const { pumpId } = alarm;
+  const { data: pump } = useQuery({ ...pumpQueries.detail(pumpId ?? ''), enabled: pumpId !== null });
+  useWatchedPumps(pumpId === null ? NO_PUMPS : [pumpId]);
   const about = [
     alarm.pumpName,
     pump === undefined ? null : pump.street.replace(alarm.padName, '').replace(/^, /, ''),
     alarm.customerName,
     alarm.technicianName === null ? null : t('alarm.technician', { name: alarm.technicianName }),
+    describeNextStop(alarm, format),
   ].filter((part) => part !== null && part !== '');
   return (
     <div className="mx-auto flex max-w-5xl flex-col gap-3.5 px-4 pb-10">
@@ -80,26 +87,40 @@ function LoadedAlarm({ alarm }: { readonly alarm: AlarmDetail }) {
             now={now}
             StripSource={StripSource}
             chart={
-              <EvidenceChart
-                pumpId={alarm.pumpId}
-                from={alarm.from}
-                zone={alarm.zone}
-                now={now}
-                usualWatts={usualWattsOf(alarm.evidence)}
-              />
+              pumpId === null ? null : (
+                <EvidenceChart
+                  pumpId={pumpId}
+                  from={alarm.from}
+                  zone={alarm.zone}
+                  now={now}
+                  usualWatts={usualWattsOf(alarm.evidence)}
+                />
+              )
             }
           />
-          <AcknowledgePanel alarm={alarm} />
+          {alarm.coveredBy === null ? null : (
+            <p className="border border-rule-strong bg-sheet px-4 py-3">
+              {t('alarm.covered')}{' '}
+              <Link to={paths.alarm(alarm.coveredBy)} className="inline-block min-h-6 underline underline-offset-2">
+                {t('alarm.coveredLink')}
+              </Link>
+            </p>
+          )}
+          <AnswerPanel alarm={alarm} />
+          <MembersSheet alarm={alarm} now={now} />
           {pump === undefined ? null : <NowCard pump={pump} />}
         </div>
         <div className="flex min-w-0 flex-col gap-3.5">
           <LookFirst look={words.look} />
+          {alarm.likely === null ? null : <LikelySheet likely={alarm.likely} />}
           <Cautions task={words.task} />
         </div>
       </div>
-      <Link to={paths.pump(alarm.pumpId)} className={buttonClass('plain', true)}>
-        {t('alarm.openPump')}
-      </Link>
+      {pumpId === null ? null : (
+        <Link to={paths.pump(pumpId)} className={buttonClass('plain', true)}>
+          {t('alarm.openPump')}
+        </Link>
+      )}
       <div className="grid items-start gap-3.5 lg:grid-cols-2">
         <AlarmHistory alarm={alarm} now={now} />
       </div>

@@ -1,6 +1,6 @@
 import { useQuery } from '@tanstack/react-query';
 import { useMemo } from 'react';
-import { useSearchParams } from 'react-router-dom';
+import { Link, useSearchParams } from 'react-router-dom';
 import type { AlarmPage } from '#shared/contract/http/alarms.ts';
 import { Figures } from '#src/components/ui/figures.tsx';
 import { PageHeading } from '#src/components/ui/page-heading.tsx';
@@ -8,12 +8,17 @@ import { Sheet } from '#src/components/ui/sheet.tsx';
 import { AlarmFilters } from '#src/features/alarms/alarm-filters.tsx';
 import { AlarmList } from '#src/features/alarms/alarm-list.tsx';
 import { alarmQueries } from '#src/features/alarms/alarm-queries.ts';
-import { AlarmRow } from '#src/features/alarms/alarm-row.tsx';
-import { parseAlarmsAddress } from '#src/features/alarms/alarms-address.ts';
-import { NoteRow } from '#src/features/alarms/note-row.tsx';
+import { AlarmTable } from '#src/features/alarms/alarm-table.tsx';
+import { AlarmTotals } from '#src/features/alarms/alarm-totals.tsx';
+import { alarmListFilter, parseAlarmsAddress } from '#src/features/alarms/alarms-address.ts';
+import { ExportAlarms } from '#src/features/alarms/export-alarms.tsx';
+import { SelectableAlarms } from '#src/features/alarms/selectable-alarms.tsx';
+import { WorkList } from '#src/features/alarms/work-list.tsx';
 import { StripSource } from '#src/features/pumps/strip-source.tsx';
 import { useNow } from '#src/hooks/use-now.ts';
+import { useSession } from '#src/hooks/use-session.ts';
 import { t } from '#src/lib/messages/page-words.ts';
+import { paths } from '#src/lib/paths.ts';
 
 const headingOf = ({ items, totals }: AlarmPage): string => {
   if (totals.unacknowledged > 0) return t('alarms.heading.waiting', { count: totals.unacknowledged });
@@ -23,36 +28,49 @@ const headingOf = ({ items, totals }: AlarmPage): string => {
 /** What needs somebody: alarms by priority with their evidence, and beside them what can wait for the next stop. */
 export function AlarmsPage() {
   const [search] = useSearchParams();
-  const { filter } = useMemo(() => parseAlarmsAddress(search), [search]);
+  const { filter, view } = useMemo(() => parseAlarmsAddress(search), [search]);
   const { data } = useQuery(alarmQueries.standing());
+  const { user } = useSession();
   const now = useNow(15_000);
+  const empty = { title: t('alarms.empty'), detail: t('alarms.empty.detail') };
   return (
     <div className="px-4 pb-10 sm:px-7">
       <div className="flex flex-col gap-3.5 pt-5 pb-3">
-        <PageHeading title={t('alarms.page')}>
-          {data === undefined ? t('alarms.page') : <Figures text={headingOf(data)} />}
-        </PageHeading>
-        <AlarmFilters />
+        <div className="flex flex-wrap items-baseline gap-x-6 gap-y-1">
+          <PageHeading title={t('alarms.page')}>
+            {data === undefined ? t('alarms.page') : <Figures text={headingOf(data)} />}
+          </PageHeading>
+          {data === undefined ? null : <AlarmTotals totals={data.totals} />}
+        </div>
+        <AlarmFilters totals={data?.totals} />
+        <div data-print="never" className="flex flex-wrap items-center gap-4">
+          <ExportAlarms filter={filter} />
+          {user.role === 'manager' ? (
+            <Link to={paths.alarmHealth()} className="inline-flex min-h-8 items-center underline underline-offset-2">
+              {t('alarms.health')}
+            </Link>
+          ) : null}
+        </div>
       </div>
-      <div className="grid items-start gap-4 lg:grid-cols-[minmax(0,1fr)_minmax(20rem,26rem)]">
+      {view === 'table' ? (
         <Sheet id="list" title={t('alarms.list')}>
-          <AlarmList
-            filter={{ ...filter, alarmClass: 'alarm' }}
-            empty={{ title: t('alarms.empty'), detail: t('alarms.empty.detail') }}
-          >
-            {(alarm) => <AlarmRow key={alarm.id} alarm={alarm} now={now} StripSource={StripSource} />}
+          <AlarmList filter={filter} empty={empty}>
+            {(alarms) => <AlarmTable alarms={alarms} now={now} />}
           </AlarmList>
         </Sheet>
-        <Sheet id="work" title={t('alarms.workList')}>
-          <p className="border-b border-rule px-4 py-2 text-13 text-ink-2 sm:px-5">{t('alarms.workList.detail')}</p>
-          <AlarmList
-            filter={{ ...filter, alarmClass: 'note' }}
-            empty={{ title: t('alarms.emptyNotes'), detail: t('alarms.emptyNotes.detail') }}
-          >
-            {(alarm) => <NoteRow key={alarm.id} alarm={alarm} now={now} />}
-          </AlarmList>
-        </Sheet>
-      </div>
+      ) : (
+        <div className="grid items-start gap-4 lg:grid-cols-[minmax(0,1fr)_minmax(20rem,26rem)]">
+          <Sheet id="list" title={t('alarms.list')}>
+            <AlarmList filter={alarmListFilter(filter)} empty={empty}>
+              {(alarms) => <SelectableAlarms alarms={alarms} now={now} StripSource={StripSource} />}
+            </AlarmList>
+          </Sheet>
+          <Sheet id="work" title={t('alarms.workList')}>
+            <p className="border-b border-rule px-4 py-2 text-13 text-ink-2 sm:px-5">{t('alarms.workList.detail')}</p>
+            <WorkList filter={filter} now={now} />
+          </Sheet>
+        </div>
+      )}
     </div>
   );
 }

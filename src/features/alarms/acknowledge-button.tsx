@@ -23,6 +23,7 @@ export function AcknowledgeButton({ alarm, note = '', touch = false, look = 'mai
   const { user } = useSession();
   const now = useNow(10_000);
   const words = { title: titleOf(alarm), where: whereOf(alarm) };
+  const latched = alarm.state === 'latched';
   const wide = touch ? 'w-full' : '';
   if (isWaiting(alarm)) {
     return (
@@ -30,14 +31,14 @@ export function AcknowledgeButton({ alarm, note = '', touch = false, look = 'mai
         look={look}
         touch={touch}
         className={wide}
-        aria-label={t('alarm.acknowledgeNamed', words)}
+        aria-label={t(latched ? 'alarm.releaseNamed' : 'alarm.acknowledgeNamed', words)}
         onClick={() => acknowledge.mutate({ alarm, note })}
       >
-        {t('alarm.acknowledge')}
+        {t(latched ? 'alarm.release' : 'alarm.acknowledge')}
       </Button>
     );
   }
-  if (!mayUndo(alarm, user.name, now)) return null;
+  if (alarm.answer !== null || !mayUndo(alarm, user.name, now)) return null;
   return (
     <Button
       touch={touch}

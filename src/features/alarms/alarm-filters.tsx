@@ -1,4 +1,5 @@
 import { useSearchParams } from 'react-router-dom';
+import type { AlarmPage } from '#shared/contract/http/alarms.ts';
 import { PRIORITIES } from '#shared/domain/detectors/detector.ts';
 import { Chip } from '#src/components/ui/chip.tsx';
 import { Folded } from '#src/components/ui/folded.tsx';
@@ -6,24 +7,43 @@ import { PriorityMark } from '#src/components/ui/priority-mark.tsx';
 import { SearchField } from '#src/components/ui/search-field.tsx';
 import { Select } from '#src/components/ui/select.tsx';
 import { t } from '#src/lib/messages/page-words.ts';
-import type { AlarmFilter } from './alarm-queries.ts';
-import { ALARM_SHOWS, ALARM_SORTS, changeAlarmsAddress, parseAlarmsAddress } from './alarms-address.ts';
+import { ALARM_SORTS, ALARM_TABS, ALARM_VIEWS, changeAlarmsAddress, parseAlarmsAddress } from './alarms-address.ts';
 
-/** Search, state, priority and order. Each stands in the address. */
-export function AlarmFilters() {
+export type AlarmFiltersProps = { readonly totals: AlarmPage['totals'] | undefined };
+
+/** How many each state holds, where that asks for a look: what was set aside must not be forgotten. */
+const countOf = (totals: AlarmPage['totals'] | undefined, show: (typeof ALARM_TABS)[number]): number =>
+  ({
+    open: 0,
+    history: 0,
+    unacknowledged: totals?.unacknowledged ?? 0,
+    shelved: totals?.shelved ?? 0,
+    suppressed: totals?.suppressed ?? 0,
+    'out-of-service': totals?.outOfService ?? 0,
+  })[show];
+
+/** Search, state, priority, order and form. Each stands in the address. */
+export function AlarmFilters({ totals }: AlarmFiltersProps) {
   const [search, setSearch] = useSearchParams();
-  const { filter } = parseAlarmsAddress(search);
-  const change = (next: AlarmFilter, replace = false) =>
+  const { filter, view } = parseAlarmsAddress(search);
+  const wordsOf = (show: (typeof ALARM_TABS)[number]) => {
+    const [what, count] = [t(`alarms.show.${show}`), countOf(totals, show)];
+    return count === 0 ? what : t('alarms.show.counted', { what, count });
+  };
+  const change = (next: Parameters<typeof changeAlarmsAddress>[1], replace = false) =>
     setSearch((current) => changeAlarmsAddress(current, next), { replace, preventScrollReset: true });
   return (
     <search data-print="never" className="flex flex-wrap items-center gap-2">
       <SearchField value={filter.q ?? ''} onSearch={(q) => change({ q }, true)} />
-      <Folded label={t('fleet.filters')} count={[filter.show, filter.priority, filter.sort].filter(Boolean).length}>
+      <Folded
+        label={t('fleet.filters')}
+        count={[filter.show, filter.priority, filter.whose, filter.sort].filter(Boolean).length}
+      >
         <fieldset className="contents">
           <legend className="sr-only">{t('alarms.show')}</legend>
-          {ALARM_SHOWS.map((show) => (
+          {ALARM_TABS.map((show) => (
             <Chip key={show} on={(filter.show ?? 'open') === show} onClick={() => change({ show })}>
-              {t(`alarms.show.${show}`)}
+              {wordsOf(show)}
             </Chip>
           ))}
         </fieldset>
@@ -40,12 +60,25 @@ export function AlarmFilters() {
             </Chip>
           ))}
         </fieldset>
+        <Chip
+          on={filter.whose === 'mine'}
+          onClick={() => change({ whose: filter.whose === 'mine' ? undefined : 'mine' })}
+        >
+          {t('alarms.mine')}
+        </Chip>
         <Select
           quiet
           label={t('alarms.sort')}
           value={filter.sort ?? 'worst'}
           onChange={(sort) => change({ sort })}
           options={ALARM_SORTS.map((sort) => ({ value: sort, label: t(`alarms.sort.${sort}`) }))}
+        />
+        <Select
+          quiet
+          label={t('alarms.view')}
+          value={view}
+          onChange={(next) => change({ view: next })}
+          options={ALARM_VIEWS.map((each) => ({ value: each, label: t(`alarms.view.${each}`) }))}
         />
       </Folded>
     </search>

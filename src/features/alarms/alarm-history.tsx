@@ -1,13 +1,31 @@
 import type { AlarmDetail } from '#shared/contract/http/alarms.ts';
 import { alarmTitle } from '#shared/domain/wording/alarm-title.ts';
+import { FactList } from '#src/components/ui/fact-list.tsx';
 import { Sheet } from '#src/components/ui/sheet.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
 import { isPlainKey, t } from '#src/lib/messages/page-words.ts';
+import { listEvidence } from './evidence-view.ts';
 
 const wordOf = (kind: string): string => {
   const key = `transition.${kind}`;
   return isPlainKey(key) ? t(key) : kind;
 };
+
+/** How the alarm's figures stood at a step, for whoever wants to check it. */
+function FiguresThen({ evidence }: { readonly evidence: AlarmDetail['evidence'] }) {
+  const facts = listEvidence(evidence, useFormat());
+  if (facts.length === 0) return null;
+  return (
+    <details>
+      <summary className="inline-flex min-h-6 items-center text-13 text-ink-2 underline underline-offset-2">
+        {t('transition.figures')}
+      </summary>
+      <div className="figures pt-1 text-13">
+        <FactList facts={facts} />
+      </div>
+    </details>
+  );
+}
 
 /** Every step of the alarm with who and when, and what became of its mails. */
 export function AlarmHistory({ alarm, now }: { readonly alarm: AlarmDetail; readonly now: number }) {
@@ -18,7 +36,7 @@ export function AlarmHistory({ alarm, now }: { readonly alarm: AlarmDetail; read
     <>
       <Sheet id="history" title={t('alarm.history')}>
         <ol className="px-4 sm:px-5">
-          {[...alarm.transitions].reverse().map(({ at, kind, by, note, cause }) => (
+          {[...alarm.transitions].reverse().map(({ at, kind, by, note, cause, evidence }) => (
             <li key={`${at} ${kind}`} className={item}>
               <span className="figures">{moment(at)}</span>
               <div>
@@ -26,7 +44,8 @@ export function AlarmHistory({ alarm, now }: { readonly alarm: AlarmDetail; read
                 {kind === 'raised' || kind === 'changed' ? (
                   <p className="text-13 text-ink-2">{alarmTitle(alarm.detector, cause, {})}</p>
                 ) : null}
-                {note === null ? null : <p className="text-ink-2">{note}</p>}
+                {note === null || kind === 'suppressed' ? null : <p className="text-ink-2">{note}</p>}
+                <FiguresThen evidence={evidence} />
               </div>
             </li>
           ))}

@@ -11,7 +11,7 @@ import { useAlarmList } from './use-alarm-list.ts';
 export type AlarmListProps = {
   readonly filter: AlarmFilter;
   readonly empty: { readonly title: string; readonly detail: string };
-  readonly children: (alarm: Alarm) => ReactNode;
+  readonly children: (alarms: readonly Alarm[]) => ReactNode;
 };
 
 const Ruled = () => (
@@ -23,7 +23,7 @@ const Ruled = () => (
   </div>
 );
 
-/** A list of alarms in all its states; rows are drawn by whoever asks for it. */
+/** A list of alarms in all its states; what there is is drawn by whoever asks for it. */
 export function AlarmList({ filter, empty, children }: AlarmListProps) {
   const { query, alarms } = useAlarmList(filter);
   if (alarms === undefined) {
@@ -39,7 +39,7 @@ export function AlarmList({ filter, empty, children }: AlarmListProps) {
   }
   return (
     <>
-      {alarms.map(children)}
+      {children(alarms)}
       {query.hasNextPage ? (
         <p className="border-t border-rule px-5 py-3">
           <Button disabled={query.isFetchingNextPage} onClick={() => void query.fetchNextPage()}>

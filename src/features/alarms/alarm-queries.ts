@@ -1,4 +1,5 @@
 import { infiniteQueryOptions, keepPreviousData, queryOptions } from '@tanstack/react-query';
+import { alarmActEndpoints } from '#shared/contract/http/alarm-acts.ts';
 import { type AlarmsQuery, alarmEndpoints } from '#shared/contract/http/alarms.ts';
 import { call } from '#src/lib/api/api-client.ts';
 
@@ -43,6 +44,12 @@ export const alarmQueries = {
       queryKey: [KEY, 'standing'] as const,
       queryFn: ({ signal }) =>
         call(alarmEndpoints.list, { query: { show: 'open', alarmClass: 'alarm', limit: 1 }, signal }),
+    }),
+  /** Whom an alarm may be given to. */
+  technicians: () =>
+    queryOptions({
+      queryKey: [KEY, 'technicians'] as const,
+      queryFn: ({ signal }) => call(alarmActEndpoints.technicians, { signal }),
     }),
   detail: (alarmId: string) =>
     queryOptions({

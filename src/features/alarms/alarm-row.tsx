@@ -5,25 +5,43 @@ import { PriorityMark } from '#src/components/ui/priority-mark.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
 import { t } from '#src/lib/messages/page-words.ts';
 import { paths } from '#src/lib/paths.ts';
-import { AcknowledgeButton } from './acknowledge-button.tsx';
 import { titleOf, whereOf } from './alarm-names.ts';
 import { ALARM_TONE } from './alarm-tone.ts';
-import { describeSpan, describeState, isWaiting } from './alarm-view.ts';
+import { describeGroup, describeNextStop, describeSpan, describeState, isWaiting } from './alarm-view.ts';
 import { EvidenceStrip, type StripSource } from './evidence-strip.tsx';
+import { RowActions } from './row-actions.tsx';
 
-export type AlarmRowProps = { readonly alarm: Alarm; readonly now: number; readonly StripSource: StripSource };
+export type AlarmRowProps = {
+  readonly alarm: Alarm;
+  readonly now: number;
+  readonly StripSource: StripSource;
+  readonly selected: boolean;
+  readonly onSelect: (selected: boolean) => void;
+};
 
 /** One alarm: what, where, since when, what it means, who has seen it, and the day around it. */
-export function AlarmRow({ alarm, now, StripSource }: AlarmRowProps) {
+export function AlarmRow({ alarm, now, StripSource, selected, onSelect }: AlarmRowProps) {
   const format = useFormat();
   const facts = [
     alarm.customerName,
     alarm.area,
     alarm.technicianName === null ? null : t('alarm.technician', { name: alarm.technicianName }),
-  ];
+    describeNextStop(alarm, format),
+    describeGroup(alarm),
+  ].filter((fact) => fact !== null && fact !== '');
   return (
     <article className="grid grid-cols-[26px_minmax(0,1fr)] gap-x-3.5 gap-y-2 border-t border-rule px-4 py-3.5 first:border-0 sm:px-5 xl:grid-cols-[26px_minmax(0,1fr)_minmax(18rem,26rem)]">
-      <PriorityMark kind={alarm.priority} acknowledged={!isWaiting(alarm)} />
+      <div className="flex flex-col items-center gap-2">
+        <PriorityMark kind={alarm.priority} acknowledged={!isWaiting(alarm)} />
+        <input
+          type="checkbox"
+          data-print="never"
+          className="size-6 accent-ink"
+          checked={selected}
+          onChange={(event) => onSelect(event.target.checked)}
+          aria-label={t('alarms.select', { title: titleOf(alarm), where: whereOf(alarm) })}
+        />
+      </div>
       <div className="min-w-0">
         <h3 className="text-17 font-semibold">
           <Link
@@ -34,21 +52,28 @@ export function AlarmRow({ alarm, now, StripSource }: AlarmRowProps) {
           </Link>
         </h3>
         <p>
-          <Link to={paths.pump(alarm.pumpId)} className="font-medium underline-offset-2 hover:underline">
-            {whereOf(alarm)}
-          </Link>
-          <span className="text-ink-2"> · {facts.filter((fact) => fact !== null).join(' · ')}</span>
+          {alarm.pumpId === null ? (
+            <span className="font-medium">{whereOf(alarm)}</span>
+          ) : (
+            <Link to={paths.pump(alarm.pumpId)} className="font-medium underline-offset-2 hover:underline">
+              {whereOf(alarm)}
+            </Link>
+          )}
+          {facts.length === 0 ? null : <span className="text-ink-2"> · {facts.join(' · ')}</span>}
         </p>
         <p className="text-13 text-ink-2">
           {describeSpan(alarm, format, now)} · {describeState(alarm, format, now)}
         </p>
         <p className="mt-1 max-w-prose text-13">{alarmWords(alarm.detector, alarm.cause, alarm.evidence).meaning}</p>
-        <div className="mt-2 empty:hidden">
-          <AcknowledgeButton alarm={alarm} />
-        </div>
+        {alarm.done?.found == null ? null : (
+          <blockquote className="mt-1 border-l-2 border-ink pl-3">{alarm.done.found}</blockquote>
+        )}
+        <RowActions alarm={alarm} />
       </div>
       <div className="col-span-2 min-w-0 xl:col-span-1">
-        <EvidenceStrip alarm={alarm} now={now} StripSource={StripSource} />
+        {alarm.pumpId === null ? null : (
+          <EvidenceStrip pumpId={alarm.pumpId} alarm={alarm} now={now} StripSource={StripSource} />
+        )}
       </div>
     </article>
   );

@@ -7,9 +7,9 @@ import { PriorityMark } from '#src/components/ui/priority-mark.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
 import { t } from '#src/lib/messages/page-words.ts';
 import { ALARM_TONE } from './alarm-tone.ts';
-import { describeSpan, describeState, isWaiting } from './alarm-view.ts';
+import { describeGroup, describeSpan, describeState, isWaiting } from './alarm-view.ts';
 import { EvidenceStrip, type StripSource } from './evidence-strip.tsx';
-import { listEvidence, listLikelyCauses } from './evidence-view.ts';
+import { listEvidence } from './evidence-view.ts';
 
 export type EvidenceSheetProps = {
   readonly alarm: AlarmDetail;
@@ -24,7 +24,6 @@ export type EvidenceSheetProps = {
 export function EvidenceSheet({ alarm, words, now, StripSource, chart }: EvidenceSheetProps) {
   const format = useFormat();
   const tone = ALARM_TONE[alarm.priority];
-  const causes = listLikelyCauses(alarm.evidence);
   return (
     <section aria-labelledby="what" className={`border bg-sheet ${tone.border}`}>
       <h2
@@ -35,29 +34,25 @@ export function EvidenceSheet({ alarm, words, now, StripSource, chart }: Evidenc
         {words.title}
       </h2>
       <div className="flex flex-col gap-3 px-4 py-3">
-        <EvidenceStrip alarm={alarm} now={now} StripSource={StripSource} />
+        {alarm.pumpId === null ? null : (
+          <EvidenceStrip pumpId={alarm.pumpId} alarm={alarm} now={now} StripSource={StripSource} />
+        )}
         {chart}
         <p className="text-17">
           <Figures text={words.meaning} />
         </p>
-        {causes.length === 0 ? null : (
-          <div>
-            <h3 className="text-ink-2">{t('alarm.likely')}</h3>
-            <ol className="list-decimal pl-6 marker:font-figures">
-              {causes.map(({ cause, reason }) => (
-                <li key={cause}>
-                  <span className="font-medium">{cause}</span>
-                  <span className="text-ink-2">: {reason}</span>
-                </li>
-              ))}
-            </ol>
-          </div>
-        )}
         <p className="text-ink-2">
-          {describeSpan(alarm, format, now)} · {describeState(alarm, format, now)}
+          {[describeSpan(alarm, format, now), describeGroup(alarm), describeState(alarm, format, now)]
+            .filter((part) => part !== '')
+            .join(' · ')}
         </p>
         {alarm.acknowledgementNote === null ? null : (
           <blockquote className="border-l-2 border-ink pl-3">{alarm.acknowledgementNote}</blockquote>
+        )}
+        {alarm.done?.found == null ? null : (
+          <blockquote className="border-l-2 border-ink pl-3">
+            {t('alarm.found', { found: alarm.done.found })}
+          </blockquote>
         )}
         <details>
           <summary className="inline-flex min-h-6 items-center text-ink-2 underline underline-offset-2">

@@ -20,20 +20,21 @@ export type StripSource = ComponentType<{
 }>;
 
 export type EvidenceStripProps = {
+  readonly pumpId: string;
   readonly alarm: Alarm;
   readonly now: number;
   readonly StripSource: StripSource;
 };
 
 /** A day of the pump around the alarm, its beginning marked. */
-export function EvidenceStrip({ alarm, now, StripSource }: EvidenceStripProps) {
+export function EvidenceStrip({ pumpId, alarm, now, StripSource }: EvidenceStripProps) {
   const [track, width] = useElementWidth<HTMLDivElement>();
   const { from, until } = evidenceWindow(alarm, now);
   const window = useMemo(() => ({ from, until }), [from, until]);
   const share = (alarm.from - from) / (until - from);
   return (
     <div ref={track} role="img" aria-label={t('alarm.strip', { where: whereOf(alarm) })} className="relative">
-      <StripSource pumpId={alarm.pumpId} window={window}>
+      <StripSource pumpId={pumpId} window={window}>
         {(strip) => (
           <StripCanvas
             size="row"

@@ -51,20 +51,3 @@ export function listEvidence(evidence: Evidence, format: Format): (readonly [str
 /** What the watts would be if all were well, where the rule knows it. */
 export const usualWattsOf = ({ primedWatts, usualWatts }: Evidence): number | undefined =>
   [primedWatts, usualWatts].find((value): value is number => typeof value === 'number' && value > 0);
-
-/** A cause the readings point to, and why. */
-export type LikelyCause = { readonly cause: string; readonly reason: string };
-
-const causeName = (slug: string): string => {
-  const key = `cause.${slug}`;
-  return isPlainKey(key) ? t(key) : spellOut(slug.replaceAll('-', ' '));
-};
-
-/** The causes a rule found likely, the likeliest first, each with its reason; empty where it ranks none. */
-export function listLikelyCauses({ causes, because }: Evidence): LikelyCause[] {
-  if (!Array.isArray(causes) || !Array.isArray(because)) return [];
-  return causes.flatMap((slug, index) => {
-    const reason = because[index];
-    return typeof slug === 'string' && typeof reason === 'string' ? [{ cause: causeName(slug), reason }] : [];
-  });
-}

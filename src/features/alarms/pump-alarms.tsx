@@ -21,28 +21,30 @@ export function PumpAlarms({ pumpId, linked, now }: PumpAlarmsProps) {
   return (
     <Sheet id="alarms" title={t('pump.alarms')}>
       <AlarmList filter={{ show: 'all', pumpId, sort: 'newest' }} empty={{ title: t('pump.alarms.none'), detail: '' }}>
-        {(alarm) => (
-          <div
-            key={alarm.id}
-            className="grid grid-cols-[26px_minmax(0,1fr)] gap-x-3 border-t border-rule px-4 py-2.5 first-of-type:border-0 sm:px-5"
-          >
-            <PriorityMark kind={alarm.priority} acknowledged={!isWaiting(alarm)} />
-            <div>
-              <p className="font-semibold">
-                {linked ? (
-                  <Link to={paths.alarm(alarm.id)} className="underline-offset-2 hover:underline">
-                    {titleOf(alarm)}
-                  </Link>
-                ) : (
-                  titleOf(alarm)
-                )}
-              </p>
-              <p className="text-13 text-ink-2">
-                {describeSpan(alarm, format, now)} · {describeState(alarm, format, now)}
-              </p>
+        {(alarms) =>
+          alarms.map((alarm) => (
+            <div
+              key={alarm.id}
+              className="grid grid-cols-[26px_minmax(0,1fr)] gap-x-3 border-t border-rule px-4 py-2.5 first-of-type:border-0 sm:px-5"
+            >
+              <PriorityMark kind={alarm.priority} acknowledged={!isWaiting(alarm)} />
+              <div>
+                <p className="font-semibold">
+                  {linked ? (
+                    <Link to={paths.alarm(alarm.id)} className="underline-offset-2 hover:underline">
+                      {titleOf(alarm)}
+                    </Link>
+                  ) : (
+                    titleOf(alarm)
+                  )}
+                </p>
+                <p className="text-13 text-ink-2">
+                  {describeSpan(alarm, format, now)} · {describeState(alarm, format, now)}
+                </p>
+              </div>
             </div>
-          </div>
-        )}
+          ))
+        }
       </AlarmList>
     </Sheet>
   );

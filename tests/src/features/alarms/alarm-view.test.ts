@@ -12,7 +12,7 @@ import {
   mayUndo,
 } from '#src/features/alarms/alarm-view.ts';
 import { changeAlarmsAddress, isNarrowed, parseAlarmsAddress } from '#src/features/alarms/alarms-address.ts';
-import { listEvidence, listLikelyCauses, usualWattsOf } from '#src/features/alarms/evidence-view.ts';
+import { listEvidence, usualWattsOf } from '#src/features/alarms/evidence-view.ts';
 import { createFormat } from '#src/lib/format/create-format.ts';
 import { createFakeFleet } from '#tests/src/fake-api/fake-fleet.ts';
 import { FAKE_EVENING as NOW } from '#tests/src/fake-api/fake-state.ts';
@@ -97,12 +97,7 @@ describe('the evidence', () => {
     expect(listEvidence({ windDirection: 'north' }, format)).toEqual([['Wind direction', 'north']]);
   });
 
-  it('ranks likely causes with their reasons, and knows the watts that would be usual', () => {
-    expect(listLikelyCauses({ causes: ['air-leak', 'old-seal'], because: ['watts of air', 'drips'] })).toEqual([
-      { cause: 'Air drawn in on the suction side', reason: 'watts of air' },
-      { cause: 'Old seal', reason: 'drips' },
-    ]);
-    expect(listLikelyCauses({ causes: ['air-leak'] })).toEqual([]);
+  it('knows the watts that would be usual', () => {
     expect(usualWattsOf({ primedWatts: 1450 })).toBe(1450);
     expect(usualWattsOf({ primedWatts: null })).toBeUndefined();
   });
