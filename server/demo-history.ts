@@ -5,8 +5,10 @@ import { fileURLToPath } from 'node:url';
 import type pg from 'pg';
 import { readLines } from './backtest/read-lines.ts';
 import { listCommissionedPumps } from './db/commissioned-pumps.ts';
+import { RAW_RETENTION_DAYS } from './db/reading-partitions.ts';
 import { asMachine } from './db/transaction.ts';
 import { foldHistory } from './fold/history/fold-history.ts';
+import { rollUpWaiting } from './rollup/roll-up-waiting.ts';
 
 /** Where the simulated fleet reads how far its story has been told. */
 const STORY_FILE = 'demo-story.json';
@@ -28,7 +30,24 @@ export type DemoHistoryOptions = {
  * none, so that the next start tells it again. The story comes from a program of its own; the server never imports
  * the simulator.
  */
-export function tellDemoHistory({ machine, dataFolder, days, now, onProgress }: DemoHistoryOptions): Promise<boolean> {
+export async function tellDemoHistory(options: DemoHistoryOptions): Promise<boolean> {
+  const isTold = await foldStory(options);
+  // Also after a start that was broken off between the two: then there is a history that was never rolled up.
+  await rollUpHistory(options);
+  return isTold;
+}
+
+async function rollUpHistory({ machine, now, onProgress }: DemoHistoryOptions): Promise<void> {
+  const options = { pool: machine, now: () => now, rawDays: RAW_RETENTION_DAYS, freshMs: 10_000 * DAY_MS };
+  const startedAt = performance.now();
+  const { pumps, failed } = await rollUpWaiting(options);
+  const [first] = failed;
+  if (first !== undefined) throw first.err;
+  const seconds = Math.round((performance.now() - startedAt) / 1000);
+  if (pumps > 0) onProgress(`Energy and water of ${pumps} pumps rolled up in ${seconds} s`);
+}
+
+function foldStory({ machine, dataFolder, days, now, onProgress }: DemoHistoryOptions): Promise<boolean> {
   return asMachine(machine, async (db, client) => {
     const { rows } = await client.query<{ told: boolean }>(
       'select exists (select from pump_states where cursor > 0) as told',

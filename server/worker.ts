@@ -6,6 +6,7 @@ import { endExplanations } from './jobs/end-explanations.ts';
 import { escalateAlarms } from './jobs/escalate-alarms.ts';
 import { keepPartitions } from './jobs/keep-partitions.ts';
 import { createLeadership } from './jobs/leadership.ts';
+import { rollUp } from './jobs/roll-up.ts';
 import { createScheduler } from './jobs/scheduler.ts';
 import { silenceSetAside } from './jobs/silence-set-aside.ts';
 import { createDoorbell } from './live/doorbell.ts';
@@ -34,7 +35,7 @@ await runProgram('worker', async ({ env, log, progress, atEnd }) => {
   atEnd(sender.stop);
 
   const scheduler = createScheduler({
-    jobs: [silenceSetAside, escalateAlarms, endExplanations, announceAssignments, keepPartitions, cleanUpTables],
+    jobs: [silenceSetAside, escalateAlarms, endExplanations, announceAssignments, keepPartitions, cleanUpTables, rollUp],
     context: { pool: machine, publicUrl: env.publicUrl, now: Date.now, log },
     leadership: createLeadership(machineUrl),
   });

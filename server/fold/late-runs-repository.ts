@@ -1,4 +1,5 @@
 import type pg from 'pg';
+import { newId } from '#server/db/new-id.ts';
 import { READING_COLUMNS, type ReadingRow, toReading } from '#server/ingest/reading-row.ts';
 import type { Reading } from '#shared/domain/readings/reading.ts';
 import type { Run } from '#shared/domain/runs/run.ts';
@@ -81,5 +82,16 @@ export async function replaceRuns(
      join pumps p on p.id = r.pump_id`,
     [`[${runs.map((run) => toRunJson(pumpId, run)).join(',')}]`],
   );
+  await markDays(database, pumpId, from, to);
   return true;
+}
+
+/** The rollups follow: every day that the stretch touches is worked out again. */
+async function markDays(database: Database, pumpId: string, from: number, to: number): Promise<void> {
+  await database.query(
+    `insert into rollup_marks (id, company_id, pump_id, kind, from_at, to_at)
+     select $4, company_id, id, 'days', to_timestamp($2::float8 / 1000), to_timestamp($3::float8 / 1000)
+     from pumps where id = $1`,
+    [pumpId, from, to, newId()],
+  );
 }

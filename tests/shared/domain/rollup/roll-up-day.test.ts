@@ -18,8 +18,8 @@ const HOUR_MS = 3_600_000;
 function runsOf(readings: readonly Reading[]): Run[] {
   const control = createControl(CONTEXT);
   const fold = createRunFold(CONTEXT);
-  const gpmOf = ({ rpm, at }: Reading) => ((at / 1000) % 7 === 0 ? undefined : rpm / 50);
-  for (const reading of readings) fold.push(reading, control.push(reading), gpmOf(reading));
+  const flowOf = ({ rpm, at }: Reading) => ((at / 1000) % 7 === 0 ? undefined : { gpm: rpm / 50, sigmaShare: 0.08 });
+  for (const reading of readings) fold.push(reading, control.push(reading), flowOf(reading));
   return fold.take();
 }
 
