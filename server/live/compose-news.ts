@@ -4,7 +4,7 @@ import type { Role } from '#shared/contract/primitives.ts';
 /** One change as JSON text, made once and sent to everyone who may see it. */
 type Item = { readonly pumpId: string; readonly text: string };
 /** `from` is when what it tells of began, ms. */
-type DatedItem = Item & { readonly from: number };
+type DatedItem = { readonly pumpId: string | null; readonly text: string; readonly from: number };
 type AlarmItem = DatedItem & { readonly textForHomeowner: string };
 
 /** What changed in a company, ready to be cut for each connection. */
@@ -49,12 +49,13 @@ export function writeNews(
  */
 export function composeNews(news: CompanyNews, { role, visible, watched }: Audience): string | undefined {
   const sees = ({ pumpId }: Item): boolean => visible === 'all' || visible.has(pumpId);
+  // What speaks for several pumps is for staff alone.
   const seesSince = ({ pumpId, from }: DatedItem): boolean =>
-    visible === 'all' || from >= (visible.get(pumpId) ?? Number.POSITIVE_INFINITY);
+    visible === 'all' || (pumpId !== null && from >= (visible.get(pumpId) ?? Number.POSITIVE_INFINITY));
   const alarms = news.alarms.filter(seesSince);
   const alarmed = new Set(alarms.map(({ pumpId }) => pumpId));
   const pumps = news.pumps.filter((item) => sees(item) && (watched.has(item.pumpId) || alarmed.has(item.pumpId)));
-  const runs = news.runs.filter((item) => seesSince(item) && watched.has(item.pumpId));
+  const runs = news.runs.filter((item) => seesSince(item) && item.pumpId !== null && watched.has(item.pumpId));
   if (pumps.length + runs.length + alarms.length === 0) return undefined;
   const list = (texts: readonly string[]): string => `[${texts.join(',')}]`;
   const alarmTexts = alarms.map((alarm) => (role === 'homeowner' ? alarm.textForHomeowner : alarm.text));

@@ -2,7 +2,7 @@ import { type SQL, sql } from 'drizzle-orm';
 import type { Transaction } from '#server/db/transaction.ts';
 import type { SortKeys } from '#server/http/page-cursor.ts';
 import type { AlarmPage, AlarmsQuery } from '#shared/contract/http/alarms.ts';
-import { alarmColumns, alarmFrom } from './alarm-columns-read-model.ts';
+import { alarmColumns, alarmFrom, placeName } from './alarm-columns-read-model.ts';
 import type { AlarmRow } from './alarm-row.ts';
 
 type Sort = AlarmsQuery['sort'];
@@ -19,7 +19,7 @@ const SORT_KEYS: Readonly<Record<Sort, readonly SQL[]>> = {
   worst: [priorityRank, waitingRank, sql`-${raisedMs}`, sql`a.id::text`],
   newest: [sql`-${raisedMs}`, sql`a.id::text`],
   oldest: [raisedMs, sql`a.id::text`],
-  name: [sql`lower(pad.name)`, priorityRank, sql`a.id::text`],
+  name: [sql`lower(${placeName})`, priorityRank, sql`a.id::text`],
 };
 
 export const SORT_SHAPES: Readonly<Record<Sort, readonly ('number' | 'string')[]>> = {
@@ -45,18 +45,29 @@ const SHOWN: Readonly<Record<AlarmsQuery['show'], SQL>> = {
 
 const like = (text: string) => `%${text.replaceAll(/[\\%_]/g, '\\$&')}%`;
 
+/** An alarm without a pump of its own that speaks for such a pump. */
+const speaksFor = (which: SQL) =>
+  sql`(a.pump_id is null and exists (select from alarm_members m join pumps mp on mp.id = m.pump_id
+    join pads mpad on mpad.id = mp.pad_id where m.alarm_id = a.id and ${which}))`;
+
+/** Alarms that go to a technician: given to them, of their pads, or speaking for one of these. */
+const isOf = (userId: string) =>
+  sql`(coalesce(a.assigned_to, pad.technician_id) = ${userId}
+    or a.assigned_to is null and ${speaksFor(sql`mpad.technician_id = ${userId}`)})`;
+
 function conditions(query: AlarmsQuery, userId: string): SQL {
   const all = [SHOWN[query.show]];
   if (query.alarmClass !== undefined) all.push(sql`a.alarm_class = ${query.alarmClass}`);
   if (query.priority !== undefined) all.push(sql`a.priority = ${query.priority}`);
   if (query.detector !== undefined) all.push(sql`a.detector = ${query.detector}`);
-  if (query.pumpId !== undefined) all.push(sql`a.pump_id = ${query.pumpId}`);
-  if (query.area !== undefined) all.push(sql`pad.area = ${query.area}`);
-  if (query.whose === 'mine') all.push(sql`coalesce(a.assigned_to, pad.technician_id) = ${userId}`);
+  if (query.pumpId !== undefined)
+    all.push(sql`(a.pump_id = ${query.pumpId} or ${speaksFor(sql`m.pump_id = ${query.pumpId}`)})`);
+  if (query.area !== undefined) all.push(sql`coalesce(pad.area, a.group_area) = ${query.area}`);
+  if (query.whose === 'mine') all.push(isOf(userId));
   if (query.q !== undefined && query.q !== '') {
     const pattern = like(query.q);
     all.push(
-      sql`(pad.name ilike ${pattern} or p.name ilike ${pattern} or pad.street ilike ${pattern} or customer.name ilike ${pattern})`,
+      sql`(${placeName} ilike ${pattern} or p.name ilike ${pattern} or pad.street ilike ${pattern} or customer.name ilike ${pattern})`,
     );
   }
   return sql.join(all, sql` and `);

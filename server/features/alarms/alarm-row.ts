@@ -1,12 +1,17 @@
 import type { AlarmRecord } from '#shared/domain/alarms/alarm-record.ts';
+import type { AreaKind } from '#shared/domain/fold/area/area-signal.ts';
 
 /** An alarm with the names a screen shows beside it; instants in ms. */
 export type AlarmRow = {
   readonly id: string;
-  readonly pumpId: string;
-  readonly padId: string;
+  /** null = it speaks for several pumps. */
+  readonly pumpId: string | null;
+  readonly padId: string | null;
   readonly padName: string;
   readonly pumpName: string;
+  readonly groupKind: AreaKind | null;
+  readonly groupArea: string | null;
+  readonly coveredBy: string | null;
   readonly customerName: string | null;
   readonly area: string | null;
   readonly zone: string;

@@ -65,8 +65,20 @@ function presentForStaff(row: AlarmRow, now: number): Alarm {
         : { id: record.assignment.to, name: row.assigneeName },
     technicianName: row.assigneeName ?? row.technicianName,
     nextStopOn: row.stopWeekday === null ? null : (nextWeekday(row.zone, row.stopWeekday, now) ?? null),
+    group: presentGroup(row),
+    coveredBy: row.coveredBy,
     version: row.version,
   };
+}
+
+function presentGroup({ groupKind, groupArea, record }: AlarmRow): Alarm['group'] {
+  if (groupKind === null) return null;
+  const numberOf = (name: string): number => {
+    const value = record.evidence[name];
+    return typeof value === 'number' ? value : 0;
+  };
+  const counts = { pumps: numberOf('pumps'), pads: numberOf('pads'), standing: numberOf('stillStanding') };
+  return { kind: groupKind, area: groupArea, ...counts };
 }
 
 function presentSetAside({ shelf, suppressedBy, outOfService }: AlarmRecord, row: AlarmRow) {

@@ -3,6 +3,7 @@ import { notFound } from '#server/errors.ts';
 import type { Alarm, AlarmDetail } from '#shared/contract/http/alarms.ts';
 import { explainAlarm } from '#shared/domain/causes/explain-alarm.ts';
 import { countFoundCauses, findAlarmRow, listMails, listTransitions } from './alarm-detail-read-model.ts';
+import { listMembers } from './alarm-members-read-model.ts';
 import { presentAlarm } from './present-alarm.ts';
 import { presentLikely } from './present-likely.ts';
 
@@ -24,6 +25,7 @@ export async function readAlarm(context: Context, alarmId: string): Promise<Alar
     likely: isStaff
       ? presentLikely(explainAlarm(alarm, alarm.zone, await countFoundCauses(context.db, alarmId)))
       : null,
+    members: alarm.group === null ? [] : await listMembers(context.db, alarmId),
     transitions: isStaff ? transitions : transitions.map((transition) => ({ ...transition, by: null, note: null })),
     mails,
     serverNow: context.now,

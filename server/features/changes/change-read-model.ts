@@ -16,7 +16,7 @@ export async function findCursor(db: Transaction): Promise<string> {
 export async function listPumpIdsChangedSince(db: Transaction, cursor: string, limit: number): Promise<string[]> {
   const { rows } = await db.execute<{ id: string }>(sql`
     select pump_id as id from pump_states where changed_in >= ${cursor}::xid8
-    union select pump_id from alarms where changed_in >= ${cursor}::xid8
+    union select pump_id from alarms where changed_in >= ${cursor}::xid8 and pump_id is not null
     limit ${limit}`);
   return rows.map(({ id }) => id);
 }

@@ -14,10 +14,37 @@ export const Evidence = z.record(
 /** What a person did about an alarm; `by` is their name, null for readers who may not know it. */
 const Deed = { at: Instant, by: z.string().nullable() };
 
+/** What one alarm speaks for: pads of one area that went silent together, clocks that nobody set, or our own link. */
+export const AlarmGroup = z.object({
+  kind: z.enum(['area-silence', 'daylight-saving', 'own-link']),
+  area: z.string().nullable(),
+  pumps: z.number().int(),
+  pads: z.number().int(),
+  /** Pumps of which something still stands. */
+  standing: z.number().int(),
+});
+export type AlarmGroup = z.infer<typeof AlarmGroup>;
+
+/** A pump that an alarm speaks for. */
+export const AlarmMember = z.object({
+  pumpId: Id,
+  pumpName: z.string(),
+  padId: Id,
+  padName: z.string(),
+  area: z.string().nullable(),
+  joinedAt: Instant,
+  /** When its own condition was over; null while it stands. */
+  leftAt: Instant.nullable(),
+  /** Its own alarm, where there is one. */
+  alarmId: Id.nullable(),
+});
+export type AlarmMember = z.infer<typeof AlarmMember>;
+
 export const Alarm = z.object({
   id: Id,
-  pumpId: Id,
-  padId: Id,
+  /** null = it speaks for several pumps: see `group`. */
+  pumpId: Id.nullable(),
+  padId: Id.nullable(),
   padName: z.string(),
   pumpName: z.string(),
   customerName: z.string().nullable(),
@@ -56,6 +83,10 @@ export const Alarm = z.object({
   technicianName: z.string().nullable(),
   /** The day of the pad's next stop, where it is on a route: today or later, in the pad's zone. */
   nextStopOn: z.iso.date().nullable(),
+  /** One alarm for what befell several pumps at once; `pumpName` is then empty and `padName` says where. */
+  group: AlarmGroup.nullable(),
+  /** The alarm that speaks for this one. */
+  coveredBy: Id.nullable(),
   /** Ends the run of versions of this alarm: pass it as If-Match. */
   version: z.number().int(),
 });
@@ -108,6 +139,8 @@ export type RankedCauses = z.infer<typeof RankedCauses>;
 export const AlarmDetail = Alarm.extend({
   /** Null for readers who are told in plain words only. */
   likely: RankedCauses.nullable(),
+  /** The pumps it speaks for, those that stand first; empty for an alarm of one pump. */
+  members: z.array(AlarmMember),
   transitions: z.array(AlarmTransition),
   mails: z.array(AlarmMail),
   serverNow: Instant,

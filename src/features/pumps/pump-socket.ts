@@ -26,7 +26,8 @@ export const pumpNews: LiveTable = {
     }
   },
   alarms: (client, alarms) => {
-    for (const { pumpId } of alarms) readUnderwayAgain(client, pumpQueries.detail(pumpId).queryKey);
+    for (const { pumpId } of alarms)
+      if (pumpId !== null) readUnderwayAgain(client, pumpQueries.detail(pumpId).queryKey);
   },
 };
 
