@@ -60,6 +60,6 @@ for (const chatty of [false, true]) {
   measure(`control, ${what}`, day, chatty, (control) => (reading) => void control.push(reading));
   measure(`control and runs, ${what}`, day, chatty, (control) => {
     const runs = createRunFold(CONTEXT);
-    return (reading) => runs.push(reading, control.push(reading), 30);
+    return (reading) => runs.push(reading, control.push(reading), { gpm: 30, sigmaShare: 0.1 });
   });
 }

@@ -53,6 +53,8 @@ export const CONSEQUENCES: Readonly<Partial<Record<Detector, readonly Detector[]
   'missing-input': ['too-little-water'],
   'input-disagreement': ['wrong-speed', 'low-load', 'high-load'],
   'wrong-speed': ['low-load', 'high-load', 'too-little-water'],
+  'low-load': ['too-little-water'],
+  'high-load': ['too-little-water'],
 };
 
 /** A consequence that would speak first waits while its cause is still inside its own delay. */

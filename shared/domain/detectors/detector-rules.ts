@@ -8,9 +8,11 @@ import { energizedWithoutFlow } from './rules/energized-without-flow.ts';
 import { failedPrime } from './rules/failed-prime.ts';
 import { fedThroughClock } from './rules/fed-through-clock.ts';
 import { freezing } from './rules/freezing.ts';
+import { highLoad } from './rules/high-load.ts';
 import { inputDisagreement } from './rules/input-disagreement.ts';
 import { keypadHold } from './rules/keypad-hold.ts';
 import { lossOfPrime } from './rules/loss-of-prime.ts';
+import { lowLoad } from './rules/low-load.ts';
 import { missingInput } from './rules/missing-input.ts';
 import { motorClock } from './rules/motor-clock.ts';
 import { settingsChanged } from './rules/settings-changed.ts';
@@ -33,9 +35,11 @@ export const DETECTOR_RULES: readonly DetectorFactory[] = [
   failedPrime,
   fedThroughClock,
   freezing,
+  highLoad,
   inputDisagreement,
   keypadHold,
   lossOfPrime,
+  lowLoad,
   missingInput,
   motorClock,
   settingsChanged,

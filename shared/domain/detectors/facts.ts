@@ -9,6 +9,7 @@ import type { Detector } from './detector.ts';
 import type { InputFacts } from './inputs/input-facts.ts';
 import type { LinkFacts } from './link/link-facts.ts';
 import type { LoadFacts } from './load/load-facts.ts';
+import type { WaterFacts } from './water/water-facts.ts';
 
 /**
  * Everything the rules may know of one pump at one event, worked out once and shared. One object a pump, changed in
@@ -32,6 +33,7 @@ export type Facts = {
   control: ControlAnswer;
   inputs: InputFacts;
   load: LoadFacts;
+  water: WaterFacts;
   link: LinkFacts;
   motorClock: MotorClockFacts;
   /** Pad-local time of the reading: day since 1970, weekday from Monday = 0, minute with its fraction. */

@@ -27,6 +27,8 @@ export type PumpNow = {
   readonly lockedBy: number | undefined;
   /** undefined = not judged (off, or still learning). */
   readonly primed: boolean | undefined;
+  /** Flow now with one standard deviation, US gpm; undefined where the readings cannot tell. */
+  readonly flow: { readonly gpm: number; readonly sigmaGpm: number } | undefined;
 };
 
 /*

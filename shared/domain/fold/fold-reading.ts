@@ -10,7 +10,7 @@ import type { PumpParts } from './pump-parts.ts';
 
 /** Moves control, inputs, load, link and runs on by one reading, and the facts with them. */
 export function foldReading(parts: PumpParts, { reading, single }: PumpEvent & { kind: 'reading' }): void {
-  const { facts, control, inputs, load, link, runs } = parts;
+  const { facts, control, inputs, load, water, link, runs } = parts;
   const seen = parts.seen();
   const previous = facts.reading;
   const elapsedMs = seen ? reading.at - previous.at : 0;
@@ -30,8 +30,9 @@ export function foldReading(parts: PumpParts, { reading, single }: PumpEvent & {
   load.read(reading, facts.control, gap ? 0 : elapsedMs, gap);
   link.read(reading.at, seen ? previous.at : 0, gap, isRunningOn(facts));
   parts.motorClock.read(facts);
+  water.read(facts);
   if (isTryOver(facts, started)) runs.flag('unprimed');
-  runs.push(reading, facts.control);
+  runs.push(reading, facts.control, water.facts);
   if (isUnprimed(facts)) runs.flag('unprimed');
 }
 

@@ -14,7 +14,7 @@ export function initialFacts(
   hot: SavedRecord,
   learnt: SavedRecord,
 ): Facts {
-  const { pace, inputs, load, link, motorClock, pad, bank } = trackers;
+  const { pace, inputs, load, water, link, motorClock, pad, bank } = trackers;
   const { context } = pace;
   const reportedSettings = restoreSettings(learnt.reported);
   const facts: Facts = {
@@ -30,6 +30,7 @@ export function initialFacts(
     control,
     inputs: inputs.facts,
     load: load.facts,
+    water: water.facts,
     link: link.facts,
     motorClock: motorClock.facts,
     localDay: 0,

@@ -3,7 +3,7 @@ import type { Facts } from '../detectors/facts.ts';
 import type { PumpNow } from './fold-output.ts';
 
 /** What a screen's row shows of a pump, from the facts of its last reading. */
-export function pumpNow({ reading, control, load, context }: Facts): PumpNow {
+export function pumpNow({ reading, control, load, water, context }: Facts): PumpNow {
   const { due } = control;
   return {
     at: reading.at,
@@ -18,5 +18,6 @@ export function pumpNow({ reading, control, load, context }: Facts): PumpNow {
     until: control.decision.until,
     lockedBy: control.decision.lockedBy,
     primed: load.primed,
+    flow: water.gpm >= 0 ? { gpm: water.gpm, sigmaGpm: water.gpm * water.sigmaShare } : undefined,
   };
 }

@@ -8,6 +8,7 @@ import { createInputTracker, type InputTracker } from '../detectors/inputs/input
 import { createLinkTracker, type LinkTracker } from '../detectors/link/link-tracker.ts';
 import { createLoadTracker, type LoadTracker } from '../detectors/load/load-tracker.ts';
 import type { Json } from '../detectors/plain-state.ts';
+import { createWaterTracker, type WaterTracker } from '../detectors/water/water-tracker.ts';
 import { createRunFold, type RunFold } from '../runs/create-run-fold.ts';
 import { createPadTracker, type PadTracker } from './pad-tracker.ts';
 import { createReadingPace, type ReadingPace } from './reading-pace.ts';
@@ -18,6 +19,7 @@ export type PumpTrackers = {
   readonly control: Control;
   readonly inputs: InputTracker;
   readonly load: LoadTracker;
+  readonly water: WaterTracker;
   readonly link: LinkTracker;
   readonly motorClock: MotorClockTracker;
   readonly pad: PadTracker;
@@ -46,6 +48,7 @@ export function createPumpTrackers(
     control,
     inputs: createInputTracker(context, hot.inputs, learnt.inputs),
     load: createLoadTracker(context, parameters['failed-prime'], hot.load, learnt.load),
+    water: createWaterTracker(context, hot.water, learnt.water),
     link: createLinkTracker(context, hot.link),
     motorClock: createMotorClockTracker(context, control, hot.motorClock),
     pad: createPadTracker(context, hot.pad),
@@ -60,17 +63,18 @@ export function createPumpTrackers(
 }
 
 /** How often any of them learnt something. */
-export function learntChanges({ load, inputs, bank }: PumpTrackers): number {
-  return load.learntVersion() + inputs.learntVersion() + bank.learntVersion();
+export function learntChanges({ load, water, inputs, bank }: PumpTrackers): number {
+  return load.learntVersion() + water.learntVersion() + inputs.learntVersion() + bank.learntVersion();
 }
 
 /** What changes with every reading, as plain JSON. */
 export function saveHotTrackers(trackers: PumpTrackers): { readonly [key: string]: Json } {
-  const { control, runs, load, inputs, link, motorClock, pad, pace, bank } = trackers;
+  const { control, runs, load, water, inputs, link, motorClock, pad, pace, bank } = trackers;
   return {
     control: control.save(),
     runs: parseJson(runs.save()),
     load: load.saveHot(),
+    water: water.saveHot(),
     inputs: inputs.saveHot(),
     link: link.save(),
     motorClock: motorClock.save(),
@@ -82,8 +86,13 @@ export function saveHotTrackers(trackers: PumpTrackers): { readonly [key: string
 }
 
 /** What is learnt and seldom changes, as plain JSON. */
-export function saveLearntTrackers({ load, inputs, bank }: PumpTrackers): { readonly [key: string]: Json } {
-  return { load: load.saveLearnt(), inputs: inputs.saveLearnt(), detectors: bank.saveLearnt() };
+export function saveLearntTrackers({ load, water, inputs, bank }: PumpTrackers): { readonly [key: string]: Json } {
+  return {
+    load: load.saveLearnt(),
+    water: water.saveLearnt(),
+    inputs: inputs.saveLearnt(),
+    detectors: bank.saveLearnt(),
+  };
 }
 
 /** Runs hold optional fields, which JSON leaves out. */

@@ -6,7 +6,9 @@ export type IntervalEnd = {
   readonly at: number;
   readonly rpm: number;
   readonly watts: number;
-  readonly gpm: number | undefined;
+  /** Flow and one sigma as a share of it; below 0 = unknown. */
+  readonly gpm: number;
+  readonly sigmaShare: number;
 };
 
 /** The trapezoid from the last reading to `end`; with the last values at the end too it is the value held. */
@@ -20,7 +22,9 @@ export function addInterval(state: RunFoldState, sums: RunSums, end: IntervalEnd
     sums.settledRpmMs += meanRpm * ms;
     sums.settledMs += ms;
   }
-  if (state.gpm === null || end.gpm === undefined) return;
-  sums.gallons += (((state.gpm + end.gpm) / 2) * ms) / 60_000;
+  if (!(state.gpm >= 0 && end.gpm >= 0)) return;
+  const gallons = (((state.gpm + end.gpm) / 2) * ms) / 60_000;
+  sums.gallons += gallons;
+  sums.gallonsSigma += gallons * end.sigmaShare;
   sums.gallonsMs += ms;
 }

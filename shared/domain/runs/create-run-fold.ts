@@ -15,12 +15,16 @@ import {
   type RunFoldState,
 } from './run-fold-state.ts';
 
+/** Flow at a reading, US gpm, below 0 or NaN = unknown, with one sigma as a share of it. */
+export type RunFlow = { readonly gpm: number; readonly sigmaShare: number };
+
+const UNKNOWN_FLOW: RunFlow = { gpm: -1, sigmaShare: 0 };
+
 export type RunFold = {
   /**
-   * Takes the next reading in with control's answer to it and, where it is known, the flow (US gpm). One not after
-   * the last, or that is no number, changes nothing.
+   * Takes the next reading in with control's answer to it and, where it is known, the flow. One not after the last, or that is no number, changes nothing.
    */
-  push(reading: Reading, control: ControlAnswer, gpm?: number | undefined): void;
+  push(reading: Reading, control: ControlAnswer, flow?: RunFlow): void;
   /** Marks the open run. */
   flag(flag: RunFlag): void;
   /** A copy of the open run as it stands; undefined before the first reading. */
@@ -58,7 +62,7 @@ export function createRunFold(context: PumpContext, saved?: unknown): RunFold {
     state.finished.push(describeGap(open, state.at, to));
   }
 
-  function advance(open: OpenRun, reading: Reading, control: ControlAnswer, gpm: number | undefined): void {
+  function advance(open: OpenRun, reading: Reading, control: ControlAnswer, { gpm, sigmaShare }: RunFlow): void {
     if (reading.at - state.at > gapMs) {
       passGap(open, reading.at);
       state.open = openRun(reading.at, reading, control);
@@ -67,12 +71,13 @@ export function createRunFold(context: PumpContext, saved?: unknown): RunFold {
         at: reading.at,
         rpm: state.rpm,
         watts: state.watts,
-        gpm: state.gpm ?? undefined,
+        gpm: state.gpm,
+        sigmaShare: state.sigmaShare,
       });
       finish(reading.at);
       state.open = openRun(reading.at, reading, control);
     } else {
-      const parted = followDeparture(state, open, reading, gpm);
+      const parted = followDeparture(state, open, reading, gpm, sigmaShare);
       if (parted !== undefined) {
         open.wattMs += parted.holdWattMs;
         finish(parted.since);
@@ -81,11 +86,11 @@ export function createRunFold(context: PumpContext, saved?: unknown): RunFold {
     }
   }
 
-  function push(reading: Reading, control: ControlAnswer, gpm?: number | undefined): void {
+  function push(reading: Reading, control: ControlAnswer, flow: RunFlow = UNKNOWN_FLOW): void {
     if (!Number.isFinite(reading.at + reading.rpm + reading.watts) || !(state.open === null || reading.at > state.at))
       return;
     if (state.open === null) state.open = openRun(reading.at, reading, control);
-    else advance(state.open, reading, control, gpm);
+    else advance(state.open, reading, control, flow);
     const { open } = state;
     if (open !== null && !open.settled && control.rampOver && state.departure === null) {
       open.settled = true;
@@ -94,7 +99,8 @@ export function createRunFold(context: PumpContext, saved?: unknown): RunFold {
     state.at = reading.at;
     state.rpm = reading.rpm;
     state.watts = reading.watts;
-    state.gpm = gpm ?? null;
+    state.gpm = flow.gpm >= 0 ? flow.gpm : -1;
+    state.sigmaShare = flow.sigmaShare;
     state.changed = true;
   }
 
@@ -122,7 +128,8 @@ export function createRunFold(context: PumpContext, saved?: unknown): RunFold {
         at,
         rpm: state.rpm,
         watts: state.watts,
-        gpm: state.gpm ?? undefined,
+        gpm: state.gpm,
+        sigmaShare: state.sigmaShare,
       });
       finish(at);
     },

@@ -3,7 +3,7 @@ import type { MotorSettings } from '../control/motor-settings.ts';
 import { speedTolerance } from '../control/speed-tolerance.ts';
 import type { Run, RunFlag } from './run.ts';
 import type { Departure, OpenRun } from './run-fold-state.ts';
-import { addSums, emptySums, settledMean } from './run-sums.ts';
+import { addSums, emptySums, type RunSums, settledMean } from './run-sums.ts';
 
 const HOUR_MS = 3_600_000;
 /** A volume is stated where the flow was known for this much of the time covered. */
@@ -38,10 +38,14 @@ export function describeRun(
     meanWatts: sums.coveredMs > 0 ? sums.wattMs / sums.coveredMs : open.firstWatts,
     wattHours: sums.wattMs / HOUR_MS,
     coveredMs: sums.coveredMs,
-    gallons: sums.gallonsMs > 0 && sums.gallonsMs >= ENOUGH_FLOW * sums.coveredMs ? sums.gallons : undefined,
+    gallons: isFlowKnown(sums) ? sums.gallons : undefined,
+    gallonsSigma: isFlowKnown(sums) ? sums.gallonsSigma : undefined,
     flags: flagsOf(open, settledRpm, expectedRpm),
   };
 }
+
+const isFlowKnown = ({ gallonsMs, coveredMs }: RunSums): boolean =>
+  gallonsMs > 0 && gallonsMs >= ENOUGH_FLOW * coveredMs;
 
 /** A gap: nothing is known of it but what was last seen before. */
 export function describeGap(open: OpenRun, from: number, to: number): Run {
@@ -58,6 +62,7 @@ export function describeGap(open: OpenRun, from: number, to: number): Run {
     wattHours: 0,
     coveredMs: 0,
     gallons: undefined,
+    gallonsSigma: undefined,
     flags: [],
   };
 }

@@ -15,10 +15,11 @@ export function followDeparture(
   state: RunFoldState,
   open: OpenRun,
   reading: Reading,
-  gpm: number | undefined,
+  gpm: number,
+  sigmaShare: number,
 ): Departure | undefined {
   const { departure } = state;
-  const end = { at: reading.at, rpm: reading.rpm, watts: reading.watts, gpm };
+  const end = { at: reading.at, rpm: reading.rpm, watts: reading.watts, gpm, sigmaShare };
   const out = open.settled && isOff(reading.rpm, settledMean(open) ?? open.firstRpm);
   if (departure === null) {
     addInterval(state, open, end, open.settled && !out);

@@ -27,7 +27,9 @@ export type RunFoldState = {
   at: number;
   rpm: number;
   watts: number;
-  gpm: number | null;
+  /** Flow and one sigma as a share of it; below 0 = unknown. */
+  gpm: number;
+  sigmaShare: number;
   open: OpenRun | null;
   departure: Departure | null;
   finished: Run[];
@@ -36,7 +38,7 @@ export type RunFoldState = {
 };
 
 export function freshRunFoldState(): RunFoldState {
-  return { at: 0, rpm: 0, watts: 0, gpm: null, open: null, departure: null, finished: [], changed: false };
+  return { at: 0, rpm: 0, watts: 0, gpm: -1, sigmaShare: 0, open: null, departure: null, finished: [], changed: false };
 }
 
 /** A saved state read back from JSON; undefined where its shape is not this version's, so that the fold starts afresh. */
@@ -44,7 +46,7 @@ export function parseRunFoldState(saved: unknown): RunFoldState | undefined {
   if (typeof saved !== 'object' || saved === null) return undefined;
   const given: Record<string, unknown> = { ...saved };
   const { at, rpm, watts, gpm, open, departure, finished, changed } = given;
-  const numbers = [at, rpm, watts, gpm ?? 0].every((value) => Number.isFinite(value));
+  const numbers = [at, rpm, watts, gpm ?? -1].every((value) => Number.isFinite(value));
   const stretches = [open, departure].every((value) => value === null || holdsSums(value));
   const fits = numbers && stretches && Array.isArray(finished) && typeof changed === 'boolean';
   return fits ? copyRunFoldState(given as RunFoldState) : undefined;
@@ -58,13 +60,21 @@ function holdsSums(value: unknown): boolean {
   );
 }
 
+/** A stretch that was saved before volumes had a sigma gets one. */
+const withSigma = <Stretch extends RunSums>(stretch: Stretch): Stretch => ({
+  ...stretch,
+  gallonsSigma: stretch.gallonsSigma ?? 0,
+});
+
 /** A copy that shares nothing which the fold writes to. */
 export function copyRunFoldState(state: RunFoldState): RunFoldState {
   const { open, departure, finished } = state;
   return {
     ...state,
-    open: open && { ...open, flags: [...open.flags] },
-    departure: departure && { ...departure },
+    gpm: state.gpm ?? -1,
+    sigmaShare: state.sigmaShare ?? 0,
+    open: open && { ...withSigma(open), flags: [...open.flags] },
+    departure: departure && withSigma(departure),
     finished: [...finished],
   };
 }

@@ -8,10 +8,21 @@ export type RunSums = {
   settledMs: number;
   gallons: number;
   gallonsMs: number;
+  /** One sigma of the gallons: the meter's error is the same all along, so that it adds up. */
+  gallonsSigma: number;
 };
 
 export function emptySums(): RunSums {
-  return { wattMs: 0, rpmMs: 0, coveredMs: 0, settledRpmMs: 0, settledMs: 0, gallons: 0, gallonsMs: 0 };
+  return {
+    wattMs: 0,
+    rpmMs: 0,
+    coveredMs: 0,
+    settledRpmMs: 0,
+    settledMs: 0,
+    gallons: 0,
+    gallonsMs: 0,
+    gallonsSigma: 0,
+  };
 }
 
 /** Adds one stretch's sums to another's. */
@@ -23,6 +34,7 @@ export function addSums(into: RunSums, from: RunSums): void {
   into.settledMs += from.settledMs;
   into.gallons += from.gallons;
   into.gallonsMs += from.gallonsMs;
+  into.gallonsSigma += from.gallonsSigma;
 }
 
 /** The mean speed of the settled part, rpm; undefined where nothing settled yet. */

@@ -25,5 +25,7 @@ export type Run = {
   coveredMs: number;
   /** US gallons; undefined where the readings cannot tell. */
   gallons: number | undefined;
+  /** One standard deviation of the gallons; undefined where they are. */
+  gallonsSigma?: number | undefined;
   flags: RunFlag[];
 };

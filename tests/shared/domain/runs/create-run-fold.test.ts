@@ -11,7 +11,8 @@ function pumpOf(given: Invented = {}) {
   const context = inventedPump({ ...given, settings: { prime: null, ...given.settings } });
   const control = createControl(context);
   const runs = createRunFold(context);
-  const push = (next: Reading, gpm?: number): void => runs.push(next, control.push(next), gpm);
+  const push = (next: Reading, gpm?: number): void =>
+    runs.push(next, control.push(next), { gpm: gpm ?? -1, sigmaShare: 0.1 });
   /** Feeds a reading every ten seconds from one instant to before another. */
   const feed = (from: string, to: string, rpm: number, more: Partial<Reading> = {}, gpm?: number): void => {
     for (let at = day(from); at < day(to); at += 10_000) push(reading(at, rpm, more), gpm);
@@ -119,7 +120,7 @@ describe('a run', () => {
       null,
       'x',
       {},
-      { at: 1, rpm: 1, watts: 1, gpm: null, open: {}, departure: null, finished: [], changed: true },
+      { at: 1, rpm: 1, watts: 1, gpm: -1, open: {}, departure: null, finished: [], changed: true },
     ]) {
       expect(createRunFold(context, saved).current()).toBeUndefined();
     }

@@ -18,7 +18,7 @@ function fold(given: readonly Reading[], cuts: ReadonlySet<number>, save: boolea
   let runs = createRunFold(CONTEXT);
   const taken: Run[] = [];
   given.forEach((reading, index) => {
-    runs.push(reading, control.push(reading), reading.rpm / 50);
+    runs.push(reading, control.push(reading), { gpm: reading.rpm / 50, sigmaShare: 0.1 });
     if (!cuts.has(index)) return;
     taken.push(...runs.take());
     if (!save) return;
@@ -35,7 +35,7 @@ function closedRuns(given: readonly Reading[]): { runs: Run[]; begins: ReadonlyS
   const fold = createRunFold(CONTEXT);
   const begins = new Set<number>();
   for (const reading of given) {
-    fold.push(reading, control.push(reading), reading.rpm / 50);
+    fold.push(reading, control.push(reading), { gpm: reading.rpm / 50, sigmaShare: 0.1 });
     begins.add(fold.current()?.from ?? START);
   }
   fold.close(given.at(-1)?.at ?? START);

@@ -1,0 +1,127 @@
+import { defineDetector, type Finding, type Spoken } from '../define-detector.ts';
+import type { RuleParameters } from '../detector-parameters.ts';
+import type { Facts } from '../facts.ts';
+import { ABNORMAL, type Judgement, NORMAL, UNJUDGED } from '../judgement.ts';
+import { mostWattsShare } from '../load/most-watts-share.ts';
+
+/**
+ * Since when the load is far above usual, and whether for long enough; when it was last usual and first above; at
+ * which speeds it was seen, with the ratio there; and the cause found.
+ */
+type State = {
+  farSince: number;
+  far: boolean;
+  usualAt: number;
+  aboveAt: number;
+  slowRpm: number;
+  slowRatio: number;
+  fastRpm: number;
+  fastRatio: number;
+  cause: string;
+};
+type Parameters = RuleParameters<'high-load'>;
+
+/** Between usual and too much in less than this is a valve; longer, something wears (common practice). */
+const AT_ONCE_MS = 30 * 60_000;
+const USUAL_RATIO = 1.06;
+/** Friction takes much more of a slow pump's watts than of a fast one's, water the same share of both. */
+const FRICTION_MORE = 1.35;
+const OTHER_SPEED = 1.2;
+/** Watts beyond what any flow could take are no water; the printed curve is good to some per cent. */
+const BEYOND_CURVE = 1.04;
+
+/** More watts than usual at one speed, and than with a clean filter: a filter that was cleaned is no trouble. */
+function judge(state: State, facts: Facts, parameters: Parameters): Judgement {
+  const { water, now } = facts;
+  if (Number.isNaN(water.ratio)) return UNJUDGED;
+  const ratio = ratioOf(facts);
+  if (ratio <= USUAL_RATIO) state.usualAt = now;
+  if (ratio <= USUAL_RATIO && state.slowRpm === 0) return NORMAL;
+  const least = parameters.aboveShare * (facts.stands('high-load') ? 1 - parameters.deadbandShare : 1);
+  if (ratio < 1 + Math.max(least, 2 * water.usualSpread)) {
+    state.farSince = 0;
+    state.aboveAt = 0;
+    if (!facts.stands('high-load')) forgetSpeeds(state);
+    return NORMAL;
+  }
+  if (state.aboveAt === 0) state.aboveAt = now;
+  if (ratio < 1 + parameters.farAboveShare) state.farSince = 0;
+  else if (state.farSince === 0) state.farSince = now;
+  state.far = state.farSince !== 0 && now - state.farSince >= parameters.farAboveSeconds * 1000;
+  seeSpeed(state, facts.control.rpm, ratio);
+  return ABNORMAL;
+}
+
+const ratioOf = ({ water }: Facts): number =>
+  water.cleanWatts > water.usualWatts ? (water.ratio * water.usualWatts) / water.cleanWatts : water.ratio;
+
+function seeSpeed(state: State, rpm: number, ratio: number): void {
+  if (state.slowRpm === 0 || rpm <= state.slowRpm) {
+    state.slowRpm = rpm;
+    state.slowRatio = ratio;
+  }
+  if (rpm >= state.fastRpm) {
+    state.fastRpm = rpm;
+    state.fastRatio = ratio;
+  }
+}
+
+function forgetSpeeds(state: State): void {
+  state.slowRpm = 0;
+  state.fastRpm = 0;
+}
+
+/**
+ * A valve opens from one moment to the next and gives no more load than the curve has; wear comes on, weighs more at
+ * low speed, and knows no such limit. Far above and at once is the way to waste: it is short and wide.
+ */
+function causeOf(state: State, facts: Facts): string {
+  const { slowRpm, fastRpm, slowRatio, fastRatio } = state;
+  const ratio = ratioOf(facts);
+  const twoSpeeds = slowRpm > 0 && fastRpm > OTHER_SPEED * slowRpm;
+  if (twoSpeeds && slowRatio - 1 > FRICTION_MORE * (fastRatio - 1)) return 'rubbing';
+  const cameOn =
+    state.usualAt !== 0 && state.aboveAt - state.usualAt > AT_ONCE_MS && facts.load.startedAt < state.usualAt;
+  if (cameOn) return 'rubbing';
+  if (state.far) return 'to-waste';
+  const most = mostWattsShare(facts.context);
+  return most !== undefined && ratio > BEYOND_CURVE * most ? 'rubbing' : 'bypass';
+}
+
+function describe(state: State, facts: Facts, _: Parameters, { raised }: Spoken): Finding {
+  const { water, load, control } = facts;
+  // Two speeds tell more than one; what was said at first stands otherwise.
+  const found = causeOf(state, facts);
+  if (!raised || (found === 'rubbing' && state.cause === 'bypass') || state.far) state.cause = found;
+  return {
+    cause: state.cause,
+    evidence: {
+      rise: Math.round((ratioOf(facts) - 1) * 100) / 100,
+      rpm: Math.round(control.rpm),
+      watts: Math.round(load.watts),
+      usualWatts: Math.round(Math.max(water.usualWatts, water.cleanWatts)),
+      riseAtLowSpeed: state.slowRpm > 0 ? Math.round((state.slowRatio - 1) * 100) / 100 : null,
+      riseAtHighSpeed: state.fastRpm > 0 ? Math.round((state.fastRatio - 1) * 100) / 100 : null,
+    },
+  };
+}
+
+export const highLoad = defineDetector<'high-load', State>({
+  detector: 'high-load',
+  hears: ['reading'],
+  initial: () => ({
+    farSince: 0,
+    far: false,
+    usualAt: 0,
+    aboveAt: 0,
+    slowRpm: 0,
+    slowRatio: 0,
+    fastRpm: 0,
+    fastRatio: 0,
+    cause: 'unknown',
+  }),
+  judge,
+  // The stretch is counted from the first reading above; far above for its own time it is said at once.
+  delaySeconds: (state, _, parameters) => (state.far ? 0 : parameters.delaySeconds),
+  describe,
+});

@@ -1,0 +1,102 @@
+import { DAY_MS, MINUTE_MS } from '#shared/domain/time/local-time.ts';
+import { defineDetector, type Finding, type Spoken } from '../define-detector.ts';
+import type { RuleParameters } from '../detector-parameters.ts';
+import type { Facts } from '../facts.ts';
+import { ABNORMAL, type Judgement, NORMAL, UNJUDGED } from '../judgement.ts';
+
+/** At which speed it was seen, what was seen, how far the flow or the watts fell, and how it came. */
+type State = { rpm: number; slow: boolean; drop: number; cause: string };
+type Parameters = RuleParameters<'low-load'>;
+
+/** A lower speed shows less of the same trouble in its watts: only a load near the usual one counts there. */
+const AS_USUAL_RATIO = 0.94;
+/** Less than this off the flow of a clean system is none. */
+const WHOLE_DROP = 0.1;
+const SAME_SPEED_SHARE = 0.97;
+/** A fall of which this much came from one day to the next came at once. */
+const AT_ONCE_SHARE = 0.7;
+/** Yesterday's watts this far under the usual ones: it has been falling for days. */
+const FALLING_RATIO = 0.93;
+/** Watts that differ this much from day to day by themselves need a deeper fall. */
+const TIMES_SPREAD = 3;
+const WIDEST_SUDDEN_SHARE = 0.35;
+
+/** Less load than usual at one speed and one setting of the valves: at once by the watts, over days by the flow. */
+function judge(state: State, facts: Facts, parameters: Parameters): Judgement {
+  const { water, control } = facts;
+  if (Number.isNaN(water.ratio)) return UNJUDGED;
+  if (state.rpm === 0 && water.ratio > AS_USUAL_RATIO && !(water.dropOfDays >= parameters.noteShare)) return NORMAL;
+  const stands = facts.stands('low-load');
+  const slow = isSlow(state, facts, parameters);
+  const share = Math.min(WIDEST_SUDDEN_SHARE, Math.max(parameters.suddenShare, TIMES_SPREAD * water.usualSpread));
+  const sudden = water.ratio < 1 - share * (stands ? 1 - parameters.deadbandShare : 1);
+  if (slow || sudden) {
+    if (!stands || (sudden && control.rpm > state.rpm)) state.rpm = control.rpm;
+    state.slow = slow && (!stands || state.slow);
+    return ABNORMAL;
+  }
+  // Below the speed at which it was seen a lesser fall proves nothing.
+  if (control.rpm < SAME_SPEED_SHARE * state.rpm && water.ratio < AS_USUAL_RATIO) return UNJUDGED;
+  if (stands && state.slow) return isFlowBack(state, facts, parameters) ? NORMAL : UNJUDGED;
+  if (!stands) state.rpm = 0;
+  return NORMAL;
+}
+
+/**
+ * The watts of an alarm that came over days may be usual by now: only the flow tells that it is over, and at another
+ * speed, where it is read otherwise, only one that is nearly whole.
+ */
+function isFlowBack({ rpm }: State, { water, control }: Facts, { noteShare, deadbandShare }: Parameters): boolean {
+  const sameSpeed = Math.abs(control.rpm / rpm - 1) <= 1 - SAME_SPEED_SHARE;
+  return water.dropNow < (sameSpeed ? noteShare * (1 - deadbandShare) : WHOLE_DROP);
+}
+
+/** Three days' median of the flow is down, and so it is by the last ten minutes; once said, those alone tell. */
+function isSlow({ slow }: State, { water, stands }: Facts, { noteShare, deadbandShare }: Parameters): boolean {
+  const least = noteShare * (1 - deadbandShare);
+  return (water.dropOfDays >= noteShare || (slow && stands('low-load'))) && water.dropNow >= least;
+}
+
+function causeOf(state: State, { water }: Facts): string {
+  if (state.slow) return water.dropAtOnce >= AT_ONCE_SHARE ? 'sudden' : 'slow';
+  return water.ratioYesterday < FALLING_RATIO ? 'slow' : 'sudden';
+}
+
+function describe(state: State, facts: Facts, parameters: Parameters, { raised }: Spoken): Finding {
+  const { water, load } = facts;
+  if (!raised) state.cause = causeOf(state, facts);
+  const flowDrop = water.dropOfDays >= 0 ? water.dropOfDays : water.dropNow;
+  const wattsDrop = 1 - water.ratio;
+  if (state.slow || !raised) state.drop = state.slow ? flowDrop : wattsDrop;
+  // What came at once is an alarm however far it went; what came over days waits for the next stop at first.
+  const note = state.slow && state.drop < parameters.alarmShare;
+  return {
+    cause: state.cause,
+    ...(state.slow && water.dropSinceDay > 0 ? { from: startOfDay(water.dropSinceDay, facts) } : {}),
+    alarmClass: note ? 'note' : 'alarm',
+    priority: note ? 'note' : 'soon',
+    evidence: {
+      drop: round(state.drop),
+      rpm: Math.round(facts.control.rpm),
+      watts: Math.round(load.watts),
+      usualWatts: Math.round(state.slow && water.cleanWatts > 0 ? water.cleanWatts : water.usualWatts),
+      flowDrop: Number.isFinite(flowDrop) ? round(flowDrop) : null,
+      gpm: Number.isFinite(water.gpm) ? Math.round(water.gpm) : null,
+      usualGpm: Number.isFinite(water.cleanGpm) ? Math.round(water.cleanGpm) : null,
+    },
+  };
+}
+
+const startOfDay = (localDay: number, { zoneOffsetMinutes }: Facts): number =>
+  localDay * DAY_MS - zoneOffsetMinutes * MINUTE_MS;
+
+const round = (share: number): number => Math.round(share * 100) / 100;
+
+export const lowLoad = defineDetector<'low-load', State>({
+  detector: 'low-load',
+  hears: ['reading'],
+  initial: () => ({ rpm: 0, slow: false, drop: 0, cause: 'sudden' }),
+  judge,
+  delaySeconds: (state, _, parameters) => (state.slow ? 0 : parameters.delaySeconds),
+  describe,
+});
