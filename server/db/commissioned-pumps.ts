@@ -12,6 +12,8 @@ import type {
   WetEndPoint,
   WiredInput,
 } from '#shared/domain/control/pump-context.ts';
+import type { DetectorParameters } from '#shared/domain/detectors/detector-parameters.ts';
+import { createRuleBook, listRuleLayers } from './rule-layers.ts';
 import type { Trippers } from './schema/clocks.ts';
 import type { Transaction } from './transaction.ts';
 
@@ -23,6 +25,8 @@ export type CommissionedPump = {
   readonly padId: string;
   readonly device: { readonly id: string; readonly serial: string } | undefined;
   readonly context: PumpContext;
+  /** The rules that hold for it. */
+  readonly rules: DetectorParameters;
 };
 
 type InputRow = {
@@ -50,6 +54,8 @@ export type CommissionedRow = {
   readonly pumpNumber: number;
   readonly companyId: string;
   readonly padId: string;
+  /** The model of the motor that is fitted now. */
+  readonly modelId: string | null;
   readonly zone: string;
   readonly area: string | null;
   readonly padState: PadState;
@@ -85,6 +91,7 @@ const equipmentColumn = sql`
 /** Columns of CommissionedRow, for a query that selects from `commissionedFrom`. */
 export const commissionedColumns = sql`
   p.id as "pumpId", p.number as "pumpNumber", p.company_id as "companyId", p.pad_id as "padId",
+  motor.model_id as "modelId",
   pad.zone, pad.area, pad.state as "padState", pad.pool_gallons as "poolGallons",
   pad.turnovers_per_day as "turnoversPerDay", p.settings, p.system_k as "systemK",
   model.traits, coalesce(p.nominal_volts, model.nominal_volts) as "nominalVolts",
@@ -114,6 +121,7 @@ export async function listCommissionedPumps(
   const { rows } = await db.execute<CommissionedRow>(
     sql`select ${commissionedColumns} from ${commissionedFrom} where p.monitored and ${which} order by p.number`,
   );
+  const rulesOf = createRuleBook(await listRuleLayers(db));
   return rows.map((row) => ({
     pumpId: row.pumpId,
     pumpNumber: row.pumpNumber,
@@ -121,6 +129,7 @@ export async function listCommissionedPumps(
     padId: row.padId,
     device: row.deviceId === null || row.serial === null ? undefined : { id: row.deviceId, serial: row.serial },
     context: toPumpContext(row),
+    rules: rulesOf(row),
   }));
 }
 

@@ -14,7 +14,7 @@ export async function reloadContexts(context: FoldContext, pumpIds: readonly str
     if (pump === undefined) context.slots.delete(pumpId);
     else {
       slot.pump = pump;
-      slot.fold = slot.fold.withContext(pump.context);
+      slot.fold = slot.fold.withContext(pump.context, pump.rules);
     }
   }
 }

@@ -39,7 +39,7 @@ export function createHistoryPump(
   cadenceSeconds: number,
   seenBy: string | undefined,
 ): HistoryPump {
-  const fold = createPumpFold({ ...pump.context, intervalSeconds: cadenceSeconds });
+  const fold = createPumpFold({ ...pump.context, intervalSeconds: cadenceSeconds }, undefined, pump.rules);
   const runs = new Map<number, Run>();
   const alarms: HistoryAlarm[] = [];
   const open = new Map<string, HistoryAlarm>();
