@@ -45,7 +45,7 @@ export function createPumpSlot(pump: CommissionedPump, state: ClaimedState, notB
   const hot = readHot(state.hot);
   return {
     pump,
-    fold: createPumpFold(pump.context, { hot: hot.fold, learnt: state.learnt }),
+    fold: createPumpFold(pump.context, { hot: hot.fold, learnt: state.learnt }, pump.rules),
     mode: 'behind',
     cursor: state.cursor,
     lastStored: state.cursor,
