@@ -8,6 +8,7 @@ import { foldMessages } from './fold-messages.ts';
 import type { FoldTask } from './fold-work.ts';
 import { reloadContexts } from './reload-contexts.ts';
 import { tickPumps } from './tick-pumps.ts';
+import { isLateDue, waitForMoreLate } from './wait-for-late.ts';
 
 /** Messages are folded together up to this many readings: beyond it a commit takes long and gains nothing. */
 const EVENTS_PER_COMMIT = 10_000;
@@ -16,8 +17,6 @@ const EVENTS_PER_COMMIT = 10_000;
  * a third of the time at most while acknowledgements want the rest. Well under the second in which all is understood.
  */
 const PAUSE_MS = { least: 40, most: 400, ofWork: 2 } as const;
-/** Late readings of a run that is still open are looked at again after this. */
-const LATE_AGAIN_MS = 5 * 60_000;
 
 /** Everything the fold does, in the order in which it is looked for. */
 export function listFoldTasks(context: FoldContext, requests: FoldRequests): FoldTask[] {
@@ -150,8 +149,8 @@ async function catchUpBetween(context: FoldContext, requests: FoldRequests): Pro
 async function correctLate(context: FoldContext): Promise<void> {
   const now = context.now();
   for (const slot of context.slots.list()) {
-    if (slot.lateAt.length === 0 || slot.lateDueAt > now || slot.mode !== 'live') continue;
-    slot.lateDueAt = now + LATE_AGAIN_MS;
+    if (slot.mode !== 'live' || !isLateDue(slot, now)) continue;
+    waitForMoreLate(slot, now);
     if (await correctLateRuns(context, slot)) context.onNews({ pumpIds: [slot.pump.pumpId], mails: 0 });
   }
 }

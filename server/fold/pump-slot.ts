@@ -5,6 +5,7 @@ import type { PumpEvent } from '#shared/domain/fold/pump-event.ts';
 import type { Run } from '#shared/domain/runs/run.ts';
 import type { ClaimedState } from './claimed-state.ts';
 import { readHot } from './saved-hot.ts';
+import { LATE_PATIENCE_MS } from './wait-for-late.ts';
 
 /**
  * A pump as this process folds it. `live` = the next event comes from memory; `behind` = its events are read from the
@@ -32,13 +33,13 @@ export type PumpSlot = {
   storedSilentSince: number | undefined;
   connection: string | undefined;
   lateAt: number[];
-  /** Late readings are next looked at then, ms. */
+  /** Late readings are looked at then, ms, at the earliest; and how things stood when they last were. */
   lateDueAt: number;
+  lateLook: { readonly at: number; readonly sight: string } | undefined;
 };
 
 /** Late readings of one pump that are remembered one by one; beyond it the span between them is. */
 const MAX_LATE = 1000;
-const LATE_PATIENCE_MS = 10_000;
 
 /** A slot that goes on from a claimed state. Its events since then have still to be read. */
 export function createPumpSlot(pump: CommissionedPump, state: ClaimedState, notBefore: number): PumpSlot {
@@ -62,6 +63,7 @@ export function createPumpSlot(pump: CommissionedPump, state: ClaimedState, notB
     connection: hot.connection,
     lateAt: [...hot.lateAt],
     lateDueAt: 0,
+    lateLook: undefined,
   };
 }
 
@@ -98,7 +100,6 @@ function noteWord(slot: PumpSlot, event: PumpEvent): void {
   slot.silentSince ??= event.receivedAt;
 }
 
-/** A backlog brings many late readings in a row: they are corrected together, a little later. */
 function noteLate(slot: PumpSlot, at: number, now: number): void {
   if (slot.lateAt.length === 0) slot.lateDueAt = now + LATE_PATIENCE_MS;
   if (slot.lateAt.length < MAX_LATE) {

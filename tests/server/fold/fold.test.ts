@@ -205,6 +205,30 @@ describe('what is stored is understood a moment later', () => {
     now = NOON;
   });
 
+  it('and a late reading within the run that is open corrects it as soon as that has closed', async () => {
+    const pump = pumps[9]!;
+    const [begin, away] = [NOON - 60 * MINUTE, NOON - 40 * MINUTE];
+    const other = (at: number) => ({ ...running1700(at), rpm: 2850, closedInputs: 1, activeInput: 1, watts: 1400 });
+    // After a break a device sends what it kept between newer readings: here two, and no gap shows.
+    const isKept = ({ at }: Reading) => at >= away && at < away + 20_000;
+    await send(
+      pump,
+      every10s(begin, NOON, running1700).filter((reading) => !isKept(reading)),
+    );
+    await send(pump, every10s(away, away + 20_000, other));
+    const lookAt = async (at: number): Promise<unknown[]> => {
+      now = at;
+      running.stream.tick();
+      await folded();
+      const runs = await query('select source from runs where pump_id = $1 order by from_at', pump.pumpId);
+      return runs.map(({ source }) => source);
+    };
+    expect(await lookAt(NOON + 15_000)).toEqual(['program']);
+    await send(pump, every10s(NOON, NOON + MINUTE, other));
+    expect(await lookAt(NOON + MINUTE)).toEqual(['program', 'input', 'program', 'input']);
+    now = NOON;
+  });
+
   it('and silence is noticed by the server’s own clock', async () => {
     const pump = pumps[4]!;
     await send(pump, every10s(NOON - 10 * MINUTE, NOON, running1700));
