@@ -3,6 +3,7 @@ import { toPumpContext } from '#server/db/commissioned-pumps.ts';
 import type { Strip } from '#shared/contract/http/pumps.ts';
 import type { Run } from '#shared/contract/http/runs.ts';
 import { planAhead } from './plan-ahead.ts';
+import { listPlanKnowledge } from './plan-knowledge-read-model.ts';
 import { presentRun } from './present-run.ts';
 import { listPumpRows } from './pump-row-read-model.ts';
 import { listRunRows } from './run-read-model.ts';
@@ -18,10 +19,11 @@ export async function listStrips({ db, now }: Context, { pumps, ...window }: Ask
     if (before === undefined) runs.set(run.pumpId, [presentRun(run)]);
     else before.push(presentRun(run));
   }
+  const known = await listPlanKnowledge(db, [...rows.keys()]);
   const strips = pumps.flatMap((pumpId): Strip[] => {
     const row = rows.get(pumpId);
     if (row === undefined) return [];
-    const planned = planAhead(toPumpContext(row), window, now);
+    const planned = planAhead({ context: toPumpContext(row), known: known.get(pumpId) }, window, now);
     return [{ pumpId, runs: runs.get(pumpId) ?? [], planned }];
   });
   return { strips, serverNow: now };

@@ -3,6 +3,7 @@ import { sayWhen } from './explain-time.ts';
 import { saySpeed, tellerOf, wordsOf } from './explain-words.ts';
 import { capitalise, fillMessage, firstKnownKey } from './fill-message.ts';
 import type { PlannedRun } from './plan.ts';
+import { spokenEdge } from './spoken-edge.ts';
 
 /**
  * What a planned run will bring, in a sentence, seen from an instant (ms). A prime counts as the start it is.
@@ -11,7 +12,11 @@ import type { PlannedRun } from './plan.ts';
  */
 export function explainNext(run: PlannedRun, at: number, context: ExplainContext, options: ExplainOptions): string {
   const teller = tellerOf(context, options);
-  const when = sayWhen(run.from, at, { zone: context.zone, hour12: options.hour12, message: teller.message });
+  const when = sayWhen(spokenEdge(run.from, context), at, {
+    zone: context.zone,
+    hour12: options.hour12,
+    message: teller.message,
+  });
   const { words, facets } = wordsOf(run.because, undefined, at, teller);
   const base = `next.${run.because.kind}`;
   const key = firstKnownKey([...facets.map((facet) => `${base}.${facet}`), base]) ?? 'next.prime';

@@ -3,6 +3,7 @@ import type { Because } from './decision.ts';
 import type { ExplainContext, ExplainOptions } from './explain-options.ts';
 import { sayMinute, sayUntil } from './explain-time.ts';
 import { fillMessage, type Message, messagesOf } from './fill-message.ts';
+import { spokenEdge } from './spoken-edge.ts';
 
 /** The words that fill a sentence. */
 export type Words = Readonly<Record<string, string | undefined>>;
@@ -54,7 +55,9 @@ export function wordsOf(
 ): { words: Words; facets: string[] } {
   const { context, options, message } = teller;
   const moment = { zone: context.zone, hour12: options.hour12, message };
-  const untilWords = until === undefined ? undefined : sayUntil(until, at, moment);
+  const isByTheClock = because.kind === 'program' || because.kind === 'off';
+  const spoken = until !== undefined && isByTheClock ? spokenEdge(until, context) : until;
+  const untilWords = spoken === undefined ? undefined : sayUntil(spoken, at, moment);
   const words: Record<string, string | undefined> = { until: untilWords, ...reasonWords(because, teller) };
   const facets = [words.duty && 'drives', words.code && 'code', untilWords && 'until'];
   return { words, facets: facets.filter((facet): facet is string => facet !== undefined && facet !== '') };

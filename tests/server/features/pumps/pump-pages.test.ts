@@ -1,6 +1,7 @@
 import { beforeAll, describe, expect, it } from 'vitest';
 import type { Pools } from '#server/db/pools.ts';
 import type { Run } from '#shared/contract/http/runs.ts';
+import { freshControlState, saveControlState } from '#shared/domain/control/control-state.ts';
 import { makeTestCompany, type TestCompany } from '#tests/support/test-company.ts';
 import { addHour } from '#tests/support/test-history.ts';
 import { openTestPools } from '#tests/support/test-pools.ts';
@@ -69,6 +70,34 @@ describe('runs of a pump', () => {
     for (const [index, run] of planned.entries()) if (index > 0) expect(run.from).toBe(planned[index - 1].to);
     const sources = new Set(planned.map(({ source }: { source: string }) => source));
     expect(sources).toEqual(new Set(['off', 'prime', 'program', 'input']));
+  });
+
+  it('are planned by the motor’s own clock where that is known to be off', async () => {
+    const other = await makeTestCompany(pools.machine);
+    const id = other.pumps[0]!.pumpId;
+    const until = server.clock.now + 30 * HOUR_MS;
+    const listStarts = async (): Promise<number[]> => {
+      const { body } = await server.ask('GET', `/api/pumps/${id}/runs?from=${start}&until=${until}`, {
+        as: other.manager,
+      });
+      const { body: strips } = await server.ask('GET', `/api/strips?pumps=${id}&from=${start}&until=${until}`, {
+        as: other.manager,
+      });
+      expect(strips.strips[0].planned).toEqual(body.planned);
+      const primes = body.planned.filter(({ source }: { source: string }) => source === 'prime');
+      return primes.map(({ from }: { from: number }) => from);
+    };
+    const right = await listStarts();
+    const control = saveControlState({ ...freshControlState(), learntOffset: -60 });
+    const hot = JSON.stringify({ fold: { control } });
+    await pools.machine.query(
+      `insert into pump_states (pump_id, company_id, pump_number, hot, heard_at)
+       select id, company_id, number, $2, now() from pumps where id = $1`,
+      [id, hot],
+    );
+    const late = right.map((from) => from + HOUR_MS).filter((from) => from < until);
+    expect(late.length).toBeGreaterThan(0);
+    expect(await listStarts()).toEqual(late);
   });
 
   it('are planned neither for the past nor for a pad that is winterized', async () => {

@@ -149,6 +149,10 @@ describe('why this speed, in a row of the fleet', () => {
     [decided('12:00', { closedInputs: 1 }), 'Input 1 closed: cleaner, until it opens'],
     [decided('12:00', { closedInputs: 2 }), 'Input 2 closed, until it opens'],
     [decided('23:30'), 'Off until 6 AM'],
+    // A motor's clock a minute or two off is right for people; half an hour is not.
+    [decided('23:30', { motorClockOffsetMinutes: -1.4 }), 'Off until 6 AM'],
+    [decided('18:00', { motorClockOffsetMinutes: 3 }), 'Evening program until 10 PM'],
+    [decided('23:30', { motorClockOffsetMinutes: -32 }), 'Off until 6:32 AM'],
     [decided('12:00', { keypadRpm: 900 }), 'On manual at the keypad'],
     [decided('12:00', { stopped: true }), 'Keypad stop'],
     [{ ...decided('12:00', { closedInputs: 1 }), source: 'program', rpm: 1725 }, 'Input 1 closed, runs program speed'],
@@ -192,6 +196,16 @@ describe('what comes next', () => {
       'Tomorrow at 2 PM the day program takes over at 1,725 rpm.',
       'Tomorrow at 5 PM the evening program takes over at 1,400 rpm.',
     ]);
+  });
+});
+
+describe('what comes next by a clock that is a minute off', () => {
+  it('is told by the program’s own times', () => {
+    const where = { zone: CONTEXT.zone, motorClockOffsetMinutes: -1 };
+    const runs = plan(CONTEXT.settings, CONTEXT.traits, where, day('18:00'), day('18:00') + 43_200_000, []);
+    expect(runs.slice(1).map((run) => explainNext(run, day('18:00'), CONTEXT, HOMEOWNER))[0]).toBe(
+      'At 10 PM the pump switches off.',
+    );
   });
 });
 
