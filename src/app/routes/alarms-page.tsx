@@ -1,6 +1,6 @@
 import { useQuery } from '@tanstack/react-query';
 import { useMemo } from 'react';
-import { Link, useSearchParams } from 'react-router-dom';
+import { useSearchParams } from 'react-router-dom';
 import type { AlarmPage } from '#shared/contract/http/alarms.ts';
 import { Figures } from '#src/components/ui/figures.tsx';
 import { PageHeading } from '#src/components/ui/page-heading.tsx';
@@ -9,16 +9,14 @@ import { AlarmFilters } from '#src/features/alarms/alarm-filters.tsx';
 import { AlarmList } from '#src/features/alarms/alarm-list.tsx';
 import { alarmQueries } from '#src/features/alarms/alarm-queries.ts';
 import { AlarmTable } from '#src/features/alarms/alarm-table.tsx';
+import { AlarmTools } from '#src/features/alarms/alarm-tools.tsx';
 import { AlarmTotals } from '#src/features/alarms/alarm-totals.tsx';
 import { alarmListFilter, parseAlarmsAddress } from '#src/features/alarms/alarms-address.ts';
-import { ExportAlarms } from '#src/features/alarms/export-alarms.tsx';
 import { SelectableAlarms } from '#src/features/alarms/selectable-alarms.tsx';
 import { WorkList } from '#src/features/alarms/work-list.tsx';
 import { StripSource } from '#src/features/pumps/strip-source.tsx';
 import { useNow } from '#src/hooks/use-now.ts';
-import { useSession } from '#src/hooks/use-session.ts';
 import { t } from '#src/lib/messages/page-words.ts';
-import { paths } from '#src/lib/paths.ts';
 
 const headingOf = ({ items, totals }: AlarmPage): string => {
   if (totals.unacknowledged > 0) return t('alarms.heading.waiting', { count: totals.unacknowledged });
@@ -30,7 +28,6 @@ export function AlarmsPage() {
   const [search] = useSearchParams();
   const { filter, view } = useMemo(() => parseAlarmsAddress(search), [search]);
   const { data } = useQuery(alarmQueries.standing());
-  const { user } = useSession();
   const now = useNow(15_000);
   const empty = { title: t('alarms.empty'), detail: t('alarms.empty.detail') };
   return (
@@ -41,16 +38,9 @@ export function AlarmsPage() {
             {data === undefined ? t('alarms.page') : <Figures text={headingOf(data)} />}
           </PageHeading>
           {data === undefined ? null : <AlarmTotals totals={data.totals} />}
+          <AlarmTools />
         </div>
         <AlarmFilters totals={data?.totals} />
-        <div data-print="never" className="flex flex-wrap items-center gap-4">
-          <ExportAlarms filter={filter} />
-          {user.role === 'manager' ? (
-            <Link to={paths.alarmHealth()} className="inline-flex min-h-8 items-center underline underline-offset-2">
-              {t('alarms.health')}
-            </Link>
-          ) : null}
-        </div>
       </div>
       {view === 'table' ? (
         <Sheet id="list" title={t('alarms.list')}>

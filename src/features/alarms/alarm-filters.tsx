@@ -7,7 +7,7 @@ import { PriorityMark } from '#src/components/ui/priority-mark.tsx';
 import { SearchField } from '#src/components/ui/search-field.tsx';
 import { Select } from '#src/components/ui/select.tsx';
 import { t } from '#src/lib/messages/page-words.ts';
-import { ALARM_SORTS, ALARM_TABS, ALARM_VIEWS, changeAlarmsAddress, parseAlarmsAddress } from './alarms-address.ts';
+import { ALARM_SORTS, ALARM_TABS, changeAlarmsAddress, parseAlarmsAddress } from './alarms-address.ts';
 
 export type AlarmFiltersProps = { readonly totals: AlarmPage['totals'] | undefined };
 
@@ -22,10 +22,10 @@ const countOf = (totals: AlarmPage['totals'] | undefined, show: (typeof ALARM_TA
     'out-of-service': totals?.outOfService ?? 0,
   })[show];
 
-/** Search, state, priority, order and form. Each stands in the address. */
+/** Search, state, priority and order. Each stands in the address. */
 export function AlarmFilters({ totals }: AlarmFiltersProps) {
   const [search, setSearch] = useSearchParams();
-  const { filter, view } = parseAlarmsAddress(search);
+  const { filter } = parseAlarmsAddress(search);
   const wordsOf = (show: (typeof ALARM_TABS)[number]) => {
     const [what, count] = [t(`alarms.show.${show}`), countOf(totals, show)];
     return count === 0 ? what : t('alarms.show.counted', { what, count });
@@ -72,13 +72,6 @@ export function AlarmFilters({ totals }: AlarmFiltersProps) {
           value={filter.sort ?? 'worst'}
           onChange={(sort) => change({ sort })}
           options={ALARM_SORTS.map((sort) => ({ value: sort, label: t(`alarms.sort.${sort}`) }))}
-        />
-        <Select
-          quiet
-          label={t('alarms.view')}
-          value={view}
-          onChange={(next) => change({ view: next })}
-          options={ALARM_VIEWS.map((each) => ({ value: each, label: t(`alarms.view.${each}`) }))}
         />
       </Folded>
     </search>

@@ -12,7 +12,7 @@ export function NoteRow({ alarm, now }: { readonly alarm: Alarm; readonly now: n
   const format = useFormat();
   const lines = [alarm.pumpName, describeSpan(alarm, format, now), describeState(alarm, format, now)];
   return (
-    <article className="border-t border-rule py-2.5 first:border-0">
+    <article className="pt-2.5">
       <h4 className="font-semibold">
         <Link
           to={paths.alarm(alarm.id)}
