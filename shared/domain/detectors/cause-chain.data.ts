@@ -37,7 +37,8 @@ const NO_WATER: readonly Detector[] = ['loss-of-prime', 'wrong-speed', 'low-load
 const NOT_RUNNING: readonly Detector[] = ['failed-prime', 'input-disagreement', ...NO_WATER];
 
 /**
- * While a detector stands, these are its consequences: they stay silent, and return to normal if they spoke first.
+ * While a detector stands, these are its consequences: they stay silent. One that spoke first stands until its own
+ * condition ends: a pump that failed to prime does not prime because its heater is on too.
  * Notes that stand for days (a wrong clock, changed settings, a missing input) explain only what they can cause, so
  * that they hide no new fault; what depends on the input or on the speed is decided in the consequence's own rule.
  */

@@ -134,11 +134,19 @@ function saveLearnt(slots: readonly Slot[]): Json {
   return saved;
 }
 
-/** What hushes a detector whatever it finds, as evidence; undefined where nothing does. */
-function hushedBy(slot: Slot, facts: Facts): Evidence | undefined {
-  const explainer = slot.explainedBy.find((other) => other.standing.raisedAt !== 0);
-  if (explainer !== undefined) return { consequenceOf: explainer.instance.detector };
-  return PAD_STATE_MUTES[facts.padState].includes(slot.instance.detector) ? { padState: facts.padState } : undefined;
+/**
+ * The pad's state, as evidence, where it mutes a detector: an alarm that stands is over then; undefined where it does
+ * not.
+ */
+function endedBy(slot: Slot, { padState }: Facts): Evidence | undefined {
+  return PAD_STATE_MUTES[padState].includes(slot.instance.detector) ? { padState } : undefined;
+}
+
+/** It would be no news: its cause stands, or one of ours is there. What has been said before goes on standing. */
+function isNoNews({ explainedBy, instance }: Slot, { onSite }: Facts): boolean {
+  if (onSite && ON_SITE_MUTES.includes(instance.detector)) return true;
+  for (const { standing } of explainedBy) if (standing.raisedAt !== 0) return true;
+  return false;
 }
 
 /** A rule that is switched off goes on learning; what stood is over. */
@@ -148,11 +156,11 @@ function hush(slot: Slot, facts: Facts, signals: AlarmSignal[]): void {
 }
 
 function settle(slot: Slot, judgement: Judgement, facts: Facts, signals: AlarmSignal[]): void {
-  const { standing, instance } = slot;
-  const hushed = hushedBy(slot, facts);
-  const visited = facts.onSite && standing.raisedAt === 0 && ON_SITE_MUTES.includes(instance.detector);
-  if (hushed !== undefined && standing.raisedAt !== 0) signals.push(clearSignal(slot, facts, hushed));
-  if (hushed !== undefined || visited) rest(standing);
+  const { standing } = slot;
+  const ended = endedBy(slot, facts);
+  const stands = standing.raisedAt !== 0;
+  if (ended !== undefined && stands) signals.push(clearSignal(slot, facts, ended));
+  if (ended !== undefined || (!stands && isNoNews(slot, facts))) rest(standing);
   else move(slot, judgement, facts, signals);
 }
 

@@ -22,6 +22,7 @@ export type ClosedEdge = readonly [day: number, minute: number, lasted: number];
 const LEARNING_DAYS = 4;
 const SAME_EDGE_MINUTES = 30;
 const REGULAR_MINUTES = 15;
+const ALIKE_SHARE = 0.7;
 /** Edges older than this say nothing about today. */
 const REMEMBERED_DAYS = 14;
 
@@ -68,8 +69,8 @@ export function keepsHours({ inputs }: PumpContext, input: number): boolean {
 }
 
 /**
- * The windows that regular edges show: the same time of day, within a quarter of an hour, on four days of the last
- * six. Empty where there is no such regularity.
+ * The windows that regular edges show: the same time of day and length, within a quarter of an hour, on four days of
+ * the last six. Empty where there is no such regularity.
  *
  * @example learnWindows(2, [[20240, 480, 119], [20241, 481, 120], [20242, 480, 120], [20243, 479, 121]])[0]?.onMinute // 480
  */
@@ -94,8 +95,12 @@ function windowOf(input: number, edges: readonly ClosedEdge[], today: number): K
   const away = edges.map(([, minute]) => clockDifference(seed, minute));
   const mean = away.reduce((sum, one) => sum + one, 0) / away.length;
   const regular = away.every((one) => Math.abs(one - mean) <= REGULAR_MINUTES);
-  const lasted = medianOf(edges.map(([, , minutes]) => minutes).filter((minutes) => minutes > 0));
+  const lengths = edges.map(([, , minutes]) => minutes).filter((minutes) => minutes > 0);
+  const lasted = medianOf(lengths);
   if (!regular || lasted === undefined) return undefined;
+  // A sun that reaches the panels at the same hour keeps it no longer: a clock's windows are as long every day.
+  const alike = lengths.filter((minutes) => Math.abs(minutes - lasted) <= REGULAR_MINUTES);
+  if (alike.length < ALIKE_SHARE * lengths.length) return undefined;
   const onMinute = (seed + mean + DAY_MINUTES) % DAY_MINUTES;
   return { input, onMinute, offMinute: (onMinute + lasted) % DAY_MINUTES, days: daysOf(edges), recorded: false };
 }
