@@ -14,6 +14,7 @@ import { mountDeviceRoutes } from './features/devices/index.ts';
 import { mountFleetRoutes } from './features/fleet/index.ts';
 import { mountHealthRoutes } from './features/health/index.ts';
 import { mountPumpRoutes } from './features/pumps/index.ts';
+import { mountRuleRoutes } from './features/rules/index.ts';
 import {
   type Authenticate,
   createAuthenticate,
@@ -85,6 +86,7 @@ export function createContainer({ env, pools, log, now, watch, clientFolder }: C
       mountAlarmRoutes(mount);
       mountAlarmHealthRoutes(mount);
       mountDeviceRoutes(mount, { hashSecret: (secret) => hashDeviceSecret(deviceKey, secret) });
+      mountRuleRoutes(mount);
       mountChangeRoutes(mount);
     },
   });

@@ -5,7 +5,7 @@ import { auditEntries } from './schema/audit-entries.ts';
 /** What a person did, and to what; `detail` holds nothing secret. */
 export type Act = {
   readonly action: string;
-  readonly subjectKind: 'alarm' | 'device';
+  readonly subjectKind: 'alarm' | 'backtest' | 'company' | 'device' | 'motor-model' | 'pad' | 'pump' | 'tariff';
   readonly subjectId: string;
   readonly detail?: Readonly<Record<string, string | number | boolean | null>>;
 };

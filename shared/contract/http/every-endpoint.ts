@@ -6,6 +6,7 @@ import { deviceEndpoints } from './devices.ts';
 import type { Endpoint } from './endpoint.ts';
 import { healthEndpoints } from './health.ts';
 import { pumpEndpoints } from './pumps.ts';
+import { ruleEndpoints } from './rules.ts';
 import { sessionEndpoints } from './session.ts';
 
 /** The whole HTTP surface, for the interface description and for tests that walk it. */
@@ -17,5 +18,6 @@ export const EVERY_ENDPOINT: readonly Endpoint[] = [
   ...Object.values(alarmActEndpoints),
   ...Object.values(alarmHealthEndpoints),
   ...Object.values(deviceEndpoints),
+  ...Object.values(ruleEndpoints),
   ...Object.values(changeEndpoints),
 ];

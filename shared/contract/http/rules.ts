@@ -75,7 +75,7 @@ export const RuleScope = z.discriminatedUnion('kind', [
 export type RuleScope = z.infer<typeof RuleScope>;
 
 /** As stored: read again by the rules, which leave out what they do not know. */
-const StoredRules = z.record(
+export const StoredRules = z.record(
   z.string(),
   z.object({
     enabled: z.boolean().optional(),

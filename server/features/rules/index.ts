@@ -1,0 +1,1 @@
+export { mountRuleRoutes } from './rule-routes.ts';
