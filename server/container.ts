@@ -11,6 +11,7 @@ import { mountAlarmHealthRoutes } from './features/alarm-health/index.ts';
 import { mountAlarmRoutes } from './features/alarms/index.ts';
 import { mountChangeRoutes } from './features/changes/index.ts';
 import { mountDeviceRoutes } from './features/devices/index.ts';
+import { mountEnergyRoutes } from './features/energy/index.ts';
 import { mountFleetRoutes } from './features/fleet/index.ts';
 import { mountHealthRoutes } from './features/health/index.ts';
 import { mountPumpRoutes } from './features/pumps/index.ts';
@@ -24,6 +25,7 @@ import {
   type EndedSessions,
   mountSessionRoutes,
 } from './features/session/index.ts';
+import { mountTariffRoutes } from './features/tariffs/index.ts';
 import { createMount } from './http/mount.ts';
 
 /** What the rest of the process says of itself, for /api/health. */
@@ -83,6 +85,8 @@ export function createContainer({ env, pools, log, now, watch, clientFolder }: C
       mountSessionRoutes(mount, sessions, authenticate);
       mountFleetRoutes(mount);
       mountPumpRoutes(mount);
+      mountEnergyRoutes(mount);
+      mountTariffRoutes(mount);
       mountAlarmRoutes(mount);
       mountAlarmHealthRoutes(mount);
       mountDeviceRoutes(mount, { hashSecret: (secret) => hashDeviceSecret(deviceKey, secret) });

@@ -1,0 +1,1 @@
+export { mountEnergyRoutes } from './energy-routes.ts';

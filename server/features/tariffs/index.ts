@@ -1,0 +1,1 @@
+export { mountTariffRoutes } from './tariff-routes.ts';
