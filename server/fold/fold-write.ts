@@ -23,6 +23,7 @@ export type FoldWrite = {
   readonly silentSince: number | undefined;
   readonly runs: readonly Run[];
   readonly signals: readonly AlarmSignal[];
+  readonly unfolded: FoldOutput['unfolded'];
 };
 
 /**
@@ -51,6 +52,7 @@ export function takeFoldWrite(
     silentSince: slot.silentSince,
     runs: chooseRuns(slot, output.runs, isDue),
     signals,
+    unfolded: output.unfolded,
   };
 }
 

@@ -35,6 +35,7 @@ export async function saveStates(context: FoldContext): Promise<void> {
 /** The same for output that was taken already. */
 export async function saveWrites(context: FoldContext, writes: readonly FoldWrite[], races = 0): Promise<void> {
   if (writes.length === 0) return;
+  if (races === 0) sayUnfolded(context, writes);
   try {
     const { written, alarms, mails } = await commitFold(context, writes);
     for (const write of writes) afterWrite(context, write, written.has(write.slot.pump.pumpId));
@@ -46,6 +47,15 @@ export async function saveWrites(context: FoldContext, writes: readonly FoldWrit
     if (fault === 'again' && races < MOST_RACES) await saveWrites(context, writes, races + 1);
     else if (fault === 'data') await saveOneByOne(context, writes, error);
     else reload(context, writes, error);
+  }
+}
+
+/** Stored before the pump's model was known, or fitted: kept, and told of by name. */
+function sayUnfolded({ log }: FoldContext, writes: readonly FoldWrite[]): void {
+  for (const { slot, unfolded } of writes) {
+    const [first] = unfolded;
+    if (first === undefined) continue;
+    log.warn({ pump: slot.pump.pumpId, readings: unfolded.length, ...first }, 'readings are not folded');
   }
 }
 

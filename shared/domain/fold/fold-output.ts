@@ -1,15 +1,21 @@
 import type { Because, RunSource } from '../control/decision.ts';
 import type { AlarmSignal } from '../detectors/detector.ts';
+import type { ReadingFault } from '../readings/check-reading.ts';
+import type { Refusal } from '../refusal/refusal.ts';
 import type { Run } from '../runs/run.ts';
 
 /**
  * What one call of the fold produced. `runs` holds every run that opened, changed or closed, each in its last state
- * and once per `from`; `signals` every alarm signal in order.
+ * and once per `from`; `signals` every alarm signal in order; `unfolded` the readings that the pump's model cannot say.
  */
 export type FoldOutput = {
   readonly runs: Run[];
   readonly signals: AlarmSignal[];
+  readonly unfolded: readonly UnfoldedReading[];
 };
+
+/** A reading that was not folded, by its device time, ms, and everything that is wrong with it. */
+export type UnfoldedReading = { readonly at: number; readonly faults: readonly Refusal<ReadingFault>[] };
 
 /** The pump this instant, derived from its state: what a screen's row shows. */
 export type PumpNow = {

@@ -4,7 +4,8 @@ import { type DetectorParameters, resolveParameters } from '../detectors/detecto
 import type { Facts } from '../detectors/facts.ts';
 import { silenceLimitMs } from '../detectors/link/link-tracker.ts';
 import type { Json } from '../detectors/plain-state.ts';
-import type { FoldOutput, PumpNow } from './fold-output.ts';
+import { checkReading, isSoundReading } from '../readings/check-reading.ts';
+import type { FoldOutput, PumpNow, UnfoldedReading } from './fold-output.ts';
 import { foldReading } from './fold-reading.ts';
 import type { PumpEvent } from './pump-event.ts';
 import { pumpNow } from './pump-now.ts';
@@ -14,8 +15,8 @@ import type { SavedPumpFold } from './saved-pump-fold.ts';
 /** The fold of one pump: from events to runs and alarm signals. */
 export type PumpFold = {
   /**
-   * Takes one event in, in order of arrival. A reading at or below `highWater` is refused, but counts as a word from
-   * the device. Throws a DetectorFailure where a rule fails; the fold is then good for nothing but being thrown away.
+   * Takes one event in, in order of arrival. A reading at or below `highWater` is refused, and so is one that its model
+   * cannot say; both count as a word from the device. Throws a DetectorFailure where a rule fails; the fold is then good for nothing but being thrown away.
    */
   push(event: PumpEvent): void;
   /** What came of the events since the last call. */
@@ -51,19 +52,24 @@ export function createPumpFold(
 
 function foldOf(commissioned: PumpContext, made: PumpParts, pending: AlarmSignal[]): PumpFold {
   let signals = pending;
+  let unfolded: UnfoldedReading[] = [];
   let parts = made;
   return {
     push: (event) => {
       const before = signals.length;
-      if (takeIn(parts, event)) parts = createPumpParts(commissioned, parts.parameters, parts.save());
+      const { traits } = commissioned;
+      const isSound = event.kind !== 'reading' || isSoundReading(event.reading, traits);
+      if (!isSound) unfolded.push({ at: event.reading.at, faults: checkReading(event.reading, traits) });
+      if (takeIn(parts, event, isSound)) parts = createPumpParts(commissioned, parts.parameters, parts.save());
       else parts.bank.judge(parts.facts, signals);
       // What an alarm speaks of is no part of what is usual.
       for (let index = before; index < signals.length; index += 1)
         if (signals[index]?.type === 'raised') parts.load.discard();
     },
     take: () => {
-      const output = { runs: parts.runs.take(), signals };
+      const output = { runs: parts.runs.take(), signals, unfolded };
       signals = [];
+      unfolded = [];
       return output;
     },
     now: () => (parts.seen() ? pumpNow(parts.facts) : undefined),
@@ -76,7 +82,7 @@ function foldOf(commissioned: PumpContext, made: PumpParts, pending: AlarmSignal
 }
 
 /** Takes an event into the facts; answers whether the device's pace turned out to be another than was thought. */
-function takeIn(parts: PumpParts, event: PumpEvent): boolean {
+function takeIn(parts: PumpParts, event: PumpEvent, isSound: boolean): boolean {
   const { facts, link, pad } = parts;
   link.hear(event);
   facts.kind = event.kind;
@@ -90,8 +96,9 @@ function takeIn(parts: PumpParts, event: PumpEvent): boolean {
   if (event.kind === 'settings') parts.hearSettings(event.settings);
   if (event.kind !== 'reading') return false;
   const late = parts.seen() && event.reading.at <= facts.reading.at;
-  // A late reading corrects history elsewhere; here it only says that the device is there.
-  if (late) {
+  // A late reading corrects history elsewhere, one that cannot be is kept as it came; here they only say that the
+  // device is there.
+  if (late || !isSound) {
     facts.kind = 'time';
     return false;
   }

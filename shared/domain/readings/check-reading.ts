@@ -26,3 +26,25 @@ export function checkReading(reading: Reading, { inputCount }: MotorTraits): Ref
   if (reading.activeInput > inputCount) faults.push({ reason: 'input-beyond-model', field: 'activeInput', allowed });
   return faults;
 }
+
+/**
+ * Whether `checkReading` finds nothing: the same bounds as plain comparisons, for every reading that is folded. NaN
+ * passes none of them.
+ *
+ * @example isSoundReading({ at: 1, rpm: 1700, closedInputs: 8, activeInput: 0, watts: 5 }, DEFAULT_TRAITS) // false
+ */
+export function isSoundReading(reading: Reading, { inputCount }: MotorTraits): boolean {
+  const { at, rpm, watts, closedInputs, activeInput } = reading;
+  return (
+    Number.isInteger(at + closedInputs + activeInput) &&
+    at >= 0 &&
+    rpm >= 0 &&
+    rpm <= 4000 &&
+    watts >= 0 &&
+    watts <= 6000 &&
+    closedInputs >= 0 &&
+    closedInputs < 1 << inputCount &&
+    activeInput >= 0 &&
+    activeInput <= inputCount
+  );
+}

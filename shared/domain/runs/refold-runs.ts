@@ -1,5 +1,6 @@
 import { createControl } from '../control/create-control.ts';
 import type { PumpContext } from '../control/pump-context.ts';
+import { isSoundReading } from '../readings/check-reading.ts';
 import type { Reading } from '../readings/reading.ts';
 import { createRunFold } from './create-run-fold.ts';
 import type { Run } from './run.ts';
@@ -30,6 +31,7 @@ export function refoldRuns(context: PumpContext, readings: readonly Reading[], s
   const fold = createRunFold(context);
   for (const reading of readings) {
     if (reading.at >= to) break;
+    if (!isSoundReading(reading, context.traits)) continue;
     const answer = control.push(reading);
     if (reading.at >= from) fold.push(reading, answer);
   }

@@ -99,6 +99,27 @@ describe('the fold of a pump', () => {
     ]);
   });
 
+  it.each([
+    ['no number', { rpm: Number.NaN }, 'rpm not-finite'],
+    ['negative watts', { watts: -3 }, 'watts too-small'],
+    ['an input beyond the model’s', { closedInputs: 8 }, 'closedInputs input-beyond-model'],
+    ['a winner beyond the model’s', { activeInput: 4 }, 'activeInput input-beyond-model'],
+  ])('refuses %s by name, and goes on as if it had not come', (_, bad, fault) => {
+    const fold = createPumpFold(CONTEXT);
+    const reading = { at: MONDAY, rpm: 1700, watts: 400, closedInputs: 0, activeInput: 0 };
+    const push = (at: number, more: object = {}) =>
+      fold.push({ kind: 'reading', reading: { ...reading, at, ...more }, receivedAt: at, single: true });
+    push(MONDAY);
+    push(MONDAY + 10_000, bad);
+    expect(fold.highWater()).toBe(MONDAY);
+    push(MONDAY + 20_000);
+    const { runs, unfolded } = fold.take();
+    expect(unfolded.map(({ at, faults }) => [at, ...faults.map(({ field, reason }) => `${field} ${reason}`)])).toEqual([
+      [MONDAY + 10_000, fault],
+    ]);
+    expect(runs.map(({ meanRpm, closedInputs }) => [meanRpm, closedInputs])).toEqual([[1700, 0]]);
+  });
+
   it('keeps hot state under 4 kB and learnt state apart', () => {
     expect(JSON.stringify(whole.saved.hot).length).toBeLessThan(4096);
     expect(JSON.stringify(whole.saved.learnt).length).toBeLessThan(16_384);
