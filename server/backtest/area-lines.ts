@@ -24,7 +24,7 @@ export const foldedPad = ({ pumpId, area }: PumpContext, fold: PumpFold): Folded
  */
 export function createAreaLines(lines: AlarmLines): AreaLines {
   const area = createAreaFold();
-  const hidden = new Map<string, AlarmSignal>();
+  const hidden = new Map<string, { readonly pad: FoldedPad; readonly signal: AlarmSignal }>();
 
   const hear = ({ serial, fold, area: name }: FoldedPad, at: number): void => {
     area.hear({ pumpId: serial, padId: serial, area: name }, fold.silentSince(), at);
@@ -39,9 +39,9 @@ export function createAreaLines(lines: AlarmLines): AreaLines {
   };
 
   const tellOwnLink = (signal: AreaSignal): void => {
-    const { type, key, detector, alarmClass, priority, cause, evidence, from, at, pumpIds } = signal;
+    const { type, key, detector, alarmClass, priority, evidence, from, at, pumpIds } = signal;
     const known = lines.find(key);
-    const words = { class: alarmClass, priority, cause, evidence, pads: pumpIds };
+    const words = { class: alarmClass, priority, cause: 'link', evidence, pads: pumpIds };
     if (type === 'cleared') {
       lines.close(key, at);
       for (const serial of pumpIds) show(serial);
@@ -50,8 +50,9 @@ export function createAreaLines(lines: AlarmLines): AreaLines {
   };
 
   const show = (serial: string): void => {
-    const signal = hidden.get(serial);
-    if (signal !== undefined) lines.take(serial, signal);
+    const own = hidden.get(serial);
+    if (own === undefined || own.pad.fold.silentSince() === undefined) return;
+    lines.take(serial, own.signal);
     hidden.delete(serial);
   };
 
@@ -70,7 +71,7 @@ export function createAreaLines(lines: AlarmLines): AreaLines {
       const covering = area.coveredBy(serial, 'silent');
       const isHidden = hidden.has(serial) || (signal.type === 'raised' && covering?.startsWith('own-link') === true);
       if (!isHidden) lines.take(serial, signal);
-      else if (signal.type === 'raised') hidden.set(serial, signal);
+      else if (signal.type === 'raised') hidden.set(serial, { pad, signal });
       else if (signal.type === 'cleared') hidden.delete(serial);
       tell();
       if (covering?.startsWith('area-silence') === true && signal.type !== 'cleared') blamePower(serial);
