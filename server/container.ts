@@ -9,6 +9,7 @@ import { openDatabase } from './db/transaction.ts';
 import type { Environment } from './env.ts';
 import { mountAlarmHealthRoutes } from './features/alarm-health/index.ts';
 import { mountAlarmRoutes } from './features/alarms/index.ts';
+import { mountBacktestRoutes } from './features/backtests/index.ts';
 import { mountChangeRoutes } from './features/changes/index.ts';
 import { mountDeviceRoutes } from './features/devices/index.ts';
 import { mountEnergyRoutes } from './features/energy/index.ts';
@@ -91,6 +92,7 @@ export function createContainer({ env, pools, log, now, watch, clientFolder }: C
       mountAlarmHealthRoutes(mount);
       mountDeviceRoutes(mount, { hashSecret: (secret) => hashDeviceSecret(deviceKey, secret) });
       mountRuleRoutes(mount);
+      mountBacktestRoutes(mount);
       mountChangeRoutes(mount);
     },
   });

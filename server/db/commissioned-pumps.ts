@@ -24,6 +24,8 @@ export type CommissionedPump = {
   readonly companyId: string;
   readonly padId: string;
   readonly device: { readonly id: string; readonly serial: string } | undefined;
+  /** The model of the motor that is fitted now. */
+  readonly modelId: string | null;
   readonly context: PumpContext;
   /** The rules that hold for it. */
   readonly rules: DetectorParameters;
@@ -127,6 +129,7 @@ export async function listCommissionedPumps(
     pumpNumber: row.pumpNumber,
     companyId: row.companyId,
     padId: row.padId,
+    modelId: row.modelId,
     device: row.deviceId === null || row.serial === null ? undefined : { id: row.deviceId, serial: row.serial },
     context: toPumpContext(row),
     rules: rulesOf(row),

@@ -7,7 +7,8 @@ import type { PumpEvent } from '#shared/domain/fold/pump-event.ts';
 /** An event of one pump with its place in the order of arrival. */
 export type StoredEvent = { readonly pumpNumber: number; readonly sequence: number; readonly event: PumpEvent };
 
-type EventRow = ReadingRow & {
+/** A row of a reading, a status or settings as it was stored. */
+export type EventRow = ReadingRow & {
   readonly sequence: number;
   readonly pump_number: number;
   readonly received_at: number;
@@ -53,7 +54,7 @@ export async function* readStoredEvents(
 }
 
 /** An event that the wire's decoder does not read any more is passed over: it was read once, when it came. */
-function toStoredEvent(row: EventRow): StoredEvent | undefined {
+export function toStoredEvent(row: EventRow): StoredEvent | undefined {
   const event = toPumpEvent(row);
   return event && { pumpNumber: row.pump_number, sequence: row.sequence, event };
 }

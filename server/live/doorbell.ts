@@ -9,6 +9,8 @@ export type Channel =
   | 'millrace_context'
   /** A device whose secret was set, rotated or revoked, by serial. */
   | 'millrace_credentials'
+  /** A backtest waits. */
+  | 'millrace_backtest'
   /** The outbox has new mail. */
   | 'millrace_mail';
 

@@ -1,1 +1,2 @@
+export { readRules } from './read-rules.ts';
 export { mountRuleRoutes } from './rule-routes.ts';

@@ -1,6 +1,7 @@
 import { alarmActEndpoints } from './alarm-acts.ts';
 import { alarmHealthEndpoints } from './alarm-health.ts';
 import { alarmEndpoints } from './alarms.ts';
+import { backtestEndpoints } from './backtests.ts';
 import { baselineEndpoints } from './baselines.ts';
 import { changeEndpoints } from './changes.ts';
 import { deviceEndpoints } from './devices.ts';
@@ -29,5 +30,6 @@ export const EVERY_ENDPOINT: readonly Endpoint[] = [
   ...Object.values(tariffEndpoints),
   ...Object.values(deviceEndpoints),
   ...Object.values(ruleEndpoints),
+  ...Object.values(backtestEndpoints),
   ...Object.values(changeEndpoints),
 ];

@@ -1,0 +1,1 @@
+export { mountBacktestRoutes } from './backtest-routes.ts';
