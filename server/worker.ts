@@ -1,3 +1,4 @@
+import { createBacktestRunner } from './backtest/stored/backtest-runner.ts';
 import { deriveRoleUrl } from './db/database-roles.ts';
 import { createPools } from './db/pools.ts';
 import { announceAssignments } from './jobs/announce-assignments.ts';
@@ -35,10 +36,23 @@ await runProgram('worker', async ({ env, log, progress, atEnd }) => {
   atEnd(sender.stop);
 
   const scheduler = createScheduler({
-    jobs: [silenceSetAside, escalateAlarms, endExplanations, announceAssignments, keepPartitions, cleanUpTables, rollUp],
+    jobs: [
+      silenceSetAside,
+      escalateAlarms,
+      endExplanations,
+      announceAssignments,
+      keepPartitions,
+      cleanUpTables,
+      rollUp,
+    ],
     context: { pool: machine, publicUrl: env.publicUrl, now: Date.now, log },
     leadership: createLeadership(machineUrl),
   });
+  const backtests = createBacktestRunner({ pool: machine, now: Date.now, log });
+  doorbell.on('millrace_backtest', backtests.wake);
+  backtests.start();
+  atEnd(backtests.stop);
+
   scheduler.start();
   atEnd(scheduler.stop);
   progress('Sending alarm mail');
