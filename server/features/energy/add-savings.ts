@@ -12,27 +12,25 @@ function addMoney(left: string | null, right: string | null): string | null {
 /** What several pumps of a pad saved together. Their baselines err apart from one another, so sigmas add as squares. */
 export function addSavings(parts: readonly Saved[]): Saved | null {
   const [first, ...others] = parts;
-  if (first === undefined) return null;
-  return others.reduce<Saved>(
-    (sum, part) => ({
-      ...sum,
-      baselineKwh: sum.baselineKwh + part.baselineKwh,
-      actualKwh: sum.actualKwh + part.actualKwh,
-      savedKwh: sum.savedKwh + part.savedKwh,
-      sigmaKwh: Math.hypot(sum.sigmaKwh, part.sigmaKwh),
-      saved: addMoney(sum.saved, part.saved),
-      sigma: sum.sigma === null || part.sigma === null ? null : hypotMoney(sum.sigma, part.sigma),
-      method: sum.method === 'A' || part.method === 'A' ? 'A' : 'B',
-      stipulated: [...new Set([...sum.stipulated, ...part.stipulated])],
-      coverage: (sum.coverage + part.coverage) / 2,
-      carbon:
-        sum.carbon === null || part.carbon === null
-          ? null
-          : { ...sum.carbon, kilograms: sum.carbon.kilograms + part.carbon.kilograms },
-    }),
-    first,
-  );
+  return first === undefined ? null : others.reduce(addTwo, first);
 }
+
+const addTwo = (sum: Saved, part: Saved): Saved => ({
+  baselineKwh: sum.baselineKwh + part.baselineKwh,
+  actualKwh: sum.actualKwh + part.actualKwh,
+  savedKwh: sum.savedKwh + part.savedKwh,
+  sigmaKwh: Math.hypot(sum.sigmaKwh, part.sigmaKwh),
+  saved: addMoney(sum.saved, part.saved),
+  sigma: sum.sigma === null || part.sigma === null ? null : hypotMoney(sum.sigma, part.sigma),
+  method: sum.method === 'A' || part.method === 'A' ? 'A' : 'B',
+  stipulated: [...new Set([...sum.stipulated, ...part.stipulated])],
+  coverage: Math.min(sum.coverage, part.coverage),
+  baseline: sum.baseline,
+  carbon:
+    sum.carbon === null || part.carbon === null
+      ? null
+      : { ...sum.carbon, kilograms: sum.carbon.kilograms + part.carbon.kilograms },
+});
 
 function hypotMoney(left: string, right: string): string {
   const decimals = left.split('.')[1]?.length ?? 0;

@@ -1,7 +1,10 @@
 import { beforeAll, describe, expect, it } from 'vitest';
+import type { Pools } from '#server/db/pools.ts';
+import { presentTariff } from '#server/features/tariffs/tariff-shape.ts';
 import { Problem } from '#shared/contract/errors.ts';
 import type { Endpoint } from '#shared/contract/http/endpoint.ts';
 import { EVERY_ENDPOINT } from '#shared/contract/http/every-endpoint.ts';
+import { TWO_TIER } from '#tests/shared/domain/energy/sample-tariffs.ts';
 import { makeTestCompany, type TestCompany, type TestPerson } from '#tests/support/test-company.ts';
 import { addAlarm, addDeviceTraces, addHour, setState } from '#tests/support/test-history.ts';
 import { openTestPools } from '#tests/support/test-pools.ts';
@@ -22,11 +25,23 @@ beforeAll(async () => {
     await setState(pools.machine, pumpId, at);
     await addHour(pools.machine, pumpId, new Date(at.getTime() - 3_600_000));
     await addDeviceTraces(pools.machine, pumpId, deviceId, at);
-    return { pumpId, deviceId, alarmId: await addAlarm(pools.machine, pumpId, { from: at }) };
+    const { padId, tariffId } = await addTariff(pools, pumpId);
+    return { pumpId, deviceId, padId, tariffId, alarmId: await addAlarm(pools.machine, pumpId, { from: at }) };
   };
   ids = { ours: await idsOf(ours.pumps[0]!), neighbours: await idsOf(ours.pumps[2]!) };
   await idsOf(theirs.pumps[0]!);
 });
+
+/** A tariff of the pump's company, and where the pump stands. */
+async function addTariff({ machine }: Pools, pumpId: string) {
+  const { rows } = await machine.query<{ companyId: string; padId: string; tariffId: string }>(
+    `insert into tariffs (id, company_id, name, tariff) select gen_random_uuid(), company_id, 'Tariff ' || number, $2
+     from pumps where id = $1
+     returning id as "tariffId", company_id as "companyId", (select pad_id from pumps where id = $1) as "padId"`,
+    [pumpId, JSON.stringify(TWO_TIER)],
+  );
+  return rows[0]!;
+}
 
 /** A query every endpoint with a window, a cursor or a list of pumps accepts. */
 const queryFor = ({ path }: Endpoint, { pumpId }: Record<string, string>) => {
@@ -50,6 +65,9 @@ const BODIES: Readonly<Record<string, unknown>> = {
   '/api/alarms/:alarmId/out-of-service': { reason: 'the pool is being rebuilt' },
   '/api/alarms/:alarmId/assignment': { technicianId: crypto.randomUUID() },
   '/api/alarms/:alarmId/done': { found: 'set the clock' },
+  '/api/tariffs/:tariffId': presentTariff(TWO_TIER),
+  '/api/pads/:padId/tariff-terms': { terms: [] },
+  '/api/pumps/:pumpId/baseline': { baseline: null },
   '/api/alarms/acts': { acts: [{ alarmId: crypto.randomUUID(), act: { kind: 'acknowledge' } }] },
 };
 
