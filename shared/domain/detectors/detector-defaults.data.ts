@@ -74,6 +74,15 @@ export const DETECTOR_DEFAULTS = {
     farAboveShare: 0.3,
     farAboveSeconds: 1200,
   },
+  'too-little-water': {
+    days: 3,
+    coverageShare: 0.9,
+    // The flow is known to some per cent: what misses the target by less may well meet it.
+    shortShare: 0.93,
+    shortMinutes: 60,
+    shortDays: 2,
+    offDelaySeconds: 0,
+  },
   'motor-clock': { offMinutes: 15, clockSeconds: 3600, edges: 3, deadbandMinutes: 3.75, offDelaySeconds: 600 },
   'clock-shift': {
     shiftMinutes: 15,

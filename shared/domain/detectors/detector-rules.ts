@@ -21,6 +21,7 @@ import { slowPrime } from './rules/slow-prime.ts';
 import { stopped } from './rules/stopped.ts';
 import { stuckInput } from './rules/stuck-input.ts';
 import { supplyVoltage } from './rules/supply-voltage.ts';
+import { tooLittleWater } from './rules/too-little-water.ts';
 import { unexpectedRun } from './rules/unexpected-run.ts';
 import { wrongSpeed } from './rules/wrong-speed.ts';
 
@@ -48,6 +49,7 @@ export const DETECTOR_RULES: readonly DetectorFactory[] = [
   stopped,
   stuckInput,
   supplyVoltage,
+  tooLittleWater,
   unexpectedRun,
   wrongSpeed,
 ];

@@ -1,4 +1,6 @@
 import type { PumpContext } from '#shared/domain/control/pump-context.ts';
+import { CAUSE_CHAIN, CONSEQUENCES } from '../cause-chain.data.ts';
+import type { Detector } from '../detector.ts';
 import type { Facts } from '../facts.ts';
 import { type Json, restoreState, saveChanges } from '../plain-state.ts';
 import { type LevelSummary, summarizeLevel } from './level-summary.ts';
@@ -32,6 +34,10 @@ export type WaterTracker = {
 const AFTER_START_MS = 300_000;
 const AFTER_CHANGE_SECONDS = 60;
 const SAMPLE_MS = 600_000;
+/** While one of these stands, what the pump draws is not usual. */
+const LOAD_ALARMS: readonly Detector[] = CAUSE_CHAIN.filter(
+  (one) => one === 'low-load' || one === 'high-load' || CONSEQUENCES[one]?.includes('low-load'),
+);
 /** What these drive turns valves: the same speed on other pipes. */
 const VALVE_DUTIES: readonly unknown[] = ['solar', 'spa', 'feature'];
 
@@ -80,7 +86,7 @@ export function createWaterTracker(context: PumpContext, hot: unknown, learnt: u
     const [watts, rpm] = [state.wattMs / state.ms, state.rpmMs / state.ms];
     endStretch(state);
     if (!(watts > 0)) return;
-    const alarmed = facts.stands('low-load') || facts.stands('high-load') || facts.stands('loss-of-prime');
+    const alarmed = LOAD_ALARMS.some(facts.stands);
     level = makeLevel(levels, rpm, valves, facts.localDay);
     if (level.alarmed && !alarmed) forgetToday(level);
     const closedDay = addSample(level, watts, facts.localDay, facts.load.startedAt, alarmed);
