@@ -24,7 +24,7 @@ export async function correctLateRuns({ pool, epoch }: Options, slot: PumpSlot):
     if (touched === undefined) return undefined;
     const { from, to } = touched;
     const readings = await listReadings(client, pumpNumber, from - LEAD_IN_MS, to);
-    const runs = refoldRuns(context, readings, { from, to, lateAt });
+    const runs = refoldRuns(context, readings, { from, to, lateAt, stored });
     await replaceRuns(client, { epoch, pumpId, from, to }, runs);
     return touched;
   });

@@ -17,16 +17,17 @@ written as (
   returning s.pump_id, s.company_id),
 ran as (
   insert into runs (pump_id, company_id, from_at, to_at, covered_ms, watt_hours, expected_rpm, mean_rpm, mean_watts,
-    gallons, closed_inputs, active_input, source, expected_source, flags)
+    gallons, gallons_sigma, closed_inputs, active_input, source, expected_source, flags)
   select r.pump_id, w.company_id, to_timestamp(r.from_at / 1000), to_timestamp(r.to_at / 1000), r.covered_ms, r.watt_hours,
-    r.expected_rpm, r.mean_rpm, r.mean_watts, r.gallons, r.closed_inputs, r.active_input, r.source, r.expected_source, r.flags
+    r.expected_rpm, r.mean_rpm, r.mean_watts, r.gallons, r.gallons_sigma, r.closed_inputs, r.active_input, r.source, r.expected_source, r.flags
   from json_to_recordset($3::json) as r(pump_id uuid, from_at float8, to_at float8, covered_ms bigint, watt_hours float8,
-    expected_rpm real, mean_rpm real, mean_watts real, gallons real, closed_inputs int2, active_input int2, source text,
+    expected_rpm real, mean_rpm real, mean_watts real, gallons real, gallons_sigma real, closed_inputs int2, active_input int2, source text,
     expected_source text, flags text[])
   join written w on w.pump_id = r.pump_id
   on conflict (pump_id, from_at) do update set to_at = excluded.to_at, covered_ms = excluded.covered_ms,
     watt_hours = excluded.watt_hours, expected_rpm = excluded.expected_rpm, mean_rpm = excluded.mean_rpm,
-    mean_watts = excluded.mean_watts, gallons = excluded.gallons, closed_inputs = excluded.closed_inputs,
+    mean_watts = excluded.mean_watts, gallons = excluded.gallons, gallons_sigma = excluded.gallons_sigma,
+    closed_inputs = excluded.closed_inputs,
     active_input = excluded.active_input, source = excluded.source, expected_source = excluded.expected_source,
     flags = excluded.flags),
 learnt as (
@@ -85,6 +86,7 @@ export function toRunJson(pumpId: string, run: Run): string {
     mean_rpm: run.meanRpm,
     mean_watts: run.meanWatts,
     gallons: run.gallons,
+    gallons_sigma: run.gallonsSigma,
     closed_inputs: run.closedInputs,
     active_input: run.activeInput,
     source: run.source,

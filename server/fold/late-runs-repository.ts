@@ -7,10 +7,11 @@ import { toRunJson } from './fold-repository.ts';
 
 type Database = Pick<pg.ClientBase, 'query'>;
 
-type RunRow = Omit<Run, 'from' | 'to' | 'gallons'> & {
+type RunRow = Omit<Run, 'from' | 'to' | 'gallons' | 'gallonsSigma'> & {
   readonly from: number;
   readonly to: number | null;
   readonly gallons: number | null;
+  readonly gallonsSigma: number | null;
 };
 
 /** The stored runs of a pump that began at or after an instant, and the one before them, in order. */
@@ -19,17 +20,18 @@ export async function listStoredRuns(database: Database, pumpId: string, from: n
     `select date_part('epoch', from_at) * 1000 as from, date_part('epoch', to_at) * 1000 as to, source,
        expected_source as "expectedSource", closed_inputs as "closedInputs", active_input as "activeInput",
        expected_rpm as "expectedRpm", mean_rpm as "meanRpm", mean_watts as "meanWatts", watt_hours as "wattHours",
-       covered_ms::float8 as "coveredMs", gallons, flags
+       covered_ms::float8 as "coveredMs", gallons, gallons_sigma as "gallonsSigma", flags
      from runs where pump_id = $1 and from_at >= coalesce(
        (select max(from_at) from runs where pump_id = $1 and from_at < to_timestamp($2::float8 / 1000)), '-infinity')
      order by from_at`,
     [pumpId, from],
   );
-  return rows.map(({ from: begin, to, gallons, ...run }) => ({
+  return rows.map(({ from: begin, to, gallons, gallonsSigma, ...run }) => ({
     ...run,
     from: Math.round(begin),
     to: to === null ? undefined : Math.round(to),
     gallons: gallons ?? undefined,
+    gallonsSigma: gallonsSigma ?? undefined,
   }));
 }
 
@@ -72,12 +74,12 @@ export async function replaceRuns(
   );
   await database.query(
     `insert into runs (pump_id, company_id, from_at, to_at, covered_ms, watt_hours, expected_rpm, mean_rpm, mean_watts,
-       gallons, closed_inputs, active_input, source, expected_source, flags)
+       gallons, gallons_sigma, closed_inputs, active_input, source, expected_source, flags)
      select p.id, p.company_id, to_timestamp(r.from_at / 1000), to_timestamp(r.to_at / 1000), r.covered_ms, r.watt_hours,
-       r.expected_rpm, r.mean_rpm, r.mean_watts, r.gallons, r.closed_inputs, r.active_input, r.source, r.expected_source,
+       r.expected_rpm, r.mean_rpm, r.mean_watts, r.gallons, r.gallons_sigma, r.closed_inputs, r.active_input, r.source, r.expected_source,
        r.flags
      from json_to_recordset($1::json) as r(pump_id uuid, from_at float8, to_at float8, covered_ms bigint,
-       watt_hours float8, expected_rpm real, mean_rpm real, mean_watts real, gallons real, closed_inputs int2,
+       watt_hours float8, expected_rpm real, mean_rpm real, mean_watts real, gallons real, gallons_sigma real, closed_inputs int2,
        active_input int2, source text, expected_source text, flags text[])
      join pumps p on p.id = r.pump_id`,
     [`[${runs.map((run) => toRunJson(pumpId, run)).join(',')}]`],

@@ -33,6 +33,8 @@ export const runs = pgTable(
     meanWatts: real('mean_watts').notNull(),
     /** US gallons; null where the readings cannot tell. */
     gallons: real(),
+    /** One standard deviation of the gallons. */
+    gallonsSigma: real('gallons_sigma'),
     closedInputs: smallint('closed_inputs').notNull(),
     activeInput: smallint('active_input').notNull(),
     source: text().$type<RunSource>().notNull(),

@@ -21,11 +21,11 @@ export async function makePartitionsBetween(database: Database, from: number, to
 }
 
 const RUNS = `insert into runs (pump_id, company_id, from_at, to_at, covered_ms, watt_hours, expected_rpm, mean_rpm, mean_watts,
-    gallons, closed_inputs, active_input, source, expected_source, flags)
+    gallons, gallons_sigma, closed_inputs, active_input, source, expected_source, flags)
   select r.pump_id, $2::uuid, to_timestamp(r.from_at / 1000), to_timestamp(r.to_at / 1000), r.covered_ms, r.watt_hours,
-    r.expected_rpm, r.mean_rpm, r.mean_watts, r.gallons, r.closed_inputs, r.active_input, r.source, r.expected_source, r.flags
+    r.expected_rpm, r.mean_rpm, r.mean_watts, r.gallons, r.gallons_sigma, r.closed_inputs, r.active_input, r.source, r.expected_source, r.flags
   from json_to_recordset($1::json) as r(pump_id uuid, from_at float8, to_at float8, covered_ms bigint, watt_hours float8,
-    expected_rpm real, mean_rpm real, mean_watts real, gallons real, closed_inputs int2, active_input int2, source text,
+    expected_rpm real, mean_rpm real, mean_watts real, gallons real, gallons_sigma real, closed_inputs int2, active_input int2, source text,
     expected_source text, flags text[])
   on conflict do nothing`;
 

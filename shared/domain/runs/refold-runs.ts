@@ -3,6 +3,7 @@ import type { PumpContext } from '../control/pump-context.ts';
 import { isSoundReading } from '../readings/check-reading.ts';
 import type { Reading } from '../readings/reading.ts';
 import { createRunFold } from './create-run-fold.ts';
+import { flowOfRuns } from './flow-of-runs.ts';
 import type { Run } from './run.ts';
 
 /**
@@ -16,6 +17,8 @@ export type Stretch = {
   readonly controlStart?: unknown;
   /** Device times of the readings that came late. */
   readonly lateAt: readonly number[];
+  /** The stored runs about the stretch: their flow is what the corrected ones are told. */
+  readonly stored?: readonly Run[] | undefined;
 };
 
 /**
@@ -29,11 +32,12 @@ export function refoldRuns(context: PumpContext, readings: readonly Reading[], s
   const { from, to = Number.POSITIVE_INFINITY } = stretch;
   const control = createControl(context, stretch.controlStart);
   const fold = createRunFold(context);
+  const flowAt = flowOfRuns(stretch.stored ?? []);
   for (const reading of readings) {
     if (reading.at >= to) break;
     if (!isSoundReading(reading, context.traits)) continue;
     const answer = control.push(reading);
-    if (reading.at >= from) fold.push(reading, answer);
+    if (reading.at >= from) fold.push(reading, answer, flowAt(reading.rpm));
   }
   if (Number.isFinite(to)) fold.close(to);
   return fold

@@ -38,6 +38,18 @@ describe('runs folded again', () => {
     expect(again).toMatchObject([{ from, to: undefined, source: 'program', flags: ['late-corrected'] }]);
   });
 
+  it('move the water that the stored runs tell of at their speed, with its sigma', () => {
+    const before = steady('11:00', '12:00', 1700);
+    const late = steady('12:00', '12:30', 1700);
+    const stored = fold(before).map((run) => ({ ...run, gallons: 1800, gallonsSigma: 180 }));
+    const stretch = { from: day('11:00'), lateAt: late.map(({ at }) => at), stored };
+    const [told] = refoldRuns(CONTEXT, [...before, ...late], stretch);
+
+    expect(told?.gallons).toBeCloseTo(1.5 * 1800, -1);
+    expect(told?.gallonsSigma).toBeCloseTo(1.5 * 180, -1);
+    expect(refoldRuns(CONTEXT, [...before, ...late], { ...stretch, stored: [] })[0]?.gallons).toBeUndefined();
+  });
+
   it('end where a later stored run begins', () => {
     const readings = [
       ...steady('05:50', '06:00', 0),
