@@ -81,10 +81,11 @@ function listLikely(record: AlarmRecord, { zone }: MailPlace, found: FoundCounts
   const listed = causes.filter(({ standing }) => standing !== 'unlikely').slice(0, MOST_CAUSES);
   return {
     guess: !certain,
-    causes: listed.map(({ name, check, reasonsFor, reasonsAgainst, found: times, calls }) => ({
+    causes: listed.map(({ name, check, detectorSays, reasonsFor, reasonsAgainst, found: times, calls }) => ({
       name,
       check,
       reasons: [
+        ...(detectorSays ? ['for it: the rule read it from the figures'] : []),
         ...reasonsFor.map((reason) => `for it: ${reason}`),
         ...reasonsAgainst.map((reason) => `against it: ${reason}`),
         ...(times > 0 ? [`found in ${times} of ${calls} of our own cases`] : []),
