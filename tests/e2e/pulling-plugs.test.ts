@@ -11,7 +11,7 @@ import { type Desk, MANAGER, openSignedIn } from './people.ts';
 import { failToPrime, type PlayedDevice, playDevice } from './played-device.ts';
 import { openProduct } from './product.ts';
 import { waitUntilDrawn } from './screens.ts';
-import { type Said, type Ticking, tick } from './ticking.ts';
+import { HELD_TICKS, type Said, type Ticking, tick } from './ticking.ts';
 
 /** Pumps that nobody simulates, each for one thing. */
 const UNMAILED = { serial: 'MR-000206', pad: 'Pebble Drive 90', primeSeconds: 150, programRpm: 1450 };
@@ -147,8 +147,6 @@ describe('the server process, when it is killed', () => {
   it('is started again, and the open pages miss nothing of what happened meanwhile', async () => {
     const [ticker, other] = [await play(TICKING.serial), await play(MISSED.serial)];
     const pumpId = await findPumpId(TICKING.pad);
-    // It stands, so that what it said in the test before does not go on in the first run.
-    await ticker.publish([{ t: Date.now(), rpm: 0, w: 6, src: 'off' }]);
     const began = Date.now();
     const ticking = startTicking(ticker);
     const [runs, alarms] = [await openRuns(pumpId), await openPage('/alarms')];
@@ -166,17 +164,20 @@ describe('the server process, when it is killed', () => {
     // Runs before, during and after.
     const turns = ticking.turns() + 2;
     expect(await waitUntil(() => ticking.turns() >= turns, BACK_WITHIN_MS)).toBe(true);
-    await expectStored(pumpId, await ticking.settle());
+    const said = await ticking.settle();
+    await expectStored(pumpId, said);
 
     await alarms.getByRole('article').filter({ hasText: MISSED.pad }).first().waitFor();
     const open = await ask<AlarmPage>('/api/alarms?alarmClass=alarm&show=open');
     expect(await readAlarmIds(alarms)).toEqual(open.items.map(({ id }) => id).sort());
 
-    // Stored is not yet understood: every turn is a run once the last of them is.
+    // Stored is not yet understood: every turn is a run once the last of them is. What the pump did before may go on
+    // in the first.
+    const secondTurn = said[HELD_TICKS]?.t ?? 0;
     const window = `from=${began - DAY_MS}&until=${Date.now() + DAY_MS}`;
     const listKept = async () => (await ask<{ runs: Run[] }>(`/api/pumps/${pumpId}/runs?${window}`)).runs;
-    const countNew = async () => (await listKept()).filter(({ from }) => from >= began).length;
-    await expect.poll(countNew, { timeout: BACK_WITHIN_MS, interval: 500 }).toBe(ticking.turns());
+    const countNew = async () => (await listKept()).filter(({ from }) => from >= secondTurn).length;
+    await expect.poll(countNew, { timeout: BACK_WITHIN_MS, interval: 500 }).toBe(ticking.turns() - 1);
     const kept = await listKept();
     const fresh = await openRuns(pumpId);
     const isAlike = async () => JSON.stringify(await readRuns(runs)) === JSON.stringify(await readRuns(fresh));

@@ -16,7 +16,7 @@ export type Ticking = {
 
 const TICK_MS = 500;
 /** A speed is held for so many readings, then another one is commanded: each opens a run. */
-const HELD_TICKS = 6;
+export const HELD_TICKS = 6;
 const SPEEDS = [
   { rpm: 1500, src: 'program' },
   { rpm: 2100, src: 'keypad' },
