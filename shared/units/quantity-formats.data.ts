@@ -18,8 +18,8 @@ const whole = (): number => 0;
 const oneDecimal = (): number => 1;
 /** One decimal where a whole number would hide a tenth of the value or more. */
 const oneBelowTen = (shown: number): number => (Math.abs(shown) < 9.95 ? 1 : 0);
-/** Three figures below a hundred. */
-const twoBelowTen = (shown: number): number => (Math.abs(shown) < 9.995 ? 2 : 1);
+/** Three figures below a thousand. */
+const threeFigures = (shown: number): number => (Math.abs(shown) < 9.995 ? 2 : Math.abs(shown) < 99.95 ? 1 : 0);
 
 /** Kept in rpm, W, Wh, US gpm, US gallons, feet (of head, or of pipe), psi and °C. */
 export const QUANTITY_FORMATS = {
@@ -32,8 +32,8 @@ export const QUANTITY_FORMATS = {
     si: { unit: 'W', convert: same, decimals: whole },
   },
   energy: {
-    us: { unit: 'kWh', convert: wattHoursToKilowattHours, decimals: twoBelowTen },
-    si: { unit: 'kWh', convert: wattHoursToKilowattHours, decimals: twoBelowTen },
+    us: { unit: 'kWh', convert: wattHoursToKilowattHours, decimals: threeFigures },
+    si: { unit: 'kWh', convert: wattHoursToKilowattHours, decimals: threeFigures },
   },
   flow: {
     us: { unit: 'gpm', convert: same, decimals: oneBelowTen },

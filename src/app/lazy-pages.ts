@@ -6,6 +6,8 @@ export const LAZY_PAGES = {
   alarms: { Component: async () => (await import('./routes/alarms-page.tsx')).AlarmsPage },
   alarm: { Component: async () => (await import('./routes/alarm-page.tsx')).AlarmPage },
   alarmHealth: { Component: async () => (await import('./routes/alarm-health-page.tsx')).AlarmHealthPage },
+  energy: { Component: async () => (await import('./routes/energy-page.tsx')).EnergyPage },
+  padEnergy: { Component: async () => (await import('./routes/pad-energy-page.tsx')).PadEnergyPage },
   myPump: { Component: async () => (await import('./routes/my-pump-page.tsx')).MyPumpPage },
   profile: { Component: async () => (await import('./routes/profile-page.tsx')).ProfilePage },
 } as const;

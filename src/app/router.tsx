@@ -29,6 +29,8 @@ export function createRouter(client: QueryClient) {
             { path: 'alarms', loader: load.alarms, lazy: LAZY_PAGES.alarms },
             { path: 'alarms/health', loader: load.managers, lazy: LAZY_PAGES.alarmHealth },
             { path: 'alarms/:alarmId', loader: load.alarm, lazy: LAZY_PAGES.alarm },
+            { path: 'energy', loader: load.managers, lazy: LAZY_PAGES.energy },
+            { path: 'energy/pads/:padId', loader: load.managers, lazy: LAZY_PAGES.padEnergy },
             { path: 'my-pump', loader: load.myPump, lazy: LAZY_PAGES.myPump },
             { path: 'profile', lazy: LAZY_PAGES.profile },
             { path: '*', Component: NotFoundPage },

@@ -16,6 +16,9 @@ export const paths = {
   alarms: (query: Readonly<Record<string, string | undefined>> = {}) => withQuery('/alarms', query),
   alarm: (alarmId: string) => `/alarms/${encodeURIComponent(alarmId)}`,
   alarmHealth: (query: Readonly<Record<string, string | undefined>> = {}) => withQuery('/alarms/health', query),
+  energy: (query: Readonly<Record<string, string | undefined>> = {}) => withQuery('/energy', query),
+  padEnergy: (padId: string, query: { readonly month?: string | undefined } = {}) =>
+    withQuery(`/energy/pads/${encodeURIComponent(padId)}`, query),
   myPump: (pumpId?: string) => withQuery('/my-pump', { pump: pumpId }),
   profile: () => '/profile',
 } as const;

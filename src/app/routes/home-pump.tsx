@@ -1,10 +1,13 @@
 import { useQuery } from '@tanstack/react-query';
 import { useMemo, useState } from 'react';
 import type { PumpRow } from '#shared/contract/http/pumps.ts';
+import type { Run } from '#shared/contract/http/runs.ts';
+import { localDayAt } from '#shared/domain/time/local-days.ts';
 import { buttonClass } from '#src/components/ui/button.tsx';
 import { Figures } from '#src/components/ui/figures.tsx';
 import { PageHeading } from '#src/components/ui/page-heading.tsx';
 import { useAlarmEvents } from '#src/features/alarms/use-alarm-events.ts';
+import { HomeEnergy } from '#src/features/energy/home-energy.tsx';
 import { HomeStrip } from '#src/features/pumps/home-strip.tsx';
 import { viewHome } from '#src/features/pumps/home-view.ts';
 import { LatelyList } from '#src/features/pumps/lately-list.tsx';
@@ -21,6 +24,7 @@ import { createStore } from '#src/lib/store.ts';
 
 const WEEK_MS = 7 * 86_400_000;
 const HOUR_MS = 3_600_000;
+const NO_RUNS: readonly Run[] = [];
 
 /** One pump for the person who lives with it: a fact, today, what happened lately. */
 export function HomePump({ pump }: { readonly pump: PumpRow }) {
@@ -64,6 +68,17 @@ export function HomePump({ pump }: { readonly pump: PumpRow }) {
         now={now}
         cursor={cursor}
       />
+      {detail === undefined ? null : (
+        <HomeEnergy
+          pumpId={pump.pumpId}
+          zone={pump.zone}
+          poolGallons={detail.poolGallons}
+          since={Math.max(detail.visibleFrom, detail.motor?.installedAt ?? 0)}
+          runs={week.runs ?? NO_RUNS}
+          dayFrom={localDayAt(pump.zone, now)?.from ?? now}
+          now={now}
+        />
+      )}
       <LatelyList events={lately} zone={pump.zone} now={now} />
       <p className="text-ink-2">{t('home.onlyWatches')}</p>
     </>

@@ -9,6 +9,8 @@ import { Figures } from '#src/components/ui/figures.tsx';
 import { PageHeading } from '#src/components/ui/page-heading.tsx';
 import { Sheet } from '#src/components/ui/sheet.tsx';
 import { PumpAlarms } from '#src/features/alarms/pump-alarms.tsx';
+import { PumpAdviceSheet } from '#src/features/energy/pump-advice-sheet.tsx';
+import { PumpEnergySheet } from '#src/features/energy/pump-energy-sheet.tsx';
 import { DaySheet } from '#src/features/pumps/day-sheet.tsx';
 import { EquipmentSheet } from '#src/features/pumps/equipment-sheet.tsx';
 import { nameOfPump, pumpHeading } from '#src/features/pumps/pump-heading.ts';
@@ -86,6 +88,10 @@ function LoadedPump({ pump }: { readonly pump: PumpDetail }) {
           <UnitSheet pump={pump} />
         </div>
       </div>
+      <PumpEnergySheet pump={pump} />
+      {user.role === 'homeowner' ? null : (
+        <PumpAdviceSheet pumpId={pump.pumpId} name={nameOfPump(pump)} zone={pump.zone} now={now} />
+      )}
       <StripLegend inputs={pump.traits.inputCount} />
     </div>
   );

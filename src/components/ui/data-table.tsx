@@ -13,8 +13,8 @@ export type DataTableProps<Row> = {
   readonly columns: readonly Column<Row>[];
   readonly rows: readonly Row[];
   readonly keyOf: (row: Row, index: number) => string | number;
-  /** Many columns: on a phone it scrolls sideways rather than break words. */
-  readonly wide?: boolean;
+  /** Many columns: where there is no room it scrolls sideways rather than break words. */
+  readonly wide?: boolean | 'very';
 };
 
 /** A plain table: hairlines, figures in their own type, scrolling sideways by itself where it is too wide. */
@@ -22,7 +22,9 @@ export function DataTable<Row>({ caption, columns, rows, keyOf, wide = false }: 
   return (
     // biome-ignore lint/a11y/noNoninteractiveTabindex: a part that scrolls must be reachable by keyboard.
     <section aria-label={caption} tabIndex={0} className="relative overflow-x-auto">
-      <table className={classNames('w-full border-collapse text-left', wide && 'min-w-xl')}>
+      <table
+        className={classNames('w-full border-collapse text-left', wide === 'very' ? 'min-w-5xl' : wide && 'min-w-xl')}
+      >
         <caption className="sr-only">{caption}</caption>
         <thead className="text-13 text-ink-2">
           <tr>

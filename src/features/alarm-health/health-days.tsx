@@ -50,7 +50,6 @@ export function HealthDays({ byDay, zone }: { readonly byDay: readonly Day[]; re
           data={data}
           height={HEIGHT}
           least={LEAST}
-          figure={format.number}
           describe={describe}
           tableLabel={t('health.byDay.table')}
           table={

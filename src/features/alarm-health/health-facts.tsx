@@ -15,11 +15,11 @@ function Verdict({ verdict }: Pick<HealthFact, 'verdict'>) {
   return (
     <span
       className={classNames(
-        'justify-self-start px-1.5 py-0.5 md:justify-self-end',
+        'justify-self-start py-0.5 md:justify-self-end',
         verdict === 'over'
-          ? 'bg-ink font-semibold text-sheet'
+          ? 'bg-ink px-1.5 font-semibold text-sheet'
           : verdict === 'most'
-            ? 'border border-ink'
+            ? 'border border-ink px-1.5'
             : 'text-ink-2',
       )}
     >

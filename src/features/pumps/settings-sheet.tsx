@@ -3,8 +3,9 @@ import { DataTable } from '#src/components/ui/data-table.tsx';
 import { FactList } from '#src/components/ui/fact-list.tsx';
 import { Sheet } from '#src/components/ui/sheet.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
+import { describeDays } from '#src/lib/describe-days.ts';
 import { t } from '#src/lib/messages/page-words.ts';
-import { describeDays, listSettings } from './settings-view.ts';
+import { listSettings } from './settings-view.ts';
 
 type Entry = PumpDetail['settings']['program'][number];
 

@@ -2,9 +2,9 @@ import type { PumpDetail } from '#shared/contract/http/pumps.ts';
 import { DataTable } from '#src/components/ui/data-table.tsx';
 import { Sheet } from '#src/components/ui/sheet.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
+import { describeDays } from '#src/lib/describe-days.ts';
 import type { Format } from '#src/lib/format/create-format.ts';
 import { t } from '#src/lib/messages/page-words.ts';
-import { describeDays } from './settings-view.ts';
 
 type Wired = PumpDetail['inputs'][number];
 type WiringRow = { readonly number: number; readonly rpm: number | null; readonly wired: Wired | undefined };

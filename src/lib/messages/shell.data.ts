@@ -6,6 +6,7 @@ export const SHELL_MESSAGES = {
   'shell.navigation': 'Pages',
   'shell.fleet': 'Fleet',
   'shell.alarms': 'Alarms',
+  'shell.energy': 'Energy',
   'shell.myPump': 'My pump',
   'shell.profile': '{name}: profile and sign out',
   'shell.lookedAfter': 'Looked after by {company}',

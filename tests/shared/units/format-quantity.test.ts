@@ -14,6 +14,7 @@ describe('a quantity', () => {
     [1234.5, 'power', '1,235 W', '1,235 W'],
     [1840, 'energy', '1.84 kWh', '1.84 kWh'],
     [18_400, 'energy', '18.4 kWh', '18.4 kWh'],
+    [336_400, 'energy', '336 kWh', '336 kWh'],
     [31, 'flow', '31 gpm', '7.0 m³/h'],
     [8.25, 'flow', '8.3 gpm', '1.9 m³/h'],
     [24_000, 'volume', '24,000 gal', '90.8 m³'],

@@ -5,13 +5,18 @@ import { alarmHealthEndpoints } from '#shared/contract/http/alarm-health.ts';
 import { type Alarm, alarmEndpoints } from '#shared/contract/http/alarms.ts';
 import { changeEndpoints } from '#shared/contract/http/changes.ts';
 import type { Endpoint } from '#shared/contract/http/endpoint.ts';
+import { energyEndpoints } from '#shared/contract/http/energy.ts';
+import { fleetEnergyEndpoints } from '#shared/contract/http/energy-fleet.ts';
+import { programEndpoints } from '#shared/contract/http/energy-programs.ts';
 import { type PumpDetail, type PumpRow, pumpEndpoints } from '#shared/contract/http/pumps.ts';
 import { sessionEndpoints } from '#shared/contract/http/session.ts';
 import { changeByAct } from './fake-alarm-acts.ts';
 import { fakeAlarmHealth } from './fake-alarm-health.ts';
 import { listFakeAlarms } from './fake-alarm-list.ts';
+import { fakeFleetEnergy, fakeHours, fakePadEnergy, fakePadMonths, fakePumpEnergy } from './fake-energy.ts';
 import { type FakePump, markOf } from './fake-fleet.ts';
 import { fakeId } from './fake-id.ts';
+import { fakeAdvice } from './fake-programs.ts';
 import { readingsOf } from './fake-readings.ts';
 import { broadcast, type FakeState, sessionOf, visiblePumps } from './fake-state.ts';
 
@@ -45,6 +50,12 @@ const findPump = (state: FakeState, pumpId: string): FakePump => {
   const pump = visiblePumps(state).find(({ detail }) => detail.pumpId === pumpId);
   if (pump === undefined) throw new FakeRefusal('not-found');
   return pump;
+};
+
+const findPad = (state: FakeState, padId: string): FakePump[] => {
+  const pumps = visiblePumps(state).filter(({ detail }) => detail.padId === padId);
+  if (pumps.length === 0) throw new FakeRefusal('not-found');
+  return pumps;
 };
 
 const findAlarmed = (state: FakeState, alarmId: string) => {
@@ -196,6 +207,42 @@ export const FAKE_HANDLERS: readonly FakeHandler[] = [
     refused: [],
   })),
   handle(alarmHealthEndpoints.read, (state) => fakeAlarmHealth(state.now(), state.pumps)),
+  handle(energyEndpoints.pump, (state, { params, query }) =>
+    fakePumpEnergy(state, findPump(state, params.pumpId), query),
+  ),
+  handle(energyEndpoints.pad, (state, { params, query }) => fakePadEnergy(state, findPad(state, params.padId), query)),
+  handle(energyEndpoints.padHours, (state, { query }) => fakeHours(state, query.month)),
+  handle(fleetEnergyEndpoints.month, (state, { query }) => fakeFleetEnergy(state, query.month)),
+  handle(fleetEnergyEndpoints.hours, (state, { query }) => fakeHours(state, query.month)),
+  handle(fleetEnergyEndpoints.pads, (state, { query }) => {
+    const pads = fakePadMonths(state).filter(({ padName }) =>
+      padName.toLowerCase().includes(query.q?.toLowerCase() ?? ''),
+    );
+    const start = Number(query.cursor ?? 0);
+    const next = start + query.limit;
+    return {
+      items: pads.slice(start, next),
+      nextCursor: next < pads.length ? String(next) : null,
+      month: query.month ?? '2026-12',
+      matching: pads.length,
+      serverNow: state.now(),
+    };
+  }),
+  handle(programEndpoints.list, (state) => {
+    const items = state.energy.money ? state.pumps.slice(0, 3).map((pump) => fakeAdvice(state, pump)) : [];
+    return {
+      items,
+      nextCursor: null,
+      matching: items.length,
+      advised: items.length,
+      waiting: 5,
+      serverNow: state.now(),
+    };
+  }),
+  handle(programEndpoints.pump, (state, { params }) => ({
+    advice: fakeAdvice(state, findPump(state, params.pumpId)),
+    serverNow: state.now(),
+  })),
   handle(changeEndpoints.list, (state) => ({
     cursor: String(state.cursor),
     complete: true,

@@ -16,6 +16,8 @@ export type FakeState = {
   /** Answers of these paths are refused with a code; `hang` never answers. */
   failures: Map<string, ErrorCode | 'hang'>;
   retryAfterSeconds: number;
+  /** Whether anybody has said what a kWh costs. */
+  energy: { money: boolean };
   /** Every call that came, as `METHOD path?query`. */
   readonly calls: string[];
   readonly sockets: Set<WebSocket>;
@@ -35,6 +37,7 @@ export function createFakeState(options: { role?: Role; size?: number; at?: numb
     preferences: { units: 'us', theme: 'system', clock: 'locale' },
     failures: new Map(),
     retryAfterSeconds: 30,
+    energy: { money: true },
     calls: [],
     sockets: new Set(),
     cursor: 100,

@@ -78,7 +78,7 @@ export function barOptions(setting: BarSetting): UPlot.Options {
         ...common,
         size: CHART_GUTTER,
         grid: { stroke: colours.rule, width: 1 },
-        values: (_, splits) => splits.map(figure),
+        values: (_, splits) => splits.map((value) => figure(value)),
       },
     ],
     cursor: { x: false, y: false, drag: { x: false, y: false }, points: { show: false } },

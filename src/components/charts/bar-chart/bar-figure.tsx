@@ -1,5 +1,6 @@
 import { lazy, type ReactNode, Suspense, useCallback, useState } from 'react';
 import { TableToggle } from '#src/components/ui/table-toggle.tsx';
+import { useFormat } from '#src/hooks/use-format.ts';
 import { type BarData, inkOfPart } from './bar-chart-data.ts';
 import { InkSwatch } from './ink-swatch.tsx';
 
@@ -12,7 +13,6 @@ export type BarFigureProps = {
   readonly data: BarData;
   readonly height: number;
   readonly least: number;
-  readonly figure: (value: number) => string;
   /** The sentence for a bar. */
   readonly describe: (index: number) => string;
   /** What is said while nobody points. */
@@ -27,8 +27,13 @@ const Ruled = ({ height }: { readonly height: number }) => <div className="ruled
 
 /** Bars with their legend, the sentence for the bar under the pointer, and the table behind them. */
 export function BarFigure(props: BarFigureProps) {
-  const { title, data, height, least, figure, describe, idle, aimLabel, tableLabel, table } = props;
+  const { title, data, height, least, describe, idle, aimLabel, tableLabel, table } = props;
   const [pointed, setPointed] = useState<number>();
+  const format = useFormat();
+  const figure = useCallback(
+    (value: number) => format.number(value, Number.isInteger(value) ? 0 : Math.abs(value) < 0.1 ? 2 : 1),
+    [format],
+  );
   const onPoint = useCallback((index: number | undefined) => setPointed(index), []);
   return (
     <figure className="min-w-0">
