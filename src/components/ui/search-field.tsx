@@ -25,7 +25,7 @@ export function SearchField({ value, onSearch }: SearchFieldProps) {
       maxLength={100}
       onChange={(event) => change(event.target.value)}
       onKeyDown={(event) => event.key === 'Escape' && change('')}
-      className="min-h-9 w-full rounded-control border border-ink-2 bg-sheet px-3 placeholder:text-ink-2 sm:w-60"
+      className="min-h-9 w-full rounded-control border border-ink-2 bg-sheet px-3 placeholder:text-ink-2 sm:w-64"
     />
   );
 }

@@ -15,7 +15,7 @@ export const HOME_MESSAGES = {
   'home.today': 'Today at {pad}',
   'home.day': '{day} at {pad}',
   'home.which': 'Which pump',
-  'home.strip.hint': 'Point at the strip, or move its time with the arrow keys, to see why your pump ran as it did.',
+  'home.strip.hint': 'Touch or point at the strip, or use the arrow keys, to see why your pump ran as it did.',
   'home.lately': 'What happened lately',
   'home.lately.none': 'Nothing out of the ordinary in the last week.',
   'home.lately.loading': 'Loading the last week',
