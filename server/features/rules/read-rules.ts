@@ -10,7 +10,8 @@ const NAMES = { company: 'company', model: 'motor model', pump: 'pump' } as cons
 export async function readRules(context: Context, scope: RuleScope): Promise<RuleLayer> {
   const row = await findRow(context, scope);
   if (row === undefined) throw notFound(NAMES[scope.kind]);
-  return presentLayer(scope, row);
+  const company = scope.kind === 'company' ? row : await getCompanyRules(context.db, context.actor.companyId);
+  return presentLayer(scope, row, company?.rules ?? {});
 }
 
 async function findRow({ db, actor: { companyId } }: Context, scope: RuleScope): Promise<RuleRow | undefined> {
@@ -24,10 +25,11 @@ export async function listRules(context: Context): Promise<RuleLayers> {
   const { db, actor } = context;
   const models = await listModelRules(db, actor.companyId);
   const pumps = await listPumpRules(db, actor.companyId);
+  const company = await readRules(context, { kind: 'company' });
   return {
-    company: await readRules(context, { kind: 'company' }),
-    models: models.map((row) => presentLayer({ kind: 'model', modelId: row.scopeId }, row)),
-    pumps: pumps.map((row) => presentLayer({ kind: 'pump', pumpId: row.scopeId }, row)),
+    company,
+    models: models.map((row) => presentLayer({ kind: 'model', modelId: row.scopeId }, row, company.rules)),
+    pumps: pumps.map((row) => presentLayer({ kind: 'pump', pumpId: row.scopeId }, row, company.rules)),
     catalogue: presentCatalogue(),
   };
 }

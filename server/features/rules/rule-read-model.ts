@@ -7,6 +7,8 @@ export type RuleRow = {
   readonly scopeId: string;
   readonly name: string;
   readonly rules: StoredRules | null;
+  /** Of the motor that is fitted to a pump now. */
+  readonly modelRules?: StoredRules | null;
   readonly version: number | null;
   readonly changedAt: number | null;
   readonly changedBy: string | null;
@@ -39,7 +41,10 @@ export async function listModelRules(db: Transaction, companyId: string, modelId
 export async function listPumpRules(db: Transaction, companyId: string, pumpId?: string): Promise<RuleRow[]> {
   const which: SQL = pumpId === undefined ? sql`r.id is not null` : sql`p.id = ${pumpId}`;
   const { rows } = await db.execute<RuleRow>(sql`
-    select p.id as "scopeId", pad.name || ', ' || p.name as name, ${ruleColumns}
+    select p.id as "scopeId", pad.name || ', ' || p.name as name, ${ruleColumns},
+      (select above.rules from motor_fittings f join motors m on m.id = f.motor_id
+        join rule_settings above on above.company_id = p.company_id and above.model_id = m.model_id
+        where f.pump_id = p.id and f.starts_at <= now() and (f.ends_at is null or f.ends_at > now()) limit 1) as "modelRules"
     from pumps p join pads pad on pad.id = p.pad_id
     left join rule_settings r on r.company_id = p.company_id and r.pump_id = p.id ${changer}
     where p.company_id = ${companyId} and ${which} order by lower(pad.name), p.name`);

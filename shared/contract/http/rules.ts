@@ -90,6 +90,8 @@ export const RuleLayer = z.object({
   /** The company, the motor model, or the pad and pump. */
   name: z.string(),
   rules: StoredRules,
+  /** What the company and, for a pump, its motor model set: what holds here where `rules` say nothing. */
+  inherited: StoredRules,
   /** 0 = nothing was ever set here. */
   version: z.number().int(),
   changedAt: Instant.nullable(),

@@ -43,3 +43,27 @@ export function resolveRules(...layers: readonly (RuleSettings | undefined)[]): 
   const parameters = resolveParameters(...figures);
   return Object.keys(choices).length === 0 ? parameters : { ...parameters, choices: choices satisfies RuleChoices };
 }
+
+type AnySetting = {
+  readonly enabled?: boolean | undefined;
+  readonly priority?: Priority | undefined;
+  readonly figures?: object | undefined;
+};
+type AnySettings = Readonly<Record<string, AnySetting>>;
+
+/**
+ * Several layers as one, the last one winning figure by figure; what no layer sets stays unset.
+ *
+ * @example mergeSettings({ stopped: { enabled: false } }, { stopped: { priority: 'note' } }) // both hold
+ */
+export function mergeSettings<Settings extends AnySettings>(...layers: readonly Settings[]): AnySettings {
+  const merged: Record<string, AnySetting> = {};
+  for (const layer of layers) {
+    for (const [name, setting] of Object.entries(layer)) {
+      const before = merged[name];
+      const figures = { ...before?.figures, ...setting.figures };
+      merged[name] = { ...before, ...setting, ...(Object.keys(figures).length === 0 ? {} : { figures }) };
+    }
+  }
+  return merged;
+}

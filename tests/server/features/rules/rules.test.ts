@@ -57,6 +57,8 @@ describe('rules', () => {
     expect([other.stopped.offDelaySeconds, other.choices]).toEqual([600, undefined]);
     const { body } = await get('/api/rules');
     expect(body.pumps).toMatchObject([{ scope: { kind: 'pump', pumpId: pump.pumpId }, rules: own, version: 1 }]);
+    const above = { stopped: { figures: { delaySeconds: 900, frostCelsius: 1 } } };
+    expect(body.pumps[0].inherited).toEqual(above);
     const theirs = await makeTestCompany(pools.machine);
     expect((await rulesOf(theirs.pumps[0]!.pumpId)).stopped).toEqual(DETECTOR_DEFAULTS.stopped);
   });
