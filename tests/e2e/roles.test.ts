@@ -19,6 +19,7 @@ let browser: Browser;
 let device: PlayedDevice;
 let alarmPath: string;
 let pumpPath: string;
+let padEnergyPath: string;
 
 beforeAll(async () => {
   [browser] = await Promise.all([launchBrowser(), product.start()]);
@@ -29,6 +30,7 @@ beforeAll(async () => {
   const row = page.getByRole('article').filter({ hasText: PAD });
   alarmPath = await getPath(row.getByRole('link', { name: /Did not prime/ }));
   pumpPath = await getPath(row.getByRole('link', { name: PAD }));
+  padEnergyPath = await findPadEnergy(page, pumpPath);
   await close();
 }, 300_000);
 
@@ -39,6 +41,12 @@ afterAll(async () => {
 
 type Hrefs = { readonly getAttribute: (name: string) => Promise<string | null> };
 const getPath = async (link: Hrefs): Promise<string> => (await link.getAttribute('href')) ?? '';
+
+/** Where the pad of a pump has its energy: the pump's page links to it. */
+async function findPadEnergy(page: Desk['page'], path: string): Promise<string> {
+  await page.goto(path);
+  return getPath(page.getByRole('link', { name: 'The whole pad' }));
+}
 
 /** Signed in, with everything that goes wrong in the page written down from its first moment. */
 async function openAs(email: string) {
@@ -54,7 +62,12 @@ const listNavigation = ({ page }: Pick<Desk, 'page'>) =>
   page.getByRole('navigation', { name: 'Pages' }).getByRole('link').allTextContents();
 
 describe.each([
-  [MANAGER, '/fleet', ['Fleet', 'Alarms'], ['/fleet', '/fleet?range=7d', '/alarms', 'pump', 'alarm']],
+  [
+    MANAGER,
+    '/fleet',
+    ['Fleet', 'Alarms', 'Energy'],
+    ['/fleet', '/fleet?range=7d', '/alarms', '/alarms/health', '/energy', 'pad energy', 'pump', 'alarm'],
+  ],
   [TECHNICIAN, '/alarms', ['Alarms', 'Fleet'], ['/alarms', 'alarm', '/fleet', 'pump']],
   [HOMEOWNER, '/my-pump', ['My pump'], ['/my-pump']],
 ])('%s', (email, first, navigation, screens) => {
@@ -70,7 +83,8 @@ describe.each([
     'finds every screen accessible, in light and dark, on a desk and on a phone, and quiet',
     async () => {
       const { page, troubles, close } = await openAs(email);
-      const pathOf = (screen: string) => ({ pump: pumpPath, alarm: alarmPath })[screen] ?? screen;
+      const pathOf = (screen: string) =>
+        ({ pump: pumpPath, alarm: alarmPath, 'pad energy': padEnergyPath })[screen] ?? screen;
       const faults: string[] = [];
       for (const screen of [...screens, '/profile', '/no-such-page']) {
         await page.goto(pathOf(screen));
@@ -96,7 +110,7 @@ describe('a homeowner', () => {
     'is told that the fleet and the alarms are not theirs',
     async () => {
       const { page, close } = await openAs(HOMEOWNER);
-      for (const path of ['/fleet', '/alarms', alarmPath]) {
+      for (const path of ['/fleet', '/alarms', '/alarms/health', '/energy', padEnergyPath, alarmPath]) {
         await page.goto(path);
         await page.getByRole('heading', { level: 1, name: 'This page is not for your role.' }).waitFor();
         expect(await examineScreen(page)).toEqual([]);
