@@ -20,7 +20,7 @@ export const RE_ALARM_AFTER_MS: Readonly<Record<Priority, number | undefined>> =
 };
 
 /**
- * When an alarm escalates if nobody acknowledges it; undefined where it never will. One that chatters waits as any
+ * When an alarm escalates if nobody acknowledges it; undefined where it never will. One that chatters waits like any
  * other: that its condition comes and goes makes it no less urgent.
  */
 export function escalatesAt(record: AlarmRecord): number | undefined {

@@ -38,7 +38,7 @@ export function partsOf(
 export type PumpStanding = { readonly padState: PadState; readonly standing: ReadonlySet<Detector> };
 
 /**
- * Ends a suppression that nothing explains any more: the alarm is then as any that has returned. Undefined while it is
+ * Ends a suppression that nothing explains any more: the alarm is then like any that has returned. Undefined while it is
  * still explained, and for one that was suppressed from elsewhere.
  */
 export function endExplanation(record: AlarmRecord, pump: PumpStanding, at: number): AlarmStep | undefined {
