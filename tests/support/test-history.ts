@@ -89,6 +89,7 @@ export const nowOf = (at: Date, more: Partial<PumpNow> = {}): PumpNow => ({
   until: undefined,
   lockedBy: undefined,
   primed: true,
+  flow: undefined,
   ...more,
 });
 
