@@ -1,0 +1,88 @@
+import type { PadState } from '../control/pump-context.ts';
+import { PAD_STATE_MUTES } from '../detectors/context-mutes.data.ts';
+import type { AlarmSignal } from '../detectors/detector.ts';
+import { DETECTOR_CLASSES } from '../detectors/detector-classes.data.ts';
+import type { Advice } from './advise-program.ts';
+import { costlyProgramCause } from './costly-program-cause.ts';
+
+/** What is remembered between days, plain JSON: local day and saved share of each, and when the note was raised, ms. */
+export type CostlyMemory = {
+  readonly days: readonly (readonly [localDay: number, savedShare: number])[];
+  readonly raisedAt: number | null;
+};
+
+/** The advisor's word of one day about a pump: `localDay` counts from 1970, `at` is when it was worked out, ms. */
+export type DailyAdvice = {
+  readonly advice: Advice;
+  readonly localDay: number;
+  readonly at: number;
+  readonly padState: PadState;
+};
+
+/** Share saved, days it must hold, and how many of them must have been judged; overridden per company. */
+export const COSTLY_PROGRAM = { savedShare: 0.25, deadbandShare: 0.25, days: 14, leastDays: 12 } as const;
+
+export type CostlyJudgement = { readonly memory: CostlyMemory; readonly signal: AlarmSignal | undefined };
+
+const DAY_MS = 86_400_000;
+export const NO_COSTLY_MEMORY: CostlyMemory = { days: [], raisedAt: null };
+
+/**
+ * `costly-program`, once a day for a pump with a tariff and hydraulics, outside the fold: working a program out takes
+ * a thousand times as long as a reading. Raises when the advisor did the same duty for a quarter less over fourteen
+ * days, clears when less than three quarters of that are left to save. A day without a comparison counts for nothing;
+ * a program changed for the better ends it at once.
+ *
+ * @example judgeCostlyProgram(memory, { advice, localDay, at, padState: 'open' }).signal?.type // 'raised'
+ */
+export function judgeCostlyProgram(
+  memory: CostlyMemory,
+  today: DailyAdvice,
+  limits: { readonly [Key in keyof typeof COSTLY_PROGRAM]: number } = COSTLY_PROGRAM,
+): CostlyJudgement {
+  const { advice, localDay, at, padState } = today;
+  if (PAD_STATE_MUTES[padState].includes('costly-program')) return over({ days: [], raisedAt: memory.raisedAt }, at);
+  if (advice.kind === 'refused' || advice.kind === 'infeasible') return { memory, signal: undefined };
+  const savedShare = advice.kind === 'keep' ? 0 : advice.savedShare;
+  if (!Number.isFinite(savedShare)) return { memory, signal: undefined };
+  const kept = memory.days.filter(([day]) => day > localDay - limits.days && day !== localDay);
+  const days = [...kept, [localDay, Math.round(savedShare * 1000) / 1000] as const];
+  const mean = days.reduce((sum, [, share]) => sum + share, 0) / days.length;
+  const left = limits.savedShare * (1 - limits.deadbandShare);
+  if (memory.raisedAt !== null && savedShare < left) return over({ days, raisedAt: memory.raisedAt }, at);
+  const raises = memory.raisedAt === null && days.length >= limits.leastDays && mean >= limits.savedShare;
+  // What was dear once and is put right today is no news.
+  if (!raises || savedShare < left) return { memory: { days, raisedAt: memory.raisedAt }, signal: undefined };
+  const from = at - (localDay - (days[0]?.[0] ?? localDay)) * DAY_MS;
+  return { memory: { days, raisedAt: at }, signal: raisedSignal(advice, mean, from, at) };
+}
+
+function over({ days, raisedAt }: CostlyMemory, at: number): CostlyJudgement {
+  const signal = { type: 'cleared', detector: 'costly-program', at, evidence: { normalSince: at } } as const;
+  return { memory: { days, raisedAt: null }, signal: raisedAt === null ? undefined : signal };
+}
+
+function raisedSignal(
+  { before, after }: Extract<Advice, { kind: 'advice' | 'keep' }>,
+  saving: number,
+  from: number,
+  at: number,
+): AlarmSignal {
+  return {
+    type: 'raised',
+    detector: 'costly-program',
+    ...DETECTOR_CLASSES['costly-program'],
+    from,
+    at,
+    cause: costlyProgramCause(before, after),
+    evidence: {
+      saving: Math.round(saving * 100) / 100,
+      minorUnitsPerMonthBefore: before.minorUnitsPerMonth,
+      minorUnitsPerMonthAfter: after.minorUnitsPerMonth,
+      kwhPerWeekBefore: Math.round(before.kwhPerWeek * 10) / 10,
+      kwhPerWeekAfter: Math.round(after.kwhPerWeek * 10) / 10,
+      gallonsPerWeekBefore: Math.round(before.gallonsPerWeek),
+      gallonsPerWeekAfter: Math.round(after.gallonsPerWeek),
+    },
+  };
+}
