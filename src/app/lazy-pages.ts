@@ -8,6 +8,7 @@ export const LAZY_PAGES = {
   alarmHealth: { Component: async () => (await import('./routes/alarm-health-page.tsx')).AlarmHealthPage },
   energy: { Component: async () => (await import('./routes/energy-page.tsx')).EnergyPage },
   padEnergy: { Component: async () => (await import('./routes/pad-energy-page.tsx')).PadEnergyPage },
+  rules: { Component: async () => (await import('./routes/rules-page.tsx')).RulesPage },
   myPump: { Component: async () => (await import('./routes/my-pump-page.tsx')).MyPumpPage },
   profile: { Component: async () => (await import('./routes/profile-page.tsx')).ProfilePage },
 } as const;

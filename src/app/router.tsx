@@ -31,6 +31,7 @@ export function createRouter(client: QueryClient) {
             { path: 'alarms/:alarmId', loader: load.alarm, lazy: LAZY_PAGES.alarm },
             { path: 'energy', loader: load.managers, lazy: LAZY_PAGES.energy },
             { path: 'energy/pads/:padId', loader: load.managers, lazy: LAZY_PAGES.padEnergy },
+            { path: 'settings/rules', loader: load.managers, lazy: LAZY_PAGES.rules },
             { path: 'my-pump', loader: load.myPump, lazy: LAZY_PAGES.myPump },
             { path: 'profile', lazy: LAZY_PAGES.profile },
             { path: '*', Component: NotFoundPage },

@@ -19,6 +19,7 @@ export const paths = {
   energy: (query: Readonly<Record<string, string | undefined>> = {}) => withQuery('/energy', query),
   padEnergy: (padId: string, query: { readonly month?: string | undefined } = {}) =>
     withQuery(`/energy/pads/${encodeURIComponent(padId)}`, query),
+  rules: (query: { readonly for?: string | undefined } = {}) => withQuery('/settings/rules', query),
   myPump: (pumpId?: string) => withQuery('/my-pump', { pump: pumpId }),
   profile: () => '/profile',
 } as const;

@@ -7,6 +7,7 @@ export const SHELL_MESSAGES = {
   'shell.fleet': 'Fleet',
   'shell.alarms': 'Alarms',
   'shell.energy': 'Energy',
+  'shell.rules': 'Rules',
   'shell.myPump': 'My pump',
   'shell.profile': '{name}: profile and sign out',
   'shell.lookedAfter': 'Looked after by {company}',

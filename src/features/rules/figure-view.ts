@@ -1,0 +1,60 @@
+import { type FigureLimits, limitsOfFigure } from '#shared/domain/detectors/figure-limits.ts';
+import { t } from '#src/lib/messages/rules-words.ts';
+
+/** How a figure is shown and typed: its stored value is so many of `size`. */
+export type FigureForm = {
+  readonly size: number;
+  readonly digits: number;
+  readonly unit: 's' | 'min' | 'h' | 'd' | 'celsius' | 'speed' | 'percent' | 'times';
+  readonly limits: FigureLimits;
+};
+
+const UNITS = {
+  s: 's',
+  min: 'min',
+  h: 'h',
+  d: 'd',
+  '°C': 'celsius',
+  rpm: 'speed',
+  share: 'percent',
+  times: 'times',
+} as const;
+
+/**
+ * The form of a figure, chosen by its usual value: 1200 s are typed as 20 min.
+ *
+ * @example formOfFigure('delaySeconds', 1200).unit // 'min'
+ */
+export function formOfFigure(figure: string, usual: number): FigureForm {
+  const limits = limitsOfFigure(figure);
+  if (limits.unit === 'share') return { size: 0.01, digits: 1, unit: 'percent', limits };
+  const seconds = limits.unit === 's' ? usual : limits.unit === 'min' ? usual * 60 : 0;
+  const own = limits.unit === 's' ? 1 : 60;
+  if (seconds >= 7200 && seconds % 3600 === 0) return { size: 3600 / own, digits: 2, unit: 'h', limits };
+  if (limits.unit === 's' && seconds >= 120 && seconds % 60 === 0) return { size: 60, digits: 2, unit: 'min', limits };
+  return { size: 1, digits: limits.whole ? 0 : 2, unit: UNITS[limits.unit], limits };
+}
+
+const plain = (value: number, digits: number): string => `${Number(value.toFixed(digits))}`;
+
+/** A stored value as it is typed, without its unit. */
+export const typedFigure = (value: number, { size, digits }: FigureForm): string => plain(value / size, digits);
+
+/** A stored value with its unit. */
+export function sayFigure(value: number, form: FigureForm): string {
+  const number = typedFigure(value, form);
+  return form.unit === 'd' ? t('unit.d', { count: Number(number), number }) : t(`unit.${form.unit}`, { number });
+}
+
+/**
+ * What was typed as a stored value; undefined where it is no number or not allowed.
+ *
+ * @example parseFigure('20', formOfFigure('delaySeconds', 1200)) // 1200
+ */
+export function parseFigure(text: string, { size, limits }: FigureForm): number | undefined {
+  const typed = text.trim().replace(',', '.');
+  if (!/^\d+(\.\d+)?$/.test(typed)) return undefined;
+  const value = Number((Number(typed) * size).toPrecision(12));
+  if (limits.whole && !Number.isInteger(value)) return undefined;
+  return value >= limits.least && value <= limits.most ? value : undefined;
+}
