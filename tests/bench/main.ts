@@ -1,9 +1,12 @@
 import { parseArgs } from 'node:util';
+import { backtestSpeed } from './backtest-speed.ts';
 import { type Bench, type Figure, keepsLimit } from './bench.ts';
 import { type BenchPostgres, startBenchPostgres } from './bench-database.ts';
 import { clientBytes } from './client-bytes.ts';
 import { connectedDevices } from './connected-devices.ts';
+import { energyAnswers } from './energy-answers.ts';
 import { foldLag } from './fold-lag.ts';
+import { foldRate } from './fold-rate.ts';
 import { formatTable } from './format-table.ts';
 import { ingestForty, ingestOne } from './ingest-ratio.ts';
 import { publishToPixel } from './publish-to-pixel.ts';
@@ -12,6 +15,9 @@ import { socketLatency } from './socket-latency.ts';
 /** `npm run bench [-- --only name]`: a table to standard error, JSON to standard output, 1 when a limit is missed. */
 const BENCHES: readonly Bench[] = [
   clientBytes,
+  foldRate,
+  backtestSpeed,
+  energyAnswers,
   ingestOne,
   ingestForty,
   foldLag,
