@@ -5,6 +5,7 @@ import { useSession } from '#src/hooks/use-session.ts';
 import { t } from '#src/lib/messages/page-words.ts';
 import { titleOf, whereOf } from './alarm-names.ts';
 import { isWaiting, mayUndo } from './alarm-view.ts';
+import { PHONE_TARGET } from './phone-target.ts';
 import { useAcknowledge } from './use-acknowledge.ts';
 import { useWithdraw } from './use-withdraw.ts';
 
@@ -24,7 +25,7 @@ export function AcknowledgeButton({ alarm, note = '', touch = false, look = 'mai
   const now = useNow(10_000);
   const words = { title: titleOf(alarm), where: whereOf(alarm) };
   const latched = alarm.state === 'latched';
-  const wide = touch ? 'w-full' : '';
+  const wide = touch ? 'w-full' : PHONE_TARGET;
   if (isWaiting(alarm)) {
     return (
       <Button

@@ -6,6 +6,7 @@ import { t } from '#src/lib/messages/page-words.ts';
 import { ActDialog, type AskedAct, isAsked } from './act-dialog.tsx';
 import { titleOf, whereOf } from './alarm-names.ts';
 import type { Offered } from './offered-acts.ts';
+import { PHONE_TARGET } from './phone-target.ts';
 import { useActs } from './use-acts.ts';
 
 export type ActButtonsProps = {
@@ -36,7 +37,7 @@ export function ActButtons({ alarms, kinds, look = 'plain', touch = false, onDon
           key={kind}
           look={look}
           touch={touch}
-          className={touch ? 'w-full' : ''}
+          className={touch ? 'w-full' : PHONE_TARGET}
           aria-label={nameOf(kind)}
           aria-haspopup={isAsked(kind) ? 'dialog' : undefined}
           onClick={() => (isAsked(kind) ? setAsked(kind) : act({ kind }))}

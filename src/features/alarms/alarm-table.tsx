@@ -15,7 +15,8 @@ export function AlarmTable({ alarms, now }: AlarmTableProps) {
     head,
     ...(figures === undefined ? {} : { figures }),
     cell: (alarm: Alarm) => {
-      const text = value(alarm, { format, now }) ?? '–';
+      const told = value(alarm, { format, now });
+      const text = told === null || told === '' ? '–' : told;
       if (index !== TITLE_COLUMN) return text;
       return (
         <Link to={paths.alarm(alarm.id)} className="underline underline-offset-2">

@@ -67,8 +67,11 @@ export function describeState(alarm: Alarm, format: Format, now: number): string
 }
 
 /** What an alarm speaks for that is not one pump's; empty for all others. */
-export const describeGroup = ({ group }: Alarm): string =>
-  group === null ? '' : t('alarm.group', { pumps: group.pumps, pads: group.pads, standing: group.standing });
+export function describeGroup({ group, returnedAt }: Alarm): string {
+  if (group === null) return '';
+  const { pumps, pads, standing } = group;
+  return returnedAt === null ? t('alarm.group', { pumps, pads, standing }) : t('alarm.groupOver', { pumps, pads });
+}
 
 /** When the pad's next stop is, or that it has none; null for what is on several pads. */
 export const describeNextStop = ({ nextStopOn, zone, pumpId }: Alarm, format: Format): string | null =>

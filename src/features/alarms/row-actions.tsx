@@ -7,6 +7,7 @@ import { AcknowledgeButton } from './acknowledge-button.tsx';
 import { ActButtons } from './act-buttons.tsx';
 import { titleOf, whereOf } from './alarm-names.ts';
 import { listOffered } from './offered-acts.ts';
+import { PHONE_TARGET } from './phone-target.ts';
 
 /** As many stand on a row; the rest is one click away. */
 const IN_SIGHT = 1;
@@ -24,6 +25,7 @@ export function RowActions({ alarm }: { readonly alarm: Alarm }) {
       {offered.length <= IN_SIGHT ? null : (
         <Button
           look="quiet"
+          className={PHONE_TARGET}
           aria-expanded={open}
           aria-label={t('alarm.moreNamed', { title: titleOf(alarm), where: whereOf(alarm) })}
           onClick={() => setOpen(!open)}

@@ -68,6 +68,7 @@ export const ALARM_MESSAGES = {
   'alarm.since': 'since {time}, {span}',
   'alarm.lasted': '{from} to {to}',
   'alarm.group': 'speaks for {pumps} pumps on {pads} pads, {standing} of them still so',
+  'alarm.groupOver': 'spoke for {pumps} pumps on {pads} pads',
   'alarm.covered': 'Another alarm speaks for it and for others like it.',
   'alarm.coveredLink': 'See that alarm',
   'alarm.members': 'The pumps it speaks for',
