@@ -1,5 +1,5 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { asMachine } from '#server/db/transaction.ts';
+import { asMachine, asPerson, type Sight } from '#server/db/transaction.ts';
 import { makePartitionsBetween } from '#server/fold/history/history-repository.ts';
 import { encodeReadings } from '#shared/contract/mqtt/encode-reading.ts';
 import type { Reading } from '#shared/domain/readings/reading.ts';
@@ -125,6 +125,13 @@ const mailsOf = (companyId: string) =>
     'select to_address, subject, text from outbox_mails where company_id = $1',
     companyId,
   );
+/** Alarms that speak for several pumps, and members of such, as a person sees them. */
+const seenBy = (sight: Sight) =>
+  asPerson(running.pools.app, sight, 'read', async (_db, client) => {
+    const groups = await client.query('select id from alarms where pump_id is null');
+    const members = await client.query('select pump_id from alarm_members');
+    return [groups.rowCount, members.rowCount];
+  });
 const standingMembers = (alarmId: string) =>
   query<{ pump_id: string }>('select pump_id from alarm_members where alarm_id = $1 and left_at is null', alarmId);
 
@@ -163,6 +170,9 @@ describe('a power cut in one area', () => {
     for (const alarm of silent)
       expect(alarm).toMatchObject({ detector: 'silent', cause: 'power', suppressed: true, covered_by: group!.id });
     expect((await standingMembers(group!.id)).length).toBe(4);
+    expect(await seenBy(company.technician.sight)).toEqual([1, 4]);
+    // The owner of the first pad reads of their own pump alone, and why it is silent.
+    expect(await seenBy(company.homeowner.sight)).toEqual([0, 0]);
     const mails = (await mailsOf(company.companyId)).filter(({ text }) => text.includes('quiet together'));
     expect(mails.map(({ to_address }) => to_address)).toEqual([company.technician.email]);
     expect(mails[0]!.subject).toBe('Urgent: 4 pads in North went quiet together · North, 4 pumps on 4 pads');
