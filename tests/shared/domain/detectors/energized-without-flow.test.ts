@@ -32,6 +32,17 @@ describe('energized-without-flow', () => {
     expect(player.spoken()).toEqual(['energized-without-flow']);
   });
 
+  it('leaves an alarm that spoke before it standing, and does not have it raised twice', () => {
+    const player = createPlayer(withEquipment({ ...HEATER, input: 2 }));
+    player.playUntil(0, 600, goodDay());
+    player.play(60 * MINUTE, { rpm: 0, watts: 4 });
+    player.play(30 * MINUTE, { closedInputs: 2, activeInput: 0, rpm: 0, watts: 4 });
+    player.play(60 * MINUTE, { rpm: 0, watts: 4 });
+    expect(player.raised('stopped')).toHaveLength(1);
+    expect(player.raised('energized-without-flow')).toHaveLength(1);
+    expect(player.standing('stopped')).toBeDefined();
+  });
+
   it('is heard while we are on site and on a pad under repair', () => {
     const player = createPlayer({ ...withEquipment(HEATER), padState: 'repair' });
     player.playUntil(0, 600, goodDay());

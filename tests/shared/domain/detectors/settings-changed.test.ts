@@ -43,6 +43,14 @@ describe('settings-changed', () => {
     expect(player.spoken()).toEqual(['settings-changed']);
   });
 
+  it('takes standing still by the reported program for its consequence', () => {
+    const player = createPlayer();
+    player.playUntil(0, 500, goodDay());
+    player.push(report({ program: [{ ...SETTINGS.program[0]!, fromMinute: 900 }] }, player.at));
+    player.play(60 * MINUTE, { rpm: 0, watts: 4, reportedSource: 'off' });
+    expect(player.spoken()).toEqual(['settings-changed']);
+  });
+
   it('waits until our visit is over, and ends when the change is taken over', () => {
     const player = createPlayer();
     player.playUntil(0, 500, goodDay());
