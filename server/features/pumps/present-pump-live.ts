@@ -2,8 +2,16 @@ import type { AlarmMark, PumpLive, PumpNow } from '#shared/contract/http/pumps.t
 import type { PumpLiveRow } from './pump-live-read-model.ts';
 
 /** The pump this instant; what the fold left out is null on the wire. */
-function presentNow({ until, lockedBy, primed, because, ...now }: NonNullable<PumpLiveRow['now']>): PumpNow {
-  return { ...now, because: { ...because }, until: until ?? null, lockedBy: lockedBy ?? null, primed: primed ?? null };
+function presentNow(row: NonNullable<PumpLiveRow['now']>): PumpNow {
+  const { until, lockedBy, primed, because, flow, ...now } = row;
+  return {
+    ...now,
+    because: { ...because },
+    until: until ?? null,
+    lockedBy: lockedBy ?? null,
+    primed: primed ?? null,
+    flow: flow ?? null,
+  };
 }
 
 /** Evidence in the contract's shape: lists that whoever gets them may change. */

@@ -25,6 +25,8 @@ export const PumpNow = z.object({
   until: Instant.nullable(),
   lockedBy: z.number().int().nullable(),
   primed: z.boolean().nullable(),
+  /** Read from the watts, US gpm with one standard deviation; null where they cannot tell. */
+  flow: z.object({ gpm: z.number(), sigmaGpm: z.number() }).nullable(),
   /** The decision's reason as the domain's `Because`. */
   because: z.looseObject({ kind: z.string() }),
 });
@@ -121,7 +123,10 @@ export const StripsQuery = z
     path: ['until'],
   });
 
-/** Columns of equal length for a chart: `t` in ms; null is a gap. Bucketed to at most `width` with the extremes kept. */
+/**
+ * Columns of equal length for a chart: `t` in ms; null is a gap. Bucketed to at most `width` with the extremes kept; from an
+ * hour a point on without the closed inputs, from 35 days on without the expected speed.
+ */
 export const ReadingSeries = z.object({
   bucketMs: z.number().int().min(0),
   t: z.array(Instant),
@@ -216,8 +221,8 @@ export const pumpEndpoints = {
         until: InstantParam,
         width: z.coerce.number().int().min(10).max(4000).default(1000),
       })
-      .refine(({ from, until }) => until > from && until - from <= 35 * 86_400_000, {
-        message: 'until must lie after from, by at most 35 days',
+      .refine(({ from, until }) => until > from && until - from <= 800 * 86_400_000, {
+        message: 'until must lie after from, by at most 800 days',
         path: ['until'],
       }),
     response: ReadingSeries,

@@ -13,6 +13,7 @@ import { PumpAdviceSheet } from '#src/features/energy/pump-advice-sheet.tsx';
 import { PumpEnergySheet } from '#src/features/energy/pump-energy-sheet.tsx';
 import { DaySheet } from '#src/features/pumps/day-sheet.tsx';
 import { EquipmentSheet } from '#src/features/pumps/equipment-sheet.tsx';
+import { flowWords } from '#src/features/pumps/flow-words.ts';
 import { nameOfPump, pumpHeading } from '#src/features/pumps/pump-heading.ts';
 import { pumpQueries } from '#src/features/pumps/pump-queries.ts';
 import { SettingsSheet } from '#src/features/pumps/settings-sheet.tsx';
@@ -57,12 +58,18 @@ function LoadedPump({ pump }: { readonly pump: PumpDetail }) {
   const window = useMemo(() => ({ from: day.from, until: day.until }), [day.from, day.until]);
   const strip = useStrip(pump.pumpId, window);
   useWatchedPumps([pump.pumpId]);
+  const flow = flowWords(pump, format);
   return (
     <div className="mx-auto flex max-w-[90rem] flex-col gap-4 px-4 py-5 sm:px-7">
       <div>
         <PageHeading title={nameOfPump(pump)}>
           <Figures text={pumpHeading(pump, format, now)} />
         </PageHeading>
+        {flow === undefined ? null : (
+          <p className="text-ink-2">
+            <Figures text={flow} />
+          </p>
+        )}
         {pump.learning ? <p className="text-ink-2">{t('pump.learning')}</p> : null}
       </div>
       <DaySheet pump={pump} strip={strip} day={day} now={now} cursor={cursor} />

@@ -11,6 +11,12 @@ export const PUMP_MESSAGES = {
   'pump.heading.never': '{name}: no reading yet.',
   'pump.heading.noDevice': '{name}: listed, but nothing watches it.',
   'pump.learning': 'Still learning what is usual here: some rules stay silent until then.',
+  'pump.flow': 'Flow now {flow} ± {sigma} (one standard deviation), read from the watts.',
+  'pump.flow.standing': 'Flow now: none, it stands still.',
+  'pump.flow.unloaded': 'Flow now: none, it turns without load.',
+  'pump.flow.noCurve': 'Flow now: cannot tell. No wet-end curve is recorded here.',
+  'pump.flow.cannot':
+    'Flow now: cannot tell. Neither what was measured at start-up nor a fast run says it closely enough.',
   'pump.day.today': 'Today',
   'pump.day.earlier': '‹ day before',
   'pump.day.later': 'day after ›',

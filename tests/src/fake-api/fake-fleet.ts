@@ -128,6 +128,7 @@ function nowOf(run: Run, planned: readonly PlannedRun[], now: number): PumpNow {
     until: current?.to ?? null,
     lockedBy: run.activeInput === 0 ? null : run.activeInput,
     primed: !run.flags.includes('unprimed'),
+    flow: { gpm: run.meanRpm / 55, sigmaGpm: run.meanRpm / 550 },
     because: {
       ...(run.expectedSource === 'input'
         ? { kind: 'input', input: run.activeInput, others: [] }

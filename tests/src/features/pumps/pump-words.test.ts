@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import type { PumpDetail } from '#shared/contract/http/pumps.ts';
 import type { StripState } from '#src/components/charts/strip/strip-run.ts';
+import { flowWords } from '#src/features/pumps/flow-words.ts';
 import { viewHome } from '#src/features/pumps/home-view.ts';
 import { instantWords } from '#src/features/pumps/instant-words.ts';
 import { listLately } from '#src/features/pumps/lately-view.ts';
@@ -168,5 +169,28 @@ describe('settings', () => {
       'Timed run': 'off',
       'Freeze protection': 'off',
     });
+  });
+});
+
+describe('the flow', () => {
+  const now = { ...pump.now!, rpm: 1700, flow: { gpm: 31, sigmaGpm: 3.2 } };
+  const running = { now, silentSince: null, wetEndModel: 'Aldermere 100' };
+
+  it('is told with one standard deviation, in the reader’s units', () => {
+    expect(flowWords(running, format)).toBe('Flow now 31 gpm ± 3.2 gpm (one standard deviation), read from the watts.');
+  });
+
+  it('is nothing while it stands or turns without load', () => {
+    const none = { gpm: 0, sigmaGpm: 0 };
+    expect(flowWords({ ...running, now: { ...now, rpm: 0, flow: none } }, format)).toContain('stands still');
+    expect(flowWords({ ...running, now: { ...now, flow: none } }, format)).toContain('turns without load');
+  });
+
+  it('cannot be told without a curve or closely enough, and is not guessed of a silent pump', () => {
+    expect(flowWords({ ...running, now: { ...now, flow: null } }, format)).toContain('cannot tell. Neither');
+    expect(flowWords({ ...running, wetEndModel: null, now: { ...now, flow: null } }, format)).toContain(
+      'No wet-end curve',
+    );
+    expect(flowWords({ ...running, silentSince: 1 }, format)).toBeUndefined();
   });
 });

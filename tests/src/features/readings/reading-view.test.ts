@@ -30,6 +30,7 @@ const now: PumpNow = {
   until: null,
   lockedBy: 1,
   primed: true,
+  flow: null,
   because: { kind: 'input' },
 };
 
