@@ -11,6 +11,8 @@ const STATEMENTS = {
   'idempotency keys': `delete from idempotency_keys where created_at < now() - interval '1 day'`,
   'sign-in attempts': `delete from sign_in_attempts where expire < extract(epoch from now()) * 1000`,
   'listening periods': `delete from listening_periods where alive_at < now() - interval '60 days'`,
+  // Its outcomes go with it.
+  backtests: `delete from backtests where ended_at < now() - interval '30 days'`,
   refusals: `delete from refused_messages r using (
       select device_id, (array_agg(id order by id desc))[${REFUSALS_KEPT}] as oldest_kept
       from refused_messages group by device_id having count(*) > ${REFUSALS_KEPT}) many
