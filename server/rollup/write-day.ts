@@ -12,12 +12,13 @@ const wattHoursOf = ({ wattMs }: SliceSums): number => wattMs / WATT_MS_PER_WH;
 const meanOf = (weighted: number, ms: number): number | null => (ms > 0 ? weighted / ms : null);
 const covered = (slice: SliceSums, value: number): number | null => (slice.coveredMs > 0 ? value : null);
 
-const DAY = `insert into pump_days (pump_id, company_id, day, from_at, to_at, watt_hours, gallons, on_ms, covered_ms,
+const DAY = `insert into pump_days (pump_id, company_id, day, from_at, to_at, watt_hours, gallons, gallons_sigma, on_ms, covered_ms,
     unknown_flow_ms, readings, rpm_mean, rpm_min, rpm_max, watts_mean, watts_min, watts_max, source_ms)
   values ($1, $2, $3, to_timestamp($4::float8 / 1000), to_timestamp($5::float8 / 1000), $6, $7, $8, $9, $10, $11, $12, $13,
-    $14, $15, $16, $17, $18)
+    $14, $15, $16, $17, $18, $19)
   on conflict (pump_id, day) do update set from_at = excluded.from_at, to_at = excluded.to_at,
-    watt_hours = excluded.watt_hours, gallons = excluded.gallons, on_ms = excluded.on_ms, covered_ms = excluded.covered_ms,
+    watt_hours = excluded.watt_hours, gallons = excluded.gallons,
+    gallons_sigma = excluded.gallons_sigma, on_ms = excluded.on_ms, covered_ms = excluded.covered_ms,
     unknown_flow_ms = excluded.unknown_flow_ms, readings = excluded.readings, rpm_mean = excluded.rpm_mean,
     rpm_min = excluded.rpm_min, rpm_max = excluded.rpm_max, watts_mean = excluded.watts_mean,
     watts_min = excluded.watts_min, watts_max = excluded.watts_max, source_ms = excluded.source_ms`;
@@ -52,6 +53,7 @@ export async function writeDay(database: Database, key: Key, rollup: DayRollup, 
       day.to,
       wattHoursOf(whole),
       whole.gallons,
+      Number.isNaN(whole.gallonsSigma) ? null : whole.gallonsSigma,
       Math.round(whole.onMs),
       Math.round(whole.coveredMs),
       Math.round(whole.unknownFlowMs),

@@ -37,7 +37,9 @@ function pourWater(fives: readonly SliceSums[], runs: readonly Run[], upTo: numb
     for (const five of fives) {
       if (five.to <= span.from) continue;
       if (five.from >= span.to) break;
-      five.gallons += run.gallons * (shareOfRun(span, five.from, five.to)?.share ?? 0);
+      const share = shareOfRun(span, five.from, five.to)?.share ?? 0;
+      five.gallons += run.gallons * share;
+      five.gallonsSigma += (run.gallonsSigma ?? Number.NaN) * share;
     }
   }
 }

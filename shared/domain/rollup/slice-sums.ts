@@ -17,6 +17,8 @@ export type SliceSums = {
   onRpmMs: number;
   onWattMs: number;
   gallons: number;
+  /** One sigma, which adds up: the flow meter errs the same way all along. NaN where it is not known. */
+  gallonsSigma: number;
   unknownFlowMs: number;
   readings: number;
   closedInputs: number;
@@ -38,6 +40,7 @@ export const emptySlice = (from: number, to: number): SliceSums => ({
   onRpmMs: 0,
   onWattMs: 0,
   gallons: 0,
+  gallonsSigma: 0,
   unknownFlowMs: 0,
   readings: 0,
   closedInputs: 0,
@@ -60,6 +63,7 @@ function addSlice(sum: SliceSums, part: SliceSums): void {
   sum.onRpmMs += part.onRpmMs;
   sum.onWattMs += part.onWattMs;
   sum.gallons += part.gallons;
+  sum.gallonsSigma += part.gallonsSigma;
   sum.unknownFlowMs += part.unknownFlowMs;
   sum.readings += part.readings;
   sum.closedInputs |= part.closedInputs;

@@ -59,6 +59,7 @@ function expectSame(stored: any, { day, whole, hours, fives }: DayRollup, isOver
   expect(stored.day).toBe(dayText(day.epochDay));
   expect(stored.watt_hours).toBeCloseTo(whole.wattMs / 3_600_000, 4);
   expect(stored.gallons).toBeCloseTo(whole.gallons, 2);
+  expect(stored.gallons_sigma).toBeCloseTo(whole.gallonsSigma, 2);
   expect(stored).toMatchObject({
     readings: whole.readings,
     on_ms: Math.round(whole.onMs),

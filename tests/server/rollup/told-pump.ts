@@ -56,11 +56,11 @@ export function createToldPump(
     await client.query('delete from runs where pump_id = $1', [pump.pumpId]);
     await client.query(
       `insert into runs (pump_id, company_id, from_at, to_at, covered_ms, watt_hours, expected_rpm, mean_rpm, mean_watts,
-         gallons, closed_inputs, active_input, source, expected_source)
+         gallons, gallons_sigma, closed_inputs, active_input, source, expected_source)
        select $1, $2, to_timestamp(r.from / 1000), to_timestamp(r.to / 1000), r."coveredMs", r."wattHours", r."expectedRpm",
-         r."meanRpm", r."meanWatts", r.gallons, r."closedInputs", r."activeInput", r.source, r."expectedSource"
+         r."meanRpm", r."meanWatts", r.gallons, r."gallonsSigma", r."closedInputs", r."activeInput", r.source, r."expectedSource"
        from jsonb_to_recordset($3::jsonb) as r("from" float8, "to" float8, "coveredMs" bigint, "wattHours" float8,
-         "expectedRpm" real, "meanRpm" real, "meanWatts" real, gallons real, "closedInputs" int2, "activeInput" int2,
+         "expectedRpm" real, "meanRpm" real, "meanWatts" real, gallons real, "gallonsSigma" real, "closedInputs" int2, "activeInput" int2,
          source text, "expectedSource" text)`,
       [pump.pumpId, pump.companyId, JSON.stringify(runs)],
     );
