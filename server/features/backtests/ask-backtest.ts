@@ -1,4 +1,3 @@
-import { sql } from 'drizzle-orm';
 import type { Context } from '#server/context.ts';
 import { recordAct } from '#server/db/record-act.ts';
 import { conflict, invalid } from '#server/errors.ts';
@@ -22,6 +21,5 @@ export async function askBacktest(context: Context, asked: AskBacktest): Promise
     throw conflict('A backtest of your company is underway. Wait for it, or call it off.');
   }
   await recordAct(context, { action: 'backtest.asked', subjectKind: 'backtest', subjectId: backtestId });
-  await db.execute(sql`select pg_notify('millrace_backtest', '')`);
   return getBacktest(context, backtestId);
 }

@@ -1,10 +1,10 @@
-import { and, eq, inArray } from 'drizzle-orm';
+import { and, eq, inArray, sql } from 'drizzle-orm';
 import type { BacktestRequest } from '#server/backtest/stored/backtest-request.ts';
 import type { Context } from '#server/context.ts';
 import { newId } from '#server/db/new-id.ts';
 import { backtests } from '#server/db/schema/backtests.ts';
 
-/** Puts a backtest in line; undefined where the company has one underway: one at a time. */
+/** Puts a backtest in line and rings for the worker; undefined where the company has one underway: one at a time. */
 export async function addBacktest({ db, actor, now }: Context, request: BacktestRequest): Promise<string | undefined> {
   const underway = await db.$count(
     backtests,
@@ -19,6 +19,7 @@ export async function addBacktest({ db, actor, now }: Context, request: Backtest
     })
     .onConflictDoNothing()
     .returning({ id: backtests.id });
+  if (added.length > 0) await db.execute(sql`select pg_notify('millrace_backtest', '')`);
   return added[0]?.id;
 }
 
