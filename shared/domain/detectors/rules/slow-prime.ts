@@ -37,7 +37,8 @@ function takeStart(state: State, seconds: number, { load, context }: Facts, para
   state.recentAt = [...state.recentAt, load.startedAt].slice(-parameters.ofStarts);
   state.stood = [...state.stood, Math.round(load.stoodSeconds)].slice(-parameters.ofStarts);
   const taught = state.usual.length >= parameters.teachingStarts;
-  const excess = Math.max(parameters.leastExcessSeconds, 2 * context.intervalSeconds);
+  // Load is seen an interval late at the most: two intervals more are more for certain.
+  const excess = Math.max(parameters.leastExcessSeconds, 1.5 * context.intervalSeconds);
   const isSlow = (one: number): boolean => one >= parameters.timesUsual * usual && one - usual >= excess;
   if (!taught || !isSlow(seconds)) state.usual = [...state.usual, Math.round(seconds)].slice(-KEPT);
   const slowStarts = state.recent.filter(isSlow).length;
