@@ -1,6 +1,6 @@
-import { type ChildProcess, spawn } from 'node:child_process';
+import { type ChildProcess, execFileSync, spawn } from 'node:child_process';
 import { once } from 'node:events';
-import { readFileSync, writeFileSync } from 'node:fs';
+import { createWriteStream, mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { backtestLines, backtestPads } from './backtest-load.ts';
@@ -27,13 +27,32 @@ function lookAt({ pid }: ChildProcess, fed: number): Look | undefined {
   }
 }
 
+/** Writes everything into the pipe that the command reads as its file; a command that ends early ends this too. */
+async function feed(pipe: string, ended: Promise<unknown>, onFed: (lines: number) => void): Promise<void> {
+  const stream = createWriteStream(pipe);
+  const broken = Promise.race([ended, once(stream, 'error')]);
+  let open = true;
+  void broken.then(() => {
+    open = false;
+  });
+  for (const { text, count } of backtestLines(PADS, READINGS)) {
+    if (!open) return;
+    onFed(count);
+    if (!stream.write(text)) await Promise.race([once(stream, 'drain'), broken]);
+  }
+  stream.end();
+}
+
 /** Feeds the command as a user runs it and looks at it meanwhile. */
-async function runBacktest(): Promise<readonly Look[]> {
-  const pads = join(tmpdir(), `bench-pads-${process.pid}.json`);
+async function runBacktest(folder: string): Promise<readonly Look[]> {
+  const [pads, pipe] = [join(folder, 'pads.json'), join(folder, 'readings')];
   writeFileSync(pads, JSON.stringify(backtestPads(PADS)));
-  const command = ['--import', 'tsx', 'server/backtest/backtest-command.ts', '--pads', pads];
-  const child = spawn(process.execPath, [...command, '--readings', '/dev/stdin', '--out', '/dev/null'], {
-    stdio: ['pipe', 'ignore', 'inherit'],
+  execFileSync('mkfifo', [pipe]);
+  const command = ['--import', 'tsx', 'server/backtest/backtest-command.ts', '--pads', pads, '--readings', pipe];
+  const child = spawn(process.execPath, [...command, '--out', '/dev/null'], { stdio: ['ignore', 'ignore', 'pipe'] });
+  let said = '';
+  child.stderr.setEncoding('utf8').on('data', (text: string) => {
+    said += text;
   });
   let fed = 0;
   const looks: Look[] = [];
@@ -42,14 +61,12 @@ async function runBacktest(): Promise<readonly Look[]> {
     if (look !== undefined && look.bytes > 0) looks.push(look);
   }, LOOK_EVERY_MS);
   const ended = once(child, 'exit');
-  for (const lines of backtestLines(PADS, READINGS)) {
-    fed += lines.count;
-    if (!child.stdin?.write(lines.text)) await once(child.stdin as NodeJS.WritableStream, 'drain');
-  }
-  child.stdin?.end();
+  await feed(pipe, ended, (count) => {
+    fed += count;
+  });
   const [code] = await ended;
   clearInterval(timer);
-  if (code !== 0) throw new Error(`the backtest ended with ${code}`);
+  if (code !== 0) throw new Error(`the backtest ended with ${code}: ${said}`);
   return looks;
 }
 
@@ -63,7 +80,8 @@ export const backtestSpeed: Bench = {
   name: 'backtest',
   about: 'five million readings through the backtest command',
   run: async () => {
-    const looks = await runBacktest();
+    const folder = mkdtempSync(join(tmpdir(), 'millrace-backtest-'));
+    const looks = await runBacktest(folder).finally(() => rmSync(folder, { recursive: true, force: true }));
     const seconds = looks.at(-1)?.seconds ?? Number.NaN;
     const early = looks.filter(({ fed }) => fed > 0.2 * READINGS && fed <= 0.5 * READINGS);
     const late = looks.filter(({ fed }) => fed > 0.7 * READINGS);
