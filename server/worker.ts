@@ -1,6 +1,7 @@
 import { createBacktestRunner } from './backtest/stored/backtest-runner.ts';
 import { deriveRoleUrl } from './db/database-roles.ts';
 import { createPools } from './db/pools.ts';
+import { advisePrograms } from './jobs/advise-programs.ts';
 import { announceAssignments } from './jobs/announce-assignments.ts';
 import { cleanUpTables } from './jobs/clean-up-tables.ts';
 import { endExplanations } from './jobs/end-explanations.ts';
@@ -44,6 +45,7 @@ await runProgram('worker', async ({ env, log, progress, atEnd }) => {
       keepPartitions,
       cleanUpTables,
       rollUp,
+      advisePrograms,
     ],
     context: { pool: machine, publicUrl: env.publicUrl, now: Date.now, log },
     leadership: createLeadership(machineUrl),

@@ -1,5 +1,5 @@
 import { doublePrecision, foreignKey, index, jsonb, pgTable, real, text, uuid } from 'drizzle-orm/pg-core';
-import type { Advice } from '#shared/domain/advisor/advise-program.ts';
+import type { KeptAdvice } from '#shared/domain/advisor/advise-pump.ts';
 import type { PadNeeds } from '#shared/domain/advisor/pad-needs.ts';
 import type { TimeOfUseFinding } from '#shared/domain/energy/time-of-use-check.ts';
 import { companyId, instant } from './columns.ts';
@@ -26,9 +26,9 @@ export const programAdvice = pgTable(
     dearMicrosPerYear: doublePrecision('dear_micros_per_year').notNull(),
     /** Of the present cost; null without a comparison. */
     savedShare: real('saved_share'),
-    kind: text().$type<Advice['kind']>().notNull(),
+    kind: text().$type<KeptAdvice['kind']>().notNull(),
     basis: jsonb().$type<AdviceBasis>().notNull(),
-    advice: jsonb().$type<Advice>().notNull(),
+    advice: jsonb().$type<KeptAdvice>().notNull(),
     dearHours: jsonb('dear_hours').$type<readonly TimeOfUseFinding[]>().notNull(),
   },
   (table) => [

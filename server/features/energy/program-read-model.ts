@@ -4,7 +4,7 @@ import type { AdviceBasis } from '#server/db/schema/program-advice.ts';
 import type { Transaction } from '#server/db/transaction.ts';
 import type { SortKeys } from '#server/http/page-cursor.ts';
 import type { ProgramsQuery } from '#shared/contract/http/energy-programs.ts';
-import type { Advice } from '#shared/domain/advisor/advise-program.ts';
+import type { KeptAdvice } from '#shared/domain/advisor/advise-pump.ts';
 import type { TimeOfUseFinding } from '#shared/domain/energy/time-of-use-check.ts';
 
 export type ProgramRecord = {
@@ -19,7 +19,7 @@ export type ProgramRecord = {
   readonly savedShare: number | null;
   readonly savedMicrosPerMonth: number | null;
   readonly basis: AdviceBasis;
-  readonly advice: Advice;
+  readonly advice: KeptAdvice;
   readonly dearHours: readonly TimeOfUseFinding[];
 };
 
