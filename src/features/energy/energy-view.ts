@@ -9,6 +9,23 @@ type WaterFigure = z.infer<typeof Water>;
 /** Energy is kept in watt-hours by whoever formats it, and crosses the wire in kWh. */
 export const kwhText = (kwh: number, format: Format): string => format.quantity(kwh * 1000, 'energy');
 
+const toSignificant = (value: number, digits: number): number => {
+  if (value === 0) return 0;
+  const step = 10 ** (Math.floor(Math.log10(Math.abs(value))) - digits + 1);
+  return step <= 1 ? value : Math.round(value / step) * step;
+};
+
+/**
+ * A sum of water to the figures it is worth: the flow behind it is known to some per cent at best.
+ *
+ * @example volumeText(868_512, us) // '869,000 gal'
+ */
+export const volumeText = (gallons: number, format: Format, digits = 3): string =>
+  format.quantity(toSignificant(gallons, digits), 'volume');
+
+/** How uncertain a sum of water is: two figures. */
+export const sigmaText = (gallons: number, format: Format): string => volumeText(gallons, format, 2);
+
 /** A share with a tenth where a whole per cent would hide it. */
 export function shareText(share: number, format: Format): string {
   const small = share !== 0 && Math.abs(share) < 0.0995;
@@ -28,11 +45,9 @@ export function waterWords(water: WaterFigure | null, format: Format): WaterWord
     return { figure: t('energy.water.cannot'), sure: t('energy.water.unknownAll', { span: format.span(unknown) }) };
   }
   const sigma =
-    sigmaGallons === null
-      ? t('energy.sigma.none')
-      : t('energy.sigma', { sigma: format.quantity(sigmaGallons, 'volume') });
+    sigmaGallons === null ? t('energy.sigma.none') : t('energy.sigma', { sigma: sigmaText(sigmaGallons, format) });
   const least = unknown > 0 ? [t('energy.atLeast.why', { span: format.span(unknown) })] : [];
-  return { figure: format.quantity(gallons, 'volume'), sure: [sigma, ...least].join('; ') };
+  return { figure: volumeText(gallons, format), sure: [sigma, ...least].join('; ') };
 }
 
 /** Whether water is the least there was: for some of the running time the flow is not known. */

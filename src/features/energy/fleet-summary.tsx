@@ -4,7 +4,7 @@ import { Figures } from '#src/components/ui/figures.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
 import type { Format } from '#src/lib/format/create-format.ts';
 import { t } from '#src/lib/messages/energy-words.ts';
-import { changeOf, coverageOf, kwhText, shareText } from './energy-view.ts';
+import { changeOf, coverageOf, kwhText, shareText, volumeText } from './energy-view.ts';
 import { nameOfMonth } from './local-month.ts';
 
 const SAME = 0.005;
@@ -76,7 +76,7 @@ export function FleetSummary({ energy }: { readonly energy: FleetEnergy }) {
     ...(cost === null ? [] : [{ name: t('energy.cell.cost'), figure: format.money(cost, currency) }]),
     {
       name: t('energy.cell.water'),
-      figure: gallons === null ? t('energy.water.cannot') : format.quantity(gallons, 'volume'),
+      figure: gallons === null ? t('energy.water.cannot') : volumeText(gallons, format),
       below: gallons === null ? t('energy.water.why') : t('energy.fleet.water'),
     },
     ...(coveredSeconds === 0

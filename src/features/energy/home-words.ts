@@ -3,7 +3,7 @@ import type { Run } from '#shared/contract/http/runs.ts';
 import { findTurnoverCompletion } from '#shared/domain/turnover/find-turnover-completion.ts';
 import type { Format } from '#src/lib/format/create-format.ts';
 import { t } from '#src/lib/messages/page-words.ts';
-import { isLeast, kwhText } from './energy-view.ts';
+import { isLeast, kwhText, volumeText } from './energy-view.ts';
 import { nameOfMonth } from './local-month.ts';
 
 export type HomeCell = {
@@ -20,7 +20,7 @@ export function waterCell(today: EnergySpan | undefined, poolGallons: number | n
   }
   const unknown = isLeast(water) ? [t('home.water.some', { span: format.span(water.unknownSeconds * 1000) })] : [];
   if (today.turnovers === null || poolGallons === null) {
-    return { figure: format.quantity(water.gallons, 'volume'), beside: t('home.water.moved'), lines: unknown };
+    return { figure: volumeText(water.gallons, format), beside: t('home.water.moved'), lines: unknown };
   }
   const times = format.number(today.turnovers, 2);
   return {

@@ -5,7 +5,7 @@ import { Sheet } from '#src/components/ui/sheet.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
 import { t } from '#src/lib/messages/energy-words.ts';
 import { paths } from '#src/lib/paths.ts';
-import { isLeast, kwhText } from './energy-view.ts';
+import { isLeast, kwhText, volumeText } from './energy-view.ts';
 import { savedAmount, savedSigma } from './saved-view.ts';
 
 type PumpOfPad = PadEnergy['pumps'][number];
@@ -46,7 +46,7 @@ export function PadPumps({ pumps, currency }: Pick<PadEnergy, 'pumps' | 'currenc
               figures: true,
               right: true,
               cell: ({ totals: { water } }) =>
-                water === null ? '–' : `${isLeast(water) ? '≥ ' : ''}${format.quantity(water.gallons, 'volume')}`,
+                water === null ? '–' : `${isLeast(water) ? '≥ ' : ''}${volumeText(water.gallons, format)}`,
             },
             {
               head: t('energy.column.saved'),

@@ -7,7 +7,7 @@ import { useFormat } from '#src/hooks/use-format.ts';
 import { describeDays } from '#src/lib/describe-days.ts';
 import type { Format } from '#src/lib/format/create-format.ts';
 import { t } from '#src/lib/messages/energy-words.ts';
-import { kwhText } from './energy-view.ts';
+import { kwhText, volumeText } from './energy-view.ts';
 import { shortNeeds } from './program-view.ts';
 import { isEveryDay, WeekStrip } from './week-strip.tsx';
 
@@ -38,7 +38,7 @@ const listLines = (currency: string | null, format: Format): Line[] => [
   { name: t('program.entries'), of: (figures) => describeEntries(figures, format) },
   { name: t('program.kwh'), of: ({ kwhPerMonth }) => kwhText(kwhPerMonth, format) },
   { name: t('program.cost'), of: ({ costPerMonth }) => format.money(costPerMonth, currency) },
-  { name: t('program.water'), of: ({ gallonsPerDay }) => format.quantity(gallonsPerDay, 'volume') },
+  { name: t('program.water'), of: ({ gallonsPerDay }) => volumeText(gallonsPerDay, format) },
   { name: t('program.shortfalls'), of: (figures) => shortNeeds(figures) || t('program.short.none') },
 ];
 

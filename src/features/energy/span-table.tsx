@@ -6,7 +6,7 @@ import { ExportButton } from '#src/components/ui/export-button.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
 import type { Format } from '#src/lib/format/create-format.ts';
 import { t } from '#src/lib/messages/energy-words.ts';
-import { coverageOf, isLeast, kwhText, shareText } from './energy-view.ts';
+import { coverageOf, isLeast, kwhText, shareText, sigmaText, volumeText } from './energy-view.ts';
 import { nameOfMonth } from './local-month.ts';
 
 type Period = z.infer<typeof PeriodFigures>;
@@ -26,8 +26,8 @@ export const labelOfSpan = ({ from, label }: EnergySpan, { by, zone }: SpanAnswe
 
 const waterText = ({ water }: EnergyFigures, format: Format): string => {
   if (water === null || (water.gallons === 0 && water.unknownSeconds > 0)) return '–';
-  const sigma = water.sigmaGallons === null ? '' : ` ± ${format.quantity(water.sigmaGallons, 'volume')}`;
-  return `${isLeast(water) ? '≥ ' : ''}${format.quantity(water.gallons, 'volume')}${sigma}`;
+  const sigma = water.sigmaGallons === null ? '' : ` ± ${sigmaText(water.sigmaGallons, format)}`;
+  return `${isLeast(water) ? '≥ ' : ''}${volumeText(water.gallons, format)}${sigma}`;
 };
 
 function listColumns(answer: SpanAnswer, format: Format): Column<EnergySpan>[] {

@@ -34,9 +34,8 @@ export const ENERGY_MESSAGES = {
     other: '{count} pumps are paid in other currencies and left out of the money.',
   },
   'energy.money.withheld': 'Money is not shown to your role here.',
-  'energy.money.no-tariff':
-    'Not all of this time has a tariff, so no money is named. A manager says in the settings what a kWh costs.',
-  'energy.money.fleet': 'No pad has a tariff yet, so no money is named. Say in the settings what a kWh costs.',
+  'energy.money.no-tariff': 'Not all of this time has a tariff on record, so no money is named.',
+  'energy.money.fleet': 'No pad has a tariff on record yet, so no money is named.',
   'energy.tariff': { one: 'Tariff: {names}.', other: 'Tariffs: {names}.' },
   'energy.fixed': 'The meter’s fixed charge comes on top: {cost} for {days} days.',
   'energy.cell.energy': 'Energy',

@@ -17,7 +17,7 @@ export const PROGRAM_MESSAGES = {
   },
   'program.none': 'No program costs a quarter more than it must.',
   'program.none.detail':
-    'The advisor looks at every program once a day, with the water, the tariff and the windows its pad needs.',
+    'The advisor looks once a day at every program whose pad has a tariff and whose pump has a wet-end curve.',
   'program.none.waiting': 'No program has been looked at yet.',
   'program.noMatch': 'No pump matches.',
   'program.heading.advice': 'The same for {saved} a month less, {share} of its cost.',
