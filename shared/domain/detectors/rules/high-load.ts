@@ -3,6 +3,7 @@ import type { RuleParameters } from '../detector-parameters.ts';
 import type { Facts } from '../facts.ts';
 import { ABNORMAL, type Judgement, NORMAL, UNJUDGED } from '../judgement.ts';
 import { mostWattsShare } from '../load/most-watts-share.ts';
+import { staysCalm } from '../water/stay-calm.ts';
 
 /**
  * Since when the load is far above usual, and whether for long enough; when it was last usual and first above; at
@@ -12,6 +13,7 @@ type State = {
   farSince: number;
   far: boolean;
   usualAt: number;
+  calmSince: number;
   aboveAt: number;
   slowRpm: number;
   slowRatio: number;
@@ -27,6 +29,8 @@ const USUAL_RATIO = 1.06;
 /** Friction takes much more of a slow pump's watts than of a fast one's, water the same share of both. */
 const FRICTION_MORE = 1.35;
 const OTHER_SPEED = 1.2;
+const SAME_SPEED = 0.97;
+const AS_USUAL_RATIO = 1.03;
 /** Watts beyond what any flow could take are no water; the printed curve is good to some per cent. */
 const BEYOND_CURVE = 1.04;
 
@@ -40,10 +44,13 @@ function judge(state: State, facts: Facts, parameters: Parameters): Judgement {
   const least = parameters.aboveShare * (facts.stands('high-load') ? 1 - parameters.deadbandShare : 1);
   if (ratio < 1 + Math.max(least, 2 * water.usualSpread)) {
     state.farSince = 0;
+    const calm = staysCalm(state, water.ratio <= AS_USUAL_RATIO, facts, parameters.offDelaySeconds);
+    if (isOtherSpeed(state, facts.control.rpm) && !calm) return UNJUDGED;
     state.aboveAt = 0;
     if (!facts.stands('high-load')) forgetSpeeds(state);
     return NORMAL;
   }
+  state.calmSince = 0;
   if (state.aboveAt === 0) state.aboveAt = now;
   if (ratio < 1 + parameters.farAboveShare) state.farSince = 0;
   else if (state.farSince === 0) state.farSince = now;
@@ -51,6 +58,10 @@ function judge(state: State, facts: Facts, parameters: Parameters): Judgement {
   seeSpeed(state, facts.control.rpm, ratio);
   return ABNORMAL;
 }
+
+/** Another speed than the one that showed it most: a fast pump shows little of what rubs, so only a usual load ends it. */
+const isOtherSpeed = ({ slowRpm, fastRpm, slowRatio, fastRatio }: State, rpm: number): boolean =>
+  slowRpm !== 0 && Math.abs(rpm / (slowRatio >= fastRatio ? slowRpm : fastRpm) - 1) > 1 - SAME_SPEED;
 
 const ratioOf = ({ water }: Facts): number =>
   water.cleanWatts > water.usualWatts ? (water.ratio * water.usualWatts) / water.cleanWatts : water.ratio;
@@ -82,7 +93,8 @@ function causeOf(state: State, facts: Facts): string {
   if (twoSpeeds && slowRatio - 1 > FRICTION_MORE * (fastRatio - 1)) return 'rubbing';
   const cameOn =
     state.usualAt !== 0 && state.aboveAt - state.usualAt > AT_ONCE_MS && facts.load.startedAt < state.usualAt;
-  if (cameOn) return 'rubbing';
+  const cameOverDays = facts.water.ratioYesterday > USUAL_RATIO && state.usualAt < state.aboveAt - AT_ONCE_MS;
+  if (cameOn || cameOverDays) return 'rubbing';
   if (state.far) return 'to-waste';
   const most = mostWattsShare(facts.context);
   return most !== undefined && ratio > BEYOND_CURVE * most ? 'rubbing' : 'bypass';
@@ -92,7 +104,7 @@ function describe(state: State, facts: Facts, _: Parameters, { raised }: Spoken)
   const { water, load, control } = facts;
   // Two speeds tell more than one; what was said at first stands otherwise.
   const found = causeOf(state, facts);
-  if (!raised || (found === 'rubbing' && state.cause === 'bypass') || state.far) state.cause = found;
+  if (!raised || state.cause === 'bypass') state.cause = found;
   return {
     cause: state.cause,
     evidence: {
@@ -113,6 +125,7 @@ export const highLoad = defineDetector<'high-load', State>({
     farSince: 0,
     far: false,
     usualAt: 0,
+    calmSince: 0,
     aboveAt: 0,
     slowRpm: 0,
     slowRatio: 0,

@@ -3,9 +3,10 @@ import { defineDetector, type Finding, type Spoken } from '../define-detector.ts
 import type { RuleParameters } from '../detector-parameters.ts';
 import type { Facts } from '../facts.ts';
 import { ABNORMAL, type Judgement, NORMAL, UNJUDGED } from '../judgement.ts';
+import { staysCalm } from '../water/stay-calm.ts';
 
 /** At which speed it was seen, what was seen, how far the flow or the watts fell, and how it came. */
-type State = { rpm: number; slow: boolean; drop: number; cause: string };
+type State = { rpm: number; calmSince: number; slow: boolean; drop: number; cause: string };
 type Parameters = RuleParameters<'low-load'>;
 
 /** A lower speed shows less of the same trouble in its watts: only a load near the usual one counts there. */
@@ -32,11 +33,13 @@ function judge(state: State, facts: Facts, parameters: Parameters): Judgement {
   const sudden = water.ratio < 1 - share * (stands ? 1 - parameters.deadbandShare : 1);
   if (slow || sudden) {
     if (!stands || (sudden && control.rpm > state.rpm)) state.rpm = control.rpm;
-    state.slow = slow && (!stands || state.slow);
+    if (!stands) state.slow = slow;
+    state.calmSince = 0;
     return ABNORMAL;
   }
   // Below the speed at which it was seen a lesser fall proves nothing.
-  if (control.rpm < SAME_SPEED_SHARE * state.rpm && water.ratio < AS_USUAL_RATIO) return UNJUDGED;
+  const calm = staysCalm(state, water.ratio >= AS_USUAL_RATIO, facts, parameters.offDelaySeconds);
+  if (control.rpm < SAME_SPEED_SHARE * state.rpm && !calm) return UNJUDGED;
   if (stands && state.slow) return isFlowBack(state, facts, parameters) ? NORMAL : UNJUDGED;
   if (!stands) state.rpm = 0;
   return NORMAL;
@@ -67,7 +70,9 @@ function describe(state: State, facts: Facts, parameters: Parameters, { raised }
   if (!raised) state.cause = causeOf(state, facts);
   const flowDrop = water.dropOfDays >= 0 ? water.dropOfDays : water.dropNow;
   const wattsDrop = 1 - water.ratio;
-  if (state.slow || !raised) state.drop = state.slow ? flowDrop : wattsDrop;
+  if (!raised) state.drop = state.slow ? flowDrop : wattsDrop;
+  // Each speed reads the fall a little otherwise: the deepest counts while the alarm stands.
+  else if (state.slow && flowDrop > state.drop) state.drop = flowDrop;
   // What came at once is an alarm however far it went; what came over days waits for the next stop at first.
   const note = state.slow && state.drop < parameters.alarmShare;
   return {
@@ -95,7 +100,7 @@ const round = (share: number): number => Math.round(share * 100) / 100;
 export const lowLoad = defineDetector<'low-load', State>({
   detector: 'low-load',
   hears: ['reading'],
-  initial: () => ({ rpm: 0, slow: false, drop: 0, cause: 'sudden' }),
+  initial: () => ({ rpm: 0, calmSince: 0, slow: false, drop: 0, cause: 'sudden' }),
   judge,
   delaySeconds: (state, _, parameters) => (state.slow ? 0 : parameters.delaySeconds),
   describe,

@@ -19,8 +19,8 @@ const USUAL_DAYS = 14;
 /** Three ten-minute means over two starts: the half hour after which a band is valid. */
 const VALID_SAMPLES = 3;
 const VALID_STARTS = 2;
-/** The clean level is held for most of five days, so that an open bypass of a day or two is not taken for it. */
-const CLEAN_DAYS = 5;
+/** The clean level is held for most of nine days, so that a bypass left open for some days is not taken for it. */
+const CLEAN_DAYS = 9;
 const FEWEST_CLEAN_DAYS = 3;
 const CURRENT_DAYS = 3;
 /** Today counts once it has half an hour, and three days must lie within six. */

@@ -36,6 +36,8 @@ const WORTHWHILE_SHARE = 0.01;
 const MOST_TIMES_CLEAN = 100;
 /** Watts this far over the clean ones are no water: something rubs, or nobody can tell. */
 const RUBBING_RATIO = 1.08;
+/** More watts than with a clean filter are believed to be water only so far. */
+const MOST_OVER_CLEAN = 0.02;
 /** A change of flow seen in the watts is good to this share of the flow, one sigma. */
 const CHANGE_SIGMA_SHARE = 0.04;
 
@@ -74,7 +76,7 @@ export function createSystemFollower(meter: WaterMeter, state: WaterState): Syst
       const speaks = speedRatio >= HIGH_SPEED_RATIO || speedRatio >= state.kRatio - 0.02 || at - state.kAt > DAY_MS;
       const { cleanWatts } = summary;
       if (!speaks || cleanWatts === 0 || level.valves !== 0 || watts > RUBBING_RATIO * cleanWatts) return;
-      const gpm = gpmAfter(level.rpm, watts - cleanWatts);
+      const gpm = gpmAfter(level.rpm, Math.min(watts - cleanWatts, MOST_OVER_CLEAN * cleanWatts));
       const k = gpm === undefined ? undefined : meter.kAt(level.rpm, gpm);
       if (k === undefined || system === undefined) return;
       const bounded = Math.min(k, MOST_TIMES_CLEAN * system.k);
