@@ -6,6 +6,7 @@ import { users } from '#server/db/schema/users.ts';
 import { wetEndModels } from '#server/db/schema/wet-end-models.ts';
 import type { Transaction } from '#server/db/transaction.ts';
 import type { DemoCompany } from '#shared/contract/demo/demo-company.ts';
+import { commissionEnergy } from './commission-energy.ts';
 import { commissionPads } from './commission-pads.ts';
 import type { CommissionedDevice } from './commissioning.ts';
 
@@ -50,6 +51,7 @@ export async function commissionCompany(
     ...models,
     hashSecret: options.hashSecret,
   });
+  if (company.energy !== undefined) await commissionEnergy(db, company.energy, { companyId, padIds, pumps });
   return { companyId, userIds, customerIds, padIds, pumps };
 }
 

@@ -1,5 +1,6 @@
 import type { MotorSettings, MotorTraits } from '#shared/domain/control/motor-settings.ts';
 import type { Equipment, PadState, WetEndPoint, WiredInput } from '#shared/domain/control/pump-context.ts';
+import type { Tariff } from '#shared/domain/energy/tariff.ts';
 
 /** Plain data of an invented company: what its own people would have entered. The simulator adds the physics behind it. */
 export type DemoCompany = {
@@ -12,6 +13,37 @@ export type DemoCompany = {
   readonly motorModels: readonly DemoMotorModel[];
   readonly wetEndModels: readonly DemoWetEndModel[];
   readonly pads: readonly DemoPad[];
+  /** What energy costs, and what the pumps used before. */
+  readonly energy?: DemoEnergy;
+};
+
+/** A tariff with terms that name it by key; days are local, `YYYY-MM-DD`, the last term has no end. */
+export type DemoEnergy = {
+  readonly tariffs: readonly { readonly key: string; readonly tariff: Tariff }[];
+  readonly companyTerms: readonly { readonly tariff: string; readonly from: string; readonly to: string | null }[];
+  /** Pads with a plan of their own, by the pad's name. */
+  readonly padTerms: readonly {
+    readonly pad: string;
+    readonly tariff: string;
+    readonly from: string;
+    readonly ownMeter: boolean;
+    readonly otherKwhByPeriod: readonly number[];
+  }[];
+  readonly baselines: readonly DemoBaseline[];
+  /** The grid whose emission factors are shown. */
+  readonly carbonRegion: string;
+};
+
+/** What the pump under a device used before, as its plate or a clamp meter told. */
+export type DemoBaseline = {
+  readonly serial: string;
+  readonly kind: 'clamped' | 'nameplate';
+  readonly watts?: number;
+  readonly sigmaWatts?: number;
+  readonly horsepower?: number;
+  readonly serviceFactor?: number;
+  readonly basis: { readonly kind: 'same-hours' };
+  readonly note: string;
 };
 
 /** Someone who signs in. `customer` is the key of a homeowner's customer. */

@@ -1,9 +1,12 @@
 import type { DemoCompany } from './demo-company.ts';
 import { LARKMOOR_COAST_PADS } from './larkmoor-coast.data.ts';
 import { LARKMOOR_CUSTOMERS } from './larkmoor-customers.data.ts';
+import { larkmoorEnergy } from './larkmoor-energy.data.ts';
 import { LARKMOOR_MOTOR_MODELS, LARKMOOR_WET_END_MODELS } from './larkmoor-models.data.ts';
 import { LARKMOOR_NORTH_PADS } from './larkmoor-north.data.ts';
 import { LARKMOOR_SOUTH_PADS } from './larkmoor-south.data.ts';
+
+const PADS = [...LARKMOOR_NORTH_PADS, ...LARKMOOR_COAST_PADS, ...LARKMOOR_SOUTH_PADS];
 
 /** The invented company of the demo: 36 pumps on 30 pads, three routes. Nobody and nothing in it exists. */
 export const LARKMOOR: DemoCompany = {
@@ -30,5 +33,6 @@ export const LARKMOOR: DemoCompany = {
   customers: LARKMOOR_CUSTOMERS,
   motorModels: LARKMOOR_MOTOR_MODELS,
   wetEndModels: LARKMOOR_WET_END_MODELS,
-  pads: [...LARKMOOR_NORTH_PADS, ...LARKMOOR_COAST_PADS, ...LARKMOOR_SOUTH_PADS],
+  pads: PADS,
+  energy: larkmoorEnergy(PADS),
 };
