@@ -6,7 +6,7 @@ import { mostWattsShare } from '../load/most-watts-share.ts';
 import { staysCalm } from '../water/stay-calm.ts';
 
 /**
- * Since when the load is far above usual, and whether for long enough; when it was last usual and first above; at
+ * Since when the load is far above usual, and whether for long enough; when it was last usual and first clearly more; at
  * which speeds it was seen, with the ratio there; and the cause found.
  */
 type State = {
@@ -14,7 +14,7 @@ type State = {
   far: boolean;
   usualAt: number;
   calmSince: number;
-  aboveAt: number;
+  risenAt: number;
   slowRpm: number;
   slowRatio: number;
   fastRpm: number;
@@ -24,8 +24,9 @@ type State = {
 type Parameters = RuleParameters<'high-load'>;
 
 /** Between usual and too much in less than this is a valve; longer, something wears (common practice). */
-const AT_ONCE_MS = 30 * 60_000;
+const AT_ONCE_MS = 12 * 60_000;
 const USUAL_RATIO = 1.06;
+const RISEN_RATIO = 1.1;
 /** Friction takes much more of a slow pump's watts than of a fast one's, water the same share of both. */
 const FRICTION_MORE = 1.35;
 const OTHER_SPEED = 1.2;
@@ -39,24 +40,30 @@ function judge(state: State, facts: Facts, parameters: Parameters): Judgement {
   const { water, now } = facts;
   if (Number.isNaN(water.ratio)) return UNJUDGED;
   const ratio = ratioOf(facts);
-  if (ratio <= USUAL_RATIO) state.usualAt = now;
+  followRise(state, ratio, now);
   if (ratio <= USUAL_RATIO && state.slowRpm === 0) return NORMAL;
   const least = parameters.aboveShare * (facts.stands('high-load') ? 1 - parameters.deadbandShare : 1);
   if (ratio < 1 + Math.max(least, 2 * water.usualSpread)) {
     state.farSince = 0;
     const calm = staysCalm(state, water.ratio <= AS_USUAL_RATIO, facts, parameters.offDelaySeconds);
     if (isOtherSpeed(state, facts.control.rpm) && !calm) return UNJUDGED;
-    state.aboveAt = 0;
     if (!facts.stands('high-load')) forgetSpeeds(state);
     return NORMAL;
   }
   state.calmSince = 0;
-  if (state.aboveAt === 0) state.aboveAt = now;
   if (ratio < 1 + parameters.farAboveShare) state.farSince = 0;
   else if (state.farSince === 0) state.farSince = now;
   state.far = state.farSince !== 0 && now - state.farSince >= parameters.farAboveSeconds * 1000;
   seeSpeed(state, facts.control.rpm, ratio);
   return ABNORMAL;
+}
+
+/** When the load was last usual, and when it was clearly more for the first time since. */
+function followRise(state: State, ratio: number, now: number): void {
+  if (ratio <= USUAL_RATIO) {
+    state.usualAt = now;
+    state.risenAt = 0;
+  } else if (ratio >= RISEN_RATIO && state.risenAt === 0) state.risenAt = now;
 }
 
 /** Another speed than the one that showed it most: a fast pump shows little of what rubs, so only a usual load ends it. */
@@ -92,8 +99,8 @@ function causeOf(state: State, facts: Facts): string {
   const twoSpeeds = slowRpm > 0 && fastRpm > OTHER_SPEED * slowRpm;
   if (twoSpeeds && slowRatio - 1 > FRICTION_MORE * (fastRatio - 1)) return 'rubbing';
   const cameOn =
-    state.usualAt !== 0 && state.aboveAt - state.usualAt > AT_ONCE_MS && facts.load.startedAt < state.usualAt;
-  const cameOverDays = facts.water.ratioYesterday > USUAL_RATIO && state.usualAt < state.aboveAt - AT_ONCE_MS;
+    state.usualAt !== 0 && state.risenAt - state.usualAt > AT_ONCE_MS && facts.load.startedAt < state.usualAt;
+  const cameOverDays = facts.water.ratioYesterday > USUAL_RATIO && state.usualAt < state.risenAt - AT_ONCE_MS;
   if (cameOn || cameOverDays) return 'rubbing';
   if (state.far) return 'to-waste';
   const most = mostWattsShare(facts.context);
@@ -126,7 +133,7 @@ export const highLoad = defineDetector<'high-load', State>({
     far: false,
     usualAt: 0,
     calmSince: 0,
-    aboveAt: 0,
+    risenAt: 0,
     slowRpm: 0,
     slowRatio: 0,
     fastRpm: 0,

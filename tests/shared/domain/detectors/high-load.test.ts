@@ -49,10 +49,10 @@ describe('high-load', () => {
     expect(player.raised('high-load')[0]).toMatchObject({ cause: 'bypass' });
   });
 
-  it('names what rubs where the load came on over an hour, or weighs more at low speed', () => {
+  it('names what rubs where the load came on over two hours, or weighs more at low speed', () => {
     const creeping = learnt(NARROW);
     const onset = creeping.at;
-    creeping.play(3.3 * HOUR, (at) => ({ closedInputs: 1, load: 1 + Math.min(0.22, ((at - onset) / HOUR) * 0.16) }));
+    creeping.play(3.8 * HOUR, (at) => ({ closedInputs: 1, load: 1 + Math.min(0.22, ((at - onset) / HOUR) * 0.1) }));
     expect(creeping.raised('high-load')[0]).toMatchObject({ cause: 'rubbing' });
 
     const slower = createPlayer(NARROW);
