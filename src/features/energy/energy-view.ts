@@ -9,6 +9,8 @@ type WaterFigure = z.infer<typeof Water>;
 /** Energy is kept in watt-hours by whoever formats it, and crosses the wire in kWh. */
 export const kwhText = (kwh: number, format: Format): string => format.quantity(kwh * 1000, 'energy');
 
+const MILLION = 1_000_000;
+
 const toSignificant = (value: number, digits: number): number => {
   if (value === 0) return 0;
   const step = 10 ** (Math.floor(Math.log10(Math.abs(value))) - digits + 1);
@@ -21,7 +23,9 @@ const toSignificant = (value: number, digits: number): number => {
  * @example volumeText(868_512, us) // '869,000 gal'
  */
 export const volumeText = (gallons: number, format: Format, digits = 3): string =>
-  format.quantity(toSignificant(gallons, digits), 'volume');
+  format.units === 'us' && gallons >= MILLION
+    ? t('energy.million', { value: format.number(gallons / MILLION, gallons < 100 * MILLION ? 1 : 0) })
+    : format.quantity(toSignificant(gallons, digits), 'volume');
 
 /** How uncertain a sum of water is: two figures. */
 export const sigmaText = (gallons: number, format: Format): string => volumeText(gallons, format, 2);

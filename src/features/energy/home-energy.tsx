@@ -84,6 +84,8 @@ export function HomeEnergy({ pumpId, zone, poolGallons, since, runs, dayFrom, no
     );
   }
   const span = days.data.spans.find(({ label }) => label === today);
+  // Nothing can have been saved before the first reading.
+  const savedSince = months.data.spans.find(({ coveredSeconds }) => coveredSeconds > 0)?.label ?? month;
   const water = waterCell(span, poolGallons, format);
   const done = turnoverLine({ runs, from: dayFrom, now, poolGallons, zone }, format);
   return (
@@ -99,7 +101,7 @@ export function HomeEnergy({ pumpId, zone, poolGallons, since, runs, dayFrom, no
         </Cell>
         <Cell name={t('home.cost')} cell={costCell(span, days.data, months.data, format)} />
         <div className={CELL}>
-          <h2 className="text-ink-2">{t('home.saved', { month: nameOfMonth(first.slice(0, 7), format.locale) })}</h2>
+          <h2 className="text-ink-2">{t('home.saved', { month: nameOfMonth(savedSince, format.locale) })}</h2>
           <HomeSaved energy={months.data} />
         </div>
       </div>

@@ -50,6 +50,7 @@ export const ENERGY_MESSAGES = {
   'energy.wanted': 'of {count} wanted',
   'energy.notWanted': 'no number is set for this pool',
   'energy.noPool': 'the pool’s volume is not recorded',
+  'energy.million': '{value} million gal',
   'energy.sigma': '± {sigma}',
   'energy.sigma.none': 'its uncertainty is not known',
   'energy.atLeast': 'at least',
