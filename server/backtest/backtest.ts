@@ -17,7 +17,8 @@ const TAKE_EVERY_EVENTS = 64;
 
 const MOST_UNKNOWN = 1000;
 
-type Pad = FoldedPad & { readonly inputs: number; waiting: number; heardAt: number };
+/** `silent` = as its neighbours were told; undefined before that. */
+type Pad = FoldedPad & { readonly inputs: number; waiting: number; heardAt: number; silent: boolean | undefined };
 
 export type BacktestCount = { readings: number; late: number; unknownSerials: Map<string, number> };
 
@@ -36,6 +37,7 @@ const createPad = (context: PumpContext): Pad => ({
   inputs: context.traits.inputCount,
   waiting: 0,
   heardAt: Number.NEGATIVE_INFINITY,
+  silent: undefined,
 });
 
 /**
@@ -55,14 +57,22 @@ export function createBacktest(contexts: readonly PumpContext[]): Backtest {
     for (const signal of pad.fold.take().signals) areas.take(pad, signal, at);
   };
 
+  const gatherAll = (): void => {
+    for (const pad of pads.values()) gather(pad, lastArrival);
+  };
+
   const tellTime = (receivedAt: number): void => {
     for (const pad of pads.values()) {
       // A pad that has just spoken knows the time.
-      if (receivedAt - pad.heardAt >= TELL_TIME_EVERY_MS) {
+      const quiet = receivedAt - pad.heardAt >= TELL_TIME_EVERY_MS;
+      if (quiet) {
         pad.fold.push({ kind: toldAt === undefined ? 'listening' : 'time', receivedAt });
+        gather(pad, receivedAt);
       }
-      gather(pad, receivedAt);
-      areas.hear(pad, receivedAt);
+      if (!quiet && pad.silent === false) continue;
+      const silent = pad.fold.silentSince() !== undefined;
+      if (silent !== pad.silent) areas.hear(pad, receivedAt);
+      pad.silent = silent;
     }
     toldAt = receivedAt;
   };
@@ -102,9 +112,13 @@ export function createBacktest(contexts: readonly PumpContext[]): Backtest {
       if (refusal === undefined) push(pad, event);
       return refusal;
     },
-    settled: () => (toldAt === undefined ? [] : lines.settled(toldAt)),
+    settled: () => {
+      gatherAll();
+      return toldAt === undefined ? [] : lines.settled(toldAt);
+    },
     end: () => {
       if (toldAt !== undefined) tellTime(lastArrival);
+      gatherAll();
       return lines.rest();
     },
     count: () => count,
