@@ -12,22 +12,28 @@ export type StoredHours = {
   readonly wattHours: readonly (number | null)[];
   readonly quarterWattHours: readonly (number | null)[];
   readonly gallons: readonly (number | null)[];
-  readonly onMs: readonly number[];
-  readonly coveredMs: readonly number[];
-  readonly unknownFlowMs: readonly number[];
+  readonly onMs: readonly (number | null)[];
+  readonly coveredMs: readonly (number | null)[];
 };
+
+/** What of the hours is asked for besides their energy: a year of arrays is slow to read for nothing. */
+export type HoursNeeded = { readonly demand: boolean; readonly savings: boolean };
+
+const EVERYTHING: HoursNeeded = { demand: true, savings: true };
+const arrayOf = (column: string, isNeeded: boolean) =>
+  isNeeded ? sql`array_to_json(${sql.identifier(column)})` : sql`'[]'::json`;
 
 /** Stored hours of some pumps from one local day to before another, in order. */
 export async function listStoredHours(
   db: Pick<Transaction, 'execute'>,
   pumpIds: readonly string[],
   { from, until }: { readonly from: string; readonly until: string },
+  { demand, savings }: HoursNeeded = EVERYTHING,
 ): Promise<StoredHours[]> {
   const { rows } = await db.execute<StoredHours>(sql`
     select pump_id as "pumpId", day::text as day, array_to_json(watt_hours) as "wattHours",
-      array_to_json(quarter_watt_hours) as "quarterWattHours", array_to_json(gallons) as gallons,
-      array_to_json(on_ms) as "onMs", array_to_json(covered_ms) as "coveredMs",
-      array_to_json(unknown_flow_ms) as "unknownFlowMs"
+      ${arrayOf('quarter_watt_hours', demand)} as "quarterWattHours", ${arrayOf('gallons', savings)} as gallons,
+      ${arrayOf('on_ms', savings)} as "onMs", ${arrayOf('covered_ms', savings)} as "coveredMs"
     from pump_day_hours
     where pump_id = any(${sql.param(pumpIds)}::uuid[]) and day >= ${from}::date and day < ${until}::date
     order by pump_id, day`);

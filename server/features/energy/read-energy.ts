@@ -44,8 +44,10 @@ export async function readEnergy(
   const prices = await findPadPrices(db, padId);
   const days = groupBy(await listEnergyDays(db, pumpIds, window), ({ pumpId }) => pumpId);
   const months = { from: window.monthsFrom, until: window.monthsUntil };
-  const hours = groupBy(await listStoredHours(db, pumpIds, months), ({ pumpId }) => pumpId);
   const baselines = await listBaselines(db, pumpIds);
+  const demand = prices.terms.some(({ tariff }) => tariff.demand !== undefined || tariff.flatDemand !== undefined);
+  const needed = { demand, savings: baselines.size > 0 };
+  const hours = groupBy(await listStoredHours(db, pumpIds, months, needed), ({ pumpId }) => pumpId);
   return {
     prices,
     pumps: pumps.map((pump) =>

@@ -49,7 +49,10 @@ async function readHours(
   place: { readonly padId: string; readonly zone: string; readonly pumpIds: readonly string[] },
   window: EnergyWindow,
 ): Promise<HourMap> {
-  const stored = groupBy(await listStoredHours(db, place.pumpIds, window), ({ day }) => day);
+  const stored = groupBy(
+    await listStoredHours(db, place.pumpIds, window, { demand: false, savings: false }),
+    ({ day }) => day,
+  );
   const { terms } = await findPadPrices(db, place.padId);
   const first = epochDayOf(window.from);
   const term = termOn(terms, first) ?? terms.at(-1);

@@ -1,0 +1,1 @@
+CREATE INDEX "runs_gaps_index" ON "runs" USING btree ("pump_id","from_at") WHERE source = 'no-data';
