@@ -42,8 +42,9 @@ export const typedFigure = (value: number, { size, digits }: FigureForm): string
 
 /** A stored value with its unit. */
 export function sayFigure(value: number, form: FigureForm): string {
-  const number = typedFigure(value, form);
-  return form.unit === 'd' ? t('unit.d', { count: Number(number), number }) : t(`unit.${form.unit}`, { number });
+  const typed = typedFigure(value, form);
+  const number = new Intl.NumberFormat('en', { maximumFractionDigits: form.digits }).format(Number(typed));
+  return form.unit === 'd' ? t('unit.d', { count: Number(typed), number }) : t(`unit.${form.unit}`, { number });
 }
 
 /**

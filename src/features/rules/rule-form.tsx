@@ -17,10 +17,12 @@ export type RuleFormProps = {
   readonly inherited: StoredRules;
   readonly onChange: (draft: RuleDraft) => void;
   readonly readOnly: boolean;
+  /** Nothing holds above but the defaults. */
+  readonly isFirst: boolean;
 };
 
 /** One rule's switch, priority and figures. An empty figure holds as above. */
-export function RuleForm({ detector, draft, inherited, onChange, readOnly }: RuleFormProps) {
+export function RuleForm({ detector, draft, inherited, onChange, readOnly, isFirst }: RuleFormProps) {
   const above = inherited[detector] ?? {};
   const usualPriority = above.priority ?? DETECTOR_CLASSES[detector].priority;
   const isOn = above.enabled ?? true;
@@ -32,7 +34,12 @@ export function RuleForm({ detector, draft, inherited, onChange, readOnly }: Rul
           value={draft.enabled}
           onChange={(enabled) => onChange({ ...draft, enabled })}
           options={[
-            { value: '', label: t('rules.speaks.inherit', { value: isOn ? t('rules.speaks.on') : t('rules.off') }) },
+            {
+              value: '',
+              label: t(isFirst ? 'rules.speaks.usual' : 'rules.speaks.inherit', {
+                value: isOn ? t('rules.speaks.on') : t('rules.off'),
+              }),
+            },
             { value: 'on', label: t('rules.speaks.on') },
             { value: 'off', label: t('rules.speaks.off') },
           ]}
@@ -42,7 +49,12 @@ export function RuleForm({ detector, draft, inherited, onChange, readOnly }: Rul
           value={draft.priority}
           onChange={(priority) => onChange({ ...draft, priority })}
           options={[
-            { value: '', label: t('rules.priority.inherit', { value: t(`mark.${usualPriority}`) }) },
+            {
+              value: '',
+              label: t(isFirst ? 'rules.priority.usual' : 'rules.priority.inherit', {
+                value: t(`mark.${usualPriority}`),
+              }),
+            },
             ...PRIORITIES.map((value) => ({ value, label: t(`mark.${value}`) })),
           ]}
         />
@@ -62,7 +74,9 @@ export function RuleForm({ detector, draft, inherited, onChange, readOnly }: Rul
       </div>
       {countSet(draft) === 0 ? null : (
         <div>
-          <Button onClick={() => onChange({ enabled: '', priority: '', figures: {} })}>{t('rules.reset')}</Button>
+          <Button onClick={() => onChange({ enabled: '', priority: '', figures: {} })}>
+            {t(isFirst ? 'rules.resetUsual' : 'rules.reset')}
+          </Button>
         </div>
       )}
     </fieldset>

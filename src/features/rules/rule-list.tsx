@@ -75,6 +75,7 @@ function RuleItem({ detector, layer, elsewhere, draft, onChange, readOnly }: Rul
           inherited={layer.inherited}
           onChange={onChange}
           readOnly={readOnly}
+          isFirst={layer.scope.kind === 'company'}
         />
       ) : null}
     </details>
