@@ -117,7 +117,15 @@ function planOne(matter: Matter, memory: MailMemory, { publicUrl, now }: Announc
   memory.persons.set(person.userId, plan.person);
   const { alarmId, companyId } = alarm;
   const { transition } = announcement;
-  const composed = composeAlarmMail({ alarmId, record: alarm.record, place, announcement, publicUrl, found });
+  const composed = composeAlarmMail({
+    alarmId,
+    record: alarm.record,
+    place,
+    announcement,
+    publicUrl,
+    found,
+    isGroup: alarm.pumpId === null,
+  });
   const key = createHash('sha256').update(`${alarmId} ${transition} ${person.address}`).digest('hex').slice(0, 40);
   return {
     id: newId(now),

@@ -41,6 +41,8 @@ export type MailMatter = {
   readonly publicUrl: string;
   /** How often this company found each cause of the alarm's detector. */
   readonly found?: FoundCounts | undefined;
+  /** It speaks for several pumps: the causes that are weighed are those of one. */
+  readonly isGroup?: boolean;
 };
 
 const PRIORITY_WORDS = { urgent: 'Urgent', soon: 'Soon', note: 'Note' } as const;
@@ -56,7 +58,7 @@ export function composeAlarmMail(matter: MailMatter): ComposedMail {
   };
 }
 
-function describeSection({ alarmId, record, place, announcement, publicUrl, found }: MailMatter): MailSection {
+function describeSection({ alarmId, record, place, announcement, publicUrl, found, isGroup }: MailMatter): MailSection {
   const words = alarmWords(record.detector, record.cause, record.evidence);
   return {
     priority: PRIORITY_WORDS[record.priority],
@@ -65,13 +67,15 @@ function describeSection({ alarmId, record, place, announcement, publicUrl, foun
     meaning: words.meaning,
     facts: listFacts(record, place),
     evidence: describeEvidence(record.evidence, place.zone),
-    likely: listLikely(record, place, found),
+    likely: isGroup === true ? NOTHING_LIKELY : listLikely(record, place, found),
     look: words.look,
     cautionTitle: CAUTIONS[words.task].title,
     cautions: words.cautions,
     link: `${publicUrl}/alarms/${alarmId}`,
   };
 }
+
+const NOTHING_LIKELY: MailSection['likely'] = { guess: false, causes: [] };
 
 /** As many as one reads standing at a pad. */
 const MOST_CAUSES = 3;

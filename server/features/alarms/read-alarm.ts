@@ -22,9 +22,11 @@ export async function readAlarm(context: Context, alarmId: string): Promise<Alar
   const isStaff = context.actor.role !== 'homeowner';
   return {
     ...alarm,
-    likely: isStaff
-      ? presentLikely(explainAlarm(alarm, alarm.zone, await countFoundCauses(context.db, alarmId)))
-      : null,
+    // The causes that are weighed are those of one pump.
+    likely:
+      isStaff && alarm.group === null
+        ? presentLikely(explainAlarm(alarm, alarm.zone, await countFoundCauses(context.db, alarmId)))
+        : null,
     members: alarm.group === null ? [] : await listMembers(context.db, alarmId),
     transitions: isStaff ? transitions : transitions.map((transition) => ({ ...transition, by: null, note: null })),
     mails,

@@ -19,7 +19,7 @@ export function LikelySheet({ likely }: { readonly likely: RankedCauses }) {
         )}
         <ol>
           {shown.map((cause, index) => (
-            <Cause key={cause.cause} cause={cause} place={index + 1} />
+            <Cause key={cause.cause} cause={certain ? cause : unsure(cause)} place={index + 1} />
           ))}
         </ol>
         {rest.length === 0 ? null : (
@@ -38,6 +38,10 @@ export function LikelySheet({ likely }: { readonly likely: RankedCauses }) {
     </Sheet>
   );
 }
+
+/** Where nothing singles one out, the first is no likelier than possible. */
+const unsure = (cause: RankedCause): RankedCause =>
+  cause.standing === 'likely' ? { ...cause, standing: 'possible' } : cause;
 
 function Cause({ cause, place }: { readonly cause: RankedCause; readonly place: number }) {
   const { name, check, standing, detectorSays, reasonsFor, reasonsAgainst, found, calls } = cause;
