@@ -8,6 +8,7 @@ import { endExplanations } from './jobs/end-explanations.ts';
 import { escalateAlarms } from './jobs/escalate-alarms.ts';
 import { keepPartitions } from './jobs/keep-partitions.ts';
 import { createLeadership } from './jobs/leadership.ts';
+import { pruneRollups } from './jobs/prune-rollups.ts';
 import { rollUp } from './jobs/roll-up.ts';
 import { createScheduler } from './jobs/scheduler.ts';
 import { silenceSetAside } from './jobs/silence-set-aside.ts';
@@ -46,6 +47,7 @@ await runProgram('worker', async ({ env, log, progress, atEnd }) => {
       cleanUpTables,
       rollUp,
       advisePrograms,
+      pruneRollups,
     ],
     context: { pool: machine, publicUrl: env.publicUrl, now: Date.now, log },
     leadership: createLeadership(machineUrl),

@@ -5,6 +5,7 @@ import { type BenchPostgres, startBenchPostgres } from './bench-database.ts';
 import { clientBytes } from './client-bytes.ts';
 import { connectedDevices } from './connected-devices.ts';
 import { energyAnswers } from './energy-answers.ts';
+import { flowMeter } from './flow-meter.ts';
 import { foldLag } from './fold-lag.ts';
 import { foldRate } from './fold-rate.ts';
 import { formatTable } from './format-table.ts';
@@ -17,6 +18,7 @@ const BENCHES: readonly Bench[] = [
   clientBytes,
   foldRate,
   backtestSpeed,
+  flowMeter,
   energyAnswers,
   ingestOne,
   ingestForty,
