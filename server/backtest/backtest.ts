@@ -12,13 +12,21 @@ const FINE_STEP_MS = 60_000;
 const FINE_FOR_MS = 2 * 3_600_000;
 const COARSE_STEP_MS = 15 * 60_000;
 
-/** How often a pad's outputs are gathered, in its own events: runs are of no interest here. */
-const TAKE_EVERY_EVENTS = 64;
+/**
+ * So many events of a pad wait to be folded together: pads take turns line by line, and a fold whose state has to be
+ * fetched from memory for every reading is several times slower.
+ */
+const FOLD_TOGETHER = 64;
 
 const MOST_UNKNOWN = 1000;
 
 /** `silent` = as its neighbours were told; undefined before that. */
-type Pad = FoldedPad & { readonly inputs: number; waiting: number; heardAt: number; silent: boolean | undefined };
+type Pad = FoldedPad & {
+  readonly inputs: number;
+  readonly waiting: PumpEvent[];
+  heardAt: number;
+  silent: boolean | undefined;
+};
 
 export type BacktestCount = { readings: number; late: number; unknownSerials: Map<string, number> };
 
@@ -35,7 +43,7 @@ export type Backtest = {
 const createPad = (context: PumpContext): Pad => ({
   ...foldedPad(context, createPumpFold(context)),
   inputs: context.traits.inputCount,
-  waiting: 0,
+  waiting: [],
   heardAt: Number.NEGATIVE_INFINITY,
   silent: undefined,
 });
@@ -53,8 +61,14 @@ export function createBacktest(contexts: readonly PumpContext[]): Backtest {
   let lastArrival = 0;
 
   const gather = (pad: Pad, at: number): void => {
-    pad.waiting = 0;
-    for (const signal of pad.fold.take().signals) areas.take(pad, signal, at);
+    const { fold, waiting } = pad;
+    for (const event of waiting) {
+      const isLate = event.kind === 'reading' && event.reading.at <= (fold.highWater() ?? Number.NEGATIVE_INFINITY);
+      if (isLate) count.late += 1;
+      fold.push(event);
+    }
+    waiting.length = 0;
+    for (const signal of fold.take().signals) areas.take(pad, signal, at);
   };
 
   const gatherAll = (): void => {
@@ -62,19 +76,25 @@ export function createBacktest(contexts: readonly PumpContext[]): Backtest {
   };
 
   const tellTime = (receivedAt: number): void => {
+    const kind = toldAt === undefined ? 'listening' : 'time';
+    const concerned: Pad[] = [];
     for (const pad of pads.values()) {
       // A pad that has just spoken knows the time.
       const quiet = receivedAt - pad.heardAt >= TELL_TIME_EVERY_MS;
-      if (quiet) {
-        pad.fold.push({ kind: toldAt === undefined ? 'listening' : 'time', receivedAt });
-        gather(pad, receivedAt);
-      }
       if (!quiet && pad.silent === false) continue;
-      const silent = pad.fold.silentSince() !== undefined;
-      if (silent !== pad.silent) areas.hear(pad, receivedAt);
-      pad.silent = silent;
+      if (quiet) pad.waiting.push({ kind, receivedAt });
+      gather(pad, receivedAt);
+      concerned.push(pad);
     }
+    // Only then, so that nobody is taken for silent whose word is still waiting.
+    for (const pad of concerned) tellNeighbours(pad, receivedAt);
     toldAt = receivedAt;
+  };
+
+  const tellNeighbours = (pad: Pad, at: number): void => {
+    const silent = pad.fold.silentSince() !== undefined;
+    if (silent !== pad.silent) areas.hear(pad, at);
+    pad.silent = silent;
   };
 
   /** A rule that counts time speaks when its time has come, not when the next line does. */
@@ -88,15 +108,9 @@ export function createBacktest(contexts: readonly PumpContext[]): Backtest {
   };
 
   const push = (pad: Pad, event: PumpEvent): void => {
-    if (event.kind === 'reading') {
-      count.readings += 1;
-      const highWater = pad.fold.highWater();
-      if (highWater !== undefined && event.reading.at <= highWater) count.late += 1;
-    }
-    pad.fold.push(event);
+    if (event.kind === 'reading') count.readings += 1;
     pad.heardAt = Math.max(pad.heardAt, event.receivedAt);
-    pad.waiting += 1;
-    if (pad.waiting >= TAKE_EVERY_EVENTS) gather(pad, lastArrival);
+    if (pad.waiting.push(event) >= FOLD_TOGETHER) gather(pad, lastArrival);
   };
 
   return {
