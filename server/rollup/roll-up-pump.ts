@@ -7,7 +7,8 @@ import { type LocalDay, localDays } from '#shared/domain/time/local-days.ts';
 import { DAY_MS, HOUR_MS } from '#shared/domain/time/local-time.ts';
 import { addToCompanyDay } from './company-sums.ts';
 import { findFirstRun, listReadingsOver, listRunsOver } from './day-sources.ts';
-import { listMonthsOver, priceMonths } from './price-months.ts';
+import { listMonthsOver } from './month-repository.ts';
+import { priceMonths } from './price-months.ts';
 import { addMark, type Mark, moveCursor, type TakenPump, takeMarks, takePump } from './rollup-work.ts';
 import { writeDay } from './write-day.ts';
 

@@ -4,7 +4,7 @@ import { conflict, notFound } from '#server/errors.ts';
 import { type ExpectedVersion, requireVersion } from '#server/http/etag.ts';
 import type { TariffRow, TariffShape } from '#shared/contract/http/tariffs.ts';
 import { getTariff } from './get-tariff.ts';
-import { markPrices, pumpsOfTariff } from './mark-prices.ts';
+import { markPrices, pumpsOfTariff } from './price-marks-repository.ts';
 import { requireSound } from './require-sound.ts';
 import { addTariff, deleteTariff, findTariffForUpdate, isNameTaken, saveTariff } from './tariff-repository.ts';
 import { toTariff } from './tariff-shape.ts';

@@ -4,8 +4,8 @@ import { notFound } from '#server/errors.ts';
 import { type ExpectedVersion, requireVersion } from '#server/http/etag.ts';
 import type { CompanyTerms, PadTerms } from '#shared/contract/http/tariffs.ts';
 import { checkTariffTerms } from '#shared/domain/energy/tariff-history.ts';
-import { markPrices, pumpsOfCompanyPlan, pumpsOfPad } from './mark-prices.ts';
 import { findPlan, hasPad, type Plan, savePlan, type Term } from './plan-repository.ts';
+import { markPrices, pumpsOfCompanyPlan, pumpsOfPad } from './price-marks-repository.ts';
 import { refuse } from './require-sound.ts';
 import { listTariffRows } from './tariff-read-model.ts';
 

@@ -19,7 +19,7 @@ const NOUGHT: HourMatrix = Array.from({ length: 12 }, () => Array.from({ length:
 /** Prices nothing: energy alone is compared. */
 const FREE: Tariff = {
   name: 'Free',
-  currency: 'XXX',
+  currency: 'USD',
   fixedMicrosPerMonth: 0,
   energy: { periods: [[{ rateMicros: 0, adjustmentMicros: 0 }]], weekday: NOUGHT, weekend: NOUGHT },
 };

@@ -5,12 +5,12 @@ import { rollUpWaiting } from '#server/rollup/roll-up-waiting.ts';
 import { listLocalSlices } from '#shared/domain/energy/local-slices.ts';
 import { priceEnergy } from '#shared/domain/energy/price-energy.ts';
 import type { Reading } from '#shared/domain/readings/reading.ts';
+import { createToldPump, type ToldPump } from '#tests/server/rollup/told-pump.ts';
 import { inventedPump, wall } from '#tests/shared/domain/control/invented-pump.ts';
 import { TIME_OF_USE, TWO_TIER } from '#tests/shared/domain/energy/sample-tariffs.ts';
 import { makeTestCompany, type TestCompany, type TestPerson } from '#tests/support/test-company.ts';
 import { openFreshPools } from '#tests/support/test-pools.ts';
 import { startTestServer, type TestServer } from '#tests/support/test-server.ts';
-import { createToldPump, type ToldPump } from '../../rollup/told-pump.ts';
 
 const ZONE = 'America/Los_Angeles';
 /** The month of the day of 25 hours. */
