@@ -26,7 +26,9 @@ beforeAll(async () => {
     await addHour(pools.machine, pumpId, new Date(at.getTime() - 3_600_000));
     await addDeviceTraces(pools.machine, pumpId, deviceId, at);
     const { padId, tariffId } = await addTariff(pools, pumpId);
-    return { pumpId, deviceId, padId, tariffId, alarmId: await addAlarm(pools.machine, pumpId, { from: at }) };
+    const tried = await addBacktest(pools, pumpId);
+    const alarmId = await addAlarm(pools.machine, pumpId, { from: at });
+    return { pumpId, deviceId, padId, tariffId, alarmId, ...tried };
   };
   ids = { ours: await idsOf(ours.pumps[0]!), neighbours: await idsOf(ours.pumps[2]!) };
   await idsOf(theirs.pumps[0]!);
@@ -39,6 +41,18 @@ async function addTariff({ machine }: Pools, pumpId: string) {
      from pumps where id = $1
      returning id as "tariffId", company_id as "companyId", (select pad_id from pumps where id = $1) as "padId"`,
     [pumpId, JSON.stringify(TWO_TIER)],
+  );
+  return rows[0]!;
+}
+
+/** A backtest of the pump's company that has ended, and the model of a motor of theirs. */
+async function addBacktest({ machine }: Pools, pumpId: string) {
+  const request = { scope: { kind: 'company' }, scopeName: '', rules: {}, from: 0, to: 1, pumpIds: [pumpId] };
+  const { rows } = await machine.query<{ backtestId: string; modelId: string }>(
+    `insert into backtests (id, company_id, asked_at, state, request, pump_count)
+     select gen_random_uuid(), company_id, now(), 'done', $2, 1 from pumps where id = $1
+     returning id as "backtestId", (select id from motor_models m where m.company_id = backtests.company_id) as "modelId"`,
+    [pumpId, JSON.stringify(request)],
   );
   return rows[0]!;
 }
@@ -68,6 +82,10 @@ const BODIES: Readonly<Record<string, unknown>> = {
   '/api/tariffs/:tariffId': presentTariff(TWO_TIER),
   '/api/pads/:padId/tariff-terms': { terms: [] },
   '/api/pumps/:pumpId/baseline': { baseline: null },
+  '/api/rules/company': { rules: {} },
+  '/api/rules/models/:modelId': { rules: {} },
+  '/api/rules/pumps/:pumpId': { rules: {} },
+  '/api/backtests': { scope: { kind: 'company' }, rules: {}, from: 0, to: 1 },
   '/api/alarms/acts': { acts: [{ alarmId: crypto.randomUUID(), act: { kind: 'acknowledge' } }] },
 };
 
