@@ -11,6 +11,9 @@ export type FigureCell = {
   readonly below?: ReactNode;
 };
 
+/** Beside so many the figures are set smaller. */
+const MANY = 4;
+
 export type FigureCellsProps = {
   readonly cells: readonly FigureCell[];
   /** On a sheet of their own; without it they lie on one already. */
@@ -34,7 +37,9 @@ export function FigureCells({ cells, framed = false }: FigureCellsProps) {
           <dt className="text-ink-2">{name}</dt>
           <dd>
             <span className="flex flex-wrap items-baseline gap-x-2">
-              <span className="text-27 font-semibold tracking-[-0.02em]">
+              <span
+                className={classNames('font-semibold tracking-[-0.02em]', cells.length > MANY ? 'text-20' : 'text-27')}
+              >
                 <Figures text={figure} />
               </span>
               {beside === undefined ? null : (

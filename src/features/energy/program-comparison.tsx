@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react';
 import type { ProgramFigures } from '#shared/contract/http/energy-programs.ts';
 import { DAY_MS } from '#shared/domain/time/local-time.ts';
 import { describeSource } from '#src/components/charts/strip/strip-words.ts';
@@ -18,24 +19,30 @@ export type ProgramComparisonProps = {
   readonly currency: string | null;
 };
 
-const describeEntries = ({ program }: ProgramFigures, format: Format): string =>
-  program.length === 0
-    ? t('program.noEntry')
-    : program
-        .map(({ days, fromMinute, toMinute, rpm }) =>
-          t('program.entry', {
+/** The entries of a program, one a line. */
+function Entries({ program }: Pick<ProgramFigures, 'program'>) {
+  const format = useFormat();
+  if (program.length === 0) return t('program.noEntry');
+  return (
+    <ul>
+      {program.map(({ days, fromMinute, toMinute, rpm }) => (
+        <li key={`${fromMinute} ${days.join()}`}>
+          {t('program.entry', {
             days: describeDays(days, format.locale),
             from: format.minuteOfDay(fromMinute),
             to: format.minuteOfDay(toMinute),
             rpm: format.rpm(rpm),
-          }),
-        )
-        .join('; ');
+          })}
+        </li>
+      ))}
+    </ul>
+  );
+}
 
-type Line = { readonly name: string; readonly of: (figures: ProgramFigures) => string };
+type Line = { readonly name: string; readonly of: (figures: ProgramFigures) => ReactNode };
 
 const listLines = (currency: string | null, format: Format): Line[] => [
-  { name: t('program.entries'), of: (figures) => describeEntries(figures, format) },
+  { name: t('program.entries'), of: ({ program }) => <Entries program={program} /> },
   { name: t('program.kwh'), of: ({ kwhPerMonth }) => kwhText(kwhPerMonth, format) },
   { name: t('program.cost'), of: ({ costPerMonth }) => format.money(costPerMonth, currency) },
   { name: t('program.water'), of: ({ gallonsPerDay }) => volumeText(gallonsPerDay, format) },
@@ -65,7 +72,7 @@ export function ProgramComparison({ name, before, after, currency }: ProgramComp
         rows={listLines(currency, format)}
         keyOf={({ name: line }) => line}
         columns={[
-          { head: t('program.figures'), cell: (line: Line) => line.name },
+          { head: t('program.column.figure'), cell: (line: Line) => line.name },
           ...sides.map(({ which, figures }) => ({ head: which, cell: ({ of }: Line) => of(figures) })),
         ]}
       />

@@ -7,10 +7,12 @@ import { StripCanvas } from '#src/components/charts/strip/strip-canvas.tsx';
 import { USUAL_TOP_RPM } from '#src/components/charts/strip/strip-metrics.ts';
 import type { StripRun } from '#src/components/charts/strip/strip-run.ts';
 import { useElementWidth } from '#src/hooks/use-element-width.ts';
+import { useFormat } from '#src/hooks/use-format.ts';
 
 /** The strip's clock for a week that has no date: Monday 5 January 1970 in UTC, so that its days have their names. */
 const MONDAY = 4 * DAY_MS;
 const WEEK_MS = 7 * DAY_MS;
+const DAYS = [0, 1, 2, 3, 4, 5, 6];
 
 const sameShape = (left: PlannedRun | undefined, right: PlannedRun, shift: number) =>
   left !== undefined &&
@@ -56,11 +58,13 @@ export type WeekStripProps = {
   readonly name: string;
 };
 
-/** An ordinary week on the same strip as measured days; one day where all are alike. */
+/** An ordinary week on the same strip as measured days, named by weekdays alone; one day where all are alike. */
 export function WeekStrip({ week, asDay, name }: WeekStripProps) {
+  const format = useFormat();
   const [track, width] = useElementWidth<HTMLDivElement>();
   const window = useMemo(() => ({ from: MONDAY, until: MONDAY + (asDay ? DAY_MS : WEEK_MS) }), [asDay]);
   const runs = useMemo(() => week.map(toRun), [week]);
+  const weekday = new Intl.DateTimeFormat(format.locale, { weekday: 'short', timeZone: 'UTC' });
   return (
     <div ref={track}>
       <div role="img" aria-label={name}>
@@ -76,9 +80,19 @@ export function WeekStrip({ week, asDay, name }: WeekStripProps) {
           width={width}
         />
       </div>
-      <div className="relative h-6">
-        <StripAxis window={window} zone="UTC" width={width} />
-      </div>
+      {asDay ? (
+        <div className="relative h-6">
+          <StripAxis window={window} zone="UTC" width={width} />
+        </div>
+      ) : (
+        <div aria-hidden="true" className="figures grid h-6 grid-cols-7 text-13 text-ink-2">
+          {DAYS.map((day) => (
+            <span key={day} className="pl-1">
+              {weekday.format(MONDAY + day * DAY_MS)}
+            </span>
+          ))}
+        </div>
+      )}
     </div>
   );
 }

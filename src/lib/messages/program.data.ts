@@ -66,6 +66,7 @@ export const PROGRAM_MESSAGES = {
   'program.dear.column.minutes': 'Minutes a week',
   'program.dear.column.extra': 'More a week',
   'program.table': 'The weeks as tables',
+  'program.column.figure': 'Figure',
   'program.column.from': 'From',
   'program.column.to': 'To',
   'program.column.source': 'Commanded by',
