@@ -1,5 +1,6 @@
 import { doublePrecision, foreignKey, index, jsonb, pgTable, real, text, uuid } from 'drizzle-orm/pg-core';
 import type { KeptAdvice } from '#shared/domain/advisor/advise-pump.ts';
+import type { CostlyMemory } from '#shared/domain/advisor/judge-costly-program.ts';
 import type { PadNeeds } from '#shared/domain/advisor/pad-needs.ts';
 import type { TimeOfUseFinding } from '#shared/domain/energy/time-of-use-check.ts';
 import { companyId, instant } from './columns.ts';
@@ -30,6 +31,8 @@ export const programAdvice = pgTable(
     basis: jsonb().$type<AdviceBasis>().notNull(),
     advice: jsonb().$type<KeptAdvice>().notNull(),
     dearHours: jsonb('dear_hours').$type<readonly TimeOfUseFinding[]>().notNull(),
+    /** What `costly-program` remembers between days; null = it was never judged. */
+    costlyMemory: jsonb('costly_memory').$type<CostlyMemory>(),
   },
   (table) => [
     foreignKey({

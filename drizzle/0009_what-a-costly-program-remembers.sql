@@ -1,0 +1,1 @@
+ALTER TABLE "program_advice" ADD COLUMN "costly_memory" jsonb;
