@@ -6,14 +6,22 @@ export type Micros = number;
 
 const MICROS = 1_000_000;
 
+/** Asking the platform takes a hundred times as long as rounding; there are under two hundred currencies. */
+const digitsByCurrency = new Map<string, number>();
+
 /**
  * How many decimals a currency (ISO 4217) has; 2 for one that the platform does not know.
  *
  * @example minorDigits('USD') // 2
  */
 export function minorDigits(currency: string): number {
+  const known = digitsByCurrency.get(currency);
+  if (known !== undefined) return known;
   if (!/^[A-Z]{3}$/.test(currency)) return 2;
-  return new Intl.NumberFormat('en', { style: 'currency', currency }).resolvedOptions().maximumFractionDigits ?? 2;
+  const digits =
+    new Intl.NumberFormat('en', { style: 'currency', currency }).resolvedOptions().maximumFractionDigits ?? 2;
+  digitsByCurrency.set(currency, digits);
+  return digits;
 }
 
 /** Half a minor unit goes away from zero, as on a bill; a hair under half is taken for half, since sums are binary. */
