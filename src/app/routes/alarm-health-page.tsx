@@ -84,7 +84,7 @@ export function AlarmHealthPage() {
           <Measured health={data} />
           <HealthFacts figures={figures} zone={data.zone} />
           <HealthDays byDay={figures.byDay} zone={data.zone} />
-          <div className="grid items-start gap-4 lg:grid-cols-2">
+          <div className="grid grid-cols-[minmax(0,1fr)] items-start gap-4 lg:grid-cols-2">
             <div className="flex min-w-0 flex-col gap-4">
               <OffendersSheet figures={figures} />
               <StaleSheet stale={figures.stale} zone={data.zone} now={now} />

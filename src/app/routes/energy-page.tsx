@@ -55,7 +55,7 @@ export function EnergyPage() {
           {data.coveredSeconds === 0 ? null : (
             <>
               <FleetSummary energy={data} />
-              <div className="grid items-start gap-4 lg:grid-cols-[minmax(0,3fr)_minmax(0,2fr)]">
+              <div className="grid grid-cols-[minmax(0,1fr)] items-start gap-4 lg:grid-cols-[minmax(0,3fr)_minmax(0,2fr)]">
                 <FleetDays days={data.days} month={month} />
                 <PeriodTable periods={data.periods} currency={data.currency} file={`energy-${month}-periods`} />
               </div>

@@ -129,7 +129,7 @@ function PadFigures({ energy, month }: { readonly energy: PadEnergy; readonly mo
           <WaterBars answer={energy} wanted={turnoversPerDay} file={file} />
         </div>
       </Sheet>
-      <div className="grid items-start gap-4 lg:grid-cols-2">
+      <div className="grid grid-cols-[minmax(0,1fr)] items-start gap-4 lg:grid-cols-2">
         <PeriodTable periods={periods} currency={currency} file={`energy-${month}-periods`} />
         <SavedSheet saved={saved} missing={savedMissing} currency={currency} carbon={carbon} />
       </div>
