@@ -84,7 +84,7 @@ describe('the energy page', () => {
   it('shows energy alone where nobody has said what a kWh costs', async () => {
     const { page } = await bench.open(NOVEMBER, { role: 'manager', prepare: withoutMoney });
     await page.getByRole('heading', { level: 1, name: /^November 2026 used [\d,]+ kWh\.$/ }).waitFor();
-    await page.getByText('No pad has a tariff yet', { exact: false }).waitFor();
+    await page.getByText('No pad has a tariff on record yet', { exact: false }).waitFor();
     await page.getByText('Without a tariff there are no periods.').waitFor();
     expect(await page.getByText('$').count()).toBe(0);
   });
