@@ -27,11 +27,15 @@ export type LoadFacts = {
   primed: boolean | undefined;
   /** Seconds from start to load; 0 until primed. */
   primeSeconds: number;
+  /** Seconds for which this start was seen without load, the least that its prime took; 0 until primed. */
+  dryForSeconds: number;
   /** Tries to prime that ended without load, this one left out, and when the first of them began. */
   failedTries: number;
   firstTryAt: number;
   /** Standard deviation of the watts over the last minutes as a share of their mean; 0 while too few. */
   raggedness: number;
+  /** What it last was in this start before there was load. */
+  tryRaggedness: number;
   /** The same share as learnt from the band's spread; 0 while not learnt. */
   usualRaggedness: number;
   /** This start caught load for a moment and lost it again. */

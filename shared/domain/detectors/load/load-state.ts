@@ -25,6 +25,10 @@ export type LoadState = {
   /** 0 no, 1 yes, 2 not judged. */
   primed: number;
   primeSeconds: number;
+  /** The last reading of this start that was judged, and carried no load; 0 none. */
+  lastUnloadedAt: number;
+  /** How ragged the watts of this start last were before it had load. */
+  tryRaggedness: number;
   /** Load over usual load of late, while it had load: 1 = as usual. */
   lately: number;
   failedTries: number;
@@ -57,6 +61,8 @@ export const restingLoad = (): LoadState => ({
   caught: false,
   primed: 2,
   primeSeconds: 0,
+  lastUnloadedAt: 0,
+  tryRaggedness: 0,
   lately: 1,
   failedTries: 0,
   firstTryAt: 0,

@@ -115,9 +115,11 @@ function publish(facts: LoadFacts, state: ReturnType<typeof restingLoad>): void 
   facts.primedOnce = state.primedOnce;
   facts.primed = state.primed === 2 ? undefined : state.primed === 1;
   facts.primeSeconds = state.primeSeconds;
+  facts.dryForSeconds = state.primedOnce ? Math.max(0, state.lastUnloadedAt - state.startedAt) / 1000 : 0;
   facts.failedTries = state.failedTries;
   facts.firstTryAt = state.firstTryAt;
   facts.raggedness = raggednessOf(state);
+  facts.tryRaggedness = state.tryRaggedness;
   facts.stoodSeconds = state.stoodSeconds;
   facts.caught = state.caught;
 }
@@ -138,9 +140,11 @@ function restingFacts(wattsAt: LoadFacts['wattsAt']): LoadFacts {
     primedOnce: false,
     primed: undefined,
     primeSeconds: 0,
+    dryForSeconds: 0,
     failedTries: 0,
     firstTryAt: 0,
     raggedness: 0,
+    tryRaggedness: 0,
     usualRaggedness: 0,
     stoodSeconds: 0,
     caught: false,

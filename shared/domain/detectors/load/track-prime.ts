@@ -1,5 +1,5 @@
 import type { LoadState } from './load-state.ts';
-import { forgetSmoothing } from './smooth-watts.ts';
+import { forgetSmoothing, raggednessOf } from './smooth-watts.ts';
 
 /** Between these, s, a try counts once it lasted its prime time. */
 export type TryLimits = { readonly shortestTrySeconds: number; readonly longestTrySeconds: number };
@@ -32,6 +32,8 @@ export function startTry(state: LoadState, at: number, seen: boolean): void {
   state.brief = false;
   state.primed = 2;
   state.primeSeconds = 0;
+  state.lastUnloadedAt = 0;
+  state.tryRaggedness = 0;
   forgetSmoothing(state);
 }
 
@@ -86,6 +88,11 @@ export function judgeLoad(state: LoadState, at: number, ratio: number, unloadedB
       state.primedOnce = false;
     }
     state.loadedSince = 0;
+    if (!state.primedOnce) {
+      state.lastUnloadedAt = at;
+      const raggedness = raggednessOf(state);
+      if (raggedness > 0) state.tryRaggedness = raggedness;
+    }
     if (state.unloadedSince === 0) state.unloadedSince = at;
     if (at - state.unloadedSince >= SETTLED_MS) state.primed = 0;
     return false;

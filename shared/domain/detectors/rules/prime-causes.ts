@@ -7,7 +7,7 @@ export type PrimeCause = { readonly cause: string; readonly weight: number; read
 /** Below this share of primed watts the wet end moves air; above it, water that goes nowhere (common practice). */
 const AIR_SHARE = 0.41;
 /** Ragged watts, as standard deviation over mean. */
-const RAGGED_SHARE = 0.12;
+const RAGGED_SHARE = 0.09;
 /** A wet end that stood this long may have drained. */
 const LONG_STAND_SECONDS = 6 * 3600;
 /** Near the model's own watts at no flow. */
@@ -25,20 +25,24 @@ export function rankPrimeCauses(facts: Facts): readonly PrimeCause[] {
   const share = primedWatts > 0 ? load.judgedWatts / primedWatts : 0;
   const stoodLong = load.stoodSeconds >= LONG_STAND_SECONDS;
   const air = share < AIR_SHARE;
-  const ragged = load.raggedness > RAGGED_SHARE;
+  const ragged = Math.max(load.raggedness, load.tryRaggedness) > RAGGED_SHARE;
   const causes: readonly PrimeCause[] = [
     {
       cause: 'water-low',
       weight: load.caught ? 5 : ragged ? 2 : 1,
       because: load.caught ? 'caught load and lost it again' : 'watts of air',
     },
-    { cause: 'air-leak', weight: air ? 3 : ragged ? 2 : 0, because: ragged ? 'ragged watts' : 'watts of air' },
+    { cause: 'air-leak', weight: ragged ? 3.5 : air ? 3 : 0, because: ragged ? 'ragged watts' : 'watts of air' },
     {
       cause: 'drained-back',
       weight: air && stoodLong ? 1.5 : 0.5,
       because: stoodLong ? 'stood for long before the start' : 'a try that follows another drains between them',
     },
-    { cause: 'valve-shut', weight: !air && isNearShutOff(facts) ? 4 : 0, because: 'steady watts of no flow' },
+    {
+      cause: 'valve-shut',
+      weight: !air && !ragged && isNearShutOff(facts) ? 4 : 0,
+      because: 'steady watts of no flow',
+    },
     { cause: 'blocked', weight: air ? 0.5 : 3, because: 'some load, far too little' },
   ];
   return causes.filter(({ weight }) => weight > 0).sort((left, right) => right.weight - left.weight);

@@ -27,7 +27,8 @@ function judge(state: State, facts: Facts, parameters: Parameters): Judgement {
   state.counted = load.startedAt;
   state.changes += 1;
   const leastSeconds = facts.context.intervalSeconds;
-  takeStart(state, Math.max(load.primeSeconds, leastSeconds), facts, parameters);
+  // What lies between two readings is nobody's prime: only the time seen without load counts.
+  takeStart(state, Math.max(load.dryForSeconds, leastSeconds), facts, parameters);
   return state.slow ? ABNORMAL : state.usual.length < parameters.teachingStarts ? UNJUDGED : NORMAL;
 }
 

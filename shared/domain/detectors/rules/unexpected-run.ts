@@ -7,12 +7,18 @@ import type { RuleParameters } from '../detector-parameters.ts';
 import type { Facts } from '../facts.ts';
 import { ABNORMAL, type Judgement, NORMAL, UNJUDGED } from '../judgement.ts';
 
-/** Minutes by which the last start on the program missed the nearest entry's beginning; null = none seen. */
-type State = { startMissedBy: number | null; wasStanding: boolean };
+/**
+ * Minutes by which the last start on the program missed the nearest entry's beginning; null = none seen. `startedLate`:
+ * that entry had begun while the shaft stood, since `stoodSince`, ms.
+ */
+type State = { startMissedBy: number | null; startedLate: boolean; wasStanding: boolean; stoodSince: number };
+
+const SHORT_STAND_MS = 3_600_000;
 
 function judge(state: State, facts: Facts): Judgement {
   const { control, reading, stands } = facts;
   if (state.wasStanding && !control.standing && !facts.gap && reading.closedInputs === 0) noteStart(state, facts);
+  if (control.standing && (!state.wasStanding || state.stoodSince === 0 || facts.gap)) state.stoodSince = facts.now;
   state.wasStanding = control.standing;
   if (control.standing) return NORMAL;
   const nothingExpected = facts.padState === 'winterized' || facts.padState === 'drained';
@@ -38,13 +44,17 @@ function mayBeFreezeProtection({ context, reading, reportsSource }: Facts): bool
   );
 }
 
-function noteStart(state: State, { context, localMinute }: Facts): void {
+function noteStart(state: State, { context, localMinute, now, control }: Facts): void {
+  // A pump that somebody stopped for a while says nothing of its clock when it goes on.
+  if (now - state.stoodSince < SHORT_STAND_MS) return;
   let nearest: number | null = null;
   for (const entry of context.settings.program) {
     const missed = clockDifference(entry.fromMinute, localMinute);
     if (nearest === null || Math.abs(missed) < Math.abs(nearest)) nearest = missed;
   }
   state.startMissedBy = nearest;
+  state.startedLate =
+    nearest !== null && nearest > 0 && control.due.rpm > 0 && now - state.stoodSince > nearest * 60_000;
 }
 
 function describe(
@@ -81,16 +91,19 @@ function causeOf(
   // Without a word from the motor, a speed of the program at the wrong hour is all there is to go by.
   if (says !== 'program' && (says !== undefined || !known)) return 'unknown';
   if (!known) return 'program-changed';
+  const missed = Math.abs(state.startMissedBy ?? 0) > parameters.sameClockMinutes;
+  // A clock that was known and has jumped since: the program began late, and ends late.
+  if (missed && state.startedLate && reading.motorClockMinute === undefined) return 'motor-clock';
   if (control.motorClockKnown) return says === 'program' ? 'program-changed' : 'unknown';
   if (state.startMissedBy === null) return 'unknown';
-  if (Math.abs(state.startMissedBy) > parameters.sameClockMinutes) return 'motor-clock';
+  if (missed) return 'motor-clock';
   return says === 'program' ? 'program-changed' : 'unknown';
 }
 
 export const unexpectedRun = defineDetector<'unexpected-run', State>({
   detector: 'unexpected-run',
   hears: ['reading'],
-  initial: () => ({ startMissedBy: null, wasStanding: false }),
+  initial: () => ({ startMissedBy: null, startedLate: false, wasStanding: false, stoodSince: 0 }),
   judge,
   delaySeconds: (_, { reportsSource }, parameters) =>
     reportsSource ? parameters.delaySeconds : parameters.withoutSourceSeconds,
