@@ -7,7 +7,7 @@ export type PrimeCause = { readonly cause: string; readonly weight: number; read
 /** Below this share of primed watts the wet end moves air; above it, water that goes nowhere (common practice). */
 const AIR_SHARE = 0.41;
 /** Ragged watts, as standard deviation over mean. */
-const RAGGED_SHARE = 0.09;
+const RAGGED_SHARE = 0.11;
 /** A wet end that stood this long may have drained. */
 const LONG_STAND_SECONDS = 6 * 3600;
 /** Near the model's own watts at no flow. */
