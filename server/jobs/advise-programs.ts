@@ -1,4 +1,3 @@
-import { openDatabase } from '#server/db/transaction.ts';
 import { listUnadvisedPumps } from '#server/rollup/advice-repository.ts';
 import { advisePumpNow } from '#server/rollup/advise-pump-now.ts';
 import type { Job } from './job.ts';
@@ -9,16 +8,16 @@ const BUDGET_MS = 1_500;
 /** Pumps asked for at a time. */
 const SOME = 20;
 
-/** Works each filter pump's program out anew once a day, for the pumps that have waited longest. */
+/** Works each filter pump's program out anew once a day, the longest waiting first, and notes those that cost too much. */
 export const advisePrograms: Job = {
   name: 'advise programs',
   everyMs: EVERY_MS,
-  run: async ({ pool, now, log }) => {
+  run: async ({ pool, publicUrl, now, log }) => {
     const startedAt = performance.now();
     for (const pumpId of await listUnadvisedPumps(pool, SOME)) {
       if (performance.now() - startedAt > BUDGET_MS) return;
       try {
-        await advisePumpNow(openDatabase(pool), pumpId, now());
+        await advisePumpNow({ pool, publicUrl, now: now() }, pumpId);
       } catch (err) {
         log.warn({ err, pumpId }, 'a program cannot be advised');
       }

@@ -2,7 +2,10 @@ import type { PadState } from '../control/pump-context.ts';
 import { PAD_STATE_MUTES } from '../detectors/context-mutes.data.ts';
 import type { AlarmSignal } from '../detectors/detector.ts';
 import { DETECTOR_CLASSES } from '../detectors/detector-classes.data.ts';
-import type { Advice } from './advise-program.ts';
+import { toMinorUnits } from '../energy/money.ts';
+import { formatMinor } from '../energy/money-text.ts';
+import type { Advice, ProgramPlan } from './advise-program.ts';
+import type { KeptAdvice } from './advise-pump.ts';
 import { costlyProgramCause } from './costly-program-cause.ts';
 
 /** What is remembered between days, plain JSON: local day and saved share of each, and when the note was raised, ms. */
@@ -11,20 +14,36 @@ export type CostlyMemory = {
   readonly raisedAt: number | null;
 };
 
-/** The advisor's word of one day about a pump: `localDay` counts from 1970, `at` is when it was worked out, ms. */
+/**
+ * The advisor's word of one day about a pump: `localDay` counts from 1970, `at` is when it was worked out, ms, `currency`
+ * (ISO 4217) is the tariff's.
+ */
 export type DailyAdvice = {
-  readonly advice: Advice;
+  readonly advice: Advice | KeptAdvice;
+  readonly currency: string;
   readonly localDay: number;
   readonly at: number;
   readonly padState: PadState;
 };
 
-/** Share saved, days it must hold, and how many of them must have been judged; overridden per company. */
-export const COSTLY_PROGRAM = { savedShare: 0.25, deadbandShare: 0.25, days: 14, leastDays: 12 } as const;
+/**
+ * Share saved, days it must hold, how many of them must have been judged, and what the share must be worth, in kWh a year
+ * at the pad's own mean price: a note asks for a technician's time and a customer's yes, and most programs could do
+ * with a little less. Lesser savings stay on the list of programs. Common practice.
+ */
+export const COSTLY_PROGRAM = {
+  savedShare: 0.25,
+  deadbandShare: 0.25,
+  days: 14,
+  leastDays: 12,
+  leastKwhPerYear: 1000,
+} as const;
 
 export type CostlyJudgement = { readonly memory: CostlyMemory; readonly signal: AlarmSignal | undefined };
 
 const DAY_MS = 86_400_000;
+/** A year of weeks like this one. */
+const WEEKS_PER_YEAR = 365.25 / 7;
 export const NO_COSTLY_MEMORY: CostlyMemory = { days: [], raisedAt: null };
 
 /**
@@ -50,11 +69,20 @@ export function judgeCostlyProgram(
   const mean = days.reduce((sum, [, share]) => sum + share, 0) / days.length;
   const left = limits.savedShare * (1 - limits.deadbandShare);
   if (memory.raisedAt !== null && savedShare < left) return over({ days, raisedAt: memory.raisedAt }, at);
-  const raises = memory.raisedAt === null && days.length >= limits.leastDays && mean >= limits.savedShare;
+  const isWorth = mean * advice.before.kwhPerWeek * WEEKS_PER_YEAR >= limits.leastKwhPerYear;
+  const isDear = days.length >= limits.leastDays && mean >= limits.savedShare && isWorth;
+  const raises = memory.raisedAt === null && isDear;
   // What was dear once and is put right today is no news.
   if (!raises || savedShare < left) return { memory: { days, raisedAt: memory.raisedAt }, signal: undefined };
   const from = at - (localDay - (days[0]?.[0] ?? localDay)) * DAY_MS;
-  return { memory: { days, raisedAt: at }, signal: raisedSignal(advice, mean, from, at) };
+  const signal = raisedSignal(today, {
+    before: advice.before,
+    after: advice.after,
+    saving: mean,
+    days: days.length,
+    from,
+  });
+  return { memory: { days, raisedAt: at }, signal };
 }
 
 function over({ days, raisedAt }: CostlyMemory, at: number): CostlyJudgement {
@@ -62,12 +90,17 @@ function over({ days, raisedAt }: CostlyMemory, at: number): CostlyJudgement {
   return { memory: { days, raisedAt: null }, signal: raisedAt === null ? undefined : signal };
 }
 
-function raisedSignal(
-  { before, after }: Extract<Advice, { kind: 'advice' | 'keep' }>,
-  saving: number,
-  from: number,
-  at: number,
-): AlarmSignal {
+type Finding = {
+  readonly before: ProgramPlan;
+  readonly after: ProgramPlan;
+  readonly saving: number;
+  readonly days: number;
+  readonly from: number;
+};
+
+function raisedSignal({ currency, at }: DailyAdvice, { before, after, saving, days, from }: Finding): AlarmSignal {
+  const costOf = ({ microsPerWeek }: ProgramPlan) =>
+    formatMinor(toMinorUnits(microsPerWeek * WEEKS_PER_YEAR, currency) ?? 0, currency);
   return {
     type: 'raised',
     detector: 'costly-program',
@@ -77,10 +110,12 @@ function raisedSignal(
     cause: costlyProgramCause(before, after),
     evidence: {
       saving: Math.round(saving * 100) / 100,
-      minorUnitsPerMonthBefore: before.minorUnitsPerMonth,
-      minorUnitsPerMonthAfter: after.minorUnitsPerMonth,
-      kwhPerWeekBefore: Math.round(before.kwhPerWeek * 10) / 10,
-      kwhPerWeekAfter: Math.round(after.kwhPerWeek * 10) / 10,
+      daysJudged: days,
+      currency,
+      costPerYearBefore: costOf(before),
+      costPerYearAfter: costOf(after),
+      kwhPerYearBefore: Math.round(before.kwhPerWeek * WEEKS_PER_YEAR),
+      kwhPerYearAfter: Math.round(after.kwhPerWeek * WEEKS_PER_YEAR),
       gallonsPerWeekBefore: Math.round(before.gallonsPerWeek),
       gallonsPerWeekAfter: Math.round(after.gallonsPerWeek),
     },

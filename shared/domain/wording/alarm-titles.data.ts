@@ -181,7 +181,11 @@ export const ALARM_TITLES: Readonly<Record<Detector, DetectorTitles>> = {
   },
   'clock-skew': { titles: ['Device clock {skewMinutes:duration} behind', 'The device’s clock is behind'], causes: {} },
   'costly-program': {
-    titles: ['The same water for {saving:percent} less', 'The same water could cost less'],
-    causes: {},
+    titles: ['Another program costs {saving:percent} less', 'The program could cost less'],
+    causes: {
+      'dear-hours': ['Runs in dear hours: {saving:percent} could be saved'],
+      'hours-too-long': ['Moves more water than asked for: {saving:percent} could be saved'],
+      'speed-too-high': ['Runs faster than it must: {saving:percent} could be saved'],
+    },
   },
 };

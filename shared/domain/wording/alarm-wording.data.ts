@@ -463,10 +463,30 @@ export const ALARM_WORDING: Readonly<Record<Detector, DetectorWording>> = {
     causes: {},
   },
   'costly-program': {
-    meaning: 'Another program moves the same water, meets every need of the pad and costs at least a quarter less.',
+    meaning: 'Another program meets every need of the pad and would have cost at least a quarter less for two weeks.',
     homeowner: 'Your pump could do the same work for less. We will suggest a new program.',
-    look: [{ what: 'Proposed program beside the one it has', why: 'Advice only: a person decides' }],
+    look: [
+      { what: 'Proposed program beside the one it has', why: 'Advice only: a person decides' },
+      {
+        what: 'Turnovers, heater, cell and quiet hours recorded for the pad',
+        why: 'The proposal is as good as what is recorded',
+      },
+      { what: 'Customer: ask before a program is changed', why: 'Somebody may want those hours or that flow' },
+    ],
     task: 'look',
-    causes: {},
+    causes: {
+      'dear-hours': {
+        meaning:
+          'It runs in hours in which energy is dear. At other hours the same work costs at least a quarter less.',
+      },
+      'hours-too-long': {
+        meaning:
+          'It moves far more water than the pad’s turnovers ask for. A program that meets every need costs at least a quarter less.',
+      },
+      'speed-too-high': {
+        meaning:
+          'It runs faster than the pad needs: power goes with the cube of speed. Slower for longer costs at least a quarter less.',
+      },
+    },
   },
 };

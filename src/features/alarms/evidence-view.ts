@@ -7,7 +7,7 @@ import { isPlainKey, t } from '#src/lib/messages/page-words.ts';
 type Evidence = Alarm['evidence'];
 
 /** What the words already say, or what is for machines alone. */
-const UNSAID = ['because', 'causes', 'knownFrom', 'saysSource', 'energized', 'connection', 'equipment'];
+const UNSAID = ['because', 'causes', 'knownFrom', 'saysSource', 'energized', 'connection', 'equipment', 'currency'];
 
 /** A number's unit is the end of its name: how each is written, and the part of the name that is the unit. */
 const UNITS: readonly { readonly unit: RegExp; readonly write: (value: number, format: Format) => string }[] = [
@@ -18,6 +18,8 @@ const UNITS: readonly { readonly unit: RegExp; readonly write: (value: number, f
   { unit: /celsius$/i, write: (value, format) => format.quantity(value, 'temperature') },
   { unit: /volts$/i, write: (value, format) => `${format.number(value)} V` },
   { unit: /(share|drop|rise|saving)$/i, write: (value, format) => `${format.number(value * 100)} %` },
+  { unit: /^kwh/i, write: (value, format) => `${format.number(value)} kWh` },
+  { unit: /^gallons/i, write: (value, format) => format.quantity(value, 'volume') },
   { unit: /ratio$/i, write: (value, format) => format.number(value, 1) },
   { unit: /closedInputs$/, write: (value) => listClosed(value).join(', ') || t('alarm.now.allOpen') },
 ];
@@ -33,8 +35,9 @@ const nameOf = (name: string): string => {
   return isPlainKey(key) ? t(key) : spellOut(name);
 };
 
-function writeValue(name: string, value: number | string, format: Format): string {
-  if (typeof value === 'string') return value;
+function writeValue(name: string, value: number | string, { currency }: Evidence, format: Format): string {
+  if (typeof value === 'string')
+    return /^cost/.test(name) && typeof currency === 'string' ? format.money(value, currency) : value;
   const unit = UNITS.find((each) => each.unit.test(name));
   return unit === undefined ? format.number(value, Number.isInteger(value) ? 0 : 1) : unit.write(value, format);
 }
@@ -44,7 +47,7 @@ export function listEvidence(evidence: Evidence, format: Format): (readonly [str
   return Object.entries(evidence).flatMap(([name, value]) =>
     UNSAID.includes(name) || (typeof value !== 'number' && typeof value !== 'string') || value === ''
       ? []
-      : [[nameOf(name), writeValue(name, value, format)] as const],
+      : [[nameOf(name), writeValue(name, value, evidence, format)] as const],
   );
 }
 

@@ -263,6 +263,13 @@ export const ALARM_MESSAGES = {
   'evidence.drop': 'Down by',
   'evidence.rise': 'Up by',
   'evidence.saving': 'Could cost less by',
+  'evidence.daysJudged': 'Days judged',
+  'evidence.costPerYearBefore': 'Cost a year, as it is',
+  'evidence.costPerYearAfter': 'Cost a year, proposed',
+  'evidence.kwhPerYearBefore': 'Energy a year, as it is',
+  'evidence.kwhPerYearAfter': 'Energy a year, proposed',
+  'evidence.gallonsPerWeekBefore': 'Water a week, as it is',
+  'evidence.gallonsPerWeekAfter': 'Water a week, proposed',
   'evidence.direction': 'Runs',
   'evidence.minutes': 'For',
 } as const;

@@ -3,7 +3,7 @@ import { beforeAll, describe, expect, it } from 'vitest';
 import { hashDeviceSecret } from '#server/broker/device-credential.ts';
 import type { Pools } from '#server/db/pools.ts';
 import { type CommissionedCompany, commissionCompany } from '#server/db/seed/commission-company.ts';
-import { asMachine, openDatabase } from '#server/db/transaction.ts';
+import { asMachine } from '#server/db/transaction.ts';
 import { listUnadvisedPumps } from '#server/rollup/advice-repository.ts';
 import { advisePumpNow } from '#server/rollup/advise-pump-now.ts';
 import { LARKMOOR } from '#shared/contract/demo/larkmoor.data.ts';
@@ -32,7 +32,10 @@ beforeAll(async () => {
     }),
   );
   for (const pumpId of await listUnadvisedPumps(pools.machine, 4)) {
-    await advisePumpNow(openDatabase(pools.machine), pumpId, server.clock.now);
+    await advisePumpNow(
+      { pool: pools.machine, publicUrl: 'https://watch.larkmoor.example', now: server.clock.now },
+      pumpId,
+    );
     advised.push(pumpId);
   }
 }, 120_000);

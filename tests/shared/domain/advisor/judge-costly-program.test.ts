@@ -22,7 +22,7 @@ function play(days: readonly (Advice | undefined)[], padState: PadState = 'open'
   for (const [index, advice] of days.entries()) {
     if (advice === undefined) continue;
     const localDay = FIRST + index;
-    const judged = judgeCostlyProgram(memory, { advice, localDay, at: localDay * DAY, padState });
+    const judged = judgeCostlyProgram(memory, { advice, localDay, at: localDay * DAY, padState, currency: 'USD' });
     memory = JSON.parse(JSON.stringify(judged.memory)) as CostlyMemory;
     if (judged.signal !== undefined) signals.push(judged.signal);
   }
@@ -43,11 +43,17 @@ describe('costly-program', () => {
         priority: 'note',
         cause: 'hours-too-long',
         from: FIRST * DAY,
-        evidence: { saving: expect.any(Number), minorUnitsPerMonthBefore: expect.any(Number) },
+        evidence: { daysJudged: 12, currency: 'USD', costPerYearBefore: expect.stringMatching(/^\d+\.\d\d$/) },
       },
       { type: 'cleared', at: (FIRST + 14) * DAY },
     ]);
     expect(signals[0]!.at).toBeGreaterThanOrEqual((FIRST + 11) * DAY);
+    if (dear.kind !== 'advice') throw new Error('the sample program is not dear');
+    const { saving, costPerYearBefore, costPerYearAfter, kwhPerYearBefore } = signals[0]!.evidence;
+    // A year has 365.25 / 7 weeks.
+    expect(Number(costPerYearBefore)).toBeCloseTo((dear.before.microsPerWeek / 1e6) * 52.17857, 1);
+    expect(kwhPerYearBefore).toBe(Math.round(dear.before.kwhPerWeek * 52.178_571));
+    expect(1 - Number(costPerYearAfter) / Number(costPerYearBefore)).toBeCloseTo(Number(saving), 2);
   });
 
   it('says it once, and needs most of the fourteen days', () => {
@@ -61,6 +67,15 @@ describe('costly-program', () => {
 
     expect(play(times(30, keep)).signals).toEqual([]);
     expect(play(times(30, lesser)).signals).toEqual([]);
+    if (dear.kind !== 'advice') throw new Error('the sample program is not dear');
+    // A quarter of 70 kWh a week is 913 kWh a year, of 80 it is 1044.
+    const using = (kwhPerWeek: number): Advice => ({
+      ...dear,
+      savedShare: 0.25,
+      before: { ...dear.before, kwhPerWeek },
+    });
+    expect(play(times(30, using(70))).signals).toEqual([]);
+    expect(play(times(30, using(80))).signals).toHaveLength(1);
     expect(play([...times(10, dear), ...times(20, keep)]).signals).toEqual([]);
     expect(play(times(30, dear), 'reduced').signals).toEqual([]);
     expect(play(times(30, dear), 'new-plaster').signals).toEqual([]);
