@@ -14,9 +14,9 @@ export const Evidence = z.record(
 /** What a person did about an alarm; `by` is their name, null for readers who may not know it. */
 const Deed = { at: Instant, by: z.string().nullable() };
 
-/** What one alarm speaks for: pads of one area that went silent together, clocks that nobody set, or our own link. */
+/** What one alarm speaks for: pads of one area that went silent or lost load together, clocks that nobody set, or our own link. */
 export const AlarmGroup = z.object({
-  kind: z.enum(['area-silence', 'daylight-saving', 'own-link']),
+  kind: z.enum(['area-silence', 'daylight-saving', 'load-fall', 'own-link']),
   area: z.string().nullable(),
   pumps: z.number().int(),
   pads: z.number().int(),

@@ -74,7 +74,11 @@ export const ALARM_TITLES: Readonly<Record<Detector, DetectorTitles>> = {
     titles: ['Load down {drop:percent} at the same speed', 'Less load than usual at this speed'],
     causes: {
       slow: ['Flow down {drop:percent}, dirty filter?', 'Less flow week by week, dirty filter?'],
-      sudden: ['Load down {drop:percent} all at once, basket?', 'Load fell all at once, basket?'],
+      sudden: [
+        'Load fell at once on {pads#pad|pads} in {area}: baskets?',
+        'Load down {drop:percent} all at once, basket?',
+        'Load fell all at once, basket?',
+      ],
     },
   },
   'high-load': {

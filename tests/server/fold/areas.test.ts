@@ -294,3 +294,54 @@ describe('the day on which the hour changes', () => {
     expect(await mailsOf(company.companyId)).toEqual([]);
   });
 });
+
+describe('the morning after a windy night', () => {
+  it('makes one list and one mail of the baskets of an area, which the next server goes on with', async () => {
+    now = at(dayOf(11, 10), 0);
+    isLeaping = true;
+    const { company, north } = await makeFleet(12);
+    // A quarter less: a basket that is plugged with leaves, and water still moves.
+    const isFallen = (index: number, day: number) => day === dayOf(11, 14) && index < 5;
+    const playDay = async (day: number, fromMinute = 0, toMinute = 1440) => {
+      now = at(day, toMinute);
+      for (const [index, pump] of north.entries()) {
+        const times = Array.from({ length: toMinute - fromMinute }, (_, minute) => at(day, fromMinute + minute));
+        await send(
+          pump,
+          times.map((time) => {
+            const reading = minuteOf(time, at(day, 0), 0);
+            return isFallen(index, day) && reading.rpm > 0 ? { ...reading, watts: reading.watts * 0.75 } : reading;
+          }),
+        );
+      }
+      await folded();
+    };
+    for (let day = dayOf(11, 10); day < dayOf(11, 14); day += 1)
+      for (const quarter of [0, 1, 2, 3]) await playDay(day, quarter * 360, (quarter + 1) * 360);
+    expect(await alarmsOf(company.companyId)).toEqual([]);
+    await playDay(dayOf(11, 14), 0, 480);
+    await restart();
+    await playDay(dayOf(11, 14), 480, 840);
+
+    const alarms = await alarmsOf(company.companyId);
+    const [group, ...others] = alarms.filter(({ pump_id }) => pump_id === null);
+    expect(others).toEqual([]);
+    expect(group).toMatchObject({
+      group_kind: 'load-fall',
+      group_area: 'North',
+      evidence: { pads: 5, stillStanding: 5 },
+    });
+    const own = alarms.filter(({ pump_id }) => pump_id !== null);
+    expect(own.map(({ pump_id }) => pump_id).sort()).toEqual(
+      north
+        .slice(0, 5)
+        .map(({ pumpId }) => pumpId)
+        .sort(),
+    );
+    for (const alarm of own)
+      expect(alarm).toMatchObject({ detector: 'low-load', suppressed: true, covered_by: group!.id });
+    expect((await mailsOf(company.companyId)).map(({ subject }) => subject)).toEqual([
+      expect.stringContaining('Load fell at once on 5 pads in North'),
+    ]);
+  }, 60_000);
+});

@@ -2,9 +2,10 @@ import type { AlarmClass, Detector, Evidence, Priority } from '#shared/domain/de
 
 /**
  * What one alarm can speak for: pads that went silent together in one area, clocks that all missed a daylight-saving
- * shift, or our own link when devices everywhere drop at once.
+ * shift, pads of one area that lost load within hours of one another, or our own link when devices everywhere drop at
+ * once.
  */
-export type AreaKind = 'area-silence' | 'daylight-saving' | 'own-link';
+export type AreaKind = 'area-silence' | 'daylight-saving' | 'load-fall' | 'own-link';
 
 /**
  * What the fold over pumps says. `key` names the alarm for as long as it stands; `pumpIds` are those it speaks for, in

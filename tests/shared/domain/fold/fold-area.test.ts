@@ -26,6 +26,18 @@ const shifted = (at: number): AlarmSignal => ({
   evidence: {},
 });
 
+const fell = (from: number, cause = 'sudden'): AlarmSignal => ({
+  type: 'raised',
+  detector: 'low-load',
+  alarmClass: 'alarm',
+  priority: 'soon',
+  from,
+  at: from + 30 * MINUTE,
+  cause,
+  evidence: {},
+});
+const loadBack = (at: number): AlarmSignal => ({ type: 'cleared', detector: 'low-load', at, evidence: {} });
+
 /** Pumps named by area and number, `North-3`; each on a pad of its own unless it names one. */
 function fleet(fold: AreaFold, names: readonly string[]): void {
   for (const name of names) fold.hear(pump(name), undefined, 0);
@@ -111,6 +123,70 @@ describe('the fold over pumps', () => {
     expect(fold.coveredBy('North-0', 'clock-shift')).toBeUndefined();
     fold.push('North-0', { type: 'cleared', detector: 'motor-clock', at: 3 * HOUR, evidence: {} }, 3 * HOUR);
     expect(fold.take()).toMatchObject([{ type: 'cleared', key }]);
+  });
+
+  it('makes one list of the pads of an area that lost load within six hours, until each has it back', () => {
+    const fold = createAreaFold();
+    fleet(fold, [...names('North', 20), ...names('South', 20)]);
+    for (const [index, name] of names('North', 4).entries()) {
+      expect(fold.take()).toEqual([]);
+      fold.push(name, fell(HOUR * (1 + index)), HOUR * (1 + index));
+    }
+    const [raised] = fold.take();
+    expect(raised).toMatchObject({
+      ...{ type: 'raised', kind: 'load-fall', detector: 'low-load', alarmClass: 'alarm', priority: 'soon' },
+      ...{ cause: 'sudden', area: 'North', from: HOUR, pumpIds: names('North', 4) },
+      evidence: { pads: 4, pumps: 4, area: 'North' },
+    });
+    fold.push('North-9', fell(6 * HOUR), 6 * HOUR);
+    fold.push('South-0', fell(6 * HOUR), 6 * HOUR);
+    fold.push('North-10', fell(13 * HOUR), 13 * HOUR);
+    expect(fold.take()).toMatchObject([{ type: 'changed', key: raised?.key, evidence: { pads: 5 } }]);
+    expect(fold.coveredBy('North-9', 'low-load')).toBe(raised?.key);
+    expect(['South-0', 'North-10'].map((name) => fold.coveredBy(name, 'low-load'))).toEqual([undefined, undefined]);
+
+    const again = createAreaFold(JSON.parse(JSON.stringify(fold.save())));
+    again.push('North-9', fell(6 * HOUR, 'slow'), 9 * HOUR);
+    for (const name of names('North', 3)) again.push(name, loadBack(10 * HOUR), 10 * HOUR);
+    expect(again.standing()).toMatchObject([{ open: ['North-3'] }]);
+    expect(again.take()).toEqual([]);
+    again.push('North-3', loadBack(11 * HOUR), 11 * HOUR);
+    expect(again.take()).toMatchObject([{ type: 'cleared', key: raised?.key }]);
+  });
+
+  it('leaves loads alone that fell on few pads, slowly, hours apart, in a large area, or where no area is known', () => {
+    const play = (falls: readonly (readonly [string, AlarmSignal])[], fleetOf = names('North', 15)) => {
+      const fold = createAreaFold();
+      fleet(fold, fleetOf);
+      for (const [name, signal] of falls) fold.push(name, signal, HOUR);
+      return fold.take();
+    };
+    const four = (make: (index: number) => AlarmSignal) =>
+      names('North', 4).map((name, index) => [name, make(index)] as const);
+
+    expect(play(four(() => fell(HOUR)))).toHaveLength(1);
+    expect(play(four(() => fell(HOUR)).slice(1))).toEqual([]);
+    expect(play(four(() => fell(HOUR, 'slow')))).toEqual([]);
+    expect(play(four((index) => fell(HOUR * (1 + 3 * index))))).toEqual([]);
+    expect(
+      play(
+        four(() => fell(HOUR)),
+        names('North', 20),
+      ),
+    ).toHaveLength(1);
+    expect(
+      play(
+        four(() => fell(HOUR)),
+        names('North', 21),
+      ),
+    ).toEqual([]);
+    const nowhere = ['-0', '-1', '-2', '-3', '-4'];
+    expect(
+      play(
+        nowhere.map((name) => [name, fell(HOUR)] as const),
+        nowhere,
+      ),
+    ).toEqual([]);
   });
 
   it('lets a pump go that nobody watches any more', () => {
