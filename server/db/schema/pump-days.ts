@@ -1,4 +1,4 @@
-import { date, doublePrecision, foreignKey, integer, pgTable, primaryKey, real, uuid } from 'drizzle-orm/pg-core';
+import { date, doublePrecision, foreignKey, integer, pgTable, primaryKey, real, text, uuid } from 'drizzle-orm/pg-core';
 import { companyId, instant } from './columns.ts';
 import { appReads, machineWorks, ofVisiblePumpSince } from './policies.ts';
 import { pumps } from './pumps.ts';
@@ -32,6 +32,13 @@ export const pumpDays = pgTable(
     wattsMax: real('watts_max'),
     /** By source, in the order of the list of sources and then `no-data`, `unknown`. */
     sourceMs: integer('source_ms').array().notNull(),
+    /** What the day was priced by, as `createPriceKeys` writes it; null = not priced yet. What follows is as old as it. */
+    pricedBy: text('priced_by'),
+    /** By period of the tariff in force; empty without one. */
+    kwhByPeriod: doublePrecision('kwh_by_period').array(),
+    energyMicrosByPeriod: doublePrecision('energy_micros_by_period').array(),
+    /** The month's demand, on the day of its peak. */
+    demandMicros: doublePrecision('demand_micros'),
   },
   (table) => [
     primaryKey({ name: 'pump_days_pkey', columns: [table.pumpId, table.day] }),
