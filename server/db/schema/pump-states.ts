@@ -26,6 +26,8 @@ export const pumpStates = pgTable(
     highWater: instant('high_water'),
     heardAt: instant('heard_at'),
     silentSince: instant('silent_since'),
+    /** When its device's connection dropped, by its will. */
+    lostAt: instant('lost_at'),
     quarantinedAt: instant('quarantined_at'),
     quarantineReason: text('quarantine_reason'),
     changedIn: xid8('changed_in').notNull().default(sql`pg_current_xact_id()`),

@@ -1,0 +1,1 @@
+ALTER TABLE "pump_states" ADD COLUMN "lost_at" timestamp with time zone;
