@@ -23,17 +23,9 @@ export const GROUPED_DETECTORS: readonly Detector[] = ['silent', 'clock-shift', 
 
 const concernsAreas = ({ detector }: AlarmSignal): boolean => GROUPED_DETECTORS.includes(detector);
 
-/**
- * Whether a write tells the area fold anything: silence or a drop that began, lasted or ended, or an alarm that others
- * may share.
- */
-export const hasAreaNews = ({ slot, silentSince, lostAt, stayedAway, signals }: FoldWrite): boolean =>
-  stayedAway ||
-  (silentSince === undefined) !== (slot.storedSilentSince === undefined) ||
-  (lostAt === undefined) !== (slot.storedLostAt === undefined) ||
-  signals.some(concernsAreas);
-
-type Moment = { readonly now: number; readonly listeningSince: number };
+/** Whether a write tells the area fold anything: silence that began or ended, or an alarm that others may share. */
+export const hasAreaNews = ({ slot, silentSince, signals }: FoldWrite): boolean =>
+  (silentSince === undefined) !== (slot.storedSilentSince === undefined) || signals.some(concernsAreas);
 
 /**
  * Folds what some writes tell over the pumps of their companies, in the transaction that stores the writes. Its state is
@@ -42,14 +34,14 @@ type Moment = { readonly now: number; readonly listeningSince: number };
 export async function foldAreas(
   client: pg.PoolClient,
   writes: readonly FoldWrite[],
-  moment: Moment,
+  now: number,
 ): Promise<AreaOutcome[]> {
   const news = writes.filter(hasAreaNews);
   const companyIds = [...new Set(news.map(({ slot }) => slot.pump.companyId))].sort();
   const outcomes: AreaOutcome[] = [];
   for (const companyId of companyIds) {
     const own = news.filter(({ slot }) => slot.pump.companyId === companyId);
-    const outcome = await foldCompany(client, companyId, own, moment);
+    const outcome = await foldCompany(client, companyId, own, now);
     if (outcome !== undefined) outcomes.push(outcome);
   }
   return outcomes;
@@ -59,7 +51,7 @@ async function foldCompany(
   client: pg.PoolClient,
   companyId: string,
   writes: readonly FoldWrite[],
-  { now, listeningSince }: Moment,
+  now: number,
 ): Promise<AreaOutcome | undefined> {
   const saved = await lockAreaState(client, companyId);
   const isQuiet = Array.isArray(saved) && saved.length === 0;
@@ -71,8 +63,6 @@ async function foldCompany(
   const before = new Map(fold.standing().map((alarm) => [alarm.key, alarm]));
   fold.keep(new Set(members.map(({ pumpId }) => pumpId)), now);
   tell(fold, writes, now);
-  // Devices that can connect are known to be gone by their will; one that only says nothing has not dropped.
-  fold.pass(now, { since: listeningSince, knowsDrops: true });
   const signals = mergeSignals(fold.take());
   const touched = fold.standing().filter((alarm) => isOther(before.get(alarm.key), alarm));
   if (touched.length > 0 || signals.length > 0) await saveAreaState(client, companyId, alarmsOf(fold));
@@ -100,26 +90,24 @@ function asBefore(members: readonly AreaMember[], writes: readonly FoldWrite[]):
   return members.map((member) => {
     const write = written.get(member.pumpId);
     if (write === undefined) return member;
-    const { storedSilentSince, storedLostAt = 0 } = write.slot;
-    const lastWord = storedSilentSince === undefined ? 0 : (write.heardAt ?? storedSilentSince);
-    return { ...member, lastWord, lostAt: storedLostAt };
+    const { storedSilentSince } = write.slot;
+    return { ...member, lastWord: storedSilentSince === undefined ? 0 : (write.heardAt ?? storedSilentSince) };
   });
 }
 
-const toSaved = ({ pumpId, padId, area, lastWord, fellAt, lostAt }: AreaMember) => [
+const toSaved = ({ pumpId, padId, area, lastWord, fellAt }: AreaMember) => [
   pumpId,
   padId,
   area ?? '',
   lastWord,
   fellAt,
-  lostAt,
 ];
 
 function tell(fold: AreaFold, writes: readonly FoldWrite[], now: number): void {
-  for (const { slot, silentSince, heardAt, lostAt } of writes) {
+  for (const { slot, silentSince, heardAt } of writes) {
     const { pumpId, padId, context } = slot.pump;
     const pump: AreaPump = { pumpId, padId, area: context.area };
-    fold.hear(pump, silentSince === undefined ? undefined : (heardAt ?? silentSince), now, lostAt);
+    fold.hear(pump, silentSince === undefined ? undefined : (heardAt ?? silentSince), now);
   }
   for (const { slot, signals } of writes) {
     for (const signal of signals) if (concernsAreas(signal)) fold.push(slot.pump.pumpId, signal, now);
