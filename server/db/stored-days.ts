@@ -23,19 +23,24 @@ const EVERYTHING: HoursNeeded = { demand: true, savings: true };
 const arrayOf = (column: string, isNeeded: boolean) =>
   isNeeded ? sql`array_to_json(${sql.identifier(column)})` : sql`'[]'::json`;
 
-/** Stored hours of some pumps from one local day to before another, in order. */
+/** Local days from one to before another; with `months` (their first days) only those in one of them. */
+export type HoursAsked = { readonly from: string; readonly until: string; readonly months?: readonly string[] };
+
+/** Stored hours of some pumps over some local days, in order. */
 export async function listStoredHours(
   db: Pick<Transaction, 'execute'>,
   pumpIds: readonly string[],
-  { from, until }: { readonly from: string; readonly until: string },
+  { from, until, months }: HoursAsked,
   { demand, savings }: HoursNeeded = EVERYTHING,
 ): Promise<StoredHours[]> {
+  const within =
+    months === undefined ? sql`true` : sql`date_trunc('month', day)::date = any(${sql.param(months)}::date[])`;
   const { rows } = await db.execute<StoredHours>(sql`
     select pump_id as "pumpId", day::text as day, array_to_json(watt_hours) as "wattHours",
       ${arrayOf('quarter_watt_hours', demand)} as "quarterWattHours", ${arrayOf('gallons', savings)} as gallons,
       ${arrayOf('on_ms', savings)} as "onMs", ${arrayOf('covered_ms', savings)} as "coveredMs"
     from pump_day_hours
-    where pump_id = any(${sql.param(pumpIds)}::uuid[]) and day >= ${from}::date and day < ${until}::date
+    where pump_id = any(${sql.param(pumpIds)}::uuid[]) and day >= ${from}::date and day < ${until}::date and ${within}
     order by pump_id, day`);
   return rows;
 }

@@ -1,4 +1,5 @@
 import { nextMonth } from '#server/db/day-text.ts';
+import { createPriceKeys } from '#server/db/price-keys.ts';
 import type { MonthSaved } from '#server/db/schema/pump-months.ts';
 import { listBaselines } from '#server/db/stated-baselines.ts';
 import { listStoredHours, toDayUse } from '#server/db/stored-days.ts';
@@ -9,10 +10,11 @@ import { priceDays } from '#shared/domain/energy/price-days.ts';
 import { saveByTerms } from '#shared/domain/energy/save-by-terms.ts';
 import { writeMonth } from './month-repository.ts';
 import type { TakenPump } from './rollup-work.ts';
+import { writeDayPrices } from './write-day-prices.ts';
 
 type Priced = Pick<TakenPump, 'pumpId' | 'companyId' | 'padId' | 'zone' | 'highWater'>;
 
-/** Works out what some calendar months of a pump used, cost and saved, from its stored days, in their transaction. */
+/** Works out what some calendar months of a pump and their days used, cost and saved, from their hours, in their transaction. */
 export async function priceMonths(
   db: Pick<Transaction, 'execute'>,
   pump: Priced,
@@ -21,11 +23,14 @@ export async function priceMonths(
 ): Promise<void> {
   if (months.length === 0) return;
   const prices = await findPadPrices(db, pump.padId);
+  const keyOf = createPriceKeys(pump.zone, prices);
   const baseline = (await listBaselines(db, [pump.pumpId])).get(pump.pumpId);
   for (const month of months) {
     const stored = await listStoredHours(db, [pump.pumpId], { from: month, until: nextMonth(month) });
     const days = stored.map((day) => toDayUse(pump.zone, day));
-    const bill = billOf(priceDays(days, prices.terms, prices));
+    const priced = priceDays(days, prices.terms, prices);
+    await writeDayPrices(db, pump.pumpId, keyOf(month), priced);
+    const bill = billOf(priced);
     const saved = baseline && saveByTerms(baseline, days, prices.terms, prices.otherKwhByPeriod);
     const savedMonth: MonthSaved | null =
       saved?.ok === true

@@ -76,6 +76,11 @@ export type EnergyDay = {
   readonly wattsMean: number | null;
   readonly wattsMax: number | null;
   readonly sourceMs: readonly number[];
+  /** What the day's price goes by; null and empty where it has none yet. */
+  readonly pricedBy: string | null;
+  readonly kwhByPeriod: readonly number[];
+  readonly energyMicrosByPeriod: readonly number[];
+  readonly demandMicros: number;
 };
 
 /** Stored days of some pumps, in order. */
@@ -88,7 +93,10 @@ export async function listEnergyDays(
     select pump_id as "pumpId", day::text as day, ${epochMs(sql`from_at`)} as "from", ${epochMs(sql`to_at`)} as "to",
       watt_hours as "wattHours", gallons, gallons_sigma as "gallonsSigma", unknown_flow_ms as "unknownFlowMs",
       on_ms as "onMs", covered_ms as "coveredMs", rpm_mean as "rpmMean", rpm_min as "rpmMin", rpm_max as "rpmMax",
-      watts_mean as "wattsMean", watts_max as "wattsMax", array_to_json(source_ms) as "sourceMs"
+      watts_mean as "wattsMean", watts_max as "wattsMax", array_to_json(source_ms) as "sourceMs",
+      priced_by as "pricedBy", coalesce(array_to_json(kwh_by_period), '[]') as "kwhByPeriod",
+      coalesce(array_to_json(energy_micros_by_period), '[]') as "energyMicrosByPeriod",
+      coalesce(demand_micros, 0) as "demandMicros"
     from pump_days
     where pump_id = any(${sql.param(pumpIds)}::uuid[]) and day >= ${from}::date and day < ${until}::date
     order by pump_id, day`);

@@ -1,8 +1,10 @@
 import type { Context } from '#server/context.ts';
 import { epochDayOf } from '#server/db/day-text.ts';
+import { createPriceKeys } from '#server/db/price-keys.ts';
 import { listBaselines } from '#server/db/stated-baselines.ts';
-import { listStoredHours, type StoredHours } from '#server/db/stored-days.ts';
+import { listStoredHours, type StoredHours, toDayUse } from '#server/db/stored-days.ts';
 import { findPadPrices, type PadPrices } from '#server/db/tariffs-in-force.ts';
+import type { Transaction } from '#server/db/transaction.ts';
 import type { Role } from '#shared/contract/primitives.ts';
 import type { Baseline } from '#shared/domain/energy/savings-baseline.ts';
 import { type EnergyDay, type EnergyPump, listEnergyDays } from './energy-read-model.ts';
@@ -33,7 +35,7 @@ export function knownTo(pumps: readonly EnergyPump[], now: number): number {
   return now - rolledTo <= PRESENT_MS ? rolledTo : now;
 }
 
-/** Loads and prices a window of some pumps of one pad. */
+/** Loads and prices a window of some pumps of one pad: from stored prices, and from hours where those are out of date. */
 export async function readEnergy(
   { db }: Context,
   padId: string,
@@ -42,35 +44,62 @@ export async function readEnergy(
 ): Promise<EnergyReckoning> {
   const pumpIds = pumps.map(({ pumpId }) => pumpId);
   const prices = await findPadPrices(db, padId);
-  const days = groupBy(await listEnergyDays(db, pumpIds, window), ({ pumpId }) => pumpId);
-  const months = { from: window.monthsFrom, until: window.monthsUntil };
+  const whole = { from: window.monthsFrom, until: window.monthsUntil };
+  const days = await listEnergyDays(db, pumpIds, whole);
+  const outdated = findOutdated(days, createPriceKeys(pumps[0]?.zone ?? '', prices));
   const baselines = await listBaselines(db, pumpIds);
-  const demand = prices.terms.some(({ tariff }) => tariff.demand !== undefined || tariff.flatDemand !== undefined);
-  const needed = { demand, savings: baselines.size > 0 };
-  const hours = groupBy(await listStoredHours(db, pumpIds, months, needed), ({ pumpId }) => pumpId);
+  const hours = await listNeededHours(db, pumpIds, whole, { prices, outdated, savings: baselines.size > 0 });
+  const daysByPump = groupBy(days, ({ pumpId }) => pumpId);
+  const hoursByPump = groupBy(hours, ({ pumpId }) => pumpId);
   return {
     prices,
-    pumps: pumps.map((pump) =>
-      reckonPump(pump, days.get(pump.pumpId) ?? [], hours.get(pump.pumpId) ?? [], {
-        prices,
+    pumps: pumps.map((pump) => {
+      const uses = (hoursByPump.get(pump.pumpId) ?? []).map((day) => toDayUse(pump.zone, day));
+      const own = { days: daysByPump.get(pump.pumpId) ?? [], uses, outdated };
+      const reckoned = reckonDays(own, prices);
+      return {
+        pump,
+        reckoned,
         baseline: baselines.get(pump.pumpId),
-      }),
-    ),
+        days: toFigures(pump, own.days, reckoned, window),
+      };
+    }),
   };
 }
 
-function reckonPump(
-  pump: EnergyPump,
+type Needs = { readonly prices: PadPrices; readonly outdated: ReadonlySet<string>; readonly savings: boolean };
+
+/** Hours of the months that are priced here and now; of all of them where savings are reckoned. */
+async function listNeededHours(
+  db: Transaction,
+  pumpIds: readonly string[],
+  whole: { readonly from: string; readonly until: string },
+  { prices, outdated, savings }: Needs,
+): Promise<StoredHours[]> {
+  if (!savings && outdated.size === 0) return [];
+  const demand = prices.terms.some(({ tariff }) => tariff.demand !== undefined || tariff.flatDemand !== undefined);
+  const asked = savings ? whole : { ...whole, months: [...outdated] };
+  return await listStoredHours(db, pumpIds, asked, { demand, savings });
+}
+
+/** First days of the months in which some day was priced by something else than now, or not yet. */
+function findOutdated(days: readonly EnergyDay[], keyOf: (month: string) => string): ReadonlySet<string> {
+  const outdated = new Set<string>();
+  for (const { day, pricedBy } of days) {
+    const month = `${day.slice(0, 7)}-01`;
+    if (pricedBy !== keyOf(month)) outdated.add(month);
+  }
+  return outdated;
+}
+
+function toFigures(
+  { purpose }: EnergyPump,
   days: readonly EnergyDay[],
-  hours: readonly StoredHours[],
-  { prices, baseline }: { readonly prices: PadPrices; readonly baseline: Baseline | undefined },
-): PumpReckoning {
-  const reckoned = reckonDays(pump.zone, hours, prices);
-  const turnsPool = pump.purpose === 'filter';
-  return {
-    pump,
-    reckoned,
-    baseline,
-    days: days.map((day) => ({ day, turnsPool, settled: reckoned.byDay.get(epochDayOf(day.day)) })),
-  };
+  { byDay }: ReckonedDays,
+  { from, until }: EnergyWindow,
+): FigureDay[] {
+  const turnsPool = purpose === 'filter';
+  return days
+    .filter(({ day }) => day >= from && day < until)
+    .map((day) => ({ day, turnsPool, settled: byDay.get(epochDayOf(day.day)) }));
 }
