@@ -10,6 +10,7 @@ export const fedThroughClock: Fault = {
   hours: [70, 160],
   needs: { days: 3 },
   also: [
+    'clock-shift',
     'silent',
     'stopped',
     'missing-input',

@@ -1,6 +1,6 @@
 import type { Reading } from '../readings/reading.ts';
 import { MINUTE_MS } from '../time/local-time.ts';
-import { offsetSpanAt } from '../time/zone-offset.ts';
+import { type OffsetSpan, offsetSpanAt } from '../time/zone-offset.ts';
 import type { ControlAnswer } from './control-answer.ts';
 import {
   type ControlState,
@@ -20,6 +20,8 @@ const RAMP_STEP_RPM = 20;
 const RAMP_MS = 30_000;
 /** Two readings of one event can come together; only readings this far apart say that the speed settled, ms. */
 const SETTLED_APART_MS = 1000;
+/** Holds no instant. */
+const NO_SPAN: OffsetSpan = { from: 0, to: 0, offsetMinutes: 0 };
 /** More intervals than this without a reading are a gap. */
 export const GAP_INTERVALS = 3;
 
@@ -50,11 +52,12 @@ export function createControl(context: PumpContext, saved?: unknown): Control {
   const gapMs = GAP_INTERVALS * context.intervalSeconds * 1000;
   const { freeze } = context.settings;
   const answer = liveAnswer(state, judgement);
+  let span = NO_SPAN;
 
   function clockMoved(reading: Reading): boolean {
     if (reading.motorClockMinute === undefined) return false;
-    const zoneOffset = offsetSpanAt(context.zone, reading.at)?.offsetMinutes ?? 0;
-    return followMotorClock(state, reading.motorClockMinute, reading.at, zoneOffset);
+    if (!(reading.at >= span.from && reading.at < span.to)) span = offsetSpanAt(context.zone, reading.at) ?? NO_SPAN;
+    return followMotorClock(state, reading.motorClockMinute, reading.at, span.offsetMinutes);
   }
 
   function mattersToAnswer(reading: Reading, standing: boolean): boolean {

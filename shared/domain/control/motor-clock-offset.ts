@@ -4,6 +4,8 @@ import type { ControlState } from './control-state.ts';
 
 /** A clock that shows whole minutes leaves this much doubt, minutes. */
 const DOUBT_MINUTES = 1.5;
+/** Nearer than this the clock shows what is held of it; just under the minute at which doubt begins. */
+const CERTAIN_MINUTES = 0.99;
 
 /** How far the motor's clock is ahead of wall time, minutes: as it says, else as learnt, else zero. */
 export function motorClockOffset(state: ControlState): number {
@@ -19,7 +21,9 @@ export function followMotorClock(state: ControlState, minute: number, at: number
   const wallMs = at + zoneOffset * MINUTE_MS;
   const wallMinute = (wallMs - Math.floor(wallMs / DAY_MS) * DAY_MS) / MINUTE_MS;
   const held = motorClockOffset(state);
-  const doubt = clockDifference(minute - wallMinute + 0.5, held);
+  const ahead = minute - wallMinute + 0.5;
+  // Most readings say what is known: no need to go round the clock for them.
+  const doubt = Math.abs(held - ahead) < CERTAIN_MINUTES ? 0 : clockDifference(ahead, held);
   const heldFor = state.zoneOffset;
   state.zoneOffset = zoneOffset;
   if (Math.abs(doubt) <= 1) {

@@ -9,7 +9,8 @@ type PrimeSettings = MotorSettings['prime'];
 
 /**
  * The start whose prime counts: the one seen, or the one due while the shaft stands. Where a start may have been
- * missed, it is the first reading since, as long as the shaft turns at the prime's speed.
+ * missed, it is the first reading since, as long as the shaft turns at the prime's speed. A prime that is claimed long
+ * after that start belongs to one between two readings: the breaker was off for a moment.
  */
 export function findPrimeStart(
   prime: PrimeSettings,
@@ -21,7 +22,9 @@ export function findPrimeStart(
   const claimed = reading.reportedSource === 'prime';
   const seen = state.standing ? (state.dueSince ?? state.primeSaidSince) : state.startedAt;
   const primes = claimed || (fitsSpeed(reading.rpm, prime.rpm) && !fitsSpeed(reading.rpm, baseRpm));
-  const since = primes ? (state.assumedSince ?? seen) : seen;
+  const said = claimed ? state.primeSaidSince : null;
+  const restarted = said !== null && seen !== null && said >= seen + longestPrimeMs(prime) ? said : seen;
+  const since = primes ? (state.assumedSince ?? restarted) : seen;
   return since !== null && reading.at < since + longestPrimeMs(prime) ? { since, claimed } : undefined;
 }
 

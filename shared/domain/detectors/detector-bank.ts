@@ -44,14 +44,17 @@ export function createDetectorBank(
 ): DetectorBank {
   const slots = createSlots(factories, parameters, recordOf(hot), recordOf(learnt));
   const byName = new Map<Detector, Slot>(slots.map((slot) => [slot.instance.detector, slot]));
+  const onReading = slots.filter(({ instance }) => instance.hears.includes('reading'));
   const byKind = new Map<PumpEvent['kind'], readonly Slot[]>();
   const heardBy = (kind: PumpEvent['kind']): readonly Slot[] => {
-    const known = byKind.get(kind);
+    const known = kind === 'reading' ? onReading : byKind.get(kind);
     if (known !== undefined) return known;
     const heard = slots.filter((slot) => slot.instance.hears.includes(kind));
     byKind.set(kind, heard);
     return heard;
   };
+  // Rules ask at every reading what stands, and hardly ever does anything.
+  let quiet = slots.every(isQuiet);
   return {
     judge: (facts, signals) => {
       let current: Slot | undefined;
@@ -60,18 +63,16 @@ export function createDetectorBank(
           current = slot;
           const judgement = slot.instance.judge(facts);
           const { onset, raisedAt } = slot.standing;
-          if (slot.isOff) {
-            hush(slot, facts, signals);
-            continue;
-          }
-          if (judgement !== ABNORMAL && onset === 0 && raisedAt === 0) continue;
-          settle(slot, judgement, facts, signals);
+          if (!slot.isOff && judgement !== ABNORMAL && onset === 0 && raisedAt === 0) continue;
+          if (slot.isOff) hush(slot, facts, signals);
+          else settle(slot, judgement, facts, signals);
+          if (slot.standing.raisedAt !== raisedAt) quiet = slots.every(isQuiet);
         }
       } catch (error) {
         throw current === undefined ? error : detectorFailure(current.instance.detector, error);
       }
     },
-    stands: (detector) => (byName.get(detector)?.standing.raisedAt ?? 0) !== 0,
+    stands: (detector) => !quiet && (byName.get(detector)?.standing.raisedAt ?? 0) !== 0,
     learntVersion: () => slots.reduce((sum, { instance }) => sum + (instance.learntVersion() ?? 0), 0),
     saveHot: () => saveHot(slots),
     saveLearnt: () => saveLearnt(slots),
@@ -79,6 +80,8 @@ export function createDetectorBank(
 }
 
 const recordOf = (value: unknown): Readonly<Record<string, unknown>> => (isRecord(value) ? value : {});
+
+const isQuiet = ({ standing }: Slot): boolean => standing.raisedAt === 0;
 
 function createSlots(
   factories: readonly DetectorFactory[],

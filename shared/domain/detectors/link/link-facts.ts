@@ -11,6 +11,8 @@ export type LinkFacts = {
   heardSince: number;
   /** What the last status said; `unknown` before any. */
   connection: 'online' | 'lost' | 'unknown';
+  /** When the connection dropped, at its arrival, ms; 0 while it stands or nothing is known of it. */
+  lostAt: number;
   /** The device has reported its boots, so that a cut without a new boot was none. */
   reportsBoots: boolean;
   /** The last status brought a new boot, at its arrival; 0 = never. */

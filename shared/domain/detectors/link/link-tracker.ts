@@ -9,6 +9,7 @@ type LinkState = {
   heardSince: number;
   connection: string;
   connectionId: string;
+  lostAt: number;
   boot: string;
   bootedAt: number;
   resumedAt: number;
@@ -24,6 +25,7 @@ const restingLink = (): LinkState => ({
   heardSince: 0,
   connection: 'unknown',
   connectionId: '',
+  lostAt: 0,
   boot: '',
   bootedAt: 0,
   resumedAt: 0,
@@ -64,6 +66,7 @@ export function createLinkTracker(context: PumpContext, saved: unknown): LinkTra
     listeningSince: 0,
     heardSince: 0,
     connection: 'unknown',
+    lostAt: 0,
     reportsBoots: false,
     bootedAt: 0,
     resumedAt: 0,
@@ -83,6 +86,7 @@ export function createLinkTracker(context: PumpContext, saved: unknown): LinkTra
           state.lastWordAt = Math.max(state.lastWordAt, event.receivedAt);
           // Speaks after its will, without having said that it is back: it is there.
           if (state.connection === 'lost') state.connection = 'online';
+          state.lostAt = 0;
         }
       }
       if (event.kind === 'status') hearStatus(state, event);
@@ -110,7 +114,9 @@ export function createLinkTracker(context: PumpContext, saved: unknown): LinkTra
 function hearStatus(state: LinkState, { status, receivedAt }: PumpEvent & { kind: 'status' }): void {
   if (status.state === 'lost') {
     // A take-over publishes the old will late.
-    if (state.connectionId === '' || status.connection === state.connectionId) state.connection = 'lost';
+    if (state.connectionId !== '' && status.connection !== state.connectionId) return;
+    if (state.connection !== 'lost') state.lostAt = receivedAt;
+    state.connection = 'lost';
     return;
   }
   const known = state.boot !== '';
@@ -128,6 +134,7 @@ function publish(facts: LinkFacts, state: LinkState): void {
   facts.listeningSince = state.listeningSince;
   facts.heardSince = state.heardSince;
   facts.connection = state.connection === 'online' || state.connection === 'lost' ? state.connection : 'unknown';
+  facts.lostAt = state.lostAt;
   facts.reportsBoots = state.boot !== '';
   facts.bootedAt = state.bootedAt;
   facts.resumedAt = state.resumedAt;

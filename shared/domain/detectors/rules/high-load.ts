@@ -32,6 +32,8 @@ const FRICTION_MORE = 1.35;
 const OTHER_SPEED = 1.2;
 const SAME_SPEED = 0.97;
 const AS_USUAL_RATIO = 1.03;
+/** At 60 gpm a pool of 20,000 gallons is empty by then: what goes on for longer goes round. */
+const LONGEST_WASTE_MS = 6 * 3_600_000;
 /** Watts beyond what any flow could take are no water; the printed curve is good to some per cent. */
 const BEYOND_CURVE = 1.04;
 
@@ -107,11 +109,12 @@ function causeOf(state: State, facts: Facts): string {
   return most !== undefined && ratio > BEYOND_CURVE * most ? 'rubbing' : 'bypass';
 }
 
-function describe(state: State, facts: Facts, _: Parameters, { raised }: Spoken): Finding {
-  const { water, load, control } = facts;
+function describe(state: State, facts: Facts, _: Parameters, { raised, onset }: Spoken): Finding {
+  const { water, load, control, now } = facts;
   // Two speeds tell more than one; what was said at first stands otherwise.
   const found = causeOf(state, facts);
   if (!raised || state.cause === 'bypass') state.cause = found;
+  if (state.cause === 'to-waste' && now - onset > LONGEST_WASTE_MS) state.cause = 'bypass';
   return {
     cause: state.cause,
     evidence: {

@@ -9,6 +9,8 @@ type Parameters = RuleParameters<'loss-of-prime'>;
 
 /** Ragged watts are air only where they are also lower than usual. */
 const RAGGED_BELOW = 0.92;
+/** Ragged watts above this share are gulps of air between water, not a wet end that has lost it. */
+const GULPS_ABOVE = 0.55;
 
 /**
  * A pump that had load in this run and holds its speed without it, or gulps air. Below 1500 rpm the watts say too
@@ -20,9 +22,10 @@ function judge(state: State, facts: Facts, parameters: Parameters): Judgement {
   // A model alone cannot tell a lost prime from a pump that differs from it; it may judge the prime, seen from zero.
   if (!load.primedOnce || (control.offExpected && !facts.stands('loss-of-prime'))) return UNJUDGED;
   state.dry = load.primed === false;
-  state.wasDry = state.dry || (state.wasDry && facts.stands('loss-of-prime'));
   const usual = Math.max(parameters.raggedShare, parameters.raggedTimesUsual * load.usualRaggedness);
   state.ragged = load.basis === 'band' && !hasRaggedDuty(facts) && load.ratio < RAGGED_BELOW && load.raggedness > usual;
+  const gulps = state.ragged && load.ratio > GULPS_ABOVE;
+  state.wasDry = (state.dry && !gulps) || (state.wasDry && facts.stands('loss-of-prime'));
   if (context.padState === 'drained') return UNJUDGED;
   return state.dry || state.ragged ? ABNORMAL : NORMAL;
 }

@@ -1,3 +1,4 @@
+import { findSlotIndex, programTimeline } from '#shared/domain/control/program-timeline.ts';
 import { isNearSuspectEdge } from '../clocks/motor-clock-tracker.ts';
 import { defineDetector, type Finding, type Spoken } from '../define-detector.ts';
 import type { RuleParameters } from '../detector-parameters.ts';
@@ -5,28 +6,47 @@ import { listEnergized } from '../energized-equipment.ts';
 import type { Facts } from '../facts.ts';
 import { ABNORMAL, type Judgement, NORMAL, UNJUDGED } from '../judgement.ts';
 
-type State = Record<string, never>;
+/** How long it stood while a speed was due, and when that was last so: nights in which nothing is due count for nothing. */
+type State = { stoodMs: number; stoodAt: number };
+
+/** Readings further apart than this do not tell what was in between. */
+const SEEN_WITHIN_MS = 600_000;
 
 /** A speed is due and the shaft stands. What freeze protection alone asks for is judged by `freezing`. */
-function judge(_: State, facts: Facts): Judgement {
-  const { control, stands } = facts;
-  if (!control.standing) return NORMAL;
+function judge(state: State, facts: Facts): Judgement {
+  const { control, stands, now } = facts;
+  if (!control.standing) {
+    state.stoodMs = 0;
+    state.stoodAt = 0;
+    return NORMAL;
+  }
   const { due } = control;
   if (due.rpm > 0 && due.source !== 'freeze') {
     // It stands because its program was changed: that is said already.
     if (stands('settings-changed') && facts.fitsReported()) return NORMAL;
-    return control.winningInput === 0 && isNearSuspectEdge(facts) ? UNJUDGED : ABNORMAL;
+    if (control.winningInput === 0 && (isNearSuspectEdge(facts) || hasClockBeenSet(facts))) return UNJUDGED;
+    if (state.stoodAt !== 0 && now - state.stoodAt <= SEEN_WITHIN_MS) state.stoodMs += now - state.stoodAt;
+    state.stoodAt = now;
+    return ABNORMAL;
   }
   // Where nothing is due a standing shaft says nothing: only one that turns ends the alarm.
   return stands('stopped') ? UNJUDGED : NORMAL;
 }
 
-function describe(_: State, facts: Facts, parameters: RuleParameters<'stopped'>, { onset }: Spoken): Finding {
+/** The motor's clock is said to be off, and by the right time nothing is due: somebody has set it. */
+function hasClockBeenSet({ stands, control, context, now }: Facts): boolean {
+  if (!stands('motor-clock') || control.due.source !== 'program') return false;
+  const { program } = context.settings;
+  const timeline = programTimeline(program, context.traits.programOverlap, context.zone, 0, now);
+  return (timeline.slots[findSlotIndex(timeline, now)]?.rpm ?? 0) <= 0;
+}
+
+function describe(state: State, facts: Facts, parameters: RuleParameters<'stopped'>, { onset }: Spoken): Finding {
   const { control, reading, now } = facts;
   const energized = listEnergized(facts);
   const ambient = reading.ambientCelsius;
   const frost = ambient !== undefined && ambient <= parameters.frostCelsius;
-  const long = now - onset >= parameters.urgentAfterSeconds * 1000;
+  const long = state.stoodMs >= parameters.urgentAfterSeconds * 1000;
   return {
     cause: causeOf(facts),
     priority: frost || long || energized.length > 0 ? 'urgent' : 'soon',
@@ -50,7 +70,7 @@ function causeOf({ control, reading }: Facts): string {
 export const stopped = defineDetector<'stopped', State>({
   detector: 'stopped',
   hears: ['reading'],
-  initial: () => ({}),
+  initial: () => ({ stoodMs: 0, stoodAt: 0 }),
   judge,
   delaySeconds: (_, { control }, parameters) =>
     control.decision.source === 'stop' ? parameters.keypadStopSeconds : parameters.delaySeconds,

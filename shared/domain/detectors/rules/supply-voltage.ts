@@ -43,7 +43,8 @@ function addToMean(state: State, volts: number, { now, gap }: Facts, { meanMinut
   if (gap) state.minutes = [];
   if (minute !== state.minute) {
     if (state.count > 0 && !gap) {
-      state.minutes = [...state.minutes, Math.round((state.sum / state.count) * 10) / 10].slice(-meanMinutes);
+      state.minutes = state.minutes.slice(Math.max(0, state.minutes.length + 1 - meanMinutes));
+      state.minutes.push(Math.round((state.sum / state.count) * 10) / 10);
       state.mean = state.minutes.reduce((sum, one) => sum + one, 0) / state.minutes.length;
     }
     state.minute = minute;
