@@ -1,3 +1,4 @@
+import { setTimeClocks } from '#simulator/pad-deeds.ts';
 import { cutPower } from '#simulator/power.ts';
 import { addDeed, type Pump } from '#simulator/pump.ts';
 import { DAY_MS, type Fault, HOUR_MS } from './fault.ts';
@@ -32,6 +33,7 @@ export const fedThroughClock: Fault = {
       addDeed(pump, off + wobble, (fed: Pump, when) => cutPower(fed, when, when + 7.5 * HOUR_MS, 'motor'));
     }
   },
-  end: () => undefined,
+  // Whoever wires it right sets the clocks that stood with it.
+  end: (pump, at) => setTimeClocks(pump, at),
   shows: (pump) => !pump.powered,
 };
