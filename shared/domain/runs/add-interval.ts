@@ -6,13 +6,20 @@ export type IntervalEnd = {
   readonly at: number;
   readonly rpm: number;
   readonly watts: number;
-  /** Flow and one sigma as a share of it; below 0 = unknown. */
-  readonly gpm: number;
-  readonly sigmaShare: number;
 };
 
-/** The trapezoid from the last reading to `end`; with the last values at the end too it is the value held. */
-export function addInterval(state: RunFoldState, sums: RunSums, end: IntervalEnd, settled = false): void {
+/**
+ * The trapezoid from the last reading to `end`; with the last values at the end too it is the value held. `gpm` is the
+ * flow there, below 0 or NaN = unknown, and `sigmaShare` one sigma as a share of it.
+ */
+export function addInterval(
+  state: RunFoldState,
+  sums: RunSums,
+  end: IntervalEnd,
+  gpm: number,
+  sigmaShare: number,
+  settled: boolean,
+): void {
   const ms = end.at - state.at;
   const meanRpm = (state.rpm + end.rpm) / 2;
   sums.wattMs += ((state.watts + end.watts) / 2) * ms;
@@ -22,9 +29,14 @@ export function addInterval(state: RunFoldState, sums: RunSums, end: IntervalEnd
     sums.settledRpmMs += meanRpm * ms;
     sums.settledMs += ms;
   }
-  if (!(state.gpm >= 0 && end.gpm >= 0)) return;
-  const gallons = (((state.gpm + end.gpm) / 2) * ms) / 60_000;
+  if (!(state.gpm >= 0 && gpm >= 0)) return;
+  const gallons = (((state.gpm + gpm) / 2) * ms) / 60_000;
   sums.gallons += gallons;
-  sums.gallonsSigma += gallons * end.sigmaShare;
+  sums.gallonsSigma += gallons * sigmaShare;
   sums.gallonsMs += ms;
+}
+
+/** The last values held until an instant. */
+export function holdUntil(state: RunFoldState, sums: RunSums, at: number): void {
+  addInterval(state, sums, { at, rpm: state.rpm, watts: state.watts }, state.gpm, state.sigmaShare, false);
 }

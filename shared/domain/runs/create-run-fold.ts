@@ -2,7 +2,7 @@ import type { ControlAnswer } from '../control/control-answer.ts';
 import { GAP_INTERVALS } from '../control/create-control.ts';
 import type { PumpContext } from '../control/pump-context.ts';
 import type { Reading } from '../readings/reading.ts';
-import { addInterval } from './add-interval.ts';
+import { holdUntil } from './add-interval.ts';
 import { describeGap, describeRun } from './describe-run.ts';
 import { followDeparture } from './follow-departure.ts';
 import { isAnotherRun, openRun, partedRun } from './open-run.ts';
@@ -67,13 +67,7 @@ export function createRunFold(context: PumpContext, saved?: unknown): RunFold {
       passGap(open, reading.at);
       state.open = openRun(reading.at, reading, control);
     } else if (isAnotherRun(open, reading, control)) {
-      addInterval(state, state.departure ?? open, {
-        at: reading.at,
-        rpm: state.rpm,
-        watts: state.watts,
-        gpm: state.gpm,
-        sigmaShare: state.sigmaShare,
-      });
+      holdUntil(state, state.departure ?? open, reading.at);
       finish(reading.at);
       state.open = openRun(reading.at, reading, control);
     } else {
@@ -124,13 +118,7 @@ export function createRunFold(context: PumpContext, saved?: unknown): RunFold {
       const { open } = state;
       if (open === null || !Number.isFinite(at) || at < state.at) return;
       if (at - state.at > gapMs) return passGap(open, at);
-      addInterval(state, state.departure ?? open, {
-        at,
-        rpm: state.rpm,
-        watts: state.watts,
-        gpm: state.gpm,
-        sigmaShare: state.sigmaShare,
-      });
+      holdUntil(state, state.departure ?? open, at);
       finish(at);
     },
     save: () => copyRunFoldState(state),

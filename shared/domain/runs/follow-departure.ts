@@ -19,16 +19,15 @@ export function followDeparture(
   sigmaShare: number,
 ): Departure | undefined {
   const { departure } = state;
-  const end = { at: reading.at, rpm: reading.rpm, watts: reading.watts, gpm, sigmaShare };
   const out = open.settled && isOff(reading.rpm, settledMean(open) ?? open.firstRpm);
   if (departure === null) {
-    addInterval(state, open, end, open.settled && !out);
+    addInterval(state, open, reading, gpm, sigmaShare, open.settled && !out);
     if (out) state.departure = depart(state, reading);
     return undefined;
   }
   const settled =
     Math.abs(reading.rpm - state.rpm) < SETTLED_STEP_RPM || state.at - departure.since >= SETTLED_AFTER_MS;
-  addInterval(state, departure, end, settled && out);
+  addInterval(state, departure, reading, gpm, sigmaShare, settled && out);
   if (!out) {
     const { settledRpmMs, settledMs } = open;
     addSums(open, departure);
