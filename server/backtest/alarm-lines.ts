@@ -23,6 +23,8 @@ export type AlarmLines = {
   readonly find: (key: string) => AlarmLine | undefined;
   readonly open: (key: string, line: AlarmLine) => void;
   readonly close: (key: string, at: number) => void;
+  /** Takes back an open line as if it had never been said. */
+  readonly withdraw: (key: string) => void;
   /** Lines raised before an instant that will not change any more; one that stands holds back those behind it. */
   readonly settled: (before: number) => AlarmLine[];
   /** Everything left, standing alarms included. */
@@ -61,6 +63,10 @@ export function createAlarmLines(): AlarmLines {
   return {
     open,
     close,
+    withdraw: (key) => {
+      queue = queue.filter((line) => line !== standing.get(key));
+      standing.delete(key);
+    },
     find: (key) => standing.get(key),
     take: (serial, signal) => {
       const key = lineKey(serial, signal.detector);

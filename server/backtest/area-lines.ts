@@ -1,6 +1,7 @@
 import type { PumpContext } from '#shared/domain/control/pump-context.ts';
 import type { AlarmSignal } from '#shared/domain/detectors/detector.ts';
 import type { AreaSignal } from '#shared/domain/fold/area/area-signal.ts';
+import type { Listening } from '#shared/domain/fold/area/own-link.ts';
 import { createAreaFold } from '#shared/domain/fold/fold-area.ts';
 import type { PumpFold } from '#shared/domain/fold/fold-pump.ts';
 import { type AlarmLines, lineKey } from './alarm-lines.ts';
@@ -14,7 +15,13 @@ export type AreaLines = {
   readonly hear: (pad: FoldedPad, at: number) => void;
   /** What a pad's own fold said. */
   readonly take: (pad: FoldedPad, signal: AlarmSignal, at: number) => void;
+  /** Time has passed, after every pad was heard. */
+  readonly pass: (at: number, listening: Listening) => void;
+  /** The trace ends: silence alone that lasts until then, since less than a day, is only the end of those pads' readings. */
+  readonly end: (at: number) => void;
 };
+
+const ENDS_WITHIN_MS = 86_400_000;
 
 export const foldedPad = ({ pumpId, area }: PumpContext, fold: PumpFold): FoldedPad => ({ serial: pumpId, area, fold });
 
@@ -24,10 +31,12 @@ export const foldedPad = ({ pumpId, area }: PumpContext, fold: PumpFold): Folded
  */
 export function createAreaLines(lines: AlarmLines): AreaLines {
   const area = createAreaFold();
+  const bySilence = new Map<string, AreaSignal>();
+  let knowsDrops = false;
   const hidden = new Map<string, { readonly pad: FoldedPad; readonly signal: AlarmSignal }>();
 
   const hear = ({ serial, fold, area: name }: FoldedPad, at: number): void => {
-    area.hear({ pumpId: serial, padId: serial, area: name }, fold.silentSince(), at);
+    area.hear({ pumpId: serial, padId: serial, area: name }, fold.silentSince(), at, fold.lostAt());
     tell();
   };
 
@@ -44,9 +53,13 @@ export function createAreaLines(lines: AlarmLines): AreaLines {
     const words = { class: alarmClass, priority, cause: 'link', evidence, pads: pumpIds };
     if (type === 'cleared') {
       lines.close(key, at);
+      bySilence.delete(key);
       for (const serial of pumpIds) show(serial);
     } else if (known !== undefined) Object.assign(known, words);
-    else lines.open(key, { detector, from, raised: at, to: null, ...words });
+    else {
+      if (!knowsDrops) bySilence.set(key, signal);
+      lines.open(key, { detector, from, raised: at, to: null, ...words });
+    }
   };
 
   const show = (serial: string): void => {
@@ -63,6 +76,19 @@ export function createAreaLines(lines: AlarmLines): AreaLines {
 
   return {
     hear,
+    pass: (at, listening) => {
+      knowsDrops = listening.knowsDrops;
+      area.pass(at, listening);
+      tell();
+    },
+    end: (at) => {
+      for (const [key, { from }] of bySilence) {
+        if (at - from > ENDS_WITHIN_MS) continue;
+        const pads = lines.find(key)?.pads ?? [];
+        lines.withdraw(key);
+        for (const serial of pads) show(serial);
+      }
+    },
     take: (pad, signal, at) => {
       const { serial } = pad;
       if (signal.detector !== 'silent') return lines.take(serial, signal);

@@ -20,12 +20,12 @@ const FOLD_TOGETHER = 64;
 
 const MOST_UNKNOWN = 1000;
 
-/** `silent` = as its neighbours were told; undefined before that. */
+/** `told` = as its neighbours were told that it is heard; undefined before that. */
 type Pad = FoldedPad & {
   readonly inputs: number;
   readonly waiting: PumpEvent[];
   heardAt: number;
-  silent: boolean | undefined;
+  told: 'heard' | 'silent' | 'lost' | undefined;
 };
 
 export type BacktestCount = { readings: number; late: number; unknownSerials: Map<string, number> };
@@ -45,7 +45,7 @@ const createPad = (context: PumpContext): Pad => ({
   inputs: context.traits.inputCount,
   waiting: [],
   heardAt: Number.NEGATIVE_INFINITY,
-  silent: undefined,
+  told: undefined,
 });
 
 /**
@@ -58,6 +58,8 @@ export function createBacktest(contexts: readonly PumpContext[]): Backtest {
   const areas = createAreaLines(lines);
   const count: BacktestCount = { readings: 0, late: 0, unknownSerials: new Map() };
   let toldAt: number | undefined;
+  let beganAt: number | undefined;
+  let hasStatus = false;
   let lastArrival = 0;
 
   const gather = (pad: Pad, at: number): void => {
@@ -81,20 +83,23 @@ export function createBacktest(contexts: readonly PumpContext[]): Backtest {
     for (const pad of pads.values()) {
       // A pad that has just spoken knows the time.
       const quiet = receivedAt - pad.heardAt >= TELL_TIME_EVERY_MS;
-      if (!quiet && pad.silent === false) continue;
+      if (!quiet && pad.told === 'heard') continue;
       if (quiet) pad.waiting.push({ kind, receivedAt });
       gather(pad, receivedAt);
       concerned.push(pad);
     }
     // Only then, so that nobody is taken for silent whose word is still waiting.
     for (const pad of concerned) tellNeighbours(pad, receivedAt);
+    beganAt ??= receivedAt;
+    areas.pass(receivedAt, { since: beganAt, knowsDrops: hasStatus });
     toldAt = receivedAt;
   };
 
   const tellNeighbours = (pad: Pad, at: number): void => {
-    const silent = pad.fold.silentSince() !== undefined;
-    if (silent !== pad.silent) areas.hear(pad, at);
-    pad.silent = silent;
+    const { fold } = pad;
+    const heard = fold.silentSince() === undefined ? 'heard' : fold.lostAt() === undefined ? 'silent' : 'lost';
+    if (heard !== pad.told) areas.hear(pad, at);
+    pad.told = heard;
   };
 
   /** A rule that counts time speaks when its time has come, not when the next line does. */
@@ -109,6 +114,7 @@ export function createBacktest(contexts: readonly PumpContext[]): Backtest {
 
   const push = (pad: Pad, event: PumpEvent): void => {
     if (event.kind === 'reading') count.readings += 1;
+    if (event.kind === 'status') hasStatus = true;
     pad.heardAt = Math.max(pad.heardAt, event.receivedAt);
     if (pad.waiting.push(event) >= FOLD_TOGETHER) gather(pad, lastArrival);
   };
@@ -133,6 +139,7 @@ export function createBacktest(contexts: readonly PumpContext[]): Backtest {
     end: () => {
       if (toldAt !== undefined) tellTime(lastArrival);
       gatherAll();
+      areas.end(lastArrival);
       return lines.rest();
     },
     count: () => count,

@@ -10,6 +10,7 @@ type Row = {
   readonly learnt_version: number | null;
   readonly heard_at: number | null;
   readonly silent_since: number | null;
+  readonly lost_at: number | null;
   readonly quarantined: boolean;
   readonly previous_epoch: number;
 };
@@ -28,12 +29,13 @@ const CLAIM = `with claimed as (
   returning s.*, before.epoch as previous_epoch)
 select c.pump_id, c.cursor::float8 as cursor, c.hot, l.learnt, l.version as learnt_version, c.previous_epoch,
   date_part('epoch', c.heard_at) * 1000 as heard_at, date_part('epoch', c.silent_since) * 1000 as silent_since,
-  c.quarantined_at is not null as quarantined
+  date_part('epoch', c.lost_at) * 1000 as lost_at, c.quarantined_at is not null as quarantined
 from claimed c left join pump_learnt l on l.pump_id = c.pump_id`;
 
 const RELOAD = `select s.pump_id, s.cursor::float8 as cursor, s.hot, l.learnt, l.version as learnt_version,
   s.epoch as previous_epoch, date_part('epoch', s.heard_at) * 1000 as heard_at,
-  date_part('epoch', s.silent_since) * 1000 as silent_since, s.quarantined_at is not null as quarantined
+  date_part('epoch', s.silent_since) * 1000 as silent_since, date_part('epoch', s.lost_at) * 1000 as lost_at,
+  s.quarantined_at is not null as quarantined
 from pump_states s left join pump_learnt l on l.pump_id = s.pump_id
 where s.pump_id = any($1::uuid[]) and s.epoch = $2`;
 
@@ -76,6 +78,7 @@ function toClaimedState(row: Row, living: readonly number[]): ClaimedState {
     learntVersion: row.learnt_version ?? -1,
     heardAt: row.heard_at ?? undefined,
     silentSince: row.silent_since ?? undefined,
+    lostAt: row.lost_at ?? undefined,
     quarantined: row.quarantined,
     takenOver: living.includes(row.previous_epoch),
   };

@@ -7,6 +7,7 @@ export type ClaimedState = {
   readonly learntVersion: number;
   readonly heardAt: number | undefined;
   readonly silentSince: number | undefined;
+  readonly lostAt: number | undefined;
   readonly quarantined: boolean;
   /** Another living process folded it until now: something of its making may still be on its way into the database. */
   readonly takenOver: boolean;

@@ -17,6 +17,8 @@ export type CommitOptions = {
   readonly epoch: number;
   readonly publicUrl: string;
   readonly now: () => number;
+  /** See FoldContext. */
+  readonly listeningSince: number;
 };
 
 export type Committed = {
@@ -35,7 +37,7 @@ export async function commitFold(options: CommitOptions, writes: readonly FoldWr
   return asMachine(pool, async (_db, client) => {
     const written = await writeFold(client, epoch, writes);
     const ours = writes.filter((write) => hasNews(write) && written.has(write.slot.pump.pumpId));
-    const alarms = await changeAlarms(client, ours, options.now());
+    const alarms = await changeAlarms(client, ours, options);
     const mails = await announceAlarms(client, alarms, { publicUrl: options.publicUrl, now: options.now() });
     return { written, alarms, mails };
   });
@@ -43,8 +45,13 @@ export async function commitFold(options: CommitOptions, writes: readonly FoldWr
 
 const hasNews = (write: FoldWrite): boolean => write.signals.length > 0 || hasAreaNews(write);
 
-async function changeAlarms(client: pg.PoolClient, writes: readonly FoldWrite[], now: number): Promise<AlarmChange[]> {
-  const areas = await foldAreas(client, writes, now);
+async function changeAlarms(
+  client: pg.PoolClient,
+  writes: readonly FoldWrite[],
+  options: CommitOptions,
+): Promise<AlarmChange[]> {
+  const now = options.now();
+  const areas = await foldAreas(client, writes, { now, listeningSince: options.listeningSince });
   const own = writes.map(({ slot }) => slot.pump.pumpId);
   const pumpIds = [...new Set([...own, ...areas.flatMap((area) => area.pumpIds)])];
   const open = await lockOpenAlarms(client, pumpIds);

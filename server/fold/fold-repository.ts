@@ -8,11 +8,12 @@ import type { FoldWrite } from './fold-write.ts';
  */
 const WRITE = `with given as (
   select * from json_to_recordset($2::json) as g(pump_id uuid, cursor bigint, hot jsonb, now jsonb, high_water float8,
-    heard_at float8, silent_since float8)),
+    heard_at float8, silent_since float8, lost_at float8)),
 written as (
   update pump_states s set cursor = coalesce(g.cursor, s.cursor), hot = coalesce(g.hot, s.hot), now = g.now,
     high_water = to_timestamp(g.high_water / 1000), heard_at = to_timestamp(g.heard_at / 1000),
-    silent_since = to_timestamp(g.silent_since / 1000), quarantined_at = null, quarantine_reason = null
+    silent_since = to_timestamp(g.silent_since / 1000), lost_at = to_timestamp(g.lost_at / 1000),
+    quarantined_at = null, quarantine_reason = null
   from given g where s.pump_id = g.pump_id and s.epoch = $1
   returning s.pump_id, s.company_id),
 ran as (
@@ -57,7 +58,7 @@ export async function writeFold(
   return new Set(rows.map(({ pump_id }) => pump_id));
 }
 
-function stateJson({ slot, state, now, highWater, heardAt, silentSince }: FoldWrite): string {
+function stateJson({ slot, state, now, highWater, heardAt, silentSince, lostAt }: FoldWrite): string {
   const plain = JSON.stringify({
     pump_id: slot.pump.pumpId,
     cursor: state?.cursor,
@@ -65,6 +66,7 @@ function stateJson({ slot, state, now, highWater, heardAt, silentSince }: FoldWr
     high_water: highWater,
     heard_at: heardAt,
     silent_since: silentSince,
+    lost_at: lostAt,
   });
   return state === undefined ? plain : `${plain.slice(0, -1)},"hot":${state.hot}}`;
 }

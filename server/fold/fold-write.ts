@@ -21,6 +21,9 @@ export type FoldWrite = {
   readonly highWater: number | undefined;
   readonly heardAt: number | undefined;
   readonly silentSince: number | undefined;
+  readonly lostAt: number | undefined;
+  /** The device has been gone long enough for its drop to be weighed with its neighbours'. */
+  readonly stayedAway: boolean;
   readonly runs: readonly Run[];
   readonly signals: readonly AlarmSignal[];
   readonly unfolded: FoldOutput['unfolded'];
@@ -32,6 +35,8 @@ export type FoldWrite = {
  */
 const STATE_EVERY_MS = 30_000;
 
+type TakeOptions = { readonly output?: FoldOutput; readonly whole?: boolean; readonly stayedAway?: boolean };
+
 /**
  * Takes what a pump's fold put out. The state goes with it when there are signals, which must never be said twice, and
  * otherwise every half minute; `whole` = in any case.
@@ -39,7 +44,7 @@ const STATE_EVERY_MS = 30_000;
 export function takeFoldWrite(
   slot: PumpSlot,
   at: number,
-  { output = slot.fold.take(), whole = false }: { readonly output?: FoldOutput; readonly whole?: boolean } = {},
+  { output = slot.fold.take(), whole = false, stayedAway = false }: TakeOptions = {},
 ): FoldWrite {
   const { signals } = output;
   const isDue = whole || signals.length > 0 || at - slot.stateSavedAt >= STATE_EVERY_MS;
@@ -50,6 +55,8 @@ export function takeFoldWrite(
     highWater: slot.fold.highWater(),
     heardAt: slot.heardAt,
     silentSince: slot.silentSince,
+    lostAt: slot.fold.lostAt(),
+    stayedAway,
     runs: chooseRuns(slot, output.runs, isDue),
     signals,
     unfolded: output.unfolded,

@@ -31,6 +31,9 @@ export type PumpSlot = {
   silentSince: number | undefined;
   /** The same as it is stored: what the fold over the company's pumps has been told. */
   storedSilentSince: number | undefined;
+  storedLostAt: number | undefined;
+  /** The drop that was weighed with its neighbours' once it had lasted, ms. */
+  weighedLostAt: number | undefined;
   connection: string | undefined;
   lateAt: number[];
   /** Late readings are looked at then, ms, at the earliest; and how things stood when they last were. */
@@ -60,6 +63,8 @@ export function createPumpSlot(pump: CommissionedPump, state: ClaimedState, notB
     heardAt: state.heardAt,
     silentSince: state.silentSince,
     storedSilentSince: state.silentSince,
+    storedLostAt: state.lostAt,
+    weighedLostAt: undefined,
     connection: hot.connection,
     lateAt: [...hot.lateAt],
     lateDueAt: 0,

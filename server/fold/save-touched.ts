@@ -59,8 +59,10 @@ function sayUnfolded({ log }: FoldContext, writes: readonly FoldWrite[]): void {
   }
 }
 
-function afterWrite(context: FoldContext, { slot, state, silentSince }: FoldWrite, isWritten: boolean): void {
-  if (isWritten) slot.storedSilentSince = silentSince;
+function afterWrite(context: FoldContext, write: FoldWrite, isWritten: boolean): void {
+  const { slot, state, silentSince, lostAt } = write;
+  if (isWritten) Object.assign(slot, { storedSilentSince: silentSince, storedLostAt: lostAt });
+  if (isWritten && write.stayedAway) slot.weighedLostAt = lostAt;
   if (state !== undefined && isWritten) slot.isStateOld = false;
   if (state?.learnt !== undefined && isWritten) slot.learntVersion = state.learnt.version;
   if (!isWritten) {

@@ -9,7 +9,7 @@ type Database = Pick<pg.ClientBase, 'query'>;
 
 /**
  * A watched pump that was ever heard; `lastWord` = its last word while it is silent, else 0; `fellAt` = when its load fell
- * all at once, as its stored alarm says, else 0.
+ * all at once, as its stored alarm says, else 0; `lostAt` = when its connection dropped, else 0.
  */
 export type AreaMember = {
   readonly pumpId: string;
@@ -17,6 +17,7 @@ export type AreaMember = {
   readonly area: string | null;
   readonly lastWord: number;
   readonly fellAt: number;
+  readonly lostAt: number;
 };
 
 /** The alarms of a company's area fold as they were saved, locked until the transaction ends. */
@@ -45,7 +46,8 @@ export async function listAreaMembers(database: Database, companyId: string): Pr
     name: 'list-area-members',
     text: `select p.id as "pumpId", p.pad_id as "padId", pad.area,
         case when s.silent_since is null then 0 else round(date_part('epoch', s.heard_at) * 1000) end as "lastWord",
-        coalesce(round(date_part('epoch', fall.from_at) * 1000), 0) as "fellAt"
+        coalesce(round(date_part('epoch', fall.from_at) * 1000), 0) as "fellAt",
+        coalesce(round(date_part('epoch', s.lost_at) * 1000), 0) as "lostAt"
       from pump_states s join pumps p on p.id = s.pump_id join pads pad on pad.id = p.pad_id
       left join alarms fall on fall.pump_id = p.id and fall.detector = 'low-load' and fall.state <> 'normal'
         and fall.cause = 'sudden' and fall.returned_at is null

@@ -23,9 +23,17 @@ export const GROUPED_DETECTORS: readonly Detector[] = ['silent', 'clock-shift', 
 
 const concernsAreas = ({ detector }: AlarmSignal): boolean => GROUPED_DETECTORS.includes(detector);
 
-/** Whether a write tells the area fold anything: silence that began or ended, or an alarm that others may share. */
-export const hasAreaNews = ({ slot, silentSince, signals }: FoldWrite): boolean =>
-  (silentSince === undefined) !== (slot.storedSilentSince === undefined) || signals.some(concernsAreas);
+/**
+ * Whether a write tells the area fold anything: silence or a drop that began, lasted or ended, or an alarm that others
+ * may share.
+ */
+export const hasAreaNews = ({ slot, silentSince, lostAt, stayedAway, signals }: FoldWrite): boolean =>
+  stayedAway ||
+  (silentSince === undefined) !== (slot.storedSilentSince === undefined) ||
+  (lostAt === undefined) !== (slot.storedLostAt === undefined) ||
+  signals.some(concernsAreas);
+
+type Moment = { readonly now: number; readonly listeningSince: number };
 
 /**
  * Folds what some writes tell over the pumps of their companies, in the transaction that stores the writes. Its state is
@@ -34,14 +42,14 @@ export const hasAreaNews = ({ slot, silentSince, signals }: FoldWrite): boolean 
 export async function foldAreas(
   client: pg.PoolClient,
   writes: readonly FoldWrite[],
-  now: number,
+  moment: Moment,
 ): Promise<AreaOutcome[]> {
   const news = writes.filter(hasAreaNews);
   const companyIds = [...new Set(news.map(({ slot }) => slot.pump.companyId))].sort();
   const outcomes: AreaOutcome[] = [];
   for (const companyId of companyIds) {
     const own = news.filter(({ slot }) => slot.pump.companyId === companyId);
-    const outcome = await foldCompany(client, companyId, own, now);
+    const outcome = await foldCompany(client, companyId, own, moment);
     if (outcome !== undefined) outcomes.push(outcome);
   }
   return outcomes;
@@ -51,7 +59,7 @@ async function foldCompany(
   client: pg.PoolClient,
   companyId: string,
   writes: readonly FoldWrite[],
-  now: number,
+  { now, listeningSince }: Moment,
 ): Promise<AreaOutcome | undefined> {
   const saved = await lockAreaState(client, companyId);
   const isQuiet = Array.isArray(saved) && saved.length === 0;
@@ -63,6 +71,8 @@ async function foldCompany(
   const before = new Map(fold.standing().map((alarm) => [alarm.key, alarm]));
   fold.keep(new Set(members.map(({ pumpId }) => pumpId)), now);
   tell(fold, writes, now);
+  // Devices that can connect are known to be gone by their will; one that only says nothing has not dropped.
+  fold.pass(now, { since: listeningSince, knowsDrops: true });
   const signals = mergeSignals(fold.take());
   const touched = fold.standing().filter((alarm) => isOther(before.get(alarm.key), alarm));
   if (touched.length > 0 || signals.length > 0) await saveAreaState(client, companyId, alarmsOf(fold));
@@ -90,24 +100,26 @@ function asBefore(members: readonly AreaMember[], writes: readonly FoldWrite[]):
   return members.map((member) => {
     const write = written.get(member.pumpId);
     if (write === undefined) return member;
-    const { storedSilentSince } = write.slot;
-    return { ...member, lastWord: storedSilentSince === undefined ? 0 : (write.heardAt ?? storedSilentSince) };
+    const { storedSilentSince, storedLostAt = 0 } = write.slot;
+    const lastWord = storedSilentSince === undefined ? 0 : (write.heardAt ?? storedSilentSince);
+    return { ...member, lastWord, lostAt: storedLostAt };
   });
 }
 
-const toSaved = ({ pumpId, padId, area, lastWord, fellAt }: AreaMember) => [
+const toSaved = ({ pumpId, padId, area, lastWord, fellAt, lostAt }: AreaMember) => [
   pumpId,
   padId,
   area ?? '',
   lastWord,
   fellAt,
+  lostAt,
 ];
 
 function tell(fold: AreaFold, writes: readonly FoldWrite[], now: number): void {
-  for (const { slot, silentSince, heardAt } of writes) {
+  for (const { slot, silentSince, heardAt, lostAt } of writes) {
     const { pumpId, padId, context } = slot.pump;
     const pump: AreaPump = { pumpId, padId, area: context.area };
-    fold.hear(pump, silentSince === undefined ? undefined : (heardAt ?? silentSince), now);
+    fold.hear(pump, silentSince === undefined ? undefined : (heardAt ?? silentSince), now, lostAt);
   }
   for (const { slot, signals } of writes) {
     for (const signal of signals) if (concernsAreas(signal)) fold.push(slot.pump.pumpId, signal, now);

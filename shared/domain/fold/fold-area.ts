@@ -13,7 +13,7 @@ import {
   saveAreaState,
 } from './area/area-state.ts';
 import { findFallList, listFallenTogether } from './area/load-fall.ts';
-import { listOwnLinkDrops } from './area/own-link.ts';
+import { droppedAt, type Listening, listOwnLinkDrops } from './area/own-link.ts';
 
 /** Where a pump stands among the company's others. */
 export type AreaPump = { readonly pumpId: string; readonly padId: string; readonly area?: string | undefined };
@@ -28,9 +28,12 @@ export type AreaStanding = {
 export type AreaFold = {
   /**
    * How a pump's device is heard now: `silentSince` = its last word once it is silent (see PumpFold.silentSince),
-   * undefined while it is heard. Saying it again changes nothing.
+   * undefined while it is heard; `lostAt` = when its connection dropped (see PumpFold.lostAt), ms. Saying it again
+   * changes nothing.
    */
-  hear(pump: AreaPump, silentSince: number | undefined, at: number): void;
+  hear(pump: AreaPump, silentSince: number | undefined, at: number, lostAt?: number): void;
+  /** Time has passed: drops that have lasted by now are weighed. To be called after `hear` and again later. */
+  pass(at: number, listening: Listening): void;
   /** What the pump's own fold said, after `hear`. `at` is now, ms. */
   push(pumpId: string, signal: AlarmSignal, at: number): void;
   /** What came of it since the last call. */
@@ -65,7 +68,8 @@ export function createAreaFold(saved?: unknown): AreaFold {
   const ledger = createAreaLedger(state);
   const parts = { state, ledger };
   return {
-    hear: (pump, silentSince, at) => hear(parts, pump, silentSince, at),
+    hear: (pump, silentSince, at, lostAt = 0) => hear(parts, pump, { silentSince, lostAt }, at),
+    pass: (at, listening) => weighDrops(parts, at, listening),
     push: (pumpId, signal, at) => {
       const member = state.members.get(pumpId);
       if (member === undefined) return;
@@ -91,30 +95,39 @@ function findCovering({ alarms }: AreaState, pumpId: string, detector: Detector)
   return alarms.find(({ open }) => open.includes(openKey(pumpId, detector)));
 }
 
-function hear(parts: Parts, pump: AreaPump, silentSince: number | undefined, at: number): void {
+type Heard = { readonly silentSince: number | undefined; readonly lostAt: number };
+
+function hear(parts: Parts, pump: AreaPump, { silentSince, lostAt }: Heard, at: number): void {
   const { state, ledger } = parts;
   const { pumpId, padId, area = '' } = pump;
-  const member = state.members.get(pumpId) ?? { pumpId, padId, area, silentSince: 0, fellAt: 0 };
+  const member = state.members.get(pumpId) ?? { pumpId, padId, area, silentSince: 0, fellAt: 0, lostAt: 0 };
   Object.assign(member, { padId, area });
   state.members.set(pumpId, member);
-  if (silentSince !== undefined && member.silentSince === 0) {
-    member.silentSince = silentSince;
-    fellSilent(parts, member, at);
-  } else if (silentSince === undefined && member.silentSince !== 0) {
-    member.silentSince = 0;
-    ledger.leave(pumpId, ['area-silence', 'own-link'], undefined, at);
-  }
-}
-
-function fellSilent({ state, ledger }: Parts, member: Member, at: number): void {
-  const standing = state.alarms.find(({ kind }) => kind === 'own-link');
-  if (standing !== undefined && isNear(standing.from, member)) {
-    ledger.join(standing, member.pumpId, { detector: 'silent', priority: 'note' }, at);
+  const wasSilent = member.silentSince !== 0;
+  if (silentSince === undefined) {
+    Object.assign(member, { silentSince: 0, lostAt: 0 });
+    if (wasSilent) ledger.leave(pumpId, ['area-silence', 'own-link'], undefined, at);
     return;
   }
-  const dropped = listOwnLinkDrops(state, member);
-  if (dropped.length === 0) return;
-  const from = Math.min(...dropped.map(({ silentSince }) => silentSince));
+  const isNews = !wasSilent || member.lostAt !== lostAt;
+  if (!wasSilent) member.silentSince = silentSince;
+  member.lostAt = lostAt;
+  if (isNews) joinOwnLink(parts, member, at);
+}
+
+function joinOwnLink({ state, ledger }: Parts, member: Member, at: number): void {
+  const dropped = droppedAt(member);
+  const standing = state.alarms.find(
+    ({ kind, from }) => kind === 'own-link' && Math.abs(dropped - from) <= TOGETHER_MS,
+  );
+  if (standing !== undefined) ledger.join(standing, member.pumpId, { detector: 'silent', priority: 'note' }, at);
+}
+
+function weighDrops({ state, ledger }: Parts, at: number, listening: Listening): void {
+  const dropped = listOwnLinkDrops(state, at, listening);
+  const [first] = dropped;
+  if (first === undefined) return;
+  const from = droppedAt(first);
   ledger.raise(
     { kind: 'own-link', detector: 'silent', cause: 'own-link', area: '', from, priority: 'urgent' },
     dropped,

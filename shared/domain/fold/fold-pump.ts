@@ -27,6 +27,8 @@ export type PumpFold = {
   highWater(): number | undefined;
   /** The device's last word, ms, once it is silent: no word for three intervals, at least two minutes, or its will. */
   silentSince(): number | undefined;
+  /** When the device's connection dropped, by its will, ms; undefined while it stands or nothing is known of it. */
+  lostAt(): number | undefined;
   /** The state: `hot` small and ever changing, `learnt` seldom; `learntVersion` grows only when `learnt` changed. */
   save(): { readonly hot: Json; readonly learnt: Json; readonly learntVersion: number };
   /** The same state under new commissioned data, and new rule figures where given. This fold is not to be used on. */
@@ -75,6 +77,7 @@ function foldOf(commissioned: PumpContext, made: PumpParts, pending: AlarmSignal
     now: () => (parts.seen() ? pumpNow(parts.facts) : undefined),
     highWater: () => (parts.seen() ? parts.facts.reading.at : undefined),
     silentSince: () => silentSinceOf(parts.facts),
+    lostAt: () => parts.facts.link.lostAt || undefined,
     save: () => parts.save(),
     withContext: (context, parameters = parts.parameters) =>
       foldOf(context, createPumpParts(context, parameters, parts.save()), signals),

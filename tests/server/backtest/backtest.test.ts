@@ -37,7 +37,8 @@ function play(pads: readonly unknown[], lines: readonly Line[]) {
   return { alarms: backtest.end(), refusals: refusals.filter((one) => one !== undefined), count: backtest.count() };
 }
 
-const byArrival = (lines: readonly Line[]): Line[] => lines.toSorted((a, b) => Number(a.t) - Number(b.t));
+const byArrival = (lines: readonly Line[]): Line[] =>
+  lines.toSorted((a, b) => Number(a.t ?? a.at) - Number(b.t ?? b.at));
 
 describe('a backtest', () => {
   it('lets time pass between two lines, so that silence is raised at its hour', () => {
@@ -72,6 +73,40 @@ describe('a backtest', () => {
     expect(alarms).toHaveLength(1);
     expect(alarms[0]).toMatchObject({ detector: 'silent', cause: 'link', pads: serials.slice(0, 5) });
     expect(alarms[0]?.s).toBeUndefined();
+  });
+
+  const fleet = ['MR-000001', 'MR-000002', 'MR-000003', 'MR-000004', 'MR-000005', 'MR-000006'];
+  const fleetPads = fleet.map((serial, index) => pad(serial, index % 2 === 0 ? 'North' : 'South'));
+  const CONNECTION = '8f2f6c1e-5d0b-4f0e-9a53-0c6b9a1d2e3f';
+  const statusOf = (s: string, minute: number, status: Line): Line => ({ s, at: FROM + minute * MINUTE, status });
+  const online = (s: string, minute: number): Line =>
+    statusOf(s, minute, { state: 'online', conn: CONNECTION, boot: CONNECTION, up: 5, fw: '1.0' });
+  const linkLines = (lines: readonly Line[]) =>
+    play(fleetPads, byArrival(lines)).alarms.filter(({ cause }) => cause === 'link');
+
+  it('does not take the end of the readings for our own link', () => {
+    const ends = fleet.flatMap((serial, index) => minutes(serial, 0, index < 5 ? 120 : 300));
+    expect(linkLines(ends)).toEqual([]);
+    // Each on a pad of its own that says nothing any more: their own lines stay.
+    expect(play(fleetPads, byArrival(ends)).alarms.filter(({ detector }) => detector === 'silent')).toHaveLength(5);
+    expect(linkLines([...ends, ...fleet.map((serial) => online(serial, 0))])).toEqual([]);
+  });
+
+  it('judges by the connections where the trace has them', () => {
+    const lines = (lost: boolean, until: number) => [
+      ...fleet.map((serial) => online(serial, 0)),
+      ...fleet.flatMap((serial, index) =>
+        index < 5 ? [...minutes(serial, 0, 30), ...minutes(serial, until, 200)] : minutes(serial, 0, 200),
+      ),
+      ...(lost ? fleet.slice(0, 5).map((serial) => statusOf(serial, 30, { state: 'lost', conn: CONNECTION })) : []),
+    ];
+    expect(linkLines(lines(false, 150))).toEqual([]);
+    expect(linkLines(lines(true, 32))).toEqual([]);
+    const [line, ...more] = linkLines(lines(true, 150));
+    expect(more).toEqual([]);
+    expect(line).toMatchObject({ from: FROM + 30 * MINUTE, pads: fleet.slice(0, 5) });
+    expect((line?.raised ?? 0) - FROM).toBeLessThanOrEqual(33 * MINUTE);
+    expect((line?.to ?? 0) - FROM).toBeLessThanOrEqual(151 * MINUTE);
   });
 
   it('takes a late reading for a word from the device and for no more', () => {

@@ -1,7 +1,9 @@
+import { randomUUID } from 'node:crypto';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { asMachine, asPerson, type Sight } from '#server/db/transaction.ts';
 import { makePartitionsBetween } from '#server/fold/history/history-repository.ts';
 import { encodeReadings } from '#shared/contract/mqtt/encode-reading.ts';
+import { encodeStatus } from '#shared/contract/mqtt/status.ts';
 import type { Reading } from '#shared/domain/readings/reading.ts';
 import { instantOf } from '#shared/domain/time/instant-of.ts';
 import { openRawDevice, type RawDevice, topicOf } from '#tests/support/test-broker.ts';
@@ -61,10 +63,26 @@ const pass = async (until: number) => {
 async function connect(pump: Pump): Promise<RawDevice> {
   const known = connections.get(pump.serial);
   if (known !== undefined) return known;
-  const device = await openRawDevice(running.port, pump.serial, { password: Buffer.from(pump.secret) });
+  const payload = encodeStatus({ state: 'lost', connection: randomUUID() });
+  const will = { topic: topicOf(pump.serial, 'status'), payload, qos: 1, retain: false };
+  const device = await openRawDevice(running.port, pump.serial, { password: Buffer.from(pump.secret), will });
   await device.next('connack');
   connections.set(pump.serial, device);
   return device;
+}
+
+/** The connections of these pumps' devices break; resolves when the server knows it. */
+async function drop(pumps: readonly Pump[]): Promise<void> {
+  for (const { serial } of pumps) {
+    connections.get(serial)?.socket.destroy();
+    connections.delete(serial);
+  }
+  const count = async () => {
+    await running.stream.drain();
+    const pumpIds = pumps.map(({ pumpId }) => pumpId);
+    return (await query('select 1 from pump_states where lost_at is not null and pump_id = any($1)', pumpIds)).length;
+  };
+  await expect.poll(count).toBe(pumps.length);
 }
 
 async function send(pump: Pump, readings: readonly Reading[]): Promise<void> {
@@ -213,7 +231,9 @@ describe('our own link', () => {
     const lost = [...north.slice(0, 4), ...south.slice(0, 4)];
     const kept = [...north.slice(4), ...south.slice(4)];
     await sayAll([...north, ...south]);
+    await goOn([...north, ...south], now + 3 * MINUTE);
     const from = now;
+    await drop(lost);
     await goOn(kept, from + 3 * MINUTE);
     const [group, ...more] = await alarmsOf(company.companyId);
     expect(more).toEqual([]);

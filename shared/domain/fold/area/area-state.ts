@@ -4,9 +4,17 @@ import type { AreaKind } from './area-signal.ts';
 
 /**
  * A pump among its neighbours; `silentSince` = its last word, ms, 0 while it is heard; `fellAt` = when its load fell all
- * at once, ms, 0 while no such alarm stands.
+ * at once, ms, 0 while no such alarm stands; `lostAt` = when its connection dropped, ms, 0 where it stands or nothing is
+ * known of it.
  */
-export type Member = { readonly pumpId: string; padId: string; area: string; silentSince: number; fellAt: number };
+export type Member = {
+  readonly pumpId: string;
+  padId: string;
+  area: string;
+  silentSince: number;
+  fellAt: number;
+  lostAt: number;
+};
 
 /** An alarm that speaks for several pumps; `open` names the pumps and detectors whose own condition still stands. */
 export type AreaAlarm = {
@@ -39,12 +47,13 @@ export const listOpenPumps = ({ open }: Pick<AreaAlarm, 'open'>): readonly strin
 /** The state as plain JSON. */
 export function saveAreaState({ members, alarms }: AreaState): Json {
   return {
-    members: [...members.values()].map(({ pumpId, padId, area, silentSince, fellAt }) => [
+    members: [...members.values()].map(({ pumpId, padId, area, silentSince, fellAt, lostAt }) => [
       pumpId,
       padId,
       area,
       silentSince,
       fellAt,
+      lostAt,
     ]),
     alarms: alarms.map((alarm) => ({ ...alarm, pumpIds: [...alarm.pumpIds], open: [...alarm.open] })),
   };
@@ -64,10 +73,10 @@ export function restoreAreaState(saved: unknown): AreaState {
 
 function parseMember(value: unknown): Member[] {
   if (!Array.isArray(value)) return [];
-  const [pumpId, padId, area, silentSince, fellAt = 0]: readonly unknown[] = value;
+  const [pumpId, padId, area, silentSince, fellAt = 0, lostAt = 0]: readonly unknown[] = value;
   if (typeof pumpId !== 'string' || typeof padId !== 'string' || typeof area !== 'string') return [];
-  if (typeof silentSince !== 'number' || typeof fellAt !== 'number') return [];
-  return [{ pumpId, padId, area, silentSince, fellAt }];
+  if (typeof silentSince !== 'number' || typeof fellAt !== 'number' || typeof lostAt !== 'number') return [];
+  return [{ pumpId, padId, area, silentSince, fellAt, lostAt }];
 }
 
 function parseAlarm(value: unknown): AreaAlarm[] {

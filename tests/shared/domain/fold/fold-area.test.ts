@@ -201,27 +201,74 @@ describe('the fold over pumps', () => {
     expect(fold.take()).toMatchObject([{ type: 'cleared' }]);
   });
 
-  it('blames our own link when over a fifth of the devices drop within two minutes, all over the place', () => {
-    const fold = createAreaFold();
-    const all = [...names('North', 15), ...names('South', 15)];
-    fleet(fold, all);
-    const dropped = all.filter((_, index) => index % 3 === 0);
-    for (const [index, name] of dropped.entries()) fold.hear(pump(name), HOUR + index * 5000, HOUR + 2 * MINUTE);
-    const signals = fold.take();
-    expect(signals[0]).toMatchObject({ type: 'raised', kind: 'own-link', priority: 'urgent' });
-    expect(signals.filter(({ type }) => type === 'raised')).toHaveLength(1);
-    expect(signals.at(-1)?.pumpIds).toEqual(dropped);
-    fold.push('North-0', silent(HOUR, 2 * HOUR), 2 * HOUR);
-    expect(fold.coveredBy('North-0', 'silent')).toBe(signals[0]?.key);
+  const listening = { since: 0, knowsDrops: true };
+  const thirdOf = (all: readonly string[]) => all.filter((_, index) => index % 3 === 0);
+  const everywhere = [...names('North', 15), ...names('South', 15)];
+  /** A third of the fleet drops, five seconds apart, and nobody comes back. */
+  const dropThird = (fold: AreaFold): string[] => {
+    fleet(fold, everywhere);
+    const dropped = thirdOf(everywhere);
+    for (const [index, name] of dropped.entries()) {
+      const at = HOUR + index * 5000;
+      fold.hear(pump(name), at - 7 * MINUTE, at, at);
+    }
+    return dropped;
+  };
 
+  it('blames our own link when over a fifth of the devices drop within two minutes and stay away, all over the place', () => {
+    const fold = createAreaFold();
+    const dropped = dropThird(fold);
+    fold.pass(HOUR + MINUTE, listening);
+    expect(fold.take()).toEqual([]);
+    fold.pass(HOUR + 3 * MINUTE, listening);
+    const [raised, ...rest] = fold.take();
+    expect(raised).toMatchObject({ type: 'raised', kind: 'own-link', priority: 'urgent', from: HOUR });
+    expect(raised?.pumpIds).toEqual(dropped);
+    expect(rest).toEqual([]);
+    fold.push('North-0', silent(HOUR, 2 * HOUR), 2 * HOUR);
+    expect(fold.coveredBy('North-0', 'silent')).toBe(raised?.key);
+
+    fold.hear(pump('South-1'), HOUR + 4 * MINUTE, HOUR + 4 * MINUTE, HOUR + 4 * MINUTE);
+    fold.pass(HOUR + 8 * MINUTE, listening);
+    expect(fold.take()).toMatchObject([{ type: 'changed', kind: 'own-link', evidence: { pumps: 11 } }]);
     for (const name of dropped) fold.hear(pump(name), undefined, 2 * HOUR);
+    fold.pass(2 * HOUR, listening);
     expect(fold.take().at(-1)).toMatchObject({ type: 'cleared', kind: 'own-link' });
+  });
+
+  it('does not blame our link for drops while we stopped or just began, nor for devices that are back', () => {
+    for (const since of [HOUR + 2 * MINUTE, HOUR - MINUTE]) {
+      const fold = createAreaFold();
+      dropThird(fold);
+      for (let at = HOUR; at < 2 * HOUR; at += 30_000) fold.pass(at, { since, knowsDrops: true });
+      expect(fold.take()).toEqual([]);
+    }
+    const fold = createAreaFold();
+    for (const name of dropThird(fold).slice(4)) fold.hear(pump(name), undefined, HOUR + 1.8 * MINUTE);
+    for (let at = HOUR; at < 2 * HOUR; at += 30_000) fold.pass(at, listening);
+    expect(fold.take()).toEqual([]);
+  });
+
+  it('takes silence for our link only where no connection is known, and nearly all stay silent', () => {
+    const outcome = (count: number, knowsDrops: boolean) => {
+      const fold = createAreaFold();
+      fleet(fold, everywhere);
+      for (const name of everywhere.slice(0, count)) fold.hear(pump(name), HOUR, HOUR + 2 * MINUTE);
+      fold.pass(HOUR + 9 * MINUTE, { since: 0, knowsDrops });
+      expect(fold.take()).toEqual([]);
+      fold.pass(HOUR + 11 * MINUTE, { since: 0, knowsDrops });
+      return fold.take().map(({ kind }) => kind);
+    };
+    expect(outcome(20, false)).toEqual([]);
+    expect(outcome(28, true)).toEqual([]);
+    expect(outcome(28, false)).toEqual(['own-link']);
   });
 
   it('blames the area, not our link, when its power takes a quarter of the fleet', () => {
     const fold = createAreaFold();
     fleet(fold, [...names('North', 9), ...names('South', 27)]);
-    for (const name of names('North', 9)) fold.hear(pump(name), HOUR, HOUR + 2 * MINUTE);
+    for (const name of names('North', 9)) fold.hear(pump(name), HOUR, HOUR + 2 * MINUTE, HOUR);
+    fold.pass(HOUR + 5 * MINUTE, listening);
     fold.push('North-0', silent(HOUR, 2 * HOUR), 2 * HOUR);
     expect(fold.take()).toMatchObject([{ kind: 'area-silence', pumpIds: names('North', 9) }]);
   });
