@@ -48,6 +48,7 @@ export function createPumpParts(
   if (answered !== undefined) copyAnswer(answer, answered);
   const facts = initialFacts(trackers, answer, hot, learnt);
   const seen = (): boolean => facts.reading !== READING_BEFORE_READINGS;
+  if (seen()) trackers.water.resume(facts);
   const settings = createReportedSettings(facts);
   const keep = createLearntKeeper(typeof learnt.version === 'number' ? learnt.version : 0, trackers, settings);
   return {

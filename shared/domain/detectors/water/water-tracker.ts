@@ -25,6 +25,8 @@ export type WaterTracker = {
   readonly facts: WaterFacts;
   /** Takes in a reading that control and load have seen. */
   readonly read: (facts: Facts) => void;
+  /** Tells the flow at the last reading again, for one that goes on from what was saved. */
+  readonly resume: (facts: Facts) => void;
   readonly learntVersion: () => number;
   readonly saveHot: () => Json;
   readonly saveLearnt: () => Json;
@@ -138,6 +140,7 @@ export function createWaterTracker(context: PumpContext, hot: unknown, learnt: u
       if (state.ms >= SAMPLE_MS) takeSample(facts, valves);
       water.ratio = water.usualWatts > 0 ? load.watts / water.usualWatts : Number.NaN;
     },
+    resume: flow,
     learntVersion: () => version,
     saveHot: () => ({ state: saveChanges(restingWaterState(), state) ?? {}, today: saveLevelToday(levels) }),
     saveLearnt: () => saveLevelDays(levels),

@@ -80,6 +80,13 @@ describe('the fold of a pump', () => {
     );
   });
 
+  it.each([0, events.length - 1])('shows the same pump once it is read back after event %i', (last) => {
+    const before = events.slice(0, last + 1);
+    const { now } = foldAll(before, new Set([last]));
+    expect(now).toEqual(foldAll(before, new Set()).now);
+    expect(now?.flow?.gpm).toBeGreaterThanOrEqual(0);
+  });
+
   it.each([
     ['a try that was given up when its prime time was over', 3 * MINUTE, 0.35, ['prime unprimed']],
     ['a prime that came', 3 * MINUTE, 1, ['prime']],
