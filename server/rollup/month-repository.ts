@@ -40,11 +40,12 @@ export async function writeMonth(
   const lines: MonthLine[] = bill.lines.map(({ tariffId, name, kwh, micros }) => ({ tariffId, name, kwh, micros }));
   await db.execute(sql`
     insert into pump_months (company_id, month, pump_id, priced_at, watt_hours, gallons, span_ms, covered_ms, on_ms,
-      unknown_flow_ms, cost_minor, days, currency, lines, saved)
+      unknown_flow_ms, cost_minor, days, currency, lines, line_names, line_kwh, line_micros, saved)
     select ${companyId}::uuid, ${month}::date, ${pumpId}::uuid, ${instantOfMs(now)}, coalesce(sum(watt_hours), 0),
       coalesce(sum(gallons), 0), coalesce(sum(known_ms), 0), coalesce(sum(covered_ms), 0), coalesce(sum(on_ms), 0),
       coalesce(sum(unknown_flow_ms), 0), ${bill.minorUnits ?? null}::bigint, ${days}::int,
-      ${bill.currency ?? null}::text, ${JSON.stringify(lines)}::jsonb,
+      ${bill.currency ?? null}::text, ${JSON.stringify(lines)}::jsonb, ${sql.param(lines.map(({ name }) => name))}::text[],
+      ${sql.param(lines.map(({ kwh }) => kwh))}::float8[], ${sql.param(lines.map(({ micros }) => micros))}::float8[],
       ${saved === null ? null : JSON.stringify(pickSaved(saved))}::jsonb
     from (select d.*, round(extract(epoch from least(d.to_at, ${instantOfMs(highWater)}) - d.from_at) * 1000)::bigint as known_ms from pump_days d
       where d.pump_id = ${pumpId}::uuid and d.day >= ${month}::date and d.day < ${nextMonth(month)}::date) own
@@ -52,7 +53,7 @@ export async function writeMonth(
       watt_hours = excluded.watt_hours, gallons = excluded.gallons, span_ms = excluded.span_ms,
       covered_ms = excluded.covered_ms, on_ms = excluded.on_ms, unknown_flow_ms = excluded.unknown_flow_ms,
       cost_minor = excluded.cost_minor, days = excluded.days, currency = excluded.currency, lines = excluded.lines,
-      saved = excluded.saved`);
+      line_names = excluded.line_names, line_kwh = excluded.line_kwh, line_micros = excluded.line_micros, saved = excluded.saved`);
 }
 
 const pickSaved = ({ baselineKwh, savedKwh, sigmaKwh, savedMicros, sigmaMicros, method }: MonthSaved): MonthSaved => ({

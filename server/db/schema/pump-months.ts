@@ -1,3 +1,4 @@
+import { sql } from 'drizzle-orm';
 import {
   bigint,
   date,
@@ -32,6 +33,10 @@ export type MonthSaved = {
   readonly method: 'A' | 'B';
 };
 
+/** A number of `saved` as a column: taking ten thousand of them out of JSON takes longer than adding them up. */
+const savedNumber = (name: string, field: keyof MonthSaved) =>
+  doublePrecision(name).generatedAlwaysAs(sql.raw(`(saved ->> '${field}')::float8`));
+
 /**
  * A calendar month of a pump with its price, kept for ever; worked out with its days, so that a fleet's month is one range
  * of this key. It names money, so it is the managers' alone.
@@ -55,6 +60,14 @@ export const pumpMonths = pgTable(
     currency: text(),
     lines: jsonb().$type<readonly MonthLine[]>().notNull(),
     saved: jsonb().$type<MonthSaved>(),
+    savedKwh: savedNumber('saved_kwh', 'savedKwh'),
+    savedSigmaKwh: savedNumber('saved_sigma_kwh', 'sigmaKwh'),
+    savedMicros: savedNumber('saved_micros', 'savedMicros'),
+    savedSigmaMicros: savedNumber('saved_sigma_micros', 'sigmaMicros'),
+    /** The lines again, side by side: a fleet's month adds up those of all its pumps. */
+    lineNames: text('line_names').array(),
+    lineKwh: doublePrecision('line_kwh').array(),
+    lineMicros: doublePrecision('line_micros').array(),
   },
   (table) => [
     primaryKey({ name: 'pump_months_pkey', columns: [table.companyId, table.month, table.pumpId] }),

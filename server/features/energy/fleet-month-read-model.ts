@@ -22,37 +22,61 @@ export type FleetMonthRow = {
   readonly savedSigmaMicros: number;
 };
 
-/** The month of a company: one range of the months' key, however many days and pumps. `currency` is the commonest. */
+/** Sums over the pumps of a month that are priced in one currency, or in none. */
+type CurrencyRow = Omit<FleetMonthRow, 'priced' | 'otherCurrencies' | 'savedSigmaKwh' | 'savedSigmaMicros'> & {
+  readonly savedVariance: number;
+  readonly savedMoneyVariance: number;
+};
+
+/** The month of a company: one range of the months' key, read once, however many days it has. `currency` is the commonest. */
 export async function findFleetMonth(db: Transaction, companyId: string, month: string): Promise<FleetMonthRow> {
-  const { rows } = await db.execute<FleetMonthRow>(sql`
-    with own as (select * from pump_months where company_id = ${companyId} and month = ${month}::date),
-      commonest as (select currency from own where currency is not null group by currency order by count(*) desc, currency limit 1)
-    select count(*)::int as pumps, coalesce(sum(watt_hours), 0)::float8 as "wattHours", coalesce(sum(gallons), 0)::float8 as gallons,
-      coalesce(sum(unknown_flow_ms), 0)::float8 as "unknownFlowMs", coalesce(sum(span_ms), 0)::float8 as "spanMs",
-      coalesce(sum(covered_ms), 0)::float8 as "coveredMs", coalesce(sum(on_ms), 0)::float8 as "onMs",
-      (select currency from commonest) as currency,
-      (count(*) filter (where currency is not null))::int as priced,
-      (count(*) filter (where currency <> (select currency from commonest)))::int as "otherCurrencies",
-      (sum(cost_minor) filter (where currency = (select currency from commonest)))::float8 as "costMinor",
-      (count(*) filter (where saved is not null))::int as "savedPumps",
-      coalesce(sum((saved ->> 'savedKwh')::float8), 0) as "savedKwh",
-      coalesce(sqrt(sum(((saved ->> 'sigmaKwh')::float8) ^ 2)), 0) as "savedSigmaKwh",
-      coalesce(sum((saved ->> 'savedMicros')::float8) filter (where currency = (select currency from commonest)), 0) as "savedMicros",
-      coalesce(sqrt(sum(((saved ->> 'sigmaMicros')::float8) ^ 2) filter (where currency = (select currency from commonest))), 0)
-        as "savedSigmaMicros"
-    from own`);
-  const [row] = rows;
-  if (row === undefined) throw new Error('an aggregate answers one row');
-  return row;
+  const { rows } = await db.execute<CurrencyRow>(sql`
+    select currency, count(*)::int as pumps, sum(watt_hours)::float8 as "wattHours", sum(gallons)::float8 as gallons,
+      sum(unknown_flow_ms)::float8 as "unknownFlowMs", sum(span_ms)::float8 as "spanMs",
+      sum(covered_ms)::float8 as "coveredMs", sum(on_ms)::float8 as "onMs", sum(cost_minor)::float8 as "costMinor",
+      count(saved_kwh)::int as "savedPumps", coalesce(sum(saved_kwh), 0) as "savedKwh",
+      coalesce(sum(saved_sigma_kwh * saved_sigma_kwh), 0) as "savedVariance",
+      coalesce(sum(saved_micros), 0) as "savedMicros",
+      coalesce(sum(saved_sigma_micros * saved_sigma_micros), 0) as "savedMoneyVariance"
+    from pump_months where company_id = ${companyId} and month = ${month}::date group by currency`);
+  return addCurrencies(rows);
+}
+
+function addCurrencies(rows: readonly CurrencyRow[]): FleetMonthRow {
+  const sum = (value: (row: CurrencyRow) => number): number => rows.reduce((total, row) => total + value(row), 0);
+  const priced = rows.filter(({ currency }) => currency !== null);
+  const [commonest] = priced.toSorted(
+    (left, right) => right.pumps - left.pumps || ((left.currency ?? '') < (right.currency ?? '') ? -1 : 1),
+  );
+  const pricedPumps = priced.reduce((total, { pumps }) => total + pumps, 0);
+  return {
+    pumps: sum(({ pumps }) => pumps),
+    wattHours: sum(({ wattHours }) => wattHours),
+    gallons: sum(({ gallons }) => gallons),
+    unknownFlowMs: sum(({ unknownFlowMs }) => unknownFlowMs),
+    spanMs: sum(({ spanMs }) => spanMs),
+    coveredMs: sum(({ coveredMs }) => coveredMs),
+    onMs: sum(({ onMs }) => onMs),
+    currency: commonest?.currency ?? null,
+    priced: pricedPumps,
+    otherCurrencies: pricedPumps - (commonest?.pumps ?? 0),
+    costMinor: commonest?.costMinor ?? null,
+    savedPumps: sum(({ savedPumps }) => savedPumps),
+    savedKwh: sum(({ savedKwh }) => savedKwh),
+    savedSigmaKwh: Math.sqrt(sum(({ savedVariance }) => savedVariance)),
+    savedMicros: commonest?.savedMicros ?? 0,
+    savedSigmaMicros: Math.sqrt(commonest?.savedMoneyVariance ?? 0),
+  };
 }
 
 /** kWh and micros by the period's name, dearest first, of pumps priced in one currency. */
 export async function listFleetPeriods(db: Transaction, companyId: string, month: string, currency: string) {
+  // One row of arrays becomes many of numbers in the select itself: a join would call a function for each pump.
   const { rows } = await db.execute<{ name: string; kwh: number; micros: number }>(sql`
-    select line.name, sum(line.kwh) as kwh, sum(line.micros) as micros
-    from pump_months m cross join lateral jsonb_to_recordset(m.lines) as line(name text, kwh float8, micros float8)
-    where m.company_id = ${companyId} and m.month = ${month}::date and m.currency = ${currency}
-    group by line.name order by sum(line.micros) / nullif(sum(line.kwh), 0) desc nulls first, line.name`);
+    select name, sum(kwh) as kwh, sum(micros) as micros
+    from (select unnest(line_names) as name, unnest(line_kwh) as kwh, unnest(line_micros) as micros from pump_months
+      where company_id = ${companyId} and month = ${month}::date and currency = ${currency} offset 0) line
+    group by name order by sum(micros) / nullif(sum(kwh), 0) desc nulls first, name`);
   return rows;
 }
 

@@ -73,7 +73,7 @@ export async function listPadMonths(
         coalesce(sum(m.on_ms) filter (where p.purpose = 'filter'), 0)::float8 as on_ms, sum(m.span_ms)::float8 as span_ms, sum(m.covered_ms)::float8 as covered_ms,
         case when count(distinct m.currency) = 1 and count(*) = count(m.currency) then min(m.currency) end as currency,
         case when count(distinct m.currency) = 1 and count(*) = count(m.currency) then sum(m.cost_minor)::float8 end as cost_minor,
-        sum((m.saved ->> 'savedKwh')::float8) as saved_kwh, sum((m.saved ->> 'savedMicros')::float8) as saved_micros
+        sum(m.saved_kwh) as saved_kwh, sum(m.saved_micros) as saved_micros
       from pump_months m join pumps p on p.id = m.pump_id
       where m.company_id = ${companyId} and m.month = ${month}::date group by p.pad_id),
     placed as (
