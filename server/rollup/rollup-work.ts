@@ -2,9 +2,6 @@ import type pg from 'pg';
 
 type Database = Pick<pg.ClientBase, 'query'>;
 
-/** A pump whose rollups lag behind what was folded. */
-export type WaitingPump = { readonly pumpId: string };
-
 /** A pump taken for rolling up, locked until the end of the transaction. Instants in ms. */
 export type TakenPump = {
   readonly pumpId: string;

@@ -1,4 +1,3 @@
-import { epochDayOf } from '#server/db/day-text.ts';
 import type { EnergyFigures } from '#shared/contract/http/energy-figures.ts';
 import { formatMinor } from '#shared/domain/energy/money-text.ts';
 import { periodName } from '#shared/domain/energy/price-days.ts';
@@ -113,6 +112,3 @@ export function sumFigures(days: readonly FigureDay[], terms: FigureTerms): Ener
     ),
   };
 }
-
-/** The epoch day of a stored day. */
-export const epochDayOfRow = ({ day }: EnergyDay): number => epochDayOf(day);
