@@ -1,11 +1,11 @@
 import type { Context } from '#server/context.ts';
 import type { Transaction } from '#server/db/transaction.ts';
 import type { ReadingSeries } from '#shared/contract/http/pumps.ts';
-import { chooseBucketMs } from './choose-bucket.ts';
+import { chooseBucketMs, DAY_MS } from './choose-bucket.ts';
 import { getPumpRow } from './get-pump-row.ts';
 import { presentReadingSeries } from './present-reading-series.ts';
 import { listReadingBuckets, listReadings as listSingleReadings, type ReadingBucket } from './reading-read-model.ts';
-import { findCoverage, findFivesEnd, listFiveBuckets, listHourBuckets } from './rolled-read-model.ts';
+import { findCoverage, findFivesEnd, listDayBuckets, listFiveBuckets, listHourBuckets } from './rolled-read-model.ts';
 import { listRunRows } from './run-read-model.ts';
 
 type Asked = { readonly pumpId: string; readonly from: number; readonly until: number; readonly width: number };
@@ -35,7 +35,8 @@ export async function listReadings(context: Context, { pumpId, width, ...window 
 function listBuckets(db: Transaction, asked: Window, bucketMs: number, width: number): Promise<ReadingBucket[]> {
   if (bucketMs === 0) return listSingleReadings(db, asked, width * SPARE);
   if (bucketMs < FIVE_MS) return listReadingBuckets(db, asked, bucketMs);
-  return bucketMs < HOUR_MS ? listMixedBuckets(db, asked, bucketMs) : listHourBuckets(db, asked, bucketMs);
+  if (bucketMs < HOUR_MS) return listMixedBuckets(db, asked, bucketMs);
+  return bucketMs < DAY_MS ? listHourBuckets(db, asked, bucketMs) : listDayBuckets(db, asked, bucketMs / DAY_MS);
 }
 
 /** Days that are over come in stored steps of five minutes, the rest from the readings themselves. */

@@ -1,4 +1,5 @@
 import type { ReadingSeries } from '#shared/contract/http/pumps.ts';
+import { DAY_MS } from './choose-bucket.ts';
 import type { ReadingBucket } from './reading-read-model.ts';
 import type { RunRow } from './run-read-model.ts';
 
@@ -12,6 +13,8 @@ type Window = {
 
 /** A gap longer than this many intervals shows as one, like a `no-data` run. */
 const GAP_INTERVALS = 3;
+/** A local day may last 25 hours: the next one begins so much later. */
+const LONGEST_DAY_MS = DAY_MS + 3_600_000;
 
 const emptySeries = (bucketMs: number): ReadingSeries => ({
   bucketMs,
@@ -35,7 +38,8 @@ export function presentReadingSeries(
 ): ReadingSeries {
   const { bucketMs, intervalMs } = window;
   const series = emptySeries(bucketMs);
-  const stepMs = Math.max(bucketMs, intervalMs * GAP_INTERVALS);
+  const longestMs = bucketMs < DAY_MS ? bucketMs : bucketMs - DAY_MS + LONGEST_DAY_MS;
+  const stepMs = Math.max(longestMs, intervalMs * GAP_INTERVALS);
   let previous: number | undefined;
   let runIndex = 0;
   for (const bucket of buckets) {

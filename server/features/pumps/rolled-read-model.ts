@@ -42,6 +42,24 @@ export async function listHourBuckets(db: Transaction, asked: Asked, bucketMs: n
   return rows;
 }
 
+/**
+ * Local days of a pump, or `days` of them together, each from its own midnight (the first from where the window begins):
+ * one stored row a day, which is kept for ever.
+ */
+export async function listDayBuckets(db: Transaction, asked: Asked, days: number): Promise<ReadingBucket[]> {
+  const { pumpId, from, until } = asked;
+  const { rows } = await db.execute<ReadingBucket>(sql`
+    select ${epochMs(sql`min(greatest(from_at, ${instantOfMs(from)}))`)} as at,
+      avg(coalesce(rpm_mean, 0) * on_ms / nullif(covered_ms, 0))::float4 as rpm, min(rpm_min) as "rpmMin",
+      max(rpm_max) as "rpmMax", avg(watt_hours * 3600000 / nullif(covered_ms, 0))::float4 as watts,
+      min(watts_min) as "wattsMin", max(watts_max) as "wattsMax", 0 as "closedInputs"
+    from pump_days
+    where pump_id = ${pumpId} and day >= ${dayOf(from)} - 1 and day <= ${dayOf(until)} + 1
+      and to_at > ${instantOfMs(from)} and from_at < ${instantOfMs(until)} and rpm_max is not null
+    group by (day - ${dayOf(from)} + 1) / ${days}::int order by 1`);
+  return rows;
+}
+
 /** Until when steps of five minutes are stored, ms; undefined without any. Later ones come from the readings. */
 export async function findFivesEnd(db: Transaction, { pumpId, until }: Asked): Promise<number | undefined> {
   const { rows } = await db.execute<{ end: number | null }>(sql`

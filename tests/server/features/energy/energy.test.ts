@@ -157,6 +157,49 @@ describe('a pump’s energy', () => {
   });
 });
 
+describe('a day’s price', () => {
+  const COLUMNS = 'day::text, priced_by, kwh_by_period, energy_micros_by_period, demand_micros';
+  const stored = async () =>
+    (await pools.machine.query(`select ${COLUMNS} from pump_days where pump_id = $1 order by day`, [filter])).rows;
+  const change = (what: string) =>
+    pools.machine.query(`update pump_days set ${what} where pump_id = $1 and day = $2`, [filter, FIRST_DAY]);
+  const firstCost = async () => (await ok(`/api/pumps/${filter}/energy${WINDOW}`, ours.manager)).spans[0].cost;
+
+  it('is kept when the day is rolled up', async () => {
+    const days = await stored();
+    // 72 kWh at 0.10.
+    expect(days[0]).toMatchObject({ day: FIRST_DAY, demand_micros: 0 });
+    expect(days[0].energy_micros_by_period[0]).toBeCloseTo(7_200_000, 0);
+    expect(days[0].kwh_by_period[0]).toBeCloseTo(72, 3);
+    expect(new Set(days.map((day: { priced_by: string | null }) => day.priced_by)).size).toBe(1);
+  });
+
+  it('is shown as it is kept, and worked out anew where it was priced by something else', async () => {
+    const before = await stored();
+    await change(`energy_micros_by_period = '{5000000}'`);
+    expect(await firstCost()).toBe('5.00');
+    await change(`priced_by = 'another tariff'`);
+    expect(await firstCost()).toBe('7.20');
+    await pools.machine.query(
+      `insert into rollup_marks (id, company_id, pump_id, kind, from_at, to_at) values ($1, $2, $3, 'prices', 'epoch', now())`,
+      [crypto.randomUUID(), ours.companyId, filter],
+    );
+    await rollUp();
+    expect(await stored()).toEqual(before);
+  });
+});
+
+describe('a chart of days', () => {
+  it('has a point a local day, that of 25 hours too, and no gap between them', async () => {
+    const [from, until] = [wall(ZONE, '2025-11-01 00:00'), wall(ZONE, '2025-11-07 00:00')];
+    const series = await ok(`/api/pumps/${filter}/readings?from=${from}&until=${until}&width=10`, ours.manager);
+    expect(series.bucketMs).toBe(86_400_000);
+    expect(series.t).toEqual([1, 2, 3, 4, 5, 6].map((day) => wall(ZONE, `2025-11-0${day} 00:00`)));
+    expect(series.watts).toEqual(Array(6).fill(WATTS));
+    expect(series.rpm).toEqual(Array(6).fill(1700));
+  });
+});
+
 describe('what was saved', () => {
   it('is against the stated baseline, with its method and uncertainty', async () => {
     const path = `/api/pumps/${filter}/baseline`;

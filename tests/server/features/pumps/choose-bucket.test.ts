@@ -8,7 +8,13 @@ describe("the length of a chart's point", () => {
   it('is one that people name', () => {
     expect(chooseBucketMs({ from: 0, until: DAY_MS }, 1000, 10_000)).toBe(120_000);
     expect(chooseBucketMs({ from: 0, until: 7 * DAY_MS }, 1000, 10_000)).toBe(900_000);
-    expect(chooseBucketMs({ from: 0, until: 35 * DAY_MS }, 10, 10_000)).toBe(84 * 3_600_000);
+    expect(chooseBucketMs({ from: 0, until: 35 * DAY_MS }, 10, 10_000)).toBe(4 * DAY_MS);
+  });
+
+  it('is a day, or some of them, where a year is shown', () => {
+    expect(chooseBucketMs({ from: 0, until: 60 * DAY_MS }, 1000, 10_000)).toBe(2 * 3_600_000);
+    expect(chooseBucketMs({ from: 0, until: 365 * DAY_MS }, 1000, 10_000)).toBe(DAY_MS);
+    expect(chooseBucketMs({ from: 0, until: 800 * DAY_MS }, 390, 10_000)).toBe(3 * DAY_MS);
   });
 
   it('is none where every reading has a point of its own', () => {
