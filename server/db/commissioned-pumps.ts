@@ -95,7 +95,7 @@ export const commissionedColumns = sql`
   p.id as "pumpId", p.number as "pumpNumber", p.company_id as "companyId", p.pad_id as "padId",
   motor.model_id as "modelId",
   pad.zone, pad.area, pad.state as "padState", pad.pool_gallons as "poolGallons",
-  pad.turnovers_per_day as "turnoversPerDay", p.settings, p.system_k as "systemK",
+  case when p.purpose = 'filter' then pad.turnovers_per_day end as "turnoversPerDay", p.settings, p.system_k as "systemK",
   model.traits, coalesce(p.nominal_volts, model.nominal_volts) as "nominalVolts",
   case when wet.id is not null then jsonb_build_object('referenceRpm', wet.reference_rpm, 'points', wet.points,
     'standbyWatts', wet.standby_watts) end as "wetEnd",

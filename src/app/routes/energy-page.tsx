@@ -70,7 +70,7 @@ export function EnergyPage() {
         month={month}
         file={`energy-${month}-hours`}
       />
-      <PadsSheet month={month} view={view} />
+      <PadsSheet month={month} growing={growing} view={view} />
       <ProgramList view={view} />
     </div>
   );

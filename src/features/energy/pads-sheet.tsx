@@ -24,7 +24,7 @@ const twoDigits = (value: number | null, format: Format) => (value === null ? '�
 const savedText = ({ saved, savedKwh, currency }: PadMonth, format: Format) =>
   saved === null ? (savedKwh === null ? '–' : kwhText(savedKwh, format)) : format.money(saved, currency);
 
-function listColumns(month: string | undefined, format: Format): Column<PadMonth>[] {
+function listColumns(month: string | undefined, growing: boolean, format: Format): Column<PadMonth>[] {
   const right = { figures: true, right: true };
   return [
     {
@@ -40,7 +40,8 @@ function listColumns(month: string | undefined, format: Format): Column<PadMonth
     {
       head: t('energy.column.change'),
       ...right,
-      cell: ({ kwh, previousKwh }) => changeText(changeOf(kwh, previousKwh), format),
+      // Part of a month beside a whole one says nothing.
+      cell: ({ kwh, previousKwh }) => (growing ? '–' : changeText(changeOf(kwh, previousKwh), format)),
     },
     { head: t('energy.column.cost'), ...right, cell: ({ cost, currency }) => format.money(cost, currency) },
     {
@@ -98,10 +99,15 @@ const exportRows = (pads: readonly PadMonth[]) => [
   ]),
 ];
 
-export type PadsSheetProps = { readonly month: MonthText; readonly view: EnergyView };
+export type PadsSheetProps = {
+  readonly month: MonthText;
+  /** The month goes on. */
+  readonly growing: boolean;
+  readonly view: EnergyView;
+};
 
 /** Every pad's month, worst first in the sense one asks for; each leads to its own page. */
-export function PadsSheet({ month, view }: PadsSheetProps) {
+export function PadsSheet({ month, growing, view }: PadsSheetProps) {
   const format = useFormat();
   const [, setSearch] = useSearchParams();
   const filter = { sort: view.sort, q: view.q };
@@ -147,7 +153,7 @@ export function PadsSheet({ month, view }: PadsSheetProps) {
             caption={t('energy.pads')}
             rows={pads}
             keyOf={({ padId }) => padId}
-            columns={listColumns(view.month, format)}
+            columns={listColumns(view.month, growing, format)}
           />
         )}
         {hasNextPage ? (
