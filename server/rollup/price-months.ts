@@ -8,9 +8,9 @@ import type { Transaction } from '#server/db/transaction.ts';
 import { billOf } from '#shared/domain/energy/month-bill.ts';
 import { priceDays } from '#shared/domain/energy/price-days.ts';
 import { saveByTerms } from '#shared/domain/energy/save-by-terms.ts';
+import { writeDayPrices } from './day-price-repository.ts';
 import { writeMonth } from './month-repository.ts';
 import type { TakenPump } from './rollup-work.ts';
-import { writeDayPrices } from './write-day-prices.ts';
 
 type Priced = Pick<TakenPump, 'pumpId' | 'companyId' | 'padId' | 'zone' | 'highWater'>;
 

@@ -1,5 +1,7 @@
 import { randomUUID } from 'node:crypto';
+import { drizzle } from 'drizzle-orm/node-postgres';
 import type pg from 'pg';
+import { priceMonths } from '#server/rollup/price-months.ts';
 import { RUN_SOURCES } from '#shared/domain/rollup/slice-sums.ts';
 import { TIME_OF_USE } from '#tests/shared/domain/energy/sample-tariffs.ts';
 
@@ -25,11 +27,13 @@ const HOURS = `insert into pump_day_hours (pump_id, company_id, from_at, day, wa
     or pump_id = (select id from pumps order by number limit 1)`;
 
 const MONTHS = `insert into pump_months (company_id, month, pump_id, priced_at, watt_hours, gallons, span_ms, covered_ms, on_ms,
-    unknown_flow_ms, cost_minor, days, currency, lines, saved)
+    unknown_flow_ms, cost_minor, days, currency, lines, line_names, line_kwh,
+    line_micros, saved)
   select company_id, date_trunc('month', day)::date, pump_id, now(), sum(watt_hours), sum(gallons), count(*) * 86400000, count(*) * 86400000,
     sum(on_ms), 0, round(sum(watt_hours) / 1000 * 20), count(*), 'USD',
     jsonb_build_array(jsonb_build_object('tariffId', $1::text, 'name', 'off-peak', 'kwh', sum(watt_hours) / 1000, 'micros', sum(watt_hours) * 120),
       jsonb_build_object('tariffId', $1::text, 'name', 'mid-peak', 'kwh', 10, 'micros', 3000000)),
+    array['off-peak', 'mid-peak'], array[sum(watt_hours) / 1000, 10], array[sum(watt_hours) * 120, 3000000],
     jsonb_build_object('baselineKwh', 700, 'savedKwh', 400, 'sigmaKwh', 60, 'savedMicros', 80000000, 'sigmaMicros', 12000000, 'method', 'A')
   from pump_days group by company_id, date_trunc('month', day), pump_id order by 1, 2, 3`;
 
@@ -62,5 +66,24 @@ export async function addEnergyHistory(owner: pg.ClientBase): Promise<void> {
   await owner.query(
     `insert into rollup_cursors (pump_id, company_id, rolled_to) select id, company_id, now() from pumps`,
   );
+  await priceFirstPump(owner);
   await owner.query('vacuum analyze');
+}
+
+/** The pump whose year is asked for has its days priced as the worker prices them. */
+async function priceFirstPump(owner: pg.ClientBase): Promise<void> {
+  const { rows } =
+    await owner.query(`select p.id as "pumpId", p.company_id as "companyId", p.pad_id as "padId", pad.zone
+    from pumps p join pads pad on pad.id = p.pad_id order by p.number limit 1`);
+  const [pump] = rows;
+  const months = await owner.query<{ month: string }>(
+    `select distinct date_trunc('month', day)::date::text as month from pump_days where pump_id = $1`,
+    [pump.pumpId],
+  );
+  await priceMonths(
+    drizzle(owner as pg.Client),
+    { ...pump, highWater: Date.now() },
+    months.rows.map(({ month }) => month),
+    Date.now(),
+  );
 }
