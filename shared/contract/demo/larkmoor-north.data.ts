@@ -470,7 +470,7 @@ export const LARKMOOR_NORTH_PADS: readonly DemoPad[] = [
         nominalVolts: 230,
         settings: {
           inputs: [2900, null, null],
-          program: [{ days: EVERY_DAY, fromMinute: 420, toMinute: 1140, rpm: 1750 }],
+          program: [{ days: EVERY_DAY, fromMinute: 420, toMinute: 1020, rpm: 1500 }],
           prime: { rpm: 3450, seconds: 180 },
           timed: null,
           freeze: { celsius: 4.4, rpm: 1150 },

@@ -8,6 +8,7 @@ import type { Fleet } from '#simulator/fleet.ts';
 import { generateHistory } from '#simulator/history.ts';
 import { describePad } from '#simulator/score/pad-file.ts';
 import { createScoreFleet, type ScoreOptions } from '#simulator/score/score-fleet.ts';
+import { listStandingTruths } from '#simulator/score/standing-truth.ts';
 import { createTruthBook, type TruthRow } from '#simulator/truth.ts';
 
 export type Played = {
@@ -56,5 +57,6 @@ export function playDemo(story: DemoStory): Played {
   const fleet = createDemoFleet(story, truth);
   const pads = fleet.pumps.map(({ spec }) => describePad(spec, story.cadenceMs));
   const played = play({ fleet, to: story.to, pads });
-  return { ...played, truth: truth.rows(), pumpMonths: fleet.pumps.length };
+  const standing = fleet.pumps.flatMap(({ spec }) => listStandingTruths(spec, story.from));
+  return { ...played, truth: [...truth.rows(), ...standing], pumpMonths: fleet.pumps.length };
 }
