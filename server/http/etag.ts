@@ -20,7 +20,7 @@ export const tellsTime = (body: unknown): boolean => typeof body === 'object' &&
  * @example etagOf({ version: 3, name: 'Filter pump' }) // 'W/"3-kGbqyD0m3zIvSx2B"'
  */
 export function etagOf(body: unknown): string {
-  const text = JSON.stringify(body, (key, value: unknown) => (key === 'serverNow' ? undefined : value)) ?? '';
+  const text = JSON.stringify(tellsTime(body) ? { ...(body as object), serverNow: undefined } : body) ?? '';
   const digest = createHash('sha256').update(text).digest('base64url').slice(0, 16);
   const version = findVersion(body);
   return version === undefined ? `W/"${digest}"` : `W/"${version}-${digest}"`;

@@ -18,7 +18,7 @@ const labelOf = (day: string, by: EnergyQuery['by']): string => (by === 'day' ? 
 function presentSpans(days: readonly FigureDay[], by: EnergyQuery['by'], terms: FigureTerms): EnergySpan[] {
   const groups = groupBy(days, ({ day }) => labelOf(day.day, by));
   return [...groups]
-    .sort(([left], [right]) => left.localeCompare(right))
+    .sort(([left], [right]) => (left < right ? -1 : 1))
     .map(([label, own]) => ({
       label,
       from: Math.min(...own.map(({ day }) => day.from)),
