@@ -242,5 +242,5 @@ it('opens a pump’s page from its row', async () => {
   await opened.page.getByRole('link', { name: /Quarry Lane 18/ }).click();
   await opened.page.waitForURL(`**/pumps/${fakeId('pump', 2)}`);
   await opened.page.getByRole('heading', { level: 1, name: /Quarry Lane 18/ }).waitFor();
-  expect(await opened.page.evaluate(() => document.activeElement?.tagName)).toBe('H1');
+  await opened.page.waitForFunction(() => document.activeElement?.tagName === 'H1');
 });

@@ -22,7 +22,7 @@ const catalogues: readonly Messages[] = await Promise.all(
 );
 
 const sources = listFiles('src')
-  .filter((file) => /\.tsx?$/.test(file) && !file.includes('/messages/'))
+  .filter((file) => /\.tsx?$/.test(file) && !/\/messages\/.*\.data\.ts$/.test(file))
   .map((file) => ({
     file,
     text: readFileSync(join(ROOT, file), 'utf8').replaceAll(/\/\*[\s\S]*?\*\/|^\s*\/\/.*$/gm, ''),
