@@ -14,13 +14,17 @@ function findVersion(body: unknown): number | undefined {
 /** Whether the body tells the time: a stored copy of it would tell the wrong one. */
 export const tellsTime = (body: unknown): boolean => typeof body === 'object' && body !== null && 'serverNow' in body;
 
+/** A body's own `serverNow`, as it is written. */
+const SERVER_NOW = /"serverNow":[\d.]+,?/;
+
 /**
  * A weak tag: the version of the thing where it has one, and a digest of what is shown of it, the clock left out.
+ * `written` is the body as JSON: a year of days is not written twice.
  *
- * @example etagOf({ version: 3, name: 'Filter pump' }) // 'W/"3-kGbqyD0m3zIvSx2B"'
+ * @example etagOf('{"version":3,"name":"Filter pump"}', { version: 3, name: 'Filter pump' }) // 'W/"3-kGbqyD0m3zIvSx2B"'
  */
-export function etagOf(body: unknown): string {
-  const text = JSON.stringify(tellsTime(body) ? { ...(body as object), serverNow: undefined } : body) ?? '';
+export function etagOf(written: string, body: unknown): string {
+  const text = tellsTime(body) ? written.replace(SERVER_NOW, '') : written;
   const digest = createHash('sha256').update(text).digest('base64url').slice(0, 16);
   const version = findVersion(body);
   return version === undefined ? `W/"${digest}"` : `W/"${version}-${digest}"`;

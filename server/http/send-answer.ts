@@ -20,14 +20,15 @@ export function sendAnswer({ endpoint, request, response, checksAnswers }: Answe
     response.status(204).end();
     return;
   }
-  response.status(status).set('ETag', etagOf(body)).vary('Cookie');
+  const written = JSON.stringify(body) ?? '';
+  response.status(status).set('ETag', etagOf(written, body)).vary('Cookie');
   // An answer that tells the time may not come out of a cache; others are asked for again and mostly unchanged.
   response.set('Cache-Control', method !== 'GET' || tellsTime(body) ? 'no-store' : 'private, no-cache');
   if (method === 'GET' && isFresh(request, response)) {
     response.status(304).end();
     return;
   }
-  response.json(body);
+  response.type('json').send(written);
 }
 
 /** If-None-Match by weak comparison (RFC 9110, 13.1.2). */
