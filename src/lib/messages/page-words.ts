@@ -1,4 +1,5 @@
 import { ALARM_MESSAGES } from './alarm.data.ts';
+import { ALARM_ACT_MESSAGES } from './alarm-acts.data.ts';
 import { CATALOGUE } from './catalogue.ts';
 import { createWords } from './create-words.ts';
 import { HOME_MESSAGES } from './home.data.ts';
@@ -10,6 +11,7 @@ const PAGE_CATALOGUE = {
   ...CATALOGUE,
   ...PUMP_MESSAGES,
   ...ALARM_MESSAGES,
+  ...ALARM_ACT_MESSAGES,
   ...HOME_MESSAGES,
   ...PROFILE_MESSAGES,
 } as const;
