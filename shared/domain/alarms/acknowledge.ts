@@ -37,13 +37,15 @@ export function withdrawAcknowledgement(
   const { acknowledgedAt, acknowledgedBy } = record;
   if (acknowledgedAt === null || acknowledgedBy !== act.by || act.at - acknowledgedAt > WITHDRAW_WITHIN_MS)
     return undefined;
-  const next: AlarmRecord = {
-    ...record,
-    state: record.releasedLatch ? 'latched' : record.active ? 'unacknowledged' : 'returned',
-    releasedLatch: false,
-    acknowledgedAt: null,
-    acknowledgedBy: null,
-    acknowledgementNote: null,
-  };
-  return makeStep(next, 'acknowledgement-withdrawn', act.at, act.by);
+  return makeStep(waitAgain(record), 'acknowledgement-withdrawn', act.at, act.by);
 }
+
+/** The alarm as it waited before anybody had seen it. */
+export const waitAgain = (record: AlarmRecord): AlarmRecord => ({
+  ...record,
+  state: record.releasedLatch ? 'latched' : record.active ? 'unacknowledged' : 'returned',
+  releasedLatch: false,
+  acknowledgedAt: null,
+  acknowledgedBy: null,
+  acknowledgementNote: null,
+});

@@ -1,4 +1,4 @@
-import { acknowledge, WITHDRAW_WITHIN_MS } from './acknowledge.ts';
+import { acknowledge, WITHDRAW_WITHIN_MS, waitAgain } from './acknowledge.ts';
 import { type AlarmRecord, type AlarmStep, isOpen, makeStep, noStep } from './alarm-record.ts';
 
 type Act = { readonly by: string; readonly at: number };
@@ -23,16 +23,8 @@ export function answerNothingToDo(
 export function withdrawAnswer(record: AlarmRecord, act: Act): AlarmStep | undefined {
   const { answer, acknowledgedAt } = record;
   if (answer === null || answer.by !== act.by || act.at - answer.at > WITHDRAW_WITHIN_MS) return undefined;
-  if (acknowledgedAt !== answer.at)
-    return makeStep({ ...record, answer: null }, 'nothing-to-do-withdrawn', act.at, act.by);
-  const next: AlarmRecord = {
-    ...record,
-    state: record.releasedLatch ? 'latched' : record.active ? 'unacknowledged' : 'returned',
-    releasedLatch: false,
-    acknowledgedAt: null,
-    acknowledgedBy: null,
-    acknowledgementNote: null,
-    answer: null,
-  };
+  // Somebody had acknowledged it before the answer: that stands.
+  const seenBefore = acknowledgedAt !== answer.at;
+  const next = { ...(seenBefore ? record : waitAgain(record)), answer: null };
   return makeStep(next, 'nothing-to-do-withdrawn', act.at, act.by);
 }
