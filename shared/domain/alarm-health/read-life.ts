@@ -1,4 +1,4 @@
-import type { Priority } from '../detectors/detector.ts';
+import { isWorse, type Priority } from '../detectors/detector.ts';
 import { DETECTOR_CLASSES } from '../detectors/detector-classes.data.ts';
 import type { AlarmLife, LifeChange } from './alarm-life.ts';
 import type { LifeStory } from './life-story.ts';
@@ -31,8 +31,6 @@ const ENDS_ASIDE: Partial<Record<LifeChange['kind'], AsideKind>> = {
 /** Taking back what one did oneself announces nothing to anybody. */
 const SILENT: ReadonlySet<LifeChange['kind']> = new Set(['acknowledgement-withdrawn', 'nothing-to-do-withdrawn']);
 
-const RANK = { urgent: 3, soon: 2, note: 1 } as const;
-
 /**
  * Follows one alarm through its changes. An annunciation is a transition into active and unacknowledged, in sight of its
  * operator; acknowledgements, returns and mails about one that waits already are none (ISA-18.2, see the facts).
@@ -62,7 +60,7 @@ export function readLife(life: AlarmLife): LifeStory {
 
 function follow(now: Condition, change: LifeChange, story: Story): void {
   const { kind, at, priority } = change;
-  const worse = RANK[priority] > RANK[now.priority];
+  const worse = isWorse(priority, now.priority);
   const told = story.annunciations.at(-1);
   now.priority = priority;
   const begun = BEGINS_ASIDE[kind];

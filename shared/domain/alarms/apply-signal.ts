@@ -1,4 +1,4 @@
-import type { AlarmSignal } from '../detectors/detector.ts';
+import { type AlarmSignal, isWorse } from '../detectors/detector.ts';
 import { type AlarmRecord, type AlarmStep, isWatched, makeStep, noStep } from './alarm-record.ts';
 import { applyToDone } from './apply-to-done.ts';
 import { explanationOf, isExplanation } from './explanation.ts';
@@ -10,8 +10,6 @@ type Cleared = Extract<AlarmSignal, { type: 'cleared' }>;
 /** Three returns within this time latch an alarm as chattering (a starting rule quoted for ISA-18.2, see the facts). */
 export const CHATTERING_WINDOW_MS = 60_000;
 export const CHATTERING_RETURNS = 3;
-
-const PRIORITY_RANK = { urgent: 3, soon: 2, note: 1 } as const;
 
 /**
  * Takes a detector's signal into the alarm of its pump and detector. `current` is the newest alarm of the two, if any;
@@ -87,8 +85,7 @@ function raiseAgain(open: AlarmRecord, signal: Raised): AlarmStep {
 /** A rise in priority, or a note that becomes an alarm, asks for a new acknowledgement; a fall does not. */
 function change(open: AlarmRecord, signal: Changed): AlarmStep {
   const worse =
-    PRIORITY_RANK[signal.priority] > PRIORITY_RANK[open.priority] ||
-    (open.alarmClass === 'note' && signal.alarmClass === 'alarm');
+    isWorse(signal.priority, open.priority) || (open.alarmClass === 'note' && signal.alarmClass === 'alarm');
   const again = worse && open.state === 'acknowledged';
   const record: AlarmRecord = {
     ...open,

@@ -33,6 +33,13 @@ export type Detector = (typeof DETECTORS)[number];
 export const PRIORITIES = ['urgent', 'soon', 'note'] as const;
 export type Priority = (typeof PRIORITIES)[number];
 
+/**
+ * Whether one priority asks for a person sooner than another.
+ *
+ * @example isWorse('urgent', 'soon') // true
+ */
+export const isWorse = (one: Priority, other: Priority): boolean => PRIORITIES.indexOf(one) < PRIORITIES.indexOf(other);
+
 /** alarm = someone must respond; note = for the work list. */
 export type AlarmClass = 'alarm' | 'note';
 

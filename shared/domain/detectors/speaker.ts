@@ -1,5 +1,5 @@
 import type { DetectorInstance, Finding } from './define-detector.ts';
-import { type AlarmClass, type AlarmSignal, type Evidence, PRIORITIES, type Priority } from './detector.ts';
+import { type AlarmClass, type AlarmSignal, type Evidence, isWorse, type Priority } from './detector.ts';
 import { DETECTOR_CLASSES } from './detector-classes.data.ts';
 import type { Facts } from './facts.ts';
 import type { Standing } from './standing.ts';
@@ -32,7 +32,7 @@ function wordsOf(speaker: Speaker, { alarmClass, priority, cause }: Finding): Wo
 function choosePriority(found: Priority, usual: Priority, chosen: Priority | undefined): Priority {
   if (chosen === undefined) return found;
   if (found === usual) return chosen;
-  return PRIORITIES.indexOf(chosen) < PRIORITIES.indexOf(found) ? chosen : found;
+  return isWorse(chosen, found) ? chosen : found;
 }
 
 /** Raises the alarm, and says so. */

@@ -1,11 +1,10 @@
-import type { Detector, Priority } from '#shared/domain/detectors/detector.ts';
+import { type Detector, isWorse, type Priority } from '#shared/domain/detectors/detector.ts';
 import { DETECTOR_CLASSES } from '#shared/domain/detectors/detector-classes.data.ts';
 import type { AreaKind, AreaSignal } from './area-signal.ts';
 import { type AreaAlarm, type AreaState, isOfPump, listOpenPumps, type Member, openKey } from './area-state.ts';
 
 /** Our own link is back once no more than this share of the devices it took is still silent. */
 const LINK_BACK_SHARE = 0.2;
-const RANK: Readonly<Record<Priority, number>> = { urgent: 3, soon: 2, note: 1 };
 
 export type AreaCause = {
   readonly kind: AreaKind;
@@ -43,7 +42,7 @@ export function createAreaLedger(state: AreaState): AreaLedger {
       say('raised', alarm, at);
     },
     join: (alarm, pumpId, { detector, priority }, at) => {
-      const worse = RANK[priority] > RANK[alarm.priority];
+      const worse = isWorse(priority, alarm.priority);
       const known = alarm.pumpIds.includes(pumpId);
       const own = openKey(pumpId, detector);
       if (!alarm.open.includes(own)) alarm.open.push(own);
