@@ -36,7 +36,9 @@ export function checkReading(reading: Reading, { inputCount }: MotorTraits): Ref
 export function isSoundReading(reading: Reading, { inputCount }: MotorTraits): boolean {
   const { at, rpm, watts, closedInputs, activeInput } = reading;
   return (
-    Number.isInteger(at + closedInputs + activeInput) &&
+    Number.isInteger(at) &&
+    Number.isInteger(closedInputs) &&
+    Number.isInteger(activeInput) &&
     at >= 0 &&
     rpm >= 0 &&
     rpm <= 4000 &&

@@ -1,6 +1,7 @@
+import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { DEFAULT_TRAITS } from '#shared/domain/control/motor-settings.ts';
-import { checkReading } from '#shared/domain/readings/check-reading.ts';
+import { checkReading, isSoundReading } from '#shared/domain/readings/check-reading.ts';
 import type { Reading } from '#shared/domain/readings/reading.ts';
 
 const GOOD: Reading = { at: 1_751_400_000_000, rpm: 1700, closedInputs: 0b011, activeInput: 1, watts: 312 };
@@ -29,5 +30,22 @@ describe('a reading', () => {
       'closedInputs input-beyond-model',
       'activeInput input-beyond-model',
     ]);
+  });
+
+  it('is sound exactly where nothing is wrong with it', () => {
+    const field = (...odd: number[]) => fc.constantFrom(0, 1, 0.5, -1, Number.NaN, Number.POSITIVE_INFINITY, ...odd);
+    const reading = fc.record({
+      at: fc.oneof({ weight: 3, arbitrary: fc.constant(GOOD.at) }, field()),
+      rpm: fc.oneof({ weight: 3, arbitrary: fc.constant(GOOD.rpm) }, field(4000, 4001)),
+      watts: fc.oneof({ weight: 3, arbitrary: fc.constant(GOOD.watts) }, field(6000, 6001)),
+      closedInputs: field(7, 8, 255, 256),
+      activeInput: field(3, 4, 8, 9),
+    });
+    fc.assert(
+      fc.property(reading, (one) => {
+        expect(isSoundReading(one, DEFAULT_TRAITS)).toBe(checkReading(one, DEFAULT_TRAITS).length === 0);
+      }),
+      { numRuns: 1000 },
+    );
   });
 });
