@@ -10,8 +10,8 @@ type CountedDay = [day: number, gallons: number, cleanGallons: number, short: nu
 type State = { today: WaterDay; days: CountedDay[]; little: boolean; short: number };
 type Parameters = RuleParameters<'too-little-water'>;
 
-/** Days in a row may miss one that was not seen whole. */
-const WITHIN_DAYS = 5;
+/** Days in a row may miss some that were not seen whole. */
+const MISSED_DAYS = 2;
 const MOST_UNKNOWN_SHARE = 0.1;
 
 /** Judged once a day, when a local day is over. */
@@ -27,8 +27,12 @@ function judge(state: State, facts: Facts, parameters: Parameters): Judgement {
   return counted ? judgeDays(state, facts, parameters) : UNJUDGED;
 }
 
+/** The stretch in which the days that are judged must lie. */
+const withinDays = ({ days, shortDays }: Parameters): number => Math.max(days, shortDays) + MISSED_DAYS;
+
 /** Takes the day that is over among those that count; answers whether it was seen whole and nothing explains it. */
-function closeDay({ today, days }: State, facts: Facts, { coverageShare, shortMinutes }: Parameters): boolean {
+function closeDay({ today, days }: State, facts: Facts, parameters: Parameters): boolean {
+  const { coverageShare, shortMinutes } = parameters;
   const whole = coverageOf(today, facts.zoneOffsetMinutes) >= coverageShare;
   if (!whole || today.explained || today.unknownMs > MOST_UNKNOWN_SHARE * today.turningMs) return false;
   days.push([
@@ -37,7 +41,7 @@ function closeDay({ today, days }: State, facts: Facts, { coverageShare, shortMi
     Math.round(today.cleanGallons),
     shortOf(today, facts, shortMinutes),
   ]);
-  while (days.length > WITHIN_DAYS) days.shift();
+  while (days.length > withinDays(parameters)) days.shift();
   return true;
 }
 
@@ -52,7 +56,7 @@ function shortOf({ shortMs, enoughMs }: WaterDay, { context }: Facts, shortMinut
 }
 
 function judgeDays(state: State, facts: Facts, parameters: Parameters): Judgement {
-  const recent = state.days.filter(([day]) => facts.localDay - day <= WITHIN_DAYS);
+  const recent = state.days.filter(([day]) => facts.localDay - day <= withinDays(parameters));
   const last = recent.slice(-parameters.days);
   const target = targetGallons(facts);
   const [share, needed] = [meanOf(last, 1) / target, facts.stands('too-little-water') ? 1 : parameters.shortShare];

@@ -1,6 +1,7 @@
 import { DEFAULT_TRAITS, type MotorSettings } from '#shared/domain/control/motor-settings.ts';
 import type { PumpContext } from '#shared/domain/control/pump-context.ts';
 import type { AlarmSignal, Detector } from '#shared/domain/detectors/detector.ts';
+import type { DetectorParameters } from '#shared/domain/detectors/detector-parameters.ts';
 import { createPumpFold, type PumpFold } from '#shared/domain/fold/fold-pump.ts';
 import type { PumpEvent } from '#shared/domain/fold/pump-event.ts';
 import type { Reading } from '#shared/domain/readings/reading.ts';
@@ -163,9 +164,9 @@ export function createPlayer(context: PumpContext = CONTEXT, start = MONDAY, see
       at = end;
     },
     /** Brings the fold through storage, as a restart of the server does. */
-    restart(nextContext: PumpContext = context): void {
+    restart(nextContext: PumpContext = context, parameters?: DetectorParameters): void {
       const saved = JSON.parse(JSON.stringify(fold.save())) as { hot: unknown; learnt: unknown };
-      fold = createPumpFold(nextContext, saved);
+      fold = createPumpFold(nextContext, saved, parameters);
     },
     raised: (detector: Detector) =>
       signals.filter((signal) => signal.type === 'raised').filter((signal) => signal.detector === detector),

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import type { PumpContext } from '#shared/domain/control/pump-context.ts';
+import { resolveRules } from '#shared/domain/detectors/rule-settings.ts';
 import { COARSE, clocks, createPlayer, DAY, HOUR, MINUTE, type Scene } from './pump-player.ts';
 
 /**
@@ -112,6 +113,16 @@ describe('too-little-water', () => {
     const reduced = createPlayer({ ...POOL, poolGallons: 60_000, padState: 'reduced' });
     reduced.play(5 * DAY, goodDays());
     expect(reduced.signals).toEqual([]);
+  });
+
+  it('judges as many days as somebody set', () => {
+    const short: PumpContext = { ...POOL, poolGallons: 55_000 };
+    const player = createPlayer(short);
+    player.restart(short, resolveRules({ 'too-little-water': { figures: { days: 7 } } }));
+    player.play(7 * DAY - HOUR, goodDays(short));
+    expect(player.spoken()).toEqual([]);
+    player.play(DAY, goodDays(short));
+    expect(player.raised('too-little-water')[0]).toMatchObject({ cause: 'short-hours', evidence: { days: 7 } });
   });
 
   it('goes on after a restart', () => {
