@@ -4,6 +4,7 @@ import type { AlarmSignal } from '../detectors/detector.ts';
 import { DETECTOR_CLASSES } from '../detectors/detector-classes.data.ts';
 import { toMinorUnits } from '../energy/money.ts';
 import { formatMinor } from '../energy/money-text.ts';
+import { DAY_MS } from '../time/local-time.ts';
 import type { Advice, ProgramPlan } from './advise-program.ts';
 import type { KeptAdvice } from './advise-pump.ts';
 import { costlyProgramCause } from './costly-program-cause.ts';
@@ -41,7 +42,6 @@ export const COSTLY_PROGRAM = {
 
 export type CostlyJudgement = { readonly memory: CostlyMemory; readonly signal: AlarmSignal | undefined };
 
-const DAY_MS = 86_400_000;
 /** A year of weeks like this one. */
 const WEEKS_PER_YEAR = 365.25 / 7;
 export const NO_COSTLY_MEMORY: CostlyMemory = { days: [], raisedAt: null };

@@ -1,5 +1,6 @@
 import type { PumpContext } from '../control/pump-context.ts';
 import { type DayTerm, termOn } from '../energy/price-days.ts';
+import { DAY_MS } from '../time/local-time.ts';
 import { advisePump, type PumpAdvice } from './advise-pump.ts';
 import { type CostlyMemory, NO_COSTLY_MEMORY } from './judge-costly-program.ts';
 
@@ -10,8 +11,6 @@ export type PastTerms = {
   readonly today: number;
   readonly made: PumpAdvice;
 };
-
-const DAY_MS = 86_400_000;
 
 /** The month (0 = January) of a local day, counted from 1970. */
 export const monthOfDay = (epochDay: number): number => new Date(epochDay * DAY_MS).getUTCMonth();

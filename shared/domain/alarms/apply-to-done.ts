@@ -1,4 +1,5 @@
 import type { AlarmSignal } from '../detectors/detector.ts';
+import { DAY_MS } from '../time/local-time.ts';
 import { type AlarmRecord, type AlarmStep, makeStep, noStep } from './alarm-record.ts';
 
 type Later = Extract<AlarmSignal, { type: 'changed' | 'cleared' }>;
@@ -16,7 +17,7 @@ export function applyToDone(record: AlarmRecord, signal: Later): AlarmStep {
 }
 
 /** How long after a note was worked off its condition may still hold before it comes back to the list, ms; common practice. */
-export const CURED_WITHIN_MS = 7 * 86_400_000;
+export const CURED_WITHIN_MS = 7 * DAY_MS;
 
 /** Brings a worked-off note back whose condition still holds a week later; undefined where that is not so. */
 export function checkCure(record: AlarmRecord, at: number): AlarmStep | undefined {

@@ -1,5 +1,6 @@
 import { HIGH_SPEED_RATIO } from '#shared/domain/hydraulics/flow-estimate.ts';
 import type { SystemEstimate } from '#shared/domain/hydraulics/system-estimate.ts';
+import { DAY_MS } from '#shared/domain/time/local-time.ts';
 import type { LevelSummary } from './level-summary.ts';
 import type { FlowRate, KnownLevel, WaterMeter } from './water-meter.ts';
 import type { WaterState } from './water-state.ts';
@@ -27,7 +28,6 @@ export type SystemFollower = {
   readonly dropAt: (rpm: number, cleanWatts: number, watts: number) => number;
 };
 
-const DAY_MS = 86_400_000;
 /** One measurement moves the system's k by this much of the difference. */
 const GAIN = 0.35;
 /** A smaller change of k is not worth working the flow out again. */

@@ -1,3 +1,4 @@
+import { DAY_MS, MINUTE_MS } from '#shared/domain/time/local-time.ts';
 import { CAUSE_CHAIN, CONSEQUENCES } from '../cause-chain.data.ts';
 import type { Detector } from '../detector.ts';
 import type { Facts } from '../facts.ts';
@@ -54,7 +55,7 @@ export function addToDay(day: WaterDay, facts: Facts): void {
     day.unknownMs += elapsedMs;
     return;
   }
-  const minutes = elapsedMs / 60_000;
+  const minutes = elapsedMs / MINUTE_MS;
   day.gallons += water.gpm * minutes;
   day.cleanGallons += water.cleanGpm * minutes;
   if (control.rampOver) addEquipment(day, facts);
@@ -78,4 +79,4 @@ function addEquipment(day: WaterDay, { elapsedMs, water, control, reading, conte
 
 /** How much of the day, of its 23, 24 or 25 hours, was seen. */
 export const coverageOf = (day: WaterDay, offsetMinutesNow: number): number =>
-  day.seenMs / (86_400_000 - (offsetMinutesNow - day.offsetMinutes) * 60_000);
+  day.seenMs / (DAY_MS - (offsetMinutesNow - day.offsetMinutes) * MINUTE_MS);
