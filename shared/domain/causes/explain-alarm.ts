@@ -1,10 +1,8 @@
 import { DAY_MS } from '../time/local-time.ts';
 import { zoneOffsetAt } from '../time/zone-offset.ts';
+import { SPEAKS_FOR_DAYS } from './gather-signs.ts';
 import { type AlarmToExplain, likelyCausesOf, type WordedCauses } from './likely-causes-of.ts';
 import type { FoundCounts } from './rank-causes.ts';
-
-/** How long a clock that nobody set is remarked after a shift, days; as `gatherSigns` has it. */
-const SHIFT_SPEAKS_DAYS = 14;
 
 /**
  * The likely causes of an alarm at a pad in a zone: as `likelyCausesOf`, with what the calendar knows of the days before
@@ -13,7 +11,7 @@ const SHIFT_SPEAKS_DAYS = 14;
  * @example explainAlarm({ detector: 'clock-shift', cause: 'unknown', from, evidence: {} }, 'America/New_York').causes.length > 0 // true
  */
 export function explainAlarm(alarm: AlarmToExplain, zone: string, found: FoundCounts = {}): WordedCauses {
-  const before = zoneOffsetAt(zone, alarm.from - SHIFT_SPEAKS_DAYS * DAY_MS);
+  const before = zoneOffsetAt(zone, alarm.from - SPEAKS_FOR_DAYS['clocks-shifted'] * DAY_MS);
   const then = zoneOffsetAt(zone, alarm.from);
   const seen = before === undefined || then === undefined ? {} : { 'clocks-shifted': before !== then };
   return likelyCausesOf(alarm, { seen }, found);

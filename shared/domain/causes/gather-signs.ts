@@ -17,7 +17,7 @@ export type AlarmSurroundings = {
 };
 
 /** How long before an alarm a deed still speaks, days; common practice. */
-const SPEAKS_FOR_DAYS = {
+export const SPEAKS_FOR_DAYS = {
   'lid-opened': 7,
   'our-visit': 7,
   'filter-cleaned': 10,

@@ -1,11 +1,10 @@
 import type { Detector, Evidence } from '../detectors/detector.ts';
+import { AIR_SHARE } from '../detectors/rules/prime-causes.ts';
 import type { Sign, Signs } from './sign.ts';
 
 /** An alarm as its detector left it: the cause it named and the figures behind it. */
 export type AlarmEvidence = { readonly detector: Detector; readonly cause: string; readonly evidence: Evidence };
 
-/** Below this share of its usual load a wet end moves air; the same line that the prime's own rule draws. */
-const AIR_SHARE = 0.41;
 /** Watts this far over the usual are more than a rub or an open valve takes (maths, detector `high-load`). */
 const FAR_OVER_SHARE = 0.3;
 /** A drive this hot is hot where its model's limit is not known; five under the usual 90 °C. */

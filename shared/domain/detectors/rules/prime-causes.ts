@@ -5,7 +5,7 @@ import { modelWatts } from '../load/primed-watts.ts';
 export type PrimeCause = { readonly cause: string; readonly weight: number; readonly because: string };
 
 /** Below this share of primed watts the wet end moves air; above it, water that goes nowhere (common practice). */
-const AIR_SHARE = 0.41;
+export const AIR_SHARE = 0.41;
 /** Ragged watts, as standard deviation over mean. */
 const RAGGED_SHARE = 0.11;
 /** A wet end that stood this long may have drained. */
