@@ -1,4 +1,5 @@
 import { type SQL, sql } from 'drizzle-orm';
+import { likePattern } from '#server/db/like-pattern.ts';
 import type { Transaction } from '#server/db/transaction.ts';
 import type { SortKeys } from '#server/http/page-cursor.ts';
 import type { AlarmPage, AlarmsQuery } from '#shared/contract/http/alarms.ts';
@@ -43,8 +44,6 @@ const SHOWN: Readonly<Record<AlarmsQuery['show'], SQL>> = {
   all: sql`true`,
 };
 
-const like = (text: string) => `%${text.replaceAll(/[\\%_]/g, '\\$&')}%`;
-
 /** An alarm without a pump of its own that speaks for such a pump. */
 const speaksFor = (which: SQL) =>
   sql`(a.pump_id is null and exists (select from alarm_members m join pumps mp on mp.id = m.pump_id
@@ -65,7 +64,7 @@ function conditions(query: AlarmsQuery, userId: string): SQL {
   if (query.area !== undefined) all.push(sql`coalesce(pad.area, a.group_area) = ${query.area}`);
   if (query.whose === 'mine') all.push(isOf(userId));
   if (query.q !== undefined && query.q !== '') {
-    const pattern = like(query.q);
+    const pattern = likePattern(query.q);
     all.push(
       sql`(${placeName} ilike ${pattern} or p.name ilike ${pattern} or pad.street ilike ${pattern} or customer.name ilike ${pattern})`,
     );

@@ -1,4 +1,5 @@
 import { type SQL, sql } from 'drizzle-orm';
+import { likePattern } from '#server/db/like-pattern.ts';
 import type { Transaction } from '#server/db/transaction.ts';
 import type { SortKeys } from '#server/http/page-cursor.ts';
 
@@ -52,7 +53,7 @@ export function listDeviceRows(
   query: { readonly q?: string | undefined; readonly limit: number },
   after: SortKeys | undefined,
 ): Promise<DeviceRow[]> {
-  const pattern = `%${(query.q ?? '').replaceAll(/[\\%_]/g, '\\$&')}%`;
+  const pattern = likePattern(query.q ?? '');
   const beyond = after === undefined ? sql`true` : sql`d.serial > ${after[0]}`;
   return selectDevices(
     db,

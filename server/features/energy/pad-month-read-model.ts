@@ -1,4 +1,5 @@
 import { type SQL, sql } from 'drizzle-orm';
+import { likePattern } from '#server/db/like-pattern.ts';
 import type { Transaction } from '#server/db/transaction.ts';
 import type { SortKeys } from '#server/http/page-cursor.ts';
 import type { PadMonthQuery } from '#shared/contract/http/energy-fleet.ts';
@@ -38,8 +39,6 @@ const RANK: Readonly<Record<PadMonthQuery['sort'], SQL>> = {
   name: sql`0::float8`,
 };
 
-const like = (text: string) => `%${text.replaceAll(/[\\%_]/g, '\\$&')}%`;
-
 type Months = { readonly companyId: string; readonly month: string; readonly before: string; readonly days: number };
 
 /** Watt-hours of a pad in as many days of the month before as this one has behind it. */
@@ -59,7 +58,7 @@ export async function listPadMonths(
   const asked = [sql`true`];
   if (query.area !== undefined) asked.push(sql`pad.area = ${query.area}`);
   if (query.q !== undefined && query.q !== '')
-    asked.push(sql`(pad.name ilike ${like(query.q)} or customer.name ilike ${like(query.q)})`);
+    asked.push(sql`(pad.name ilike ${likePattern(query.q)} or customer.name ilike ${likePattern(query.q)})`);
   const where = sql.join(asked, sql` and `);
   const beyond =
     after === undefined

@@ -1,5 +1,6 @@
 import { type SQL, sql } from 'drizzle-orm';
 import { epochMs } from '#server/db/epoch-ms.ts';
+import { likePattern } from '#server/db/like-pattern.ts';
 import type { AdviceBasis } from '#server/db/schema/program-advice.ts';
 import type { Transaction } from '#server/db/transaction.ts';
 import type { SortKeys } from '#server/http/page-cursor.ts';
@@ -39,8 +40,6 @@ const RANK: Readonly<Record<ProgramsQuery['sort'], SQL>> = {
   name: sql`0::float8`,
 };
 
-const like = (text: string) => `%${text.replaceAll(/[\\%_]/g, '\\$&')}%`;
-
 const adviceColumns = sql`
   a.pump_id as "pumpId", p.pad_id as "padId", pad.name as "padName", p.name as "pumpName", customer.name as "customerName",
   pad.area, ${epochMs(sql`a.made_at`)} as "madeAt", a.saved_share as "savedShare",
@@ -61,7 +60,7 @@ export async function listProgramRecords(
   const asked = [sql`a.company_id = ${companyId}`, SHOWN[query.show]];
   if (query.area !== undefined) asked.push(sql`pad.area = ${query.area}`);
   if (query.q !== undefined && query.q !== '')
-    asked.push(sql`(pad.name ilike ${like(query.q)} or customer.name ilike ${like(query.q)})`);
+    asked.push(sql`(pad.name ilike ${likePattern(query.q)} or customer.name ilike ${likePattern(query.q)})`);
   const where = sql.join(asked, sql` and `);
   const rank = RANK[query.sort];
   const beyond =

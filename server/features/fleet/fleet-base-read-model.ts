@@ -1,9 +1,8 @@
 import { type SQL, sql } from 'drizzle-orm';
+import { likePattern } from '#server/db/like-pattern.ts';
 import { openAlarmMarks } from '#server/features/pumps/index.ts';
 import type { FleetQuery } from '#shared/contract/http/pumps.ts';
 import { STANDSTILL_RPM } from '#shared/domain/control/speed-tolerance.ts';
-
-const likePattern = (text: string) => `%${text.replaceAll(/[\\%_]/g, '\\$&')}%`;
 
 /** Matches the pad, the pump, the customer and the device. Sub-selects without parameters are worked out once. */
 function matches(text: string): SQL {
