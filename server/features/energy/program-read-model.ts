@@ -6,6 +6,7 @@ import type { Transaction } from '#server/db/transaction.ts';
 import type { SortKeys } from '#server/http/page-cursor.ts';
 import type { ProgramsQuery } from '#shared/contract/http/energy-programs.ts';
 import type { KeptAdvice } from '#shared/domain/advisor/advise-pump.ts';
+import { COSTLY_PROGRAM } from '#shared/domain/advisor/judge-costly-program.ts';
 import type { TimeOfUseFinding } from '#shared/domain/energy/time-of-use-check.ts';
 
 export type ProgramRecord = {
@@ -24,12 +25,10 @@ export type ProgramRecord = {
   readonly dearHours: readonly TimeOfUseFinding[];
 };
 
-/** The advisor's `costly-program`: the same duty for this much less. */
-const COSTLY_SHARE = 0.25;
 const LAST = 1e18;
 
 const SHOWN: Readonly<Record<ProgramsQuery['show'], SQL>> = {
-  costly: sql`a.kind = 'advice' and a.saved_share >= ${COSTLY_SHARE}::real`,
+  costly: sql`a.kind = 'advice' and a.saved_share >= ${COSTLY_PROGRAM.savedShare}::real`,
   'dear-hours': sql`a.dear_micros_per_year > 0`,
   all: sql`true`,
 };
