@@ -7,15 +7,16 @@ import type { AlarmChange, OpenAlarm } from './alarm-change.ts';
 
 type Database = Pick<pg.ClientBase, 'query'>;
 
-type Row = {
+/** An alarm's columns that make an OpenAlarm of it. */
+export type AlarmRow = {
   readonly id: string;
   readonly company_id: string;
-  readonly pump_id: string;
-  readonly pad_id: string;
+  readonly pump_id: string | null;
+  readonly pad_id: string | null;
   readonly record: unknown;
 };
 
-const toOpenAlarm = (row: Row): OpenAlarm => ({
+export const toOpenAlarm = (row: AlarmRow): OpenAlarm => ({
   alarmId: row.id,
   companyId: row.company_id,
   pumpId: row.pump_id,
@@ -28,7 +29,7 @@ const toOpenAlarm = (row: Row): OpenAlarm => ({
  * acknowledges one meanwhile waits, or we do.
  */
 export async function lockOpenAlarms(database: Database, pumpIds: readonly string[]): Promise<OpenAlarm[]> {
-  const { rows } = await database.query<Row>(
+  const { rows } = await database.query<AlarmRow>(
     `select id, company_id, pump_id, pad_id, record from alarms
      where pump_id = any($1::uuid[]) and (state <> 'normal' or done_at is not null and returned_at is null)
      order by id for update`,
@@ -39,7 +40,7 @@ export async function lockOpenAlarms(database: Database, pumpIds: readonly strin
 
 /** Alarms that time alone may change (escalation, re-alarm, the end of a shelf, a cure that did not come), as they stand. */
 export async function listWaitingAlarms(database: Database, now: number): Promise<OpenAlarm[]> {
-  const { rows } = await database.query<Row>(
+  const { rows } = await database.query<AlarmRow>(
     `select id, company_id, pump_id, pad_id, record from alarms
      where state <> 'normal' and (alarm_class = 'alarm' and priority <> 'note' or shelved_until is not null)
      union all select id, company_id, pump_id, pad_id, record from alarms
@@ -51,7 +52,7 @@ export async function listWaitingAlarms(database: Database, now: number): Promis
 
 /** These alarms, locked. */
 export async function lockAlarms(database: Database, alarmIds: readonly string[]): Promise<OpenAlarm[]> {
-  const { rows } = await database.query<Row>(
+  const { rows } = await database.query<AlarmRow>(
     `select id, company_id, pump_id, pad_id, record from alarms
      where id = any($1::uuid[]) and (state <> 'normal' or done_at is not null and returned_at is null)
      order by id for update`,

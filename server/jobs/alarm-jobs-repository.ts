@@ -1,33 +1,19 @@
 import type pg from 'pg';
 import type { OpenAlarm } from '#server/fold/alarm-change.ts';
+import { type AlarmRow, toOpenAlarm } from '#server/fold/alarms-repository.ts';
 import type { PumpStanding } from '#shared/domain/alarms/explanation.ts';
-import { readRecord } from '#shared/domain/alarms/read-record.ts';
 import type { PadState } from '#shared/domain/control/pump-context.ts';
 import type { Detector } from '#shared/domain/detectors/detector.ts';
 
 type Database = Pick<pg.ClientBase, 'query'>;
 
-type Row = {
-  readonly id: string;
-  readonly company_id: string;
-  readonly pump_id: string;
-  readonly pad_id: string;
-  readonly record: unknown;
-};
-
-const toAlarm = (row: Row): OpenAlarm => ({
-  alarmId: row.id,
-  companyId: row.company_id,
-  pumpId: row.pump_id,
-  padId: row.pad_id,
-  record: readRecord(row.record),
-});
-
 export type ExplainedAlarm = { readonly alarm: OpenAlarm; readonly pump: PumpStanding };
 
 /** Suppressed alarms of single pumps, locked, each with what may explain it now. */
 export async function lockExplainedAlarms(database: Database): Promise<ExplainedAlarm[]> {
-  const { rows } = await database.query<Row & { readonly pad_state: PadState; readonly standing: readonly Detector[] }>(
+  const { rows } = await database.query<
+    AlarmRow & { readonly pad_state: PadState; readonly standing: readonly Detector[] }
+  >(
     `select a.id, a.company_id, a.pump_id, a.pad_id, a.record, pad.state as pad_state, array(
        select o.detector from alarms o where o.pump_id = a.pump_id and o.returned_at is null
          and (o.state <> 'normal' or o.done_at is not null)) as standing
@@ -35,19 +21,19 @@ export async function lockExplainedAlarms(database: Database): Promise<Explained
      where a.state <> 'normal' and a.suppressed order by a.id for update of a`,
   );
   return rows.map((row) => ({
-    alarm: toAlarm(row),
+    alarm: toOpenAlarm(row),
     pump: { padState: row.pad_state, standing: new Set(row.standing) },
   }));
 }
 
 /** Open alarms whose new technician has not been told yet, locked. */
 export async function lockUntoldAlarms(database: Database): Promise<OpenAlarm[]> {
-  const { rows } = await database.query<Row>(
+  const { rows } = await database.query<AlarmRow>(
     `select id, company_id, pump_id, pad_id, record from alarms
      where state <> 'normal' and assigned_to is not null
        and record -> 'assignment' -> 'told' = 'false' order by id for update`,
   );
-  return rows.map(toAlarm);
+  return rows.map(toOpenAlarm);
 }
 
 /** Alarms that were set aside while a mail of theirs, not due yet, waits to leave. */
