@@ -20,6 +20,8 @@ const LIMITS: readonly (readonly [RegExp, FigureLimits])[] = [
   [/^dueDaysThatMatter$/, { unit: 'd', least: 1, most: 30, whole: true }],
   [/Celsius$/, { unit: '°C', least: 0, most: 60, whole: false }],
   [/Rpm$/, { unit: 'rpm', least: 0, most: 5000, whole: true }],
+  // A deadband as wide as its threshold would never let an alarm return.
+  [/^deadbandShare$/, { unit: 'share', least: 0, most: 0.9, whole: false }],
   [/Share$/, { unit: 'share', least: 0, most: 3, whole: false }],
   [/Usual$/, { unit: 'times', least: 1, most: 20, whole: false }],
 ];
@@ -39,7 +41,7 @@ export function limitsOfFigure(figure: string): FigureLimits {
   return { ...limits, least: limits.unit === 'share' ? 0.01 : 1 };
 }
 
-/** The detectors whose rules can be set, in the order of the cause chain's data. */
+/** The detectors whose rules can be set, in the order of their defaults. */
 export const FOLDED_DETECTORS = Object.keys(DETECTOR_DEFAULTS) as readonly FoldedDetector[];
 
 /** The figures of a rule with their defaults. */

@@ -48,7 +48,7 @@ export type AreaFold = {
 };
 
 /** Last words within this time of one another are one event, ms. */
-const TOGETHER_MS = 600_000;
+const NEAR_IN_TIME_MS = 600_000;
 /** Clocks that missed the same shift tell of it within this time, ms. */
 const SEASON_MS = 30 * 86_400_000;
 
@@ -118,7 +118,7 @@ function hear(parts: Parts, pump: AreaPump, { silentSince, lostAt }: Heard, at: 
 function joinOwnLink({ state, ledger }: Parts, member: Member, at: number): void {
   const dropped = droppedAt(member);
   const standing = state.alarms.find(
-    ({ kind, from }) => kind === 'own-link' && Math.abs(dropped - from) <= TOGETHER_MS,
+    ({ kind, from }) => kind === 'own-link' && Math.abs(dropped - from) <= NEAR_IN_TIME_MS,
   );
   if (standing !== undefined) ledger.join(standing, member.pumpId, { detector: 'silent', priority: 'note' }, at);
 }
@@ -191,5 +191,5 @@ function loadTold({ state, ledger }: Parts, member: Member, signal: AlarmSignal,
 }
 
 function isNear(at: number, { silentSince }: Member): boolean {
-  return Math.abs(silentSince - at) <= TOGETHER_MS;
+  return Math.abs(silentSince - at) <= NEAR_IN_TIME_MS;
 }

@@ -23,7 +23,7 @@ it('holds every row that is in sight and never one that does not exist', () => {
         expect(end).toBeLessThanOrEqual(count);
         for (const row of [0, count - 1]) {
           const top = listTop + row * 64;
-          if (row >= 0 && top + 64 > 0 && top < screen) expect(row >= first && row < end).toBe(true);
+          if (row >= 0 && row < count && top + 64 > 0 && top < screen) expect(row >= first && row < end).toBe(true);
         }
       },
     ),
