@@ -5,13 +5,18 @@ import type { AdviceBasis } from '#server/db/schema/program-advice.ts';
 import type { Transaction } from '#server/db/transaction.ts';
 import type { PumpAdvice } from '#shared/domain/advisor/advise-pump.ts';
 
-/** Filter pumps whose program was not looked at for a day, those never looked at first. */
-export async function listUnadvisedPumps(database: Pick<pg.Pool, 'query'>, limit: number): Promise<string[]> {
+/** Filter pumps whose program was not looked at for a day, those never looked at first; `but` are left out. */
+export async function listUnadvisedPumps(
+  database: Pick<pg.Pool, 'query'>,
+  limit: number,
+  but: readonly string[] = [],
+): Promise<string[]> {
   const { rows } = await database.query<{ id: string }>(
     `select p.id from pumps p left join program_advice a on a.pump_id = p.id
      where p.monitored and p.purpose = 'filter' and (a.pump_id is null or a.made_at < now() - interval '1 day')
+       and p.id <> all($2::uuid[])
      order by a.made_at nulls first, p.number limit $1`,
-    [limit],
+    [limit, but],
   );
   return rows.map(({ id }) => id);
 }

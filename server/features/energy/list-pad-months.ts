@@ -27,11 +27,7 @@ export async function listPadEnergy({ db, actor, now }: Context, query: PadMonth
     days: Math.max(passed, 0),
   };
   const { rows, matching } = await listPadMonths(db, months, query, after);
-  const { items, nextCursor } = toPage(rows, query.limit, ({ rank, padName, padId }) => [
-    rank,
-    padName.toLowerCase(),
-    padId,
-  ]);
+  const { items, nextCursor } = toPage(rows, query.limit, ({ rank, padName, padId }) => [rank, padName, padId]);
   return {
     items: items.map(present),
     nextCursor,

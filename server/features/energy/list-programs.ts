@@ -9,11 +9,7 @@ import { findProgramRecord, listProgramRecords } from './program-read-model.ts';
 export async function listPrograms({ db, actor, now }: Context, query: ProgramsQuery) {
   const after = decodeCursor(query.cursor, ['number', 'string', 'string']);
   const { rows, ...counts } = await listProgramRecords(db, actor.companyId, query, after);
-  const { items, nextCursor } = toPage(rows, query.limit, ({ rank, padName, pumpId }) => [
-    rank,
-    padName.toLowerCase(),
-    pumpId,
-  ]);
+  const { items, nextCursor } = toPage(rows, query.limit, ({ rank, padName, pumpId }) => [rank, padName, pumpId]);
   return { items: items.map(presentProgram), nextCursor, ...counts, serverNow: now };
 }
 

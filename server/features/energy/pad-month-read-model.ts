@@ -63,7 +63,7 @@ export async function listPadMonths(
   const beyond =
     after === undefined
       ? sql`true`
-      : sql`(rank, lower(pad_name), pad_id::text) > (${after[0]}::float8, ${after[1]}::text, ${after[2]}::text)`;
+      : sql`(rank, lower(pad_name), pad_id::text) > (${after[0]}::float8, lower(${after[1]}::text), ${after[2]}::text)`;
   const { rows } = await db.execute<PadMonthRow & { matching: number }>(sql`
     with sums as (
       select p.pad_id, count(*)::int as pumps, sum(m.watt_hours) as watt_hours,

@@ -65,7 +65,7 @@ export async function listProgramRecords(
   const beyond =
     after === undefined
       ? sql`true`
-      : sql`(${rank}, lower(pad.name), a.pump_id::text) > (${after[0]}::float8, ${after[1]}::text, ${after[2]}::text)`;
+      : sql`(${rank}, lower(pad.name), a.pump_id::text) > (${after[0]}::float8, lower(${after[1]}::text), ${after[2]}::text)`;
   const { rows } = await db.execute<ProgramRecord>(sql`
     select (${rank})::float8 as rank, ${adviceColumns} from ${adviceFrom} where ${where} and ${beyond}
     order by 1, lower(pad.name), a.pump_id::text limit ${query.limit + 1}`);
