@@ -2,6 +2,7 @@ import type { StoredRules } from '#shared/contract/http/rules.ts';
 import type { Priority } from '#shared/domain/detectors/detector.ts';
 import type { FoldedDetector } from '#shared/domain/detectors/detector-defaults.data.ts';
 import { FOLDED_DETECTORS, listFigures } from '#shared/domain/detectors/figure-limits.ts';
+import type { UnitSystem } from '#shared/units/unit-system.ts';
 import { formOfFigure, parseFigure, typedFigure } from './figure-view.ts';
 
 /** One rule as it is being edited: '' = as above; figures as they are typed. */
@@ -15,12 +16,12 @@ export type Draft = Readonly<Record<FoldedDetector, RuleDraft>>;
 
 const usualOf = (detector: FoldedDetector): ReadonlyMap<string, number> => new Map(listFigures(detector));
 
-function draftOfRule(detector: FoldedDetector, rules: StoredRules): RuleDraft {
+function draftOfRule(detector: FoldedDetector, rules: StoredRules, system: UnitSystem): RuleDraft {
   const { enabled, priority, figures = {} } = rules[detector] ?? {};
   const usual = usualOf(detector);
   const known = Object.entries(figures).flatMap(([name, value]) => {
     const ofRule = usual.get(name);
-    return ofRule === undefined ? [] : [[name, typedFigure(value, formOfFigure(name, ofRule))] as const];
+    return ofRule === undefined ? [] : [[name, typedFigure(value, formOfFigure(name, ofRule, system))] as const];
   });
   return {
     enabled: enabled === undefined ? '' : enabled ? 'on' : 'off',
@@ -29,12 +30,12 @@ function draftOfRule(detector: FoldedDetector, rules: StoredRules): RuleDraft {
   };
 }
 
-/** What is set, ready to be edited. */
-export const draftOf = (rules: StoredRules): Draft =>
-  Object.fromEntries(FOLDED_DETECTORS.map((detector) => [detector, draftOfRule(detector, rules)])) as Draft;
+/** What is set, ready to be edited in the reader's units. */
+export const draftOf = (rules: StoredRules, system: UnitSystem): Draft =>
+  Object.fromEntries(FOLDED_DETECTORS.map((detector) => [detector, draftOfRule(detector, rules, system)])) as Draft;
 
 /** What a draft sets; undefined where something in it cannot be. A figure that was emptied holds as above. */
-export function settingsOf(draft: Draft): StoredRules | undefined {
+export function settingsOf(draft: Draft, system: UnitSystem): StoredRules | undefined {
   const settings: StoredRules = {};
   for (const detector of FOLDED_DETECTORS) {
     const { enabled, priority, figures } = draft[detector];
@@ -42,7 +43,7 @@ export function settingsOf(draft: Draft): StoredRules | undefined {
     const parsed: Record<string, number> = {};
     for (const [name, text] of Object.entries(figures)) {
       if (text.trim() === '') continue;
-      const value = parseFigure(text, formOfFigure(name, usual.get(name) ?? 0));
+      const value = parseFigure(text, formOfFigure(name, usual.get(name) ?? 0, system));
       if (value === undefined) return undefined;
       parsed[name] = value;
     }

@@ -17,10 +17,10 @@ export function RuleEditor({ layer, layers }: RuleEditorProps) {
   const format = useFormat();
   const { company } = useSession();
   const now = useNow(60_000);
-  const stored = useMemo(() => draftOf(layer.rules), [layer.rules]);
+  const stored = useMemo(() => draftOf(layer.rules, format.units), [layer.rules, format.units]);
   const [changed, setChanged] = useState<Draft>();
   const draft = changed ?? stored;
-  const rules = settingsOf(draft);
+  const rules = settingsOf(draft, format.units);
   const changes = countDifferences(stored, draft);
   const save = useSetRules();
   const others = [layers.company, ...layers.models, ...layers.pumps].filter(({ scope }) => !isAt(scope, layer.scope));

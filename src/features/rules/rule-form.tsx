@@ -6,6 +6,7 @@ import { listFigures } from '#shared/domain/detectors/figure-limits.ts';
 import { Button } from '#src/components/ui/button.tsx';
 import { Field } from '#src/components/ui/field.tsx';
 import { Select } from '#src/components/ui/select.tsx';
+import { useFormat } from '#src/hooks/use-format.ts';
 import { figureName, t } from '#src/lib/messages/rules-words.ts';
 import { type FigureForm, formOfFigure, parseFigure, sayFigure } from './figure-view.ts';
 import { countSet, type RuleDraft } from './rule-draft.ts';
@@ -92,7 +93,8 @@ type FigureFieldProps = {
 };
 
 function FigureField({ name, usual, inherited, text, onChange }: FigureFieldProps) {
-  const form = formOfFigure(name, usual);
+  const { units } = useFormat();
+  const form = formOfFigure(name, usual, units);
   const unit = t(`unit.${form.unit === 'd' ? 'h' : form.unit}`, { number: '' }).trim();
   const label = form.unit === 'd' ? figureName(name) : `${figureName(name)}${unit === '' ? '' : ` (${unit})`}`;
   const isWrong = text.trim() !== '' && parseFigure(text, form) === undefined;

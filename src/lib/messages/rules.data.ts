@@ -47,6 +47,7 @@ export const RULES_MESSAGES = {
   'unit.h': '{number} h',
   'unit.d': { one: '{number} day', other: '{number} days' },
   'unit.celsius': '{number} °C',
+  'unit.fahrenheit': '{number} °F',
   'unit.speed': '{number} rpm',
   'unit.percent': '{number} %',
   'unit.times': '{number}',
