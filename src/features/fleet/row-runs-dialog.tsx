@@ -5,7 +5,7 @@ import { t } from '#src/lib/messages/t.ts';
 
 export type RowRunsDialogProps = {
   readonly name: string;
-  readonly runs: readonly Run[];
+  readonly runs: readonly Run[] | undefined;
   readonly zone: string;
   readonly now: number;
   readonly onClose: () => void;

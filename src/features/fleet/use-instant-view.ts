@@ -16,14 +16,14 @@ const NO_FIGURE = '–';
  */
 export function useInstantView(
   row: PumpRow,
-  runs: readonly Run[],
+  runs: readonly Run[] | undefined,
   cursor: CursorStore,
   now: number,
 ): InstantView | undefined {
   const format = useFormat();
   const run = useSyncExternalStore(cursor.subscribe, () => {
     const at = cursor.get();
-    return at === undefined ? undefined : runAt(runs, at, now);
+    return at === undefined ? undefined : runAt(runs ?? [], at, now);
   });
   const at = cursor.get();
   if (run === undefined || at === undefined) return undefined;

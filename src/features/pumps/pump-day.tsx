@@ -42,7 +42,7 @@ export function PumpDay({ pump, strip: read, day, now, cursor, size, voice, idle
   };
   const name = nameOfPump(pump);
   const table = t('strip.tableOf', { name });
-  const shown = strip.runs.filter(({ from, to }) => from < day.until && (to ?? now) > day.from);
+  const shown = strip.runs?.filter(({ from, to }) => from < day.until && (to ?? now) > day.from);
   return (
     <div aria-busy={read.runs === undefined} className="flex flex-col gap-2 px-4 pt-4 pb-3 sm:px-5">
       <DayStrip

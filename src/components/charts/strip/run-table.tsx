@@ -5,7 +5,8 @@ import { STANDSTILL_RPM, type StripRun } from './strip-run.ts';
 import { describeSource, newestFirst } from './strip-words.ts';
 
 export type RunTableProps = {
-  readonly runs: readonly StripRun[];
+  /** Undefined until they have come. */
+  readonly runs: readonly StripRun[] | undefined;
   readonly zone: string;
   readonly now: number;
   readonly caption: string;
@@ -14,6 +15,15 @@ export type RunTableProps = {
 /** Everything a strip shows, as text: the same runs, one a row, the latest first. */
 export function RunTable({ runs, zone, now, caption }: RunTableProps) {
   const format = useFormat();
+  if (runs === undefined)
+    return (
+      <div aria-busy="true">
+        <p role="status" className="sr-only">
+          {t('shell.loading')}
+        </p>
+        <div aria-hidden="true" className="ruled h-20" />
+      </div>
+    );
   if (runs.length === 0) return <p className="text-ink-2">{t('strip.empty')}</p>;
   const figure = (run: StripRun, value: number) => (run.source === 'no-data' ? '–' : format.number(value));
   return (

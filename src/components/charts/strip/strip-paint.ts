@@ -59,6 +59,11 @@ function paintFill(pen: Pen, { texture, x, y, width, height, input, tone }: Stri
   context.fillRect(x, y, width, height);
 }
 
+function paintUnheard({ context, colours, density }: Pen, { unheard }: StripLayout) {
+  context.fillStyle = patternFor('gap', 0, undefined, colours, density);
+  for (const { x, y, width, height } of unheard) context.fillRect(x, y, width, height);
+}
+
 function paintPen(pen: Pen, block: StripBlock, before: StripBlock | undefined, metrics: StripMetrics) {
   const { colours } = pen;
   if (block.texture === 'gap') return;
@@ -101,7 +106,7 @@ function paintLabels({ context, colours }: Pen, { labels }: StripPicture) {
   for (const { text, x, y } of labels) context.fillText(text, x, y);
 }
 
-/** Draws one strip. `context` is in CSS pixels already; without blocks it is ruled paper without ink. */
+/** Draws one strip. `context` is in CSS pixels already; until its runs have come it is ruled paper without ink. */
 export function paintStrip(
   context: CanvasRenderingContext2D,
   colours: StripColours,
@@ -112,6 +117,8 @@ export function paintStrip(
   const pen: Pen = { context, colours, density };
   context.clearRect(0, 0, width, metrics.height);
   paintRules(pen, picture);
+  if (!layout.known) return;
+  paintUnheard(pen, layout);
   for (const block of layout.blocks) paintFill(pen, block);
   paintPlanned(pen, picture);
   // What is off its expected speed comes last: a try of seconds must not vanish under its neighbours' ink.

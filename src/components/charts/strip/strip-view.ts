@@ -21,13 +21,18 @@ export type StripBlock = {
 export type StripOutline = { readonly x: number; readonly width: number; readonly y: number; readonly height: number };
 
 export type StripLayout = {
+  /** The runs have come; until then there is no ink at all. */
+  readonly known: boolean;
   readonly blocks: readonly StripBlock[];
+  /** Time gone by that no run covers: nothing was heard, which is not the same as standing still. */
+  readonly unheard: readonly StripOutline[];
   readonly planned: readonly StripOutline[];
   readonly nowX: number | undefined;
 };
 
 export type StripInput = {
-  readonly runs: readonly StripRun[];
+  /** Undefined until they have come. */
+  readonly runs: readonly StripRun[] | undefined;
   readonly planned: readonly StripPlan[];
   readonly window: StripWindow;
   readonly now: number;
@@ -65,16 +70,36 @@ function layoutBlock(run: StripRun, input: StripInput, scale: StripScale, metric
   };
 }
 
+/** Narrower than this it is the seam between two runs. */
+const SEAM = 1;
+
+function layoutUnheard(blocks: readonly StripBlock[], endX: number, metrics: StripMetrics): StripOutline[] {
+  const y = metrics.top - 4;
+  const unheard: StripOutline[] = [];
+  let x = 0;
+  for (const block of blocks) {
+    if (block.x - x > SEAM) unheard.push({ x, width: block.x - x, y, height: metrics.base - y });
+    x = Math.max(x, block.x + block.width);
+  }
+  return endX - x > SEAM ? [...unheard, { x, width: endX - x, y, height: metrics.base - y }] : unheard;
+}
+
+const NOTHING: StripLayout = { known: false, blocks: [], unheard: [], planned: [], nowX: undefined };
+
 const overlaps = (from: number, to: number, window: StripWindow) => from < window.until && to > window.from;
 
 /** Everything a strip draws, as plain numbers: the same for canvas, tests and print. */
 export function layoutStrip(input: StripInput, width: number, metrics: StripMetrics): StripLayout {
-  const { window, now } = input;
+  const { runs, window, now } = input;
+  if (runs === undefined) return NOTHING;
   const scale = createStripScale(window, width, metrics, input.topRpm);
-  const shown = input.runs.filter(({ from, to }) => overlaps(from, to ?? Math.max(now, from + 1), window));
+  const shown = runs.filter(({ from, to }) => overlaps(from, to ?? Math.max(now, from + 1), window));
   const ahead = input.planned.filter(({ from, to, rpm }) => rpm > 0 && to > now && overlaps(from, to, window));
+  const blocks = shown.map((run) => layoutBlock(run, input, scale, metrics));
   return {
-    blocks: shown.map((run) => layoutBlock(run, input, scale, metrics)),
+    known: true,
+    blocks,
+    unheard: layoutUnheard(blocks, scale.x(Math.min(now, window.until)), metrics),
     planned: ahead.map(({ from, to, rpm }) => {
       const x = scale.x(Math.max(from, now, window.from));
       return {

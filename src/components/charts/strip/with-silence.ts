@@ -2,11 +2,12 @@ import type { Run } from '#shared/contract/http/runs.ts';
 
 /**
  * Runs of a pump that has gone silent: nobody knows whether the run that was open then still goes on, so it ends where
- * the silence began, and what follows is no data. Runs that say so already, and those of a pump that is heard, stay.
+ * the silence began, and what follows is no data. Runs that say so already, those of a pump that is heard, and
+ * those that have not come yet stay.
  */
-export function withSilence(runs: readonly Run[] | undefined, silentSince: number | null): readonly Run[] {
+export function withSilence(runs: readonly Run[] | undefined, silentSince: number | null): readonly Run[] | undefined {
   const open = runs?.at(-1);
-  if (runs === undefined || open === undefined) return [];
+  if (runs === undefined || open === undefined) return runs;
   if (silentSince === null || open.to !== null || open.source === 'no-data' || open.from >= silentSince) return runs;
   return [
     ...runs.slice(0, -1),

@@ -124,6 +124,31 @@ describe('a block', () => {
   });
 });
 
+describe('time that no run covers', () => {
+  const run = (from: number, to: number | null) => makeRun({ from: from * HOUR, to: to === null ? null : to * HOUR });
+  const unheard = (change: Partial<StripInput>) => layout(change).unheard.map(({ x, width }) => [x, width]);
+
+  it('is drawn as no data up to now, not as standing still', () => {
+    expect(unheard({ runs: [run(6, 12), run(15, null)] })).toEqual([
+      [0, 240],
+      [480, 120],
+    ]);
+    expect(unheard({ runs: [] })).toEqual([[0, 800]]);
+    expect(unheard({ runs: [run(0, 6)], now: 30 * HOUR })).toEqual([[240, 720]]);
+    expect(unheard({ runs: [run(0, null)] })).toEqual([]);
+  });
+
+  it('is not drawn before the runs have come: a strip on its way has no ink at all', () => {
+    expect(layout({ runs: undefined })).toEqual({
+      known: false,
+      blocks: [],
+      unheard: [],
+      planned: [],
+      nowX: undefined,
+    });
+  });
+});
+
 describe('what is planned', () => {
   const plan = (from: number, to: number, rpm = 1400) => ({
     from: from * HOUR,

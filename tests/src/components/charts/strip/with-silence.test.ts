@@ -3,7 +3,7 @@ import { withSilence } from '#src/components/charts/strip/with-silence.ts';
 import { makeRun } from '#tests/src/support/make-run.ts';
 
 const runs = [makeRun({ from: 0, to: 10 }), makeRun({ from: 10, to: null })];
-const spans = (list: ReturnType<typeof withSilence>) => list.map(({ from, to, source }) => [from, to, source]);
+const spans = (list: ReturnType<typeof withSilence>) => list?.map(({ from, to, source }) => [from, to, source]);
 
 describe('a pump that has gone silent', () => {
   it('is not said to run on: what follows the last word is no data', () => {
@@ -20,7 +20,8 @@ describe('a pump that has gone silent', () => {
   });
 });
 
-it('leaves a pump that is heard as it is, and nothing as nothing', () => {
+it('leaves a pump that is heard as it is, nothing as nothing, and what has not come as not come', () => {
   expect(withSilence(runs, null)).toBe(runs);
-  expect(withSilence(undefined, 50)).toEqual([]);
+  expect(withSilence([], 50)).toEqual([]);
+  expect(withSilence(undefined, 50)).toBeUndefined();
 });
