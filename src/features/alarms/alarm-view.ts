@@ -45,6 +45,13 @@ function describeSuppression({ suppressedBy }: Alarm): string {
 function describeSeen(alarm: Alarm, moment: (at: number) => string, now: number): string[] {
   const { state, acknowledgedAt, acknowledgedBy: by, alarmClass } = alarm;
   if (state === 'returned') return [t('alarm.state.returned', { time: moment(alarm.returnedAt ?? now) })];
+  // It stood so long that it asks again: who saw it first still matters, and it waits all the same.
+  if (acknowledgedAt !== null && state === 'unacknowledged')
+    return [
+      by === null
+        ? t('alarm.state.unacknowledged')
+        : t('alarm.state.asksAgain', { name: by, time: moment(acknowledgedAt) }),
+    ];
   if (acknowledgedAt !== null && state !== 'latched')
     return [t('alarm.state.acknowledged', { name: by ?? '–', time: moment(acknowledgedAt) })];
   if (state === 'latched') return [t('alarm.state.latched')];

@@ -76,6 +76,7 @@ export const ALARM_MESSAGES = {
   'alarm.member.over': 'since {time}, over {end}',
   'alarm.times': { one: '{count} time', other: '{count} times' },
   'alarm.state.unacknowledged': 'nobody has acknowledged it',
+  'alarm.state.asksAgain': 'asks again: it still stands since {name} acknowledged it, {time}',
   'alarm.state.acknowledged': 'acknowledged by {name}, {time}',
   'alarm.state.returned': 'back to normal since {time}, not acknowledged',
   'alarm.state.latched': 'comes and goes: held as one alarm until acknowledged',

@@ -43,6 +43,15 @@ describe('an alarm in words', () => {
     );
   });
 
+  it('asks again, and says who saw it before, once it has stood too long', () => {
+    const seen = acknowledgedBy(alarm, 'Ilse Ravn', NOW - HOUR);
+    const asked = { ...seen, state: 'unacknowledged' as const };
+    expect(describeState(asked, format, NOW)).toBe(
+      'asks again: it still stands since Ilse Ravn acknowledged it, 6:30\u00a0PM',
+    );
+    expect(isWaiting(asked)).toBe(true);
+  });
+
   it('waits for somebody in three of its states', () => {
     const waiting = (['unacknowledged', 'acknowledged', 'returned', 'latched', 'normal'] as const).map((state) =>
       isWaiting({ ...alarm, state }),
