@@ -47,7 +47,8 @@ export function formOfFigure(figure: string, usual: number, system: UnitSystem):
   const seconds = limits.unit === 's' ? usual : limits.unit === 'min' ? usual * 60 : 0;
   const own = limits.unit === 's' ? 1 : 60;
   if (seconds >= 7200 && seconds % 3600 === 0) return { size: 3600 / own, zero: 0, digits: 2, unit: 'h', limits };
-  if (limits.unit === 's' && seconds >= 120 && seconds % 60 === 0) return { size: 60, zero: 0, digits: 2, unit: 'min', limits };
+  if (limits.unit === 's' && seconds >= 120 && seconds % 60 === 0)
+    return { size: 60, zero: 0, digits: 2, unit: 'min', limits };
   return { size: 1, zero: 0, digits: limits.whole ? 0 : 2, unit: UNITS[limits.unit], limits };
 }
 
