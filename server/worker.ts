@@ -11,7 +11,7 @@ import { createLeadership } from './jobs/leadership.ts';
 import { pruneRollups } from './jobs/prune-rollups.ts';
 import { rollUp } from './jobs/roll-up.ts';
 import { createScheduler } from './jobs/scheduler.ts';
-import { silenceSetAside } from './jobs/silence-set-aside.ts';
+import { withdrawUntrue } from './jobs/withdraw-untrue.ts';
 import { createDoorbell } from './live/doorbell.ts';
 import { createSmtpTransport } from './mail/mail-transport.ts';
 import { createOutboxSender } from './mail/outbox-sender.ts';
@@ -39,7 +39,7 @@ await runProgram('worker', async ({ env, log, progress, atEnd }) => {
 
   const scheduler = createScheduler({
     jobs: [
-      silenceSetAside,
+      withdrawUntrue,
       escalateAlarms,
       endExplanations,
       announceAssignments,

@@ -2,6 +2,7 @@ import type pg from 'pg';
 import { asMachine } from '#server/db/transaction.ts';
 import { announceAlarms } from '#server/mail/announce-alarms.ts';
 import { withdrawMails } from '#server/mail/withdraw-mails.ts';
+import type { AlarmRecord } from '#shared/domain/alarms/alarm-record.ts';
 import type { AlarmChange, OpenAlarm } from './alarm-change.ts';
 import { listNewestStarts, lockOpenAlarms, saveAlarmChanges } from './alarms-repository.ts';
 import { applySignals, BACKLOG_AFTER_MS } from './apply-signals.ts';
@@ -87,15 +88,16 @@ async function changeGroups(
   return { groups, changes: all, covers };
 }
 
-/** What returned needs no mail that has not left; one of which none ever left, from a backlog, is history at once. */
+/**
+ * What returned needs no mail that has not left, unless it chatters and waits for a person; one of which none ever left,
+ * from a backlog, is history at once.
+ */
 async function withdrawReturned(client: pg.PoolClient, changes: readonly AlarmChange[], now: number): Promise<void> {
-  const returned = changes.filter(({ record, isNew }) => !isNew && (!record.active || record.suppressedBy !== null));
+  const isOver = ({ active, state, suppressedBy }: AlarmRecord) =>
+    suppressedBy !== null || (!active && state !== 'latched');
+  const returned = changes.filter(({ record, isNew }) => !isNew && isOver(record));
   if (returned.length === 0) return;
-  const unheard = await withdrawMails(
-    client,
-    returned.map(({ alarmId }) => alarmId),
-    now,
-  );
+  const unheard = await withdrawMails(client, { alarmIds: returned.map(({ alarmId }) => alarmId) }, now);
   for (const change of returned) {
     const { record } = change;
     if (record.active) continue;

@@ -35,13 +35,3 @@ export async function lockUntoldAlarms(database: Database): Promise<OpenAlarm[]>
   );
   return rows.map(toOpenAlarm);
 }
-
-/** Alarms that were set aside while a mail of theirs, not due yet, waits to leave. */
-export async function listSetAsideWithMail(database: Database): Promise<string[]> {
-  const { rows } = await database.query<{ id: string }>(
-    `select distinct a.id from outbox_mails m join alarms a on a.id = m.alarm_id
-     where m.sent_at is null and m.failed_at is null and m.attempts = 0
-       and (a.shelved_until is not null or a.suppressed or a.out_of_service)`,
-  );
-  return rows.map(({ id }) => id);
-}

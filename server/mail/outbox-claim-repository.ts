@@ -1,4 +1,5 @@
 import type pg from 'pg';
+import { UNTRUE } from './untrue-mail.ts';
 
 type Database = Pick<pg.Pool, 'query'>;
 
@@ -20,9 +21,9 @@ export type ClaimedMail = {
 export const LEASE_SECONDS = 60;
 const GROUPS_A_CLAIM = 20;
 
-/** What was set aside since it was written calls nobody: its mails wait to be withdrawn. */
-const NOT_SET_ASIDE = `not exists (select from alarms a where a.id = m.alarm_id
-  and (a.shelved_until is not null or a.suppressed or a.out_of_service))`;
+/** Due, in nobody's hands, not waiting for another try, and still true: what is not is taken back by a job. */
+const IS_DUE = `m.sent_at is null and m.failed_at is null and m.due_at <= $1
+  and (m.leased_until is null or m.leased_until <= $1) and (m.retry_at is null or m.retry_at <= $1) and not ${UNTRUE}`;
 
 /**
  * Takes what is due, whole groups at a time; what another worker holds is passed over. A worker that dies lets its
@@ -31,15 +32,10 @@ const NOT_SET_ASIDE = `not exists (select from alarms a where a.id = m.alarm_id
 export async function claimMails(database: Database, now: number): Promise<ClaimedMail[]> {
   const { rows } = await database.query<Omit<ClaimedMail, 'dueAt'> & { readonly due_at: number }>(
     `with due as (
-       select distinct to_address, due_at from outbox_mails m
-       where sent_at is null and failed_at is null and due_at <= $1 and (leased_until is null or leased_until <= $1)
-         and ${NOT_SET_ASIDE}
-       order by due_at limit $2),
+       select distinct to_address, due_at from outbox_mails m where ${IS_DUE} order by due_at limit $2),
      locked as (
        select m.id from outbox_mails m join due using (to_address, due_at)
-       where m.sent_at is null and m.failed_at is null and (m.leased_until is null or m.leased_until <= $1)
-         and ${NOT_SET_ASIDE}
-       order by m.id for update of m skip locked)
+       where ${IS_DUE} order by m.id for update of m skip locked)
      update outbox_mails m set leased_until = $1::timestamptz + make_interval(secs => $3), attempts = m.attempts + 1
      from locked where m.id = locked.id
      returning m.id, m.to_address as address, m.subject, m.text, m.html, m.message_id as "messageId",
@@ -64,11 +60,10 @@ export async function markDelayed(
   error: string,
   retryAt: number,
 ): Promise<void> {
-  await database.query('update outbox_mails set leased_until = $2, last_error = $3 where id = any($1::uuid[])', [
-    ids,
-    new Date(retryAt),
-    error,
-  ]);
+  await database.query(
+    'update outbox_mails set leased_until = null, retry_at = $2, last_error = $3 where id = any($1::uuid[])',
+    [ids, new Date(retryAt), error],
+  );
 }
 
 /** Gives mails up: the mail server will never take them. */

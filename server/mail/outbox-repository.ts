@@ -1,4 +1,5 @@
 import type pg from 'pg';
+import { UNTRUE } from './untrue-mail.ts';
 
 type Database = Pick<pg.ClientBase, 'query'>;
 
@@ -52,7 +53,7 @@ export type WithdrawnMail = {
   readonly padId: string;
   readonly recipientUserId: string;
   readonly dueAt: number;
-  /** Something of this alarm has left, or is leaving. */
+  /** A mail of this alarm had come due: it called somebody, if only on the screens. */
   readonly isHeard: boolean;
   /** Other alarms leave with it, at the same instant. */
   readonly isShared: boolean;
@@ -68,15 +69,22 @@ type WithdrawnRow = {
   readonly is_shared: boolean;
 };
 
-/** Takes back what was not due yet of alarms that need nobody any more. */
-export async function withdrawMails(
-  database: Database,
-  alarmIds: readonly string[],
-  now: number,
-): Promise<WithdrawnMail[]> {
+/** In a sender's hands: it may have left already. */
+const LEAVING = 'm.leased_until > to_timestamp($2::float8 / 1000)';
+
+/** Every mail of some alarms; or some mails, as far as they are untrue. */
+export type Withdrawal = { readonly alarmIds: readonly string[] } | { readonly mailIds: readonly string[] };
+
+/** Takes back what has not left, also what waits for another try. */
+export async function withdrawMails(database: Database, withdrawal: Withdrawal, now: number): Promise<WithdrawnMail[]> {
+  const [ids, which] =
+    'alarmIds' in withdrawal
+      ? [withdrawal.alarmIds, 'm.alarm_id = any($1::uuid[])']
+      : [withdrawal.mailIds, `m.id = any($1::uuid[]) and ${UNTRUE}`];
   const { rows } = await database.query<WithdrawnRow>(
     `with withdrawn as (
-       delete from outbox_mails where alarm_id = any($1::uuid[]) and attempts = 0 and due_at > to_timestamp($2::float8 / 1000)
+       delete from outbox_mails m
+       where ${which} and m.sent_at is null and m.failed_at is null and (${LEAVING}) is not true
        returning id, alarm_id, company_id, recipient_user_id, due_at)
      select w.alarm_id, w.company_id, coalesce(a.pad_id, a.id) as pad_id, w.recipient_user_id, date_part('epoch', w.due_at) * 1000 as due_at,
        exists (select from outbox_mails m where m.alarm_id = w.alarm_id
@@ -84,7 +92,7 @@ export async function withdrawMails(
        exists (select from outbox_mails m where m.recipient_user_id = w.recipient_user_id and m.due_at = w.due_at
          and m.id not in (select id from withdrawn)) as is_shared
      from withdrawn w join alarms a on a.id = w.alarm_id`,
-    [alarmIds, now],
+    [ids, now],
   );
   return rows.map((row) => ({
     alarmId: row.alarm_id,
@@ -95,4 +103,12 @@ export async function withdrawMails(
     isHeard: row.is_heard,
     isShared: row.is_shared,
   }));
+}
+
+/** Mails that have not left and no longer tell the truth. */
+export async function listUntrueMails(database: Database): Promise<string[]> {
+  const { rows } = await database.query<{ id: string }>(
+    `select m.id from outbox_mails m where m.sent_at is null and m.failed_at is null and ${UNTRUE}`,
+  );
+  return rows.map(({ id }) => id);
 }

@@ -1,17 +1,17 @@
 import type pg from 'pg';
 import { lockMailMemory, type MailMemory, saveMailMemory } from './mail-states-repository.ts';
-import { type WithdrawnMail, withdrawMails as withdrawRows } from './outbox-repository.ts';
+import { type Withdrawal, type WithdrawnMail, withdrawMails as withdrawRows } from './outbox-repository.ts';
 
 /**
- * Takes back the mails, not due yet, of alarms that need nobody any more, and forgets that they were planned: the next
- * mail about the pad is its first again. Answers the alarms of which nobody heard anything.
+ * Takes back mails that have not left and are needed no more, and forgets that they were planned: the next mail about the
+ * pad is its first again. Answers the alarms of which nobody was to hear yet.
  */
 export async function withdrawMails(
   client: Pick<pg.ClientBase, 'query'>,
-  alarmIds: readonly string[],
+  withdrawal: Withdrawal,
   now: number,
 ): Promise<Set<string>> {
-  const withdrawn = await withdrawRows(client, alarmIds, now);
+  const withdrawn = await withdrawRows(client, withdrawal, now);
   const unplanned = withdrawn.filter(({ isShared }) => !isShared);
   if (unplanned.length > 0) {
     const memory = await lockMailMemory(client, unplanned.flatMap(listSubjects));

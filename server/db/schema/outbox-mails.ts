@@ -1,8 +1,8 @@
 import { sql } from 'drizzle-orm';
-import { foreignKey, index, integer, pgPolicy, pgTable, text, unique, uuid } from 'drizzle-orm/pg-core';
+import { foreignKey, index, integer, pgTable, text, unique, uuid } from 'drizzle-orm/pg-core';
 import { alarms } from './alarms.ts';
 import { companyId, id, instant } from './columns.ts';
-import { appReads, machineWorks, millraceApp, staffOnly } from './policies.ts';
+import { appReads, machineWorks, staffOnly } from './policies.ts';
 
 /** Mail to be sent, its content frozen when it was decided; a transition mails an address once. */
 export const outboxMails = pgTable(
@@ -22,7 +22,10 @@ export const outboxMails = pgTable(
     createdAt: instant('created_at').notNull().defaultNow(),
     dueAt: instant('due_at').notNull(),
     attempts: integer().notNull().default(0),
+    /** In a sender's hands until then. */
     leasedUntil: instant('leased_until'),
+    /** After a failed attempt: when the next one may be made. */
+    retryAt: instant('retry_at'),
     sentAt: instant('sent_at'),
     /** Given up: no further attempt is made. */
     failedAt: instant('failed_at'),
@@ -38,8 +41,6 @@ export const outboxMails = pgTable(
     }),
     index('outbox_mails_due_index').on(table.dueAt).where(sql`sent_at is null and failed_at is null`),
     appReads('outbox_mails', staffOnly),
-    // An acknowledgement withdraws what has not left yet.
-    pgPolicy('outbox_mails_app_deletes', { for: 'delete', to: millraceApp, using: staffOnly }),
     machineWorks('outbox_mails'),
   ],
 );

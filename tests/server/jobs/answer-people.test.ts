@@ -1,13 +1,14 @@
 import pino from 'pino';
 import { beforeAll, describe, expect, it } from 'vitest';
 import { newId } from '#server/db/new-id.ts';
-import { saveAlarmChanges } from '#server/fold/alarms-repository.ts';
+import { asMachine } from '#server/db/transaction.ts';
+import { lockAlarms, saveAlarmChanges } from '#server/fold/alarms-repository.ts';
 import { announceAssignments } from '#server/jobs/announce-assignments.ts';
 import { endExplanations } from '#server/jobs/end-explanations.ts';
 import { escalateAlarms } from '#server/jobs/escalate-alarms.ts';
 import type { Job } from '#server/jobs/job.ts';
-import { silenceSetAside } from '#server/jobs/silence-set-aside.ts';
-import { claimMails } from '#server/mail/outbox-claim-repository.ts';
+import { withdrawUntrue } from '#server/jobs/withdraw-untrue.ts';
+import { claimMails, LEASE_SECONDS, markDelayed } from '#server/mail/outbox-claim-repository.ts';
 import { acknowledge } from '#shared/domain/alarms/acknowledge.ts';
 import type { AlarmRecord } from '#shared/domain/alarms/alarm-record.ts';
 import { applySignal } from '#shared/domain/alarms/apply-signal.ts';
@@ -46,6 +47,11 @@ const raise = (at: number, more: Partial<Extract<AlarmSignal, { type: 'raised' }
 
 async function add(pump: number, record: AlarmRecord): Promise<string> {
   const { pumpId } = company.pumps[pump]!;
+  // One may be open from the test before: two at once cannot be.
+  await machine.query(`update alarms set state = 'normal' where pump_id = $1 and detector = $2`, [
+    pumpId,
+    record.detector,
+  ]);
   const { rows } = await machine.query<{ pad_id: string }>('select pad_id from pumps where id = $1', [pumpId]);
   const whose = { alarmId: newId(), companyId: company.companyId, pumpId, padId: rows[0]!.pad_id };
   await saveAlarmChanges(machine, [{ ...whose, isNew: true, record, transitions: [], isBacklog: false }]);
@@ -98,12 +104,20 @@ describe('an alarm that was given away', () => {
 });
 
 describe('mail of what was set aside', () => {
-  const waitingMail = async (id: string, dueAt: number) =>
+  const waitingMail = async (id: string, dueAt: number, transition = 'raised 1') =>
     machine.query(
       `insert into outbox_mails (id, company_id, alarm_id, transition, recipient_user_id, to_address, subject, text, html,
-         message_id, due_at) values ($1::uuid, $2, $3, 'raised 1', $4, 'tech@company.example', 's', 't', 'h', '<' || $1 || '@x>', $5)`,
-      [newId(), company.companyId, id, company.technician.userId, new Date(dueAt)],
+         message_id, due_at) values ($1::uuid, $2, $3, $6, $4, 'tech@company.example', 's', 't', 'h', '<' || $1 || '@x>', $5)`,
+      [newId(), company.companyId, id, company.technician.userId, new Date(dueAt), transition],
     );
+  const claimed = async (now: number) => (await claimMails(machine, now)).filter(({ subject }) => subject === 's');
+  const keep = (id: string, record: AlarmRecord) =>
+    asMachine(machine, async (_db, client) => {
+      const [open] = await lockAlarms(client, [id]);
+      await saveAlarmChanges(client, [{ ...open!, record, transitions: [], isNew: false, isBacklog: false }]);
+    });
+  const hold = (record: AlarmRecord, at: number) =>
+    shelve(record, { by: company.manager.userId, at, until: at + HOUR, reason: 'part ordered' })!.record;
 
   it.each([
     ['shelved', 1, (record: AlarmRecord, at: number) => shelve(record, { by: 'x', at, until: at + HOUR, reason: 'r' })],
@@ -118,9 +132,66 @@ describe('mail of what was set aside', () => {
       shelf: made.shelf === null ? null : { ...made.shelf, by },
     });
     await waitingMail(id, now - 1000);
-    expect((await claimMails(machine, now)).filter(({ subject }) => subject === 's')).toEqual([]);
-    await run(silenceSetAside, now);
+    expect(await claimed(now)).toEqual([]);
+    await run(withdrawUntrue, now);
     expect(await mailsOf(id)).toEqual([]);
+  });
+
+  it('is taken back though it was tried once, so that it does not leave stale when the hold is over', async () => {
+    const now = Date.now();
+    const record = raise(now);
+    const id = await add(8, record);
+    await waitingMail(id, now - 1000);
+    const [mail] = await claimed(now);
+    await markDelayed(machine, [mail!.id], 'connection refused', now + 2000);
+    await keep(id, hold(record, now));
+    expect(await claimed(now + 3000)).toEqual([]);
+    await run(withdrawUntrue, now + 3000);
+    await keep(id, record);
+    expect(await claimed(now + 2 * HOUR)).toEqual([]);
+    expect(await mailsOf(id)).toEqual([]);
+  });
+
+  it('stays while a sender has it in hand: it may have left', async () => {
+    const now = Date.now();
+    const record = raise(now);
+    const id = await add(8, record);
+    await waitingMail(id, now - 1000);
+    expect(await claimed(now)).toHaveLength(1);
+    await keep(id, hold(record, now));
+    await run(withdrawUntrue, now + 1000);
+    expect(await mailsOf(id)).toHaveLength(1);
+    await run(withdrawUntrue, now + 1000 * LEASE_SECONDS);
+    expect(await mailsOf(id)).toEqual([]);
+  });
+
+  it('leaves at its next try where the alarm still stands', async () => {
+    const now = Date.now();
+    const id = await add(8, raise(now));
+    await waitingMail(id, now - 1000);
+    const [mail] = await claimed(now);
+    await markDelayed(machine, [mail!.id], 'connection refused', now + 2000);
+    await run(withdrawUntrue, now + 1000);
+    expect(await claimed(now + 1000)).toEqual([]);
+    expect(await claimed(now + 2000)).toMatchObject([{ id: mail!.id, attempts: 2 }]);
+  });
+
+  it.each([
+    ['the condition is over', 'raised 1', true],
+    ['it says that nobody acknowledged what somebody has', 'escalated 1', true],
+    ['somebody acknowledged what it tells of', 'raised 1', false],
+  ] as const)('when %s, of “%s”: taken back is %s', async (what, transition, isTakenBack) => {
+    const now = Date.now();
+    const record = raise(now);
+    const id = await add(8, record);
+    await waitingMail(id, now - 1000, transition);
+    const over = what === 'the condition is over';
+    await keep(id, {
+      ...record,
+      ...(over ? { active: false, state: 'returned', returnedAt: now } : { state: 'acknowledged' }),
+    });
+    await run(withdrawUntrue, now);
+    expect(await mailsOf(id)).toHaveLength(isTakenBack ? 0 : 1);
   });
 
   it('comes when the hold is over and the condition still stands', async () => {

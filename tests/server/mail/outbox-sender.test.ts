@@ -66,18 +66,27 @@ function startSender(port: number): OutboxSender {
   return sender;
 }
 
+/** The open alarm that all mails of a company tell of. */
+const opened = new Map<string, Promise<string>>();
+function alarmOf({ companyId, pumps }: TestCompany): Promise<string> {
+  const known = opened.get(companyId) ?? openAlarm(pumps[0]!.pumpId);
+  opened.set(companyId, known);
+  return known;
+}
+async function openAlarm(pumpId: string): Promise<string> {
+  const id = await addAlarm(machine, pumpId, { from: new Date(clock) });
+  await machine.query('delete from outbox_mails where alarm_id = $1', [id]);
+  return id;
+}
+
 /** Puts a mail into the outbox; the address is of this test's own. */
 async function enqueue(company: TestCompany, change: { dueAt?: number; to?: string; part?: string } = {}) {
-  const alarmId = await addAlarm(machine, company.pumps[0]!.pumpId, {
-    from: new Date(clock - Math.floor(Math.random() * 1e9)),
-    state: 'normal',
-  });
+  const alarmId = await alarmOf(company);
   const id = newId();
   const { dueAt = clock, to = company.technician.email, part = 'Did not prime' } = change;
-  await machine.query('delete from outbox_mails where alarm_id = $1', [alarmId]);
   await machine.query(
     `insert into outbox_mails (id, company_id, alarm_id, transition, recipient_user_id, to_address, subject, text, html, message_id, due_at)
-     values ($1, $2, $3, 'raised', $4, $5, $6, $7, $8, $9, $10)`,
+     values ($1::uuid, $2, $3, 'raised ' || $1, $4, $5, $6, $7, $8, $9, $10)`,
     [
       id,
       company.companyId,
