@@ -1,4 +1,5 @@
 import { createHash } from 'node:crypto';
+import type { Baseline } from '#shared/domain/energy/savings-baseline.ts';
 import { epochDayOf, nextMonth } from './day-text.ts';
 import type { PadPrices } from './tariffs-in-force.ts';
 
@@ -29,6 +30,19 @@ export function createPriceKeys(zone: string, { terms, otherKwhByPeriod }: Price
     return key;
   };
 }
+
+/** To be raised when the domain compares the same hours otherwise. */
+const COMPARING = 1;
+
+/**
+ * Names what a calendar month of a pump was compared by: its prices and its baseline, by content.
+ *
+ * @example createCompareKeys(createPriceKeys(zone, prices), baseline)('2025-07-01') // 'p0Qd…'
+ */
+export const createCompareKeys =
+  (keyOf: (month: string) => string, baseline: Baseline): ((month: string) => string) =>
+  (month) =>
+    digest([COMPARING, keyOf(month), baseline]);
 
 const digest = (content: unknown): string =>
   createHash('sha256').update(JSON.stringify(content)).digest('base64url').slice(0, 22);

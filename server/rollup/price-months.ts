@@ -1,14 +1,15 @@
 import { nextMonth } from '#server/db/day-text.ts';
-import { createPriceKeys } from '#server/db/price-keys.ts';
+import { createCompareKeys, createPriceKeys } from '#server/db/price-keys.ts';
 import type { MonthSaved } from '#server/db/schema/pump-months.ts';
 import { listBaselines } from '#server/db/stated-baselines.ts';
 import { listStoredHours, toDayUse } from '#server/db/stored-days.ts';
 import { findPadPrices } from '#server/db/tariffs-in-force.ts';
 import type { Transaction } from '#server/db/transaction.ts';
+import { compareDays } from '#shared/domain/energy/compare-days.ts';
 import { billOf } from '#shared/domain/energy/month-bill.ts';
 import { priceDays } from '#shared/domain/energy/price-days.ts';
-import { saveByTerms } from '#shared/domain/energy/save-by-terms.ts';
-import { writeDayPrices } from './day-price-repository.ts';
+import { sumSavings } from '#shared/domain/energy/sum-savings.ts';
+import { writeComparedDays, writeDayPrices } from './day-price-repository.ts';
 import { writeMonth } from './month-repository.ts';
 import type { TakenPump } from './rollup-work.ts';
 
@@ -31,11 +32,14 @@ export async function priceMonths(
     const priced = priceDays(days, prices.terms, prices);
     await writeDayPrices(db, pump.pumpId, keyOf(month), priced);
     const bill = billOf(priced);
-    const saved = baseline && saveByTerms(baseline, days, prices.terms, prices.otherKwhByPeriod);
+    const compared = baseline === undefined ? [] : compareDays(baseline, days, prices.terms, prices.otherKwhByPeriod);
+    const comparedBy = baseline && createCompareKeys(keyOf, baseline)(month);
+    await writeComparedDays(db, { pumpId: pump.pumpId, month }, comparedBy, compared);
+    const saved = baseline && sumSavings(baseline, compared);
     const savedMonth: MonthSaved | null =
-      saved?.ok === true
-        ? { ...saved, savedMicros: saved.savedMicros ?? 0, sigmaMicros: saved.sigmaMicros ?? 0 }
-        : null;
+      saved === undefined
+        ? null
+        : { ...saved, savedMicros: saved.savedMicros ?? 0, sigmaMicros: saved.sigmaMicros ?? 0 };
     await writeMonth(db, pump, { month, days: days.length, bill, saved: savedMonth }, now);
   }
 }

@@ -39,6 +39,13 @@ export const pumpDays = pgTable(
     energyMicrosByPeriod: doublePrecision('energy_micros_by_period').array(),
     /** The month's demand, on the day of its peak. */
     demandMicros: doublePrecision('demand_micros'),
+    /** By what the day was compared with the pump's baseline, as `createCompareKeys` writes it; null = it was not. */
+    comparedBy: text('compared_by'),
+    /** What the motor before would have used and cost, and what counts of this one; null where nothing can be compared. */
+    beforeKwh: doublePrecision('before_kwh'),
+    beforeMicros: doublePrecision('before_micros'),
+    afterKwh: doublePrecision('after_kwh'),
+    afterMicros: doublePrecision('after_micros'),
   },
   (table) => [
     primaryKey({ name: 'pump_days_pkey', columns: [table.pumpId, table.day] }),

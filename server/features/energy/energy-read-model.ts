@@ -81,6 +81,12 @@ export type EnergyDay = {
   readonly kwhByPeriod: readonly number[];
   readonly energyMicrosByPeriod: readonly number[];
   readonly demandMicros: number;
+  /** What it was compared by; null, and the rest null, where it was not or cannot be. */
+  readonly comparedBy: string | null;
+  readonly beforeKwh: number | null;
+  readonly beforeMicros: number | null;
+  readonly afterKwh: number | null;
+  readonly afterMicros: number | null;
 };
 
 /** Stored days of some pumps, in order. */
@@ -96,7 +102,8 @@ export async function listEnergyDays(
       watts_mean as "wattsMean", watts_max as "wattsMax", array_to_json(source_ms) as "sourceMs",
       priced_by as "pricedBy", coalesce(array_to_json(kwh_by_period), '[]') as "kwhByPeriod",
       coalesce(array_to_json(energy_micros_by_period), '[]') as "energyMicrosByPeriod",
-      coalesce(demand_micros, 0) as "demandMicros"
+      coalesce(demand_micros, 0) as "demandMicros", compared_by as "comparedBy", before_kwh as "beforeKwh",
+      before_micros as "beforeMicros", after_kwh as "afterKwh", after_micros as "afterMicros"
     from pump_days
     where pump_id = any(${sql.param(pumpIds)}::uuid[]) and day >= ${from}::date and day < ${until}::date
     order by pump_id, day`);

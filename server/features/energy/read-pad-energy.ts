@@ -1,6 +1,5 @@
 import type { z } from 'zod';
 import type { Context } from '#server/context.ts';
-import { epochDayOf } from '#server/db/day-text.ts';
 import type { PadPrices } from '#server/db/tariffs-in-force.ts';
 import { notFound } from '#server/errors.ts';
 import type { EnergyQuery, PadEnergy } from '#shared/contract/http/energy.ts';
@@ -36,11 +35,10 @@ export async function readPadEnergy(context: Context, { padId, by, ...asked }: A
   const shown = presentEnergy(days, { window, by, zone, prices, poolGallons, showsMoney, knownTo: known });
   const region = own[0]?.region ?? null;
   const money = { currency: shown.currency ?? undefined, shows: shown.money === 'shown' };
-  const [first, last] = [epochDayOf(window.from), epochDayOf(window.until)];
   const terms = { periods: listPeriodNames(days.flatMap(({ settled }) => settled ?? [])), showsMoney, knownTo: known };
-  const parts = pumps.map(({ pump, days: ownDays, reckoned, baseline }) => {
-    const uses = reckoned.uses.filter(({ epochDay }) => epochDay >= first && epochDay < last);
-    const saved = reckonSavings(baseline, uses, prices, { money, region });
+  const parts = pumps.map((reckoning) => {
+    const { pump, days: ownDays } = reckoning;
+    const saved = reckonSavings(reckoning, { money, region });
     const ownPool = pump.purpose === 'filter' ? poolGallons : null;
     const totals = sumFigures(ownDays, { ...terms, poolGallons: ownPool });
     return { pumpId: pump.pumpId, pumpName: pump.pumpName, totals, ...saved };

@@ -1,5 +1,4 @@
 import type { Context } from '#server/context.ts';
-import { epochDayOf } from '#server/db/day-text.ts';
 import { notFound } from '#server/errors.ts';
 import type { EnergyQuery, PumpEnergy } from '#shared/contract/http/energy.ts';
 import { findEnergyPump, listGaps } from './energy-read-model.ts';
@@ -11,6 +10,8 @@ import { presentCarbon, reckonSavings } from './reckon-savings.ts';
 /** Gaps that an answer lists. */
 const MOST_GAPS = 50;
 
+const NOTHING = { days: [], baseline: undefined, compared: [] };
+
 type Asked = EnergyQuery & { readonly pumpId: string };
 
 /** What a pump used, by local day or month. */
@@ -20,7 +21,8 @@ export async function readPumpEnergy(context: Context, { pumpId, by, ...asked }:
   if (pump === undefined) throw notFound('pump');
   const window = windowOf(asked, pump.zone, now);
   const { pumps, prices } = await readEnergy(context, pump.padId, [pump], window);
-  const days = pumps.flatMap((one) => one.days);
+  const [reckoning = NOTHING] = pumps;
+  const { days } = reckoning;
   const known = knownTo([pump], now);
   const shown = presentEnergy(days, {
     window,
@@ -33,9 +35,6 @@ export async function readPumpEnergy(context: Context, { pumpId, by, ...asked }:
   });
   const span = spanOf(window, pump.zone);
   const { gaps, count } = await listGaps(db, pumpId, { from: span.from, to: Math.min(span.to, known) }, MOST_GAPS);
-  const within = (epochDay: number): boolean =>
-    epochDay >= epochDayOf(window.from) && epochDay < epochDayOf(window.until);
-  const uses = pumps.flatMap(({ reckoned }) => reckoned.uses.filter(({ epochDay }) => within(epochDay)));
   const money = { currency: shown.currency ?? undefined, shows: shown.money === 'shown' };
   return {
     pumpId,
@@ -45,7 +44,7 @@ export async function readPumpEnergy(context: Context, { pumpId, by, ...asked }:
     by,
     upTo: pump.rolledTo,
     ...shown,
-    ...reckonSavings(pumps[0]?.baseline, uses, prices, { money, region: pump.region }),
+    ...reckonSavings(reckoning, { money, region: pump.region }),
     carbon: presentCarbon(shown.totals.kwh, 'consumption', pump.region),
     gaps,
     gapCount: count,

@@ -12,11 +12,6 @@ export type SettledDay = PricedDay & {
   readonly currency: string | undefined;
 };
 
-export type ReckonedDays = {
-  readonly uses: readonly DayUse[];
-  readonly byDay: ReadonlyMap<number, SettledDay>;
-};
-
 /** Days of whole calendar months of a pump, and the hours of those months whose stored prices are out of date. */
 export type DaysToReckon = {
   readonly days: readonly EnergyDay[];
@@ -28,7 +23,7 @@ export type DaysToReckon = {
 const monthOf = ({ epochDay }: { readonly epochDay: number }): string => monthStart(epochDay);
 
 /** Prices whole calendar months of a pump, from their stored prices where these are up to date, and settles each in cents. */
-export function reckonDays({ days, uses, outdated }: DaysToReckon, prices: PadPrices): ReckonedDays {
+export function reckonDays({ days, uses, outdated }: DaysToReckon, prices: PadPrices): ReadonlyMap<number, SettledDay> {
   const stored = days.map((day) => toPriced(day, prices)).filter((day) => !outdated.has(monthOf(day)));
   const fresh = priceDays(
     uses.filter((use) => outdated.has(monthOf(use))),
@@ -38,7 +33,7 @@ export function reckonDays({ days, uses, outdated }: DaysToReckon, prices: PadPr
   const months = groupBy([...stored, ...fresh], (day) => `${monthOf(day)} ${day.term?.tariff.currency ?? ''}`);
   const byDay = new Map<number, SettledDay>();
   for (const month of months.values()) for (const day of settle(month)) byDay.set(day.epochDay, day);
-  return { uses, byDay };
+  return byDay;
 }
 
 /** What a stored day says of its price. */

@@ -1,14 +1,11 @@
 import type { z } from 'zod';
-import { monthStart } from '#server/db/day-text.ts';
-import type { PadPrices } from '#server/db/tariffs-in-force.ts';
 import type { Carbon, Saved, SavedMissing } from '#shared/contract/http/energy-figures.ts';
 import { type CarbonPurpose, carbonOf, findCarbonFactor } from '#shared/domain/energy/carbon.ts';
 import { toMinorUnits } from '#shared/domain/energy/money.ts';
 import { formatMinor } from '#shared/domain/energy/money-text.ts';
-import type { DayUse } from '#shared/domain/energy/price-days.ts';
-import { type SavingsByTerms, saveByTerms, type TermSavings } from '#shared/domain/energy/save-by-terms.ts';
 import type { Baseline } from '#shared/domain/energy/savings-baseline.ts';
-import { groupBy } from './group-by.ts';
+import { sumSavings, type TermSavings } from '#shared/domain/energy/sum-savings.ts';
+import type { PumpReckoning } from './read-energy.ts';
 
 export type SavedAnswer = {
   readonly saved: Saved | null;
@@ -24,50 +21,39 @@ export function presentCarbon(kwh: number, purpose: CarbonPurpose, region: strin
 
 type Money = { readonly currency: string | undefined; readonly shows: boolean };
 
-/** Savings over days, month by month as the months store them, so that a year is the sum of its months. */
+/** What a pump saved over a window, from its days and what they compare to. */
 export function reckonSavings(
-  baseline: Baseline | undefined,
-  days: readonly DayUse[],
-  prices: PadPrices,
+  { baseline, days, compared }: Pick<PumpReckoning, 'baseline' | 'days' | 'compared'>,
   { money, region }: { readonly money: Money; readonly region: string | null },
 ): SavedAnswer {
   if (baseline === undefined) return { saved: null, savedMissing: 'no-baseline' };
-  const months = groupBy(days, ({ epochDay }) => monthStart(epochDay));
-  const outcomes: SavingsByTerms[] = [...months.values()].map((own) =>
-    saveByTerms(baseline, own, prices.terms, prices.otherKwhByPeriod),
-  );
-  const parts = outcomes.flatMap((outcome) => (outcome.ok ? [outcome] : []));
-  if (parts.length === 0) {
-    const noWater = outcomes.some((outcome) => !outcome.ok && outcome.missing === 'no-water');
-    return { saved: null, savedMissing: noWater ? 'no-water' : 'nothing-yet' };
+  const savings = sumSavings(baseline, compared);
+  if (savings === undefined) {
+    const ran = days.some(({ day }) => day.onMs > 0);
+    return { saved: null, savedMissing: baseline.basis.kind === 'same-volume' && ran ? 'no-water' : 'nothing-yet' };
   }
-  return { saved: presentSaved(baseline, parts, { money, region }), savedMissing: null };
+  const span = days.reduce((sum, { day }) => sum + day.to - day.from, 0);
+  const coverage = span > 0 ? days.reduce((sum, { day }) => sum + day.coveredMs, 0) / span : 0;
+  return { saved: { ...presentSaved(baseline, savings, { money, region }), coverage }, savedMissing: null };
 }
 
 function presentSaved(
   { kind, basis, watts, sigmaWatts }: Baseline,
-  parts: readonly TermSavings[],
+  { savedMicros, sigmaMicros, stipulated, ...savings }: TermSavings,
   { money, region }: { readonly money: Money; readonly region: string | null },
-): Saved {
-  const sum = (value: (part: TermSavings) => number): number => parts.reduce((total, part) => total + value(part), 0);
-  const savedKwh = sum((part) => part.savedKwh);
-  const isPriced = money.shows && parts.every(({ savedMicros }) => savedMicros !== undefined);
-  const text = (micros: number): string | null => {
-    const units = isPriced && money.currency !== undefined ? toMinorUnits(micros, money.currency) : undefined;
-    return units === undefined || money.currency === undefined ? null : formatMinor(units, money.currency);
+): Omit<Saved, 'coverage'> {
+  const { currency } = money;
+  const text = (micros: number | undefined): string | null => {
+    if (!money.shows || currency === undefined || micros === undefined) return null;
+    const units = toMinorUnits(micros, currency);
+    return units === undefined ? null : formatMinor(units, currency);
   };
-  const [first] = parts;
   return {
-    baselineKwh: sum((part) => part.baselineKwh),
-    actualKwh: sum((part) => part.actualKwh),
-    savedKwh,
-    sigmaKwh: sum((part) => part.sigmaKwh),
-    saved: text(sum((part) => part.savedMicros ?? 0)),
-    sigma: text(sum((part) => part.sigmaMicros ?? 0)),
-    method: first?.method ?? 'A',
-    stipulated: [...(first?.stipulated ?? [])],
-    coverage: sum((part) => part.coverageShare) / parts.length,
+    ...savings,
+    saved: text(savedMicros),
+    sigma: text(sigmaMicros),
+    stipulated: [...stipulated],
     baseline: { kind, basis: basis.kind, watts, sigmaWatts },
-    carbon: presentCarbon(savedKwh, 'savings', region),
+    carbon: presentCarbon(savings.savedKwh, 'savings', region),
   };
 }

@@ -38,7 +38,12 @@ const STIPULATED = {
   nameplate: ['baseline-watts', 'baseline-hours'],
 } as const satisfies Record<Baseline['kind'], Savings['stipulated']>;
 
-function checkBaseline({ watts, sigmaWatts, basis }: Baseline): Refusal<SavingsFault>[] {
+/**
+ * Every number of a baseline that is out of range, by name.
+ *
+ * @example checkBaseline({ ...baseline, watts: -1 })[0]?.field // 'baseline.watts'
+ */
+export function checkBaseline({ watts, sigmaWatts, basis }: Baseline): Refusal<SavingsFault>[] {
   const flow = basis.kind === 'same-volume' ? basis : undefined;
   return checkNumbers([
     [watts, { field: 'baseline.watts', unit: 'W', above: 0, most: 10_000 }],
@@ -51,19 +56,46 @@ function checkBaseline({ watts, sigmaWatts, basis }: Baseline): Refusal<SavingsF
 const sumOf = (usage: readonly HourUsage[], value: (hour: HourUsage) => number): number =>
   usage.reduce((sum, hour) => sum + value(hour), 0);
 
-/** The old motor's hours per hour that the new one runs: 1 for the same hours, else what the same water takes. */
-function hoursRatio(basis: Baseline['basis'], usage: readonly HourUsage[]): number | undefined {
+/**
+ * The old motor's hours per hour that the new one runs: 1 for the same hours, else what the same water takes; undefined
+ * where that is not known.
+ *
+ * @example hoursRatio({ kind: 'same-volume', gpm: 60, sigmaGpm: 5 }, anHourAtThirtyGpm) // 0.5
+ */
+export function hoursRatio(basis: Baseline['basis'], usage: readonly HourUsage[]): number | undefined {
   if (basis.kind === 'same-hours') return 1;
   const minutes = sumOf(usage, (hour) => hour.turningMs) / 60_000;
   const gallons = sumOf(usage, (hour) => hour.gallons);
   return gallons > 0 && minutes > 0 ? gallons / basis.gpm / minutes : undefined;
 }
 
+/**
+ * What of a baseline nobody measured.
+ *
+ * @example stipulatedBy({ kind: 'clamped', watts: 2000, sigmaWatts: 60, basis: { kind: 'same-hours' } }) // ['baseline-hours']
+ */
+export const stipulatedBy = ({ kind, basis }: Baseline): Savings['stipulated'] => [
+  ...STIPULATED[kind],
+  ...(basis.kind === 'same-volume' ? (['baseline-flow'] as const) : []),
+];
+
 /** One sigma of the baseline as a share: its watts, and for the same water both flows. */
 function baselineSigmaShare({ watts, sigmaWatts, basis }: Baseline, flowSigmaShare: number): number {
   const flow = basis.kind === 'same-volume' ? Math.hypot(basis.sigmaGpm / basis.gpm, flowSigmaShare) : 0;
   return Math.hypot(sigmaWatts / watts, flow);
 }
+
+/**
+ * One sigma of a difference between what the old motor would have used (or cost) and what the new one did, in the same
+ * unit; `shares` are one sigma of the meter and of its flow, as shares.
+ *
+ * @example sigmaOfSavings(baseline, { meter: 0.02, flow: 0 }, { before: 400, after: 100 }) // 12.2, of watts known to 3 %
+ */
+export const sigmaOfSavings = (
+  baseline: Baseline,
+  shares: { readonly meter: number; readonly flow: number },
+  { before, after }: { readonly before: number; readonly after: number },
+): number => Math.hypot(baselineSigmaShare(baseline, shares.flow) * before, shares.meter * after);
 
 /**
  * What was saved against a stated baseline, in kWh and in money (micros) under one tariff: the old motor's watts over
@@ -97,16 +129,17 @@ export function computeSavings(
   const [old, now] = [priceEnergy(tariff, before, options), priceEnergy(tariff, usage, options)];
   if (!old.ok) return old;
   if (!now.ok) return now;
-  const [oldShare, nowShare] = [baselineSigmaShare(baseline, flowSigmaShare), meterSigmaShare];
-  const hadFlow = baseline.basis.kind === 'same-volume';
-  const stipulated = [...STIPULATED[baseline.kind], ...(hadFlow ? (['baseline-flow'] as const) : [])];
+  const shares = { meter: meterSigmaShare, flow: flowSigmaShare };
+  const sigma = (of: 'kwh' | 'micros') =>
+    sigmaOfSavings(baseline, shares, { before: old.value[of], after: now.value[of] });
+  const stipulated = stipulatedBy(baseline);
   return accepted({
     baselineKwh: old.value.kwh,
     actualKwh: now.value.kwh,
     savedKwh: old.value.kwh - now.value.kwh,
-    sigmaKwh: Math.hypot(oldShare * old.value.kwh, nowShare * now.value.kwh),
+    sigmaKwh: sigma('kwh'),
     savedMicros: old.value.micros - now.value.micros,
-    sigmaMicros: Math.hypot(oldShare * old.value.micros, nowShare * now.value.micros),
+    sigmaMicros: sigma('micros'),
     method: stipulated.length === 0 ? 'B' : 'A',
     stipulated,
     coverageShare:

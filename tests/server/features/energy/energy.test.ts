@@ -227,6 +227,27 @@ describe('what was saved', () => {
     expect(fleet.days.map((day: { kwh: number }) => Math.round(day.kwh))).toEqual([72, 75, 72, 72, 72, 72, 0]);
     expect(fleet.periods[0]).toMatchObject({ name: 'Period 1', cost: pump.totals.cost });
   });
+
+  it('is kept with the days: the hours are not read for it, and it is what the request worked out itself', async () => {
+    const path = `/api/pumps/${filter}/energy${WINDOW}`;
+    const fromHours = async () => {
+      await pools.machine.query('update pump_days set compared_by = null where pump_id = $1', [filter]);
+      return (await ok(path, ours.manager)).saved;
+    };
+    const stored = (await ok(path, ours.manager)).saved;
+    expect(await fromHours()).toEqual({ ...stored, sigmaKwh: expect.closeTo(stored.sigmaKwh, 6) });
+    await pools.machine.query(
+      `insert into rollup_marks (id, company_id, pump_id, kind, from_at, to_at)
+       values (gen_random_uuid(), $1, $2, 'prices', 'epoch', now())`,
+      [ours.companyId, filter],
+    );
+    await rollUp();
+    const hours = await pools.machine.query('update pump_day_hours set on_ms = array[]::int[] where pump_id = $1', [
+      filter,
+    ]);
+    expect(hours.rowCount).toBeGreaterThan(0);
+    expect((await ok(path, ours.manager)).saved).toEqual(stored);
+  });
 });
 
 describe('a pad and the company', () => {
