@@ -17,8 +17,8 @@ function byWallHour({ hours }: DayRollup): number[] {
 
 /**
  * Adds what a pump's day differs from what is stored of it to the company's day, so that a fleet's day is one row however
- * many pumps it has. To be called before the new day is written, in its transaction. `hours` are the day's, by wall clock,
- * of which the stored ones have a doubled hour apart.
+ * many pumps it has. To be called before the new day is written, in its transaction. Hours are added by wall clock; the
+ * stored ones have a doubled hour apart, and know which they are: the pad may have been given another zone since.
  */
 export async function addToCompanyDay(
   database: Database,
@@ -30,9 +30,9 @@ export async function addToCompanyDay(
     name: 'rollup-company-day',
     text: `with old as (
         select array(select coalesce(sum(wh), 0)::float8 from generate_series(0, 23) wall(hour)
-          left join unnest(h.watt_hours, $5::int[]) as stored(wh, hour) on stored.hour = wall.hour
+          left join unnest(h.watt_hours, coalesce(h.wall_hours, $5::int2[])) as stored(wh, hour) on stored.hour = wall.hour
           group by wall.hour order by wall.hour) as hours
-        from pump_day_hours h where h.pump_id = $2 and h.day = $3::date and cardinality(h.watt_hours) = cardinality($5::int[])),
+        from pump_day_hours h where h.pump_id = $2 and h.day = $3::date),
       delta as (
         select array(select fresh.wh - coalesce((select o.hours[fresh.place] from old o), 0)
           from unnest($4::float8[]) with ordinality as fresh(wh, place) order by fresh.place) as hours,

@@ -24,13 +24,13 @@ const DAY = `insert into pump_days (pump_id, company_id, day, from_at, to_at, wa
     watts_min = excluded.watts_min, watts_max = excluded.watts_max, source_ms = excluded.source_ms`;
 
 const HOURS = `insert into pump_day_hours (pump_id, company_id, day, from_at, watt_hours, quarter_watt_hours, gallons, on_ms,
-    covered_ms, unknown_flow_ms, rpm_mean, rpm_min, rpm_max, watts_mean, watts_min, watts_max)
-  values ($1, $2, $3, to_timestamp($4::float8 / 1000), $5, $6, $7, $8, $9, $10, $11, $12, $13, $14, $15, $16)
+    covered_ms, unknown_flow_ms, rpm_mean, rpm_min, rpm_max, watts_mean, watts_min, watts_max, wall_hours)
+  values ($1, $2, $3, to_timestamp($4::float8 / 1000), $5, $6, $7, $8, $9, $10, $11, $12, $13, $14, $15, $16, $17)
   on conflict (pump_id, day) do update set from_at = excluded.from_at, watt_hours = excluded.watt_hours,
     quarter_watt_hours = excluded.quarter_watt_hours, gallons = excluded.gallons, on_ms = excluded.on_ms,
     covered_ms = excluded.covered_ms, unknown_flow_ms = excluded.unknown_flow_ms, rpm_mean = excluded.rpm_mean,
     rpm_min = excluded.rpm_min, rpm_max = excluded.rpm_max, watts_mean = excluded.watts_mean,
-    watts_min = excluded.watts_min, watts_max = excluded.watts_max`;
+    watts_min = excluded.watts_min, watts_max = excluded.watts_max, wall_hours = excluded.wall_hours`;
 
 const FIVES = `insert into pump_day_fives (pump_id, company_id, day, from_at, watt_hours, rpm_mean, rpm_min, rpm_max,
     watts_mean, watts_min, watts_max, closed_inputs)
@@ -92,6 +92,7 @@ async function writeHours(database: Database, key: Key, { day, hours }: DayRollu
       hours.map(({ onWattMs, onMs }) => meanOf(onWattMs, onMs)),
       hours.map(({ wattsMin }) => wattsMin ?? null),
       hours.map(({ wattsMax }) => wattsMax ?? null),
+      hours.map(({ hour }) => hour),
     ],
   });
 }

@@ -1,4 +1,4 @@
-import { date, foreignKey, integer, pgTable, primaryKey, real, uuid } from 'drizzle-orm/pg-core';
+import { date, foreignKey, integer, pgTable, primaryKey, real, smallint, uuid } from 'drizzle-orm/pg-core';
 import { companyId, instant } from './columns.ts';
 import { appReads, machineWorks, ofVisiblePumpSince } from './policies.ts';
 import { pumps } from './pumps.ts';
@@ -14,6 +14,8 @@ export const pumpDayHours = pgTable(
     companyId: companyId(),
     fromAt: instant('from_at').notNull(),
     day: date({ mode: 'string' }).notNull(),
+    /** Which hour of the wall clock each element is, 0 to 23, in the zone of the pad then; null = as the zone is now. */
+    wallHours: smallint('wall_hours').array(),
     wattHours: real('watt_hours').array().notNull(),
     /** The largest quarter-hour's watt-hours: what a demand price goes by. */
     quarterWattHours: real('quarter_watt_hours').array().notNull(),

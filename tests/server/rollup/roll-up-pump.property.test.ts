@@ -129,6 +129,39 @@ describe('the rollups of a pump', () => {
     );
   }, 120_000);
 
+  it('count once for their company when the pad gets a zone in which the day has another length', async () => {
+    const made = await makePump();
+    const pump = createToldPump(pools.machine, made, CONTEXT);
+    const [from, to] = [wall(ZONE, '2025-11-02 00:00'), wall(ZONE, '2025-11-02 22:00')];
+    const readings = Array.from({ length: (to - from) / 60_000 }, (_, minute): Reading => {
+      return { at: from + minute * 60_000, rpm: 1700, watts: 600, closedInputs: 0, activeInput: 0 };
+    });
+    await pump.tell(readings);
+    await rollUpAll();
+    await pools.machine.query(
+      `update pads set zone = 'America/Phoenix' where id = (select pad_id from pumps where id = $1)`,
+      [made.pumpId],
+    );
+    await pools.machine.query(
+      `insert into rollup_marks (id, company_id, pump_id, kind, from_at, to_at)
+       values (gen_random_uuid(), $1, $2, 'days', '2025-11-01 12:00Z', '2025-11-04 12:00Z')`,
+      [made.companyId, made.pumpId],
+    );
+    await rollUpAll();
+    const { rows } = await pools.machine.query(
+      `select c.day::text as day, c.pumps, c.watt_hours, c.hour_watt_hours from company_days c
+       where c.company_id = $1 order by c.day`,
+      [made.companyId],
+    );
+    const byDay = new Map((await listDays(made.pumpId)).map((day) => [day.day, day]));
+    expect(rows.map(({ day }) => day)).toEqual([...byDay.keys()]);
+    for (const { day, pumps, watt_hours: wattHours, hour_watt_hours: hours } of rows) {
+      expect([day, pumps]).toEqual([day, 1]);
+      expect(wattHours).toBeCloseTo(byDay.get(day).watt_hours, 3);
+      near(hours, byDay.get(day).hour_watt_hours.map(Number), 2);
+    }
+  });
+
   it('add up to the days of their company, wall-clock hour by wall-clock hour', async () => {
     const { rows } = await pools.machine.query(`
       select c.watt_hours as company, sum(d.watt_hours) as pumps, (select sum(x) from unnest(c.hour_watt_hours) x) as hours

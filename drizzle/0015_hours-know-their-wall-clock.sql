@@ -1,0 +1,1 @@
+ALTER TABLE "pump_day_hours" ADD COLUMN "wall_hours" smallint[];
