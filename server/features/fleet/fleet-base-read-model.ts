@@ -16,7 +16,7 @@ function matches(text: string): SQL {
 
 /**
  * One narrow row for every pump the person may see that search and area keep: what filters, sorts and totals need.
- * A silent pump neither runs nor idles, since nobody knows.
+ * A silent pump neither runs nor idles, since nobody knows; one that stands although a speed is due does not idle.
  */
 export function fleetBase({ q, area }: Pick<FleetQuery, 'q' | 'area'>): SQL {
   const kept = [sql`p.monitored`];
@@ -30,7 +30,7 @@ export function fleetBase({ q, area }: Pick<FleetQuery, 'q' | 'area'>): SQL {
       abs(${rpm} - ${expectedRpm}) > greatest(40, 0.02 * ${expectedRpm}) as off_expected,
       s.silent_since is not null as silent,
       s.silent_since is null and ${rpm} > ${STANDSTILL_RPM}::float8 as running,
-      s.silent_since is null and ${rpm} <= ${STANDSTILL_RPM}::float8 as idle,
+      s.silent_since is null and greatest(${rpm}, ${expectedRpm}) <= ${STANDSTILL_RPM}::float8 as idle,
       extract(epoch from s.heard_at)::float8 as heard,
       mark.priority, mark.acknowledged, mark.detector
     from pumps p join pads pad on pad.id = p.pad_id

@@ -1,5 +1,6 @@
 import { type SQL, sql } from 'drizzle-orm';
 import { epochMs } from '#server/db/epoch-ms.ts';
+import { isSetAside } from '#server/db/set-aside.ts';
 import type { Transaction } from '#server/db/transaction.ts';
 import type { Detector, Evidence, Priority } from '#shared/domain/detectors/detector.ts';
 import type { PumpNow } from '#shared/domain/fold/fold-output.ts';
@@ -29,15 +30,15 @@ const priorityRank = sql`case priority when 'urgent' then 0 when 'soon' then 1 e
 
 /**
  * One row a pump that has an open alarm which calls somebody: neither shelved, suppressed by design nor out of
- * service. The worst, of those the one nobody has seen, of those the oldest.
+ * service. The worst, of those the one nobody has seen, of those the oldest. A note waits for a stop and asks nobody to
+ * have seen it: it counts as acknowledged.
  */
 export const openAlarmMarks = (which: SQL = sql`true`) => sql`
-  select distinct on (pump_id) pump_id, id, detector, cause, evidence, priority, state = 'acknowledged' as acknowledged,
+  select distinct on (pump_id) pump_id, id, detector, cause, evidence, priority,
+    state = 'acknowledged' or alarm_class = 'note' as acknowledged,
     ${epochMs(sql`from_at`)} as from_ms, (count(*) over (partition by pump_id))::int as open
-  from alarms
-  where state <> 'normal' and not suppressed and not out_of_service
-    and (shelved_until is null or shelved_until <= now()) and ${which}
-  order by pump_id, ${priorityRank}, state = 'acknowledged', from_at`;
+  from alarms a where state <> 'normal' and not ${isSetAside} and ${which}
+  order by pump_id, ${priorityRank}, acknowledged, from_at`;
 
 /** Columns of PumpLiveRow, for a query that joins `pump_states s` and `openAlarmMarks` as `mark`. */
 export const liveColumns = sql`
