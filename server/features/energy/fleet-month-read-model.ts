@@ -76,7 +76,7 @@ export async function listFleetPeriods(db: Transaction, companyId: string, month
     select name, sum(kwh) as kwh, sum(micros) as micros
     from (select unnest(line_names) as name, unnest(line_kwh) as kwh, unnest(line_micros) as micros from pump_months
       where company_id = ${companyId} and month = ${month}::date and currency = ${currency} offset 0) line
-    group by name order by sum(micros) / nullif(sum(kwh), 0) desc nulls first, name`);
+    group by name order by sum(micros) / nullif(sum(kwh), 0) desc nulls last, name`);
   return rows;
 }
 
