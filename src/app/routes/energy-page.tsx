@@ -1,5 +1,5 @@
 import { useQuery } from '@tanstack/react-query';
-import { useMemo } from 'react';
+import { useMemo, useState } from 'react';
 import { useSearchParams } from 'react-router-dom';
 import { ErrorNotice } from '#src/components/ui/error-notice.tsx';
 import { Figures } from '#src/components/ui/figures.tsx';
@@ -9,7 +9,7 @@ import { energyQueries } from '#src/features/energy/energy-queries.ts';
 import { FleetDays } from '#src/features/energy/fleet-days.tsx';
 import { FleetSummary, fleetHeading, listFleetNotes } from '#src/features/energy/fleet-summary.tsx';
 import { HourSheet } from '#src/features/energy/hour-sheet.tsx';
-import { earlierOf, monthAt } from '#src/features/energy/local-month.ts';
+import { dayAt, earlierOf, type MonthText, monthAt, usualMonth } from '#src/features/energy/local-month.ts';
 import { MonthNav } from '#src/features/energy/month-nav.tsx';
 import { PadsSheet } from '#src/features/energy/pads-sheet.tsx';
 import { PeriodTable } from '#src/features/energy/period-table.tsx';
@@ -27,9 +27,14 @@ export function EnergyPage() {
   const now = useNow(60_000);
   const view = useMemo(() => parseEnergyAddress(search), [search]);
   const present = monthAt(company.zone, now);
-  const month = earlierOf(view.month ?? present, present);
+  const [first, setFirst] = useState<MonthText>();
+  const usual = usualMonth(dayAt(company.zone, now), first);
+  const month = earlierOf(view.month ?? usual, present);
   const growing = month === present;
   const { data, isError, error, refetch, isPlaceholderData } = useQuery(energyQueries.fleet(month, growing));
+  // Which month is usual depends on the first there is anything of, and any month's answer names that.
+  const known = data === undefined ? undefined : (data.firstMonth ?? present);
+  if (known !== undefined && known !== first) setFirst(known);
   const hours = useQuery(energyQueries.fleetHours(month, growing));
   return (
     <div className="mx-auto flex max-w-[90rem] flex-col gap-4 px-4 py-5 sm:px-7">
@@ -37,7 +42,7 @@ export function EnergyPage() {
         <PageHeading title={t('energy.page')}>
           {data === undefined ? t('energy.page') : <Figures text={fleetHeading(data, present, format)} />}
         </PageHeading>
-        <MonthNav month={month} present={present} first={data?.firstMonth ?? undefined} />
+        <MonthNav month={month} present={present} usual={usual} first={data?.firstMonth ?? undefined} />
       </div>
       {data === undefined ? (
         isError ? (

@@ -32,12 +32,17 @@ import type { Format } from '#src/lib/format/create-format.ts';
 import { t } from '#src/lib/messages/energy-words.ts';
 import { paths } from '#src/lib/paths.ts';
 
-function headingOf({ padName, totals, currency }: PadEnergy, month: string, format: Format): string {
+function headingOf(
+  { padName, totals, currency }: PadEnergy,
+  { month, soFar }: { readonly month: string; readonly soFar: boolean },
+  format: Format,
+): string {
   const values = { month, kwh: kwhText(totals.kwh, format) };
   if (totals.coveredSeconds === 0) return `${padName}: ${t('energy.heading.none', { month })}`;
-  return totals.cost === null
-    ? `${padName}: ${t('energy.heading.pastKwh', values)}`
-    : `${padName}: ${t('energy.heading.past', { ...values, cost: format.money(totals.cost, currency) })}`;
+  if (totals.cost === null)
+    return `${padName}: ${soFar ? t('energy.heading.sofarKwh', values) : t('energy.heading.pastKwh', values)}`;
+  const priced = { ...values, cost: format.money(totals.cost, currency) };
+  return `${padName}: ${soFar ? t('energy.heading.sofar', priced) : t('energy.heading.past', priced)}`;
 }
 
 /** A month of one pad: all its pumps together, and each. */
@@ -62,16 +67,16 @@ export function PadEnergyPage() {
   return (
     <div className="mx-auto flex max-w-[90rem] flex-col gap-4 px-4 py-5 sm:px-7">
       <div>
-        <Link
-          to={paths.energy({ month: month === present ? undefined : month })}
-          data-print="never"
-          className="text-ink-2 underline underline-offset-2"
-        >
+        <Link to={paths.energy({ month })} data-print="never" className="text-ink-2 underline underline-offset-2">
           {t('energy.pads.back')}
         </Link>
         <div className="flex flex-wrap items-start justify-between gap-x-6 gap-y-2">
           <PageHeading title={data === undefined ? t('energy.page') : t('energy.pad', { pad: data.padName })}>
-            {data === undefined ? t('energy.page') : <Figures text={headingOf(data, name, format)} />}
+            {data === undefined ? (
+              t('energy.page')
+            ) : (
+              <Figures text={headingOf(data, { month: name, soFar: growing }, format)} />
+            )}
           </PageHeading>
           <MonthNav month={month} present={present} />
         </div>

@@ -6,7 +6,7 @@ import { type MonthText, parseMonth } from './local-month.ts';
 export const PROGRAM_SHOWS = ['costly', 'dear-hours', 'all'] as const;
 export const PROGRAM_SORTS = ['saved', 'share', 'name'] as const;
 
-/** What the energy page is turned to, as its address says; `month` undefined = the present one. */
+/** What the energy page is turned to, as its address says; `month` undefined = the usual one. */
 export type EnergyView = {
   readonly month: MonthText | undefined;
   readonly sort: PadMonthQuery['sort'];

@@ -35,6 +35,23 @@ export const earlierOf = (left: string, right: string): string => [left, right].
 export const dayAfter = (day: string): string =>
   new Date(Date.parse(`${day}T00:00:00Z`) + 86_400_000).toISOString().slice(0, 10);
 
+/** So many days of a month say little of it yet. */
+const FEW_DAYS = 3;
+
+/**
+ * The month a page shows when nobody asked for one: the present one, or the one before while the present has only begun.
+ * `first` is the first month there is anything of, where it is known.
+ *
+ * @example usualMonth('2026-12-01', '2026-11') // '2026-11'
+ * @example usualMonth('2026-12-04', '2026-11') // '2026-12'
+ */
+export function usualMonth(today: string, first: MonthText | undefined): MonthText {
+  const present = today.slice(0, 7);
+  const before = shiftMonth(present, -1);
+  const isEarly = Number(today.slice(8)) <= FEW_DAYS;
+  return isEarly && (first === undefined || first <= before) ? before : present;
+}
+
 /** A month's days, half-open, no further than `last` (a day, included). Undefined where the month lies after it. */
 export function daysOfMonth(
   month: MonthText,

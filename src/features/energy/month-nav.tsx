@@ -8,19 +8,21 @@ import { type MonthText, nameOfMonth, shiftMonth } from './local-month.ts';
 export type MonthNavProps = {
   readonly month: MonthText;
   readonly present: MonthText;
+  /** What is shown when no month is asked for; without it the present one. */
+  readonly usual?: MonthText;
   /** The first there is anything of; undefined = not known. */
   readonly first?: MonthText | undefined;
 };
 
 const LINK = 'inline-flex min-h-8 items-center rounded-control border border-rule-strong bg-sheet px-2.5 hover:bg-wash';
 
-/** A month earlier, a month later; the present one stands in no address. */
-export function MonthNav({ month, present, first }: MonthNavProps) {
+/** A month earlier, a month later; the usual one stands in no address. */
+export function MonthNav({ month, present, usual = present, first }: MonthNavProps) {
   const format = useFormat();
   const [search] = useSearchParams();
   const name = (each: MonthText) => nameOfMonth(each, format.locale, 'short');
   const to = (each: MonthText) => ({
-    search: `${changeSearch(search, { month: each === present ? undefined : each }, ENERGY_USUAL)}`,
+    search: `${changeSearch(search, { month: each === usual ? undefined : each }, ENERGY_USUAL)}`,
   });
   const [earlier, later] = [shiftMonth(month, -1), shiftMonth(month, 1)];
   return (
@@ -32,7 +34,7 @@ export function MonthNav({ month, present, first }: MonthNavProps) {
       ) : null}
       {later <= present ? (
         <Link to={to(later)} preventScrollReset className={LINK}>
-          {t('energy.month.later', { month: name(later) })}
+          {t(later === present ? 'energy.month.present' : 'energy.month.later', { month: name(later) })}
         </Link>
       ) : null}
     </nav>

@@ -24,7 +24,7 @@ const twoDigits = (value: number | null, format: Format) => (value === null ? 'â
 const savedText = ({ saved, savedKwh, currency }: PadMonth, format: Format) =>
   saved === null ? (savedKwh === null ? 'â€“' : kwhText(savedKwh, format)) : format.money(saved, currency);
 
-function listColumns(month: string | undefined, growing: boolean, format: Format): Column<PadMonth>[] {
+function listColumns(month: MonthText, growing: boolean, format: Format): Column<PadMonth>[] {
   const right = { figures: true, right: true };
   return [
     {
@@ -153,7 +153,7 @@ export function PadsSheet({ month, growing, view }: PadsSheetProps) {
             caption={t('energy.pads')}
             rows={pads}
             keyOf={({ padId }) => padId}
-            columns={listColumns(view.month, growing, format)}
+            columns={listColumns(month, growing, format)}
           />
         )}
         {hasNextPage ? (

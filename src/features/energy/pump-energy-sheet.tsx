@@ -23,6 +23,7 @@ import {
   nameOfMonth,
   parseMonth,
   shiftMonth,
+  usualMonth,
 } from './local-month.ts';
 import { MonthNav } from './month-nav.tsx';
 import { SavedFacts } from './saved-facts.tsx';
@@ -46,16 +47,16 @@ function useAsked({ zone, visibleFrom }: EnergyPump, now: number) {
   const [search] = useSearchParams();
   const by = search.get('by') === 'month' ? ('month' as const) : ('day' as const);
   const present = monthAt(zone, now);
-  const asked = parseMonth(search.get('month')) ?? present;
-  const month = earlierOf(asked, present);
   const today = dayAt(zone, now);
   const first = dayAt(zone, visibleFrom);
+  const usual = usualMonth(today, first.slice(0, 7));
+  const month = earlierOf(parseMonth(search.get('month')) ?? usual, present);
   const from = [`${shiftMonth(present, -MONTHS_BACK)}-01`, first].sort().at(-1) ?? first;
   const span =
     by === 'month'
       ? { from, until: dayAfter(today), by, growing: true }
       : { ...(daysOfMonth(month, today) ?? { from: today, until: dayAfter(today) }), by, growing: month === present };
-  return { by, month, present, span };
+  return { by, month, present, usual, span };
 }
 
 /** What a pump used, cost and moved, by day or month, and what was saved; every figure with how sure it is. */
@@ -64,7 +65,7 @@ export function PumpEnergySheet({ pump }: { readonly pump: EnergyPump }) {
   const { user } = useSession();
   const now = useNow(60_000);
   const [search] = useSearchParams();
-  const { by, month, present, span } = useAsked(pump, now);
+  const { by, month, present, usual, span } = useAsked(pump, now);
   const { data, isError, error, refetch, isPlaceholderData } = useQuery(energyQueries.pump(pump.pumpId, span));
   const name = nameOfMonth(month, format.locale);
   const to = (next: 'day' | 'month') => ({ search: `${changeSearch(search, { by: next }, ENERGY_USUAL)}` });
@@ -75,7 +76,7 @@ export function PumpEnergySheet({ pump }: { readonly pump: EnergyPump }) {
       aside={
         <div className="flex flex-wrap items-center gap-2">
           {by === 'day' ? (
-            <MonthNav month={month} present={present} first={monthAt(pump.zone, pump.visibleFrom)} />
+            <MonthNav month={month} present={present} usual={usual} first={monthAt(pump.zone, pump.visibleFrom)} />
           ) : null}
           <nav aria-label={t('energy.by')} data-print="never" className="flex gap-1.5">
             {(['day', 'month'] as const).map((each) => (
@@ -103,7 +104,7 @@ export function PumpEnergySheet({ pump }: { readonly pump: EnergyPump }) {
         <div aria-busy={isPlaceholderData} className="flex flex-col gap-4 px-4 py-4 sm:px-5">
           <PumpFigures pump={pump} energy={data} now={now} file={`energy-${by === 'day' ? month : 'months'}`} />
           {user.role === 'manager' ? (
-            <Link to={paths.padEnergy(pump.padId)} className="self-start underline underline-offset-2">
+            <Link to={paths.padEnergy(pump.padId, { month })} className="self-start underline underline-offset-2">
               {t('energy.toPad')}
             </Link>
           ) : null}

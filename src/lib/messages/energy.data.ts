@@ -5,6 +5,7 @@ export const ENERGY_MESSAGES = {
   'energy.month.which': 'Which month',
   'energy.month.earlier': '‹ {month}',
   'energy.month.later': '{month} ›',
+  'energy.month.present': '{month} so far ›',
   'energy.heading.past': '{month} used {kwh} and cost {cost}.',
   'energy.heading.pastKwh': '{month} used {kwh}.',
   'energy.heading.sofar': '{month} has used {kwh} so far, for {cost}.',
@@ -103,8 +104,8 @@ export const ENERGY_MESSAGES = {
   'energy.periods.none': 'Without a tariff there are no periods.',
   'energy.hours': 'Hour by hour',
   'energy.hours.detail':
-    'Each column is an hour of the wall clock, each row a day; the darker, the more. Above it the price of a first kWh: hatched is dear.',
-  'energy.hours.plain': 'Each column is an hour of the wall clock, each row a day; the darker, the more.',
+    'Each column is an hour of the wall clock, each row a day; the more ink, the more energy. Above it the price of a first kWh: hatched is dear.',
+  'energy.hours.plain': 'Each column is an hour of the wall clock, each row a day; the more ink, the more energy.',
   'energy.hours.name': 'Energy by day and hour in {month}',
   'energy.hours.cell': '{day}, {time}: {kwh}',
   'energy.hours.cellNone': '{day}, {time}: no reading',

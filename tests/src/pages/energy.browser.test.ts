@@ -20,14 +20,17 @@ describe('the energy page', () => {
     await page.getByText('± $63.20').first().waitFor();
   });
 
-  it('goes from month to month by links, none into the future', async () => {
+  it('opens at the last whole month while the present one has only begun, and goes on by links, none into the future', async () => {
     const { page } = await bench.open('/energy', { role: 'manager' });
-    await page.getByRole('heading', { level: 1, name: /^December 2026 has used/ }).waitFor();
+    await page.getByRole('heading', { level: 1, name: /^November 2026 used/ }).waitFor();
     const months = page.getByRole('navigation', { name: 'Which month' });
+    await months.getByRole('link', { name: 'Dec 2026 so far ›' }).click();
+    await page.getByRole('heading', { level: 1, name: /^December 2026 has used/ }).waitFor();
+    expect(new URL(page.url()).search).toBe('?month=2026-12');
     expect(await months.getByRole('link').allTextContents()).toEqual(['‹ Nov 2026']);
     await months.getByRole('link').click();
-    expect(new URL(page.url()).search).toBe('?month=2026-11');
     await page.getByRole('heading', { level: 1, name: /^November 2026/ }).waitFor();
+    expect(new URL(page.url()).search).toBe('');
   });
 
   it('says under the pointer what an hour used and cost, and has the hours as a table', async () => {

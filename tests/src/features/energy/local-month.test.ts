@@ -8,6 +8,7 @@ import {
   nameOfMonth,
   parseMonth,
   shiftMonth,
+  usualMonth,
 } from '#src/features/energy/local-month.ts';
 
 describe('a month of an address', () => {
@@ -34,6 +35,13 @@ describe('a month of an address', () => {
     expect(monthAt('America/Los_Angeles', at)).toBe('2026-11');
     expect(dayAt('Europe/Berlin', at)).toBe('2026-12-01');
     expect(dayAfter('2028-02-28')).toBe('2028-02-29');
+  });
+
+  it('is the one before while the present one has only begun, if there was anything then', () => {
+    expect(usualMonth('2026-12-03', undefined)).toBe('2026-11');
+    expect(usualMonth('2027-01-01', '2026-11')).toBe('2026-12');
+    expect(usualMonth('2026-12-03', '2026-12')).toBe('2026-12');
+    expect(usualMonth('2026-12-04', '2026-11')).toBe('2026-12');
   });
 
   it('has a name', () => {
