@@ -66,10 +66,14 @@ export function costCell(
   months: PumpEnergy | undefined,
   format: Format,
 ): HomeCell {
-  const lines = (months?.spans ?? [])
+  const spans = months?.spans ?? [];
+  const present = spans.at(-1)?.label;
+  // On its first day the month is today, which stands above already.
+  const lines = spans
     .slice(-2)
+    .filter(({ label }) => label !== present || today === undefined || !today.label.endsWith('-01'))
     .toReversed()
-    .map((span, index) => monthLine(span, months as PumpEnergy, index === 0, format));
+    .map((span) => monthLine(span, months as PumpEnergy, span.label === present, format));
   const missing = days.money === 'no-tariff' ? [t('home.cost.noTariff')] : [];
   if (today === undefined || today.coveredSeconds === 0) {
     return { figure: '–', lines: [t('home.cost.none'), ...lines, ...missing] };

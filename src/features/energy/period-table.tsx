@@ -48,7 +48,7 @@ export function PeriodTable({ periods, currency, file }: PeriodTableProps) {
                 head: t('energy.column.share'),
                 figures: true,
                 right: true,
-                cell: ({ kwh }) => (all > 0 ? shareText(kwh / all, format) : '–'),
+                cell: ({ kwh }) => (all > 0 && kwh > 0 ? shareText(kwh / all, format) : '–'),
               },
               {
                 head: t('energy.column.cost'),

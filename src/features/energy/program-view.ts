@@ -34,6 +34,12 @@ export function spellMonths(months: readonly number[], locale: string): string {
   return stretches.map(([from, to]) => (from === to ? name(from) : `${name(from)}–${name(to)}`)).join(', ');
 }
 
+/** In which months, or all year. */
+const spellWhen = (months: readonly number[], locale: string): string =>
+  new Set(months).size === 12
+    ? t('program.dear.allYear')
+    : t('program.dear.inMonths', { months: spellMonths(months, locale) });
+
 type Dear = ProgramRow['dearHours'][number];
 
 export const nameOfCaller = ({ caller }: Dear): string =>
@@ -45,7 +51,7 @@ export const nameOfCaller = ({ caller }: Dear): string =>
 export const dearLine = (dear: Dear, currency: string | null, format: Format): string =>
   t('program.dear.line', {
     what: nameOfCaller(dear),
-    months: spellMonths(
+    when: spellWhen(
       dear.months.map(({ month }) => month),
       format.locale,
     ),

@@ -9,7 +9,7 @@ import {
   waterWords,
 } from '#src/features/energy/energy-view.ts';
 import { costCell, turnoverLine, waterCell } from '#src/features/energy/home-words.ts';
-import { spellMonths } from '#src/features/energy/program-view.ts';
+import { dearLine, spellMonths } from '#src/features/energy/program-view.ts';
 import { savedLine, savedMethod } from '#src/features/energy/saved-view.ts';
 import { isEveryDay } from '#src/features/energy/week-strip.tsx';
 import { createFormat } from '#src/lib/format/create-format.ts';
@@ -136,10 +136,13 @@ describe('for a homeowner', () => {
   });
 
   it('cost is today’s and the months’, or energy alone without a tariff', () => {
-    const cell = costCell(today, days, energyBy('month'), us);
+    const cell = costCell({ ...today, label: '2026-12-02' }, days, energyBy('month'), us);
     expect(cell.figure).toMatch(/^\$\d+\.\d\d$/);
     expect(cell.lines[0]).toMatch(/^December 2026 so far: \$/);
     expect(cell.lines[1]).toMatch(/^November 2026 came to \$/);
+    // On the first of a month "so far" would say today's figure a second time.
+    const first = costCell({ ...today, label: '2026-12-01' }, days, energyBy('month'), us);
+    expect(first.lines[0]).toMatch(/^November 2026 came to \$/);
     const plain = costCell({ ...today, cost: null }, energyBy('day', false), energyBy('month', false), us);
     expect(plain.figure).toMatch(/kWh$/);
     expect(plain.lines.at(-1)).toBe('What a kWh costs you is not recorded, so only the energy is shown.');
@@ -151,6 +154,16 @@ describe('programs', () => {
   it('name months in a row as one stretch', () => {
     expect(spellMonths([5, 6, 7, 11], 'en-US')).toBe('Jun–Aug, Dec');
     expect(spellMonths([3], 'en-US')).toBe('Apr');
+  });
+
+  it('say when something runs at a dear price, and that it does all year', () => {
+    const dear = (months: readonly number[]) => ({
+      caller: { kind: 'clock' as const, input: 1 },
+      months: months.map((month) => ({ month, minutesPerWeek: 60, extraPerWeek: '1.00' })),
+      extraPerYear: '52.00',
+    });
+    expect(dearLine(dear([5, 6, 7]), 'USD', us)).toContain(' at a dear price in Jun–Aug: $52.00 a year');
+    expect(dearLine(dear([0, 1, 2, 3, 4, 5, 6, 7, 8, 9, 10, 11]), 'USD', us)).toContain(' at a dear price all year: ');
   });
 
   it('show one day where all days are alike, also over midnight', () => {
