@@ -2,7 +2,7 @@ import type { Alarm } from '#shared/contract/http/alarms.ts';
 import type { Format } from '#src/lib/format/create-format.ts';
 import { t } from '#src/lib/messages/page-words.ts';
 import { titleOf } from './alarm-names.ts';
-import { describeState } from './alarm-view.ts';
+import { dayOfStop, describeState } from './alarm-view.ts';
 
 type Told = { readonly format: Format; readonly now: number };
 
@@ -11,6 +11,8 @@ export type AlarmColumn = {
   readonly head: string;
   readonly figures?: boolean;
   readonly value: (alarm: Alarm, told: Told) => string | number | null;
+  /** How the page writes it, where a person reads it otherwise than a spreadsheet. */
+  readonly shown?: (alarm: Alarm, told: Told) => string | null;
 };
 
 /** The same columns on the page and in the file, so that neither knows more than the other. */
@@ -30,7 +32,12 @@ export const listAlarmColumns = (): readonly AlarmColumn[] => [
   { head: t('alarms.column.count'), figures: true, value: ({ count }) => count },
   { head: t('alarms.column.state'), value: (alarm, { format, now }) => describeState(alarm, format, now) },
   { head: t('alarms.column.technician'), value: ({ technicianName }) => technicianName },
-  { head: t('alarms.column.nextStop'), figures: true, value: ({ nextStopOn }) => nextStopOn },
+  {
+    head: t('alarms.column.nextStop'),
+    figures: true,
+    value: ({ nextStopOn }) => nextStopOn,
+    shown: ({ nextStopOn, zone }, { format }) => (nextStopOn === null ? null : dayOfStop(nextStopOn, zone, format)),
+  },
   { head: t('alarms.column.found'), value: ({ done }) => done?.found ?? null },
 ];
 

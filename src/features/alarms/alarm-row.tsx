@@ -7,7 +7,7 @@ import { t } from '#src/lib/messages/page-words.ts';
 import { paths } from '#src/lib/paths.ts';
 import { titleOf, whereOf } from './alarm-names.ts';
 import { ALARM_TONE } from './alarm-tone.ts';
-import { describeGroup, describeNextStop, describeSpan, describeState, isWaiting } from './alarm-view.ts';
+import { describeGroup, describeNextStop, describeStanding, isWaiting } from './alarm-view.ts';
 import { EvidenceStrip, type StripSource } from './evidence-strip.tsx';
 import { RowActions } from './row-actions.tsx';
 
@@ -55,15 +55,16 @@ export function AlarmRow({ alarm, now, StripSource, selected, onSelect }: AlarmR
           {alarm.pumpId === null ? (
             <span className="font-medium">{whereOf(alarm)}</span>
           ) : (
-            <Link to={paths.pump(alarm.pumpId)} className="font-medium underline-offset-2 hover:underline">
+            <Link
+              to={paths.pump(alarm.pumpId)}
+              className="inline-block min-h-6 font-medium underline-offset-2 hover:underline"
+            >
               {whereOf(alarm)}
             </Link>
           )}
           {facts.length === 0 ? null : <span className="text-ink-2"> · {facts.join(' · ')}</span>}
         </p>
-        <p className="text-13 text-ink-2">
-          {describeSpan(alarm, format, now)} · {describeState(alarm, format, now)}
-        </p>
+        <p className="text-13 text-ink-2">{describeStanding(alarm, format, now)}</p>
         <p className="mt-1 max-w-prose text-13">{alarmWords(alarm.detector, alarm.cause, alarm.evidence).meaning}</p>
         {alarm.done?.found == null ? null : (
           <blockquote className="mt-1 border-l-2 border-ink pl-3">{alarm.done.found}</blockquote>

@@ -11,11 +11,11 @@ export type AlarmTableProps = { readonly alarms: readonly Alarm[]; readonly now:
 /** The list as a table: the same rows in the same order, figure by figure. */
 export function AlarmTable({ alarms, now }: AlarmTableProps) {
   const format = useFormat();
-  const columns = listAlarmColumns().map(({ head, figures, value }, index) => ({
+  const columns = listAlarmColumns().map(({ head, figures, value, shown = value }, index) => ({
     head,
     ...(figures === undefined ? {} : { figures }),
     cell: (alarm: Alarm) => {
-      const told = value(alarm, { format, now });
+      const told = shown(alarm, { format, now });
       const text = told === null || told === '' ? '–' : told;
       if (index !== TITLE_COLUMN) return text;
       return (

@@ -41,19 +41,20 @@ function describeSuppression({ suppressedBy }: Alarm): string {
   return t('alarm.suppressed');
 }
 
+/** Who saw it and when; a homeowner is not told who. `again` = it waits once more. */
+function describeSeer(by: string | null, time: string, again: boolean): string {
+  if (by === null)
+    return t(again ? 'alarm.state.asksAgain.bySomebody' : 'alarm.state.acknowledged.bySomebody', { time });
+  return t(again ? 'alarm.state.asksAgain' : 'alarm.state.acknowledged', { name: by, time });
+}
+
 /** Who has seen it and how it stands. */
 function describeSeen(alarm: Alarm, moment: (at: number) => string, now: number): string[] {
   const { state, acknowledgedAt, acknowledgedBy: by, alarmClass } = alarm;
   if (state === 'returned') return [t('alarm.state.returned', { time: moment(alarm.returnedAt ?? now) })];
-  // It stood so long that it asks again: who saw it first still matters, and it waits all the same.
-  if (acknowledgedAt !== null && state === 'unacknowledged')
-    return [
-      by === null
-        ? t('alarm.state.unacknowledged')
-        : t('alarm.state.asksAgain', { name: by, time: moment(acknowledgedAt) }),
-    ];
+  // One that stood so long that it asks again waits, and still says who saw it first.
   if (acknowledgedAt !== null && state !== 'latched')
-    return [t('alarm.state.acknowledged', { name: by ?? '–', time: moment(acknowledgedAt) })];
+    return [describeSeer(by, moment(acknowledgedAt), state === 'unacknowledged')];
   if (state === 'latched') return [t('alarm.state.latched')];
   // A note waits for a stop, not for somebody to say that they have seen it.
   return state === 'unacknowledged' && alarmClass === 'alarm' ? [t('alarm.state.unacknowledged')] : [];
@@ -73,6 +74,10 @@ export function describeState(alarm: Alarm, format: Format, now: number): string
   return parts.join(' · ');
 }
 
+/** Since when, and how it stands, where there is something to say of that. */
+export const describeStanding = (alarm: Alarm, format: Format, now: number): string =>
+  [describeSpan(alarm, format, now), describeState(alarm, format, now)].filter((part) => part !== '').join(' · ');
+
 /** What an alarm speaks for that is not one pump's; empty for all others. */
 export function describeGroup({ group, returnedAt }: Alarm): string {
   if (group === null) return '';
@@ -86,7 +91,11 @@ export const describeNextStop = ({ nextStopOn, zone, pumpId }: Alarm, format: Fo
     ? pumpId === null
       ? null
       : t('alarms.noRoute')
-    : t('alarms.nextStop', { day: format.day(instantOfDay(nextStopOn, zone), zone) });
+    : t('alarms.nextStop', { day: dayOfStop(nextStopOn, zone, format) });
+
+/** The calendar day of a stop, as the reader writes days. */
+export const dayOfStop = (day: string, zone: string, format: Format): string =>
+  format.day(instantOfDay(day, zone), zone);
 
 /** Noon of a calendar day at a pad: what writes that day in its zone. */
 const instantOfDay = (day: string, zone: string): number => {

@@ -14,7 +14,7 @@ export function AnswerPanel({ alarm }: { readonly alarm: Alarm }) {
     <section aria-label={t('alarm.actions')} data-print="never" className="flex flex-col gap-2">
       {isNote ? null : <AcknowledgePanel alarm={alarm} />}
       {first === undefined ? null : (
-        <div className="grid gap-2 sm:grid-cols-2">
+        <div className="grid grid-cols-2 gap-2 max-sm:*:px-2">
           <ActButtons alarms={[alarm]} kinds={[first]} look={isNote ? 'main' : 'plain'} touch />
           <ActButtons alarms={[alarm]} kinds={rest} touch />
         </div>

@@ -6,6 +6,7 @@ import { USUAL_TOP_RPM } from '#src/components/charts/strip/strip-metrics.ts';
 import type { StripState, StripWindow } from '#src/components/charts/strip/strip-run.ts';
 import { withSilence } from '#src/components/charts/strip/with-silence.ts';
 import { useElementWidth } from '#src/hooks/use-element-width.ts';
+import { useFormat } from '#src/hooks/use-format.ts';
 import { t } from '#src/lib/messages/page-words.ts';
 import { unprimedSince } from '#src/lib/unprimed-since.ts';
 import { whereOf } from './alarm-names.ts';
@@ -28,6 +29,7 @@ export type EvidenceStripProps = {
 
 /** A day of the pump around the alarm, its beginning marked. */
 export function EvidenceStrip({ pumpId, alarm, now, StripSource }: EvidenceStripProps) {
+  const format = useFormat();
   const [track, width] = useElementWidth<HTMLDivElement>();
   const { from, until } = evidenceWindow(alarm, now);
   const window = useMemo(() => ({ from, until }), [from, until]);
@@ -59,6 +61,11 @@ export function EvidenceStrip({ pumpId, alarm, now, StripSource }: EvidenceStrip
       <div className="h-6">
         <StripAxis window={window} zone={alarm.zone} width={width} />
       </div>
+      {now < until ? null : (
+        <p className="text-13 text-ink-2">
+          {t('alarm.stripDays', { from: format.day(from, alarm.zone), to: format.day(until - 1, alarm.zone) })}
+        </p>
+      )}
     </div>
   );
 }

@@ -6,7 +6,7 @@ import { t } from '#src/lib/messages/page-words.ts';
 import { paths } from '#src/lib/paths.ts';
 import { AlarmList } from './alarm-list.tsx';
 import { titleOf } from './alarm-names.ts';
-import { describeSpan, describeState, isWaiting } from './alarm-view.ts';
+import { describeStanding, isWaiting } from './alarm-view.ts';
 
 export type PumpAlarmsProps = {
   readonly pumpId: string;
@@ -38,9 +38,7 @@ export function PumpAlarms({ pumpId, linked, now }: PumpAlarmsProps) {
                     titleOf(alarm)
                   )}
                 </p>
-                <p className="text-13 text-ink-2">
-                  {describeSpan(alarm, format, now)} · {describeState(alarm, format, now)}
-                </p>
+                <p className="text-13 text-ink-2">{describeStanding(alarm, format, now)}</p>
               </div>
             </div>
           ))

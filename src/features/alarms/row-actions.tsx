@@ -19,7 +19,7 @@ export function RowActions({ alarm }: { readonly alarm: Alarm }) {
   const offered = listOffered(alarm, user.role);
   const shown = open ? offered : offered.slice(0, IN_SIGHT);
   return (
-    <div data-print="never" className="mt-2 flex flex-wrap gap-2 empty:hidden">
+    <div data-print="never" className="mt-2 flex flex-wrap gap-2 empty:hidden max-sm:gap-1 max-sm:*:px-2.5">
       {alarm.alarmClass === 'alarm' ? <AcknowledgeButton alarm={alarm} /> : null}
       <ActButtons alarms={[alarm]} kinds={shown} />
       {offered.length <= IN_SIGHT ? null : (

@@ -6,6 +6,7 @@ import { alarmQueries } from '#src/features/alarms/alarm-queries.ts';
 import {
   acknowledgedBy,
   describeSpan,
+  describeStanding,
   describeState,
   evidenceWindow,
   isWaiting,
@@ -47,9 +48,16 @@ describe('an alarm in words', () => {
     const seen = acknowledgedBy(alarm, 'Ilse Ravn', NOW - HOUR);
     const asked = { ...seen, state: 'unacknowledged' as const };
     expect(describeState(asked, format, NOW)).toBe(
-      'asks again: it still stands since Ilse Ravn acknowledged it, 6:30\u00a0PM',
+      'asks again: Ilse Ravn acknowledged it 6:30\u00a0PM, and it still stands',
     );
     expect(isWaiting(asked)).toBe(true);
+  });
+
+  it('says nothing where there is nothing to say, and names nobody to a homeowner', () => {
+    const note = { ...alarm, alarmClass: 'note' as const, state: 'unacknowledged' as const };
+    expect(describeStanding(note, format, NOW)).toBe(describeSpan(note, format, NOW));
+    const seen = { ...acknowledgedBy(alarm, 'Ilse Ravn', NOW - HOUR), acknowledgedBy: null };
+    expect(describeState(seen, format, NOW)).toBe('acknowledged 6:30\u00a0PM');
   });
 
   it('waits for somebody in three of its states', () => {
