@@ -13,7 +13,7 @@ export type SelectProps<Value extends string> = {
 export function Select<Value extends string>({ label, value, options, onChange, quiet = false }: SelectProps<Value>) {
   const id = useId();
   return (
-    <span className="inline-flex min-h-8 items-center gap-2 text-ink-2">
+    <span className="inline-flex min-h-8 min-w-0 max-w-full items-center gap-2 text-ink-2">
       <label htmlFor={id} className={quiet ? 'sr-only' : undefined}>
         {label}
       </label>
@@ -24,7 +24,7 @@ export function Select<Value extends string>({ label, value, options, onChange, 
           const chosen = options.find((option) => option.value === event.target.value);
           if (chosen !== undefined) onChange(chosen.value);
         }}
-        className="min-h-8 max-w-40 rounded-control border border-ink-2 bg-sheet px-2 text-ink"
+        className="min-h-8 min-w-0 max-w-64 rounded-control border border-ink-2 bg-sheet px-2 text-ink"
       >
         {options.map((option) => (
           <option key={option.value} value={option.value}>

@@ -20,6 +20,17 @@ export type InstantLineProps = {
 /** A minute is as fine as anybody reads a day's strip. */
 const STEP_MS = 60_000;
 
+/** Figures that part between one another, never from their units. */
+const Unbroken = ({ text }: { readonly text: string }) => (
+  <span>
+    {text.split(/(?<=, )/).map((part) => (
+      <span key={part} className="inline-block whitespace-pre">
+        {part}
+      </span>
+    ))}
+  </span>
+);
+
 /** "Why this speed": time, figures and reason of the instant under the cursor. */
 export function InstantLine({ pump, strip, cursor, now, voice, idle }: InstantLineProps) {
   const format = useFormat();
@@ -38,7 +49,7 @@ export function InstantLine({ pump, strip, cursor, now, voice, idle }: InstantLi
         <span className={`px-1.5 text-13 font-medium text-sheet ${at === undefined ? 'bg-ink' : 'bg-focus'}`}>
           {format.time(at ?? now, pump.zone)}
         </span>
-        {figures}
+        {figures === undefined ? null : <Unbroken text={figures} />}
       </p>
       <p className="text-17">
         <Figures text={why} />

@@ -67,7 +67,15 @@ export function ReadingCharts({ pumpId, window, zone, now, growing, topRpm, curs
         <span aria-hidden="true" className="ml-4 inline-block w-6 border-t-2 border-dashed border-ink-3 align-middle" />{' '}
         {t('pump.chart.expected')}
       </h3>
-      <Suspense fallback={<Ruled />}>
+      <Suspense
+        fallback={
+          <>
+            <Ruled />
+            <h3 className="pt-3 pb-1 text-13 text-ink-2">{t('pump.chart.watts')}</h3>
+            <Ruled />
+          </>
+        }
+      >
         {speed === undefined ? (
           <Ruled />
         ) : (

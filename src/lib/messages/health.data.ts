@@ -66,7 +66,7 @@ export const HEALTH_MESSAGES = {
     'On hold {shelved} times, suppressed {suppressed}, out of service {out}; {unexplained} without a name and a reason.',
   'health.target.rate': 'About {acceptable} is acceptable, {most} the most',
   'health.target.ten-minutes': 'About {acceptable}, {most} the most',
-  'health.target.peak': 'Under {share} of periods above {limit}, and none above it',
+  'health.target.peak': '{limit} or fewer; more in under {share} of periods',
   'health.target.flood': 'Begins above {begins} in ten minutes, ends below {ends}: under {share} of the time',
   'health.target.top-ten': 'At most {share}, with a plan for each',
   'health.target.chattering': 'None: three returns within a minute',

@@ -4,6 +4,8 @@ import { darkness, GUTTER, HOURS, type HourLayout, type HourRow, type PriceRow }
 
 const FONT = '500 13px "JetBrains Mono", monospace';
 const LABEL_EVERY_PX = 34;
+/** Between one hour's name and the next. */
+const LABEL_APART = 8;
 
 export type HourPicture = {
   readonly rows: readonly HourRow[];
@@ -39,8 +41,9 @@ export function paintHours(brush: Brush, picture: HourPicture): void {
 }
 
 function paintHead({ context, colours }: Brush, { layout, hourLabel }: HourPicture): void {
-  const every = layout.cell * 3 >= 52 ? 3 : 6;
   context.fillStyle = colours.ink;
+  const widest = Math.max(...[0, 6, 12, 18].map((hour) => context.measureText(hourLabel(hour)).width)) + LABEL_APART;
+  const every = [3, 6, 12].find((hours) => layout.cell * hours >= widest) ?? HOURS;
   for (let hour = 0; hour < HOURS; hour += every) {
     context.fillText(hourLabel(hour), GUTTER + hour * layout.cell + 1, layout.headHeight / 2);
   }

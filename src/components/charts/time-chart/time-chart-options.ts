@@ -51,7 +51,12 @@ function axes({ window, zone, format, colours, width }: ChartSetting): uPlot.Axi
   const ticks = listTicks(window, zone, width - CHART_GUTTER, LABEL_APART);
   const grid = { stroke: colours.rule, width: 1 };
   const common = { stroke: colours.ink, font: FONT, grid, ticks: { show: false } };
-  const minuteOf = new Map(ticks.map(({ at, minute }) => [at / 1000, minute]));
+  // A name that would be cut off at the right edge is left out; its line stays.
+  const named = new Map(
+    ticks
+      .filter(({ x }) => x + LABEL_APART * 0.75 < width - CHART_GUTTER)
+      .map(({ at, minute }) => [at / 1000, { at, minute }]),
+  );
   return [
     {
       ...common,
@@ -59,9 +64,10 @@ function axes({ window, zone, format, colours, width }: ChartSetting): uPlot.Axi
       align: 1,
       splits: () => ticks.map(({ at }) => at / 1000),
       values: (_, splits) =>
-        splits.map((second) =>
-          axisLabel({ at: second * 1000, minute: minuteOf.get(second) ?? 1 }, window, zone, format),
-        ),
+        splits.map((second) => {
+          const tick = named.get(second);
+          return tick === undefined ? '' : axisLabel(tick, window, zone, format);
+        }),
     },
     { ...common, size: CHART_GUTTER, values: (_, splits) => splits.map((value) => format.number(value)) },
   ];
