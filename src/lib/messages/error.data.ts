@@ -10,7 +10,8 @@ export const ERROR_MESSAGES = {
   'error.unauthenticated': 'You are not signed in any more.',
   'error.unauthenticated.detail': 'Sign in again; you come back to this page.',
   'error.forbidden': 'This page is not for your role.',
-  'error.forbidden.detail': 'Your company’s manager decides who sees what. If you need it for your work, ask them.',
+  'error.forbidden.detail':
+    'It is for others of your company, or of the company that looks after your pump. If you need it, ask them.',
   'error.not-found': 'There is no such thing here.',
   'error.not-found.detail': 'It may have been removed, or the link belongs to another company’s sign-in.',
   'error.conflict': 'Somebody else has changed this meanwhile.',

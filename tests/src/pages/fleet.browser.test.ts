@@ -197,7 +197,9 @@ describe('when something is wrong', () => {
 
   it('is not for a homeowner', async () => {
     const { page } = await bench.open('/fleet', { role: 'homeowner' });
-    await page.getByRole('alert').getByText('This page is not for your role.').waitFor();
+    await page.getByRole('heading', { level: 1, name: 'This page is not for your role.' }).waitFor();
+    await page.getByRole('link', { name: 'Go to the first page' }).click();
+    await page.waitForURL(/my-pump/);
   });
 
   it('fades when the connection is lost, says since when, and catches up by itself', async () => {
