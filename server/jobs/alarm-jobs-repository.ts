@@ -9,8 +9,18 @@ type Database = Pick<pg.ClientBase, 'query'>;
 
 export type ExplainedAlarm = { readonly alarm: OpenAlarm; readonly pump: PumpStanding };
 
-/** Suppressed alarms of single pumps, locked, each with what may explain it now. */
-export async function lockExplainedAlarms(database: Database): Promise<ExplainedAlarm[]> {
+/** Suppressed alarms of single pumps, each with what may explain it now. */
+export const listExplainedAlarms = (database: Database): Promise<ExplainedAlarm[]> => selectExplained(database, '', []);
+
+/** Those of some alarms that are suppressed still, locked. */
+export const lockExplainedAlarms = (database: Database, alarmIds: readonly string[]): Promise<ExplainedAlarm[]> =>
+  selectExplained(database, 'and a.id = any($1::uuid[]) order by a.id for update of a', [alarmIds]);
+
+async function selectExplained(
+  database: Database,
+  which: string,
+  values: readonly unknown[],
+): Promise<ExplainedAlarm[]> {
   const { rows } = await database.query<
     AlarmRow & { readonly pad_state: PadState; readonly standing: readonly Detector[] }
   >(
@@ -18,7 +28,8 @@ export async function lockExplainedAlarms(database: Database): Promise<Explained
        select o.detector from alarms o where o.pump_id = a.pump_id and o.returned_at is null
          and (o.state <> 'normal' or o.done_at is not null)) as standing
      from alarms a join pads pad on pad.id = a.pad_id
-     where a.state <> 'normal' and a.suppressed order by a.id for update of a`,
+     where a.state <> 'normal' and a.suppressed ${which}`,
+    [...values],
   );
   return rows.map((row) => ({
     alarm: toOpenAlarm(row),

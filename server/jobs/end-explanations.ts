@@ -3,7 +3,7 @@ import type { AlarmChange } from '#server/fold/alarm-change.ts';
 import { saveAlarmChanges } from '#server/fold/alarms-repository.ts';
 import { ringForPumps } from '#server/live/ring.ts';
 import { endExplanation } from '#shared/domain/alarms/explanation.ts';
-import { type ExplainedAlarm, lockExplainedAlarms } from './alarm-jobs-repository.ts';
+import { type ExplainedAlarm, listExplainedAlarms, lockExplainedAlarms } from './alarm-jobs-repository.ts';
 import type { Job } from './job.ts';
 
 /** Ends a suppression by design once nothing explains the alarm any more: the pad is open again, its cause is over. */
@@ -11,8 +11,13 @@ export const endExplanations: Job = {
   name: 'end explanations',
   everyMs: 5_000,
   run: async ({ pool, now }) => {
+    const due = (await listExplainedAlarms(pool)).flatMap((explained) => changeOf(explained, now()) ?? []);
+    if (due.length === 0) return;
+    const alarmIds = due.map(({ alarmId }) => alarmId);
     const changes = await asMachine(pool, async (_db, client) => {
-      const ended = (await lockExplainedAlarms(client)).flatMap((explained) => changeOf(explained, now()) ?? []);
+      // Something may explain one again since it was listed: locked, it is looked at once more.
+      const explained = await lockExplainedAlarms(client, alarmIds);
+      const ended = explained.flatMap((one) => changeOf(one, now()) ?? []);
       await saveAlarmChanges(client, ended);
       return ended;
     });

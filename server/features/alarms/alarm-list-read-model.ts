@@ -1,10 +1,12 @@
 import { type SQL, sql } from 'drizzle-orm';
 import { likePattern } from '#server/db/like-pattern.ts';
+import { isSetAside } from '#server/db/set-aside.ts';
 import type { Transaction } from '#server/db/transaction.ts';
 import type { SortKeys } from '#server/http/page-cursor.ts';
 import type { AlarmPage, AlarmsQuery } from '#shared/contract/http/alarms.ts';
 import { alarmColumns, alarmFrom, placeName } from './alarm-columns-read-model.ts';
 import type { AlarmRow } from './alarm-row.ts';
+import { isOf, speaksFor } from './whose-alarm.ts';
 
 type Sort = AlarmsQuery['sort'];
 
@@ -30,9 +32,6 @@ export const SORT_SHAPES: Readonly<Record<Sort, readonly ('number' | 'string')[]
   name: ['string', 'number', 'string'],
 };
 
-/** Set aside by a person or by design: it calls nobody. */
-const isSetAside = sql`(a.shelved_until is not null or a.suppressed or a.out_of_service)`;
-
 const SHOWN: Readonly<Record<AlarmsQuery['show'], SQL>> = {
   open: sql`a.state <> 'normal' and not ${isSetAside}`,
   unacknowledged: sql`a.state in ('unacknowledged', 'returned', 'latched') and not ${isSetAside}`,
@@ -44,16 +43,6 @@ const SHOWN: Readonly<Record<AlarmsQuery['show'], SQL>> = {
   all: sql`true`,
 };
 
-/** An alarm without a pump of its own that speaks for such a pump. */
-const speaksFor = (which: SQL) =>
-  sql`(a.pump_id is null and exists (select from alarm_members m join pumps mp on mp.id = m.pump_id
-    join pads mpad on mpad.id = mp.pad_id where m.alarm_id = a.id and ${which}))`;
-
-/** Alarms that go to a technician: given to them, of their pads, or speaking for one of these. */
-const isOf = (userId: string) =>
-  sql`(coalesce(a.assigned_to, pad.technician_id) = ${userId}
-    or a.assigned_to is null and ${speaksFor(sql`mpad.technician_id = ${userId}`)})`;
-
 function conditions(query: AlarmsQuery, userId: string): SQL {
   const all = [SHOWN[query.show]];
   if (query.alarmClass !== undefined) all.push(sql`a.alarm_class = ${query.alarmClass}`);
@@ -62,7 +51,7 @@ function conditions(query: AlarmsQuery, userId: string): SQL {
   if (query.pumpId !== undefined)
     all.push(sql`(a.pump_id = ${query.pumpId} or ${speaksFor(sql`m.pump_id = ${query.pumpId}`)})`);
   if (query.area !== undefined) all.push(sql`coalesce(pad.area, a.group_area) = ${query.area}`);
-  if (query.whose === 'mine') all.push(isOf(userId));
+  if (query.whose === 'mine') all.push(isOf(sql`${userId}`));
   if (query.q !== undefined && query.q !== '') {
     const pattern = likePattern(query.q);
     all.push(

@@ -1,14 +1,15 @@
 import { sql } from 'drizzle-orm';
 import type { Context } from '#server/context.ts';
+import { isSetAside } from '#server/db/set-aside.ts';
 import { invalid } from '#server/errors.ts';
 import type { Technicians } from '#shared/contract/http/alarm-acts.ts';
+import { isOf } from './whose-alarm.ts';
 
 /** Technicians of the company who have not left, each with the open alarms that go to them; by name. */
 export async function listTechnicianRows({ db, actor }: Context): Promise<Technicians['items']> {
   const { rows } = await db.execute<Technicians['items'][number]>(sql`
     select u.id, u.name, (select count(*) from alarms a left join pads pad on pad.id = a.pad_id
-      where a.state <> 'normal' and a.alarm_class = 'alarm' and a.shelved_until is null and not a.suppressed
-        and not a.out_of_service and coalesce(a.assigned_to, pad.technician_id) = u.id)::int as "openAlarms"
+      where a.state <> 'normal' and a.alarm_class = 'alarm' and not ${isSetAside} and ${isOf(sql`u.id`)})::int as "openAlarms"
     from users u where u.company_id = ${actor.companyId} and u.role = 'technician' and u.disabled_at is null
     order by u.name, u.id`);
   return rows;

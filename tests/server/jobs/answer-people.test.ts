@@ -230,6 +230,21 @@ describe('an alarm that another one explained', () => {
     expect(await stateOf(id)).toMatchObject({ suppressed: false, state: 'returned', kinds: ['suppression-ended'] });
   });
 
+  it('is ended without waiting for others that somebody has in hand and that are explained still', async () => {
+    const now = Date.now();
+    await add(0, raise(now, { detector: 'stopped' }));
+    const held = await add(0, hush(raise(now, { detector: 'wrong-speed' }), now + 1, { consequenceOf: 'stopped' }));
+    const free = await add(6, hush(raise(now, { detector: 'wrong-speed' }), now + 1, { consequenceOf: 'stopped' }));
+    const other = await machine.connect();
+    await other.query('begin');
+    await other.query('select from alarms where id = $1 for update', [held]);
+    await run(endExplanations, now + 2);
+    await other.query('rollback');
+    other.release();
+    expect((await stateOf(held))?.suppressed).toBe(true);
+    expect((await stateOf(free))?.suppressed).toBe(false);
+  });
+
   it('stays suppressed while the pad’s state mutes it', async () => {
     const now = Date.now();
     const { padIds } = company;

@@ -135,6 +135,21 @@ describe('giving an alarm to a technician', () => {
     const { body } = await server.ask('GET', '/api/technicians', { as: company.manager });
     expect(body.items).toEqual([{ id: company.technician.userId, name: expect.any(String), openAlarms: 1 }]);
   });
+
+  it('counts an alarm that speaks for several of their pads', async () => {
+    const { id } = await raise();
+    const { pumpId } = company.pumps[0]!;
+    await pools.machine.query(
+      `update alarms set pump_id = null, pad_id = null, group_key = 'power Northside', group_kind = 'power' where id = $1`,
+      [id],
+    );
+    await pools.machine.query(
+      'insert into alarm_members (company_id, alarm_id, pump_id, joined_at) values ($1, $2, $3, now())',
+      [company.companyId, id, pumpId],
+    );
+    const { body } = await server.ask('GET', '/api/technicians', { as: company.manager });
+    expect(body.items[0].openAlarms).toBe(1);
+  });
 });
 
 describe('“nothing to do”', () => {
