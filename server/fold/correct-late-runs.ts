@@ -18,14 +18,14 @@ type Options = { readonly pool: pg.Pool; readonly epoch: number };
 export async function correctLateRuns({ pool, epoch }: Options, slot: PumpSlot): Promise<boolean> {
   const { pumpId, pumpNumber, context } = slot.pump;
   const lateAt = [...slot.lateAt];
-  const stretch = await asMachine(pool, async (_db, client) => {
+  const stretch = await asMachine(pool, async (db, client) => {
     const stored = await listStoredRuns(client, pumpId, Math.min(...lateAt) - DAY_MS);
     const touched = findTouchedStretch(stored, lateAt);
     if (touched === undefined) return undefined;
     const { from, to } = touched;
     const readings = await listReadings(client, pumpNumber, from - LEAD_IN_MS, to);
     const runs = refoldRuns(context, readings, { from, to, lateAt, stored });
-    await replaceRuns(client, { epoch, pumpId, from, to }, runs);
+    await replaceRuns(client, db, { epoch, pumpId, from, to }, runs);
     return touched;
   });
   if (stretch === undefined) return false;

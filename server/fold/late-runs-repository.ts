@@ -1,5 +1,7 @@
 import type pg from 'pg';
-import { newId } from '#server/db/new-id.ts';
+import { markPump } from '#server/db/rollup-marks.ts';
+import { RUN_COLUMNS, type StoredRun, toRun } from '#server/db/stored-run.ts';
+import type { Transaction } from '#server/db/transaction.ts';
 import { READING_COLUMNS, type ReadingRow, toReading } from '#server/ingest/reading-row.ts';
 import type { Reading } from '#shared/domain/readings/reading.ts';
 import type { Run } from '#shared/domain/runs/run.ts';
@@ -7,32 +9,15 @@ import { toRunJson } from './fold-repository.ts';
 
 type Database = Pick<pg.ClientBase, 'query'>;
 
-type RunRow = Omit<Run, 'from' | 'to' | 'gallons' | 'gallonsSigma'> & {
-  readonly from: number;
-  readonly to: number | null;
-  readonly gallons: number | null;
-  readonly gallonsSigma: number | null;
-};
-
 /** The stored runs of a pump that began at or after an instant, and the one before them, in order. */
 export async function listStoredRuns(database: Database, pumpId: string, from: number): Promise<Run[]> {
-  const { rows } = await database.query<RunRow>(
-    `select date_part('epoch', from_at) * 1000 as from, date_part('epoch', to_at) * 1000 as to, source,
-       expected_source as "expectedSource", closed_inputs as "closedInputs", active_input as "activeInput",
-       expected_rpm as "expectedRpm", mean_rpm as "meanRpm", mean_watts as "meanWatts", watt_hours as "wattHours",
-       covered_ms::float8 as "coveredMs", gallons, gallons_sigma as "gallonsSigma", flags
-     from runs where pump_id = $1 and from_at >= coalesce(
+  const { rows } = await database.query<StoredRun>(
+    `select ${RUN_COLUMNS} from runs where pump_id = $1 and from_at >= coalesce(
        (select max(from_at) from runs where pump_id = $1 and from_at < to_timestamp($2::float8 / 1000)), '-infinity')
      order by from_at`,
     [pumpId, from],
   );
-  return rows.map(({ from: begin, to, gallons, gallonsSigma, ...run }) => ({
-    ...run,
-    from: Math.round(begin),
-    to: to === null ? undefined : Math.round(to),
-    gallons: gallons ?? undefined,
-    gallonsSigma: gallonsSigma ?? undefined,
-  }));
+  return rows.map(toRun);
 }
 
 /** Readings of a pump from an instant to before another, by device time. */
@@ -54,6 +39,7 @@ export async function listReadings(
 /** Puts corrected runs in the place of those that began from `from` to before `to`. The pump must still be ours. */
 export async function replaceRuns(
   database: Database,
+  db: Pick<Transaction, 'execute'>,
   {
     epoch,
     pumpId,
@@ -84,16 +70,7 @@ export async function replaceRuns(
      join pumps p on p.id = r.pump_id`,
     [`[${runs.map((run) => toRunJson(pumpId, run)).join(',')}]`],
   );
-  await markDays(database, pumpId, from, to);
+  // The rollups follow: every day that the stretch touches is worked out again.
+  await markPump(db, pumpId, { kind: 'days', from, to });
   return true;
-}
-
-/** The rollups follow: every day that the stretch touches is worked out again. */
-async function markDays(database: Database, pumpId: string, from: number, to: number): Promise<void> {
-  await database.query(
-    `insert into rollup_marks (id, company_id, pump_id, kind, from_at, to_at)
-     select $4, company_id, id, 'days', to_timestamp($2::float8 / 1000), to_timestamp($3::float8 / 1000)
-     from pumps where id = $1`,
-    [pumpId, from, to, newId()],
-  );
 }

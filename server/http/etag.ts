@@ -46,8 +46,9 @@ export function readIfMatch(request: Request, isRequired: boolean): ExpectedVers
 /** Refuses a change that was made for another version than the present one. */
 export function requireVersion(expected: ExpectedVersion, present: number): void {
   if (expected === undefined || expected === 'any' || expected === present) return;
-  throw new RequestError(
-    'precondition-failed',
-    'Somebody changed it meanwhile. Read it again, then repeat the change.',
-  );
+  throw changedMeanwhile();
 }
+
+/** Refuses a change to what somebody else has changed a moment ago. */
+export const changedMeanwhile = (): RequestError =>
+  new RequestError('precondition-failed', 'Somebody changed it meanwhile. Read it again, then repeat the change.');

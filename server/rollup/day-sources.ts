@@ -1,4 +1,5 @@
 import type pg from 'pg';
+import { RUN_COLUMNS, type StoredRun, toRun } from '#server/db/stored-run.ts';
 import type { SlicedReading } from '#shared/domain/rollup/fill-slices.ts';
 import type { Run } from '#shared/domain/runs/run.ts';
 import type { TakenPump } from './rollup-work.ts';
@@ -9,34 +10,17 @@ type Span = { readonly from: number; readonly to: number };
 /** Readings farther apart than this are a gap whatever the device's interval (at most 60 s, three of them). */
 const REACH_MS = 3_600_000;
 
-type RunRow = Omit<Run, 'to' | 'gallons' | 'gallonsSigma'> & {
-  readonly to: number | null;
-  readonly gallons: number | null;
-  readonly gallonsSigma: number | null;
-};
-
 /** A pump's runs that share time with a stretch, in order. */
 export async function listRunsOver(database: Database, pumpId: string, { from, to }: Span): Promise<Run[]> {
-  const { rows } = await database.query<RunRow>({
+  const { rows } = await database.query<StoredRun>({
     name: 'rollup-runs',
-    text: `select round(date_part('epoch', from_at) * 1000) as from, round(date_part('epoch', to_at) * 1000) as to, source,
-       expected_source as "expectedSource", closed_inputs as "closedInputs", active_input as "activeInput",
-       expected_rpm as "expectedRpm", mean_rpm as "meanRpm", mean_watts as "meanWatts", watt_hours as "wattHours",
-       covered_ms::float8 as "coveredMs", gallons, gallons_sigma as "gallonsSigma", flags
-     from runs where pump_id = $1 and from_at < to_timestamp($3::float8 / 1000)
+    text: `select ${RUN_COLUMNS} from runs where pump_id = $1 and from_at < to_timestamp($3::float8 / 1000)
        and from_at >= coalesce((select max(from_at) from runs where pump_id = $1 and from_at <= to_timestamp($2::float8 / 1000)),
          '-infinity')
      order by from_at`,
     values: [pumpId, from, to],
   });
-  return rows
-    .map(({ to, gallons, gallonsSigma, ...run }) => ({
-      ...run,
-      to: to ?? undefined,
-      gallons: gallons ?? undefined,
-      gallonsSigma: gallonsSigma ?? undefined,
-    }))
-    .filter((run) => run.to === undefined || run.to > from);
+  return rows.map(toRun).filter((run) => run.to === undefined || run.to > from);
 }
 
 /**

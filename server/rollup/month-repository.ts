@@ -1,11 +1,12 @@
 import { sql } from 'drizzle-orm';
 import { dayText, nextMonth } from '#server/db/day-text.ts';
 import { instantOfMs } from '#server/db/epoch-ms.ts';
+import type { Mark } from '#server/db/rollup-marks.ts';
 import type { MonthLine, MonthSaved } from '#server/db/schema/pump-months.ts';
 import type { Transaction } from '#server/db/transaction.ts';
 import type { Bill } from '#shared/domain/energy/month-bill.ts';
 import { localDayAt } from '#shared/domain/time/local-days.ts';
-import type { Mark, TakenPump } from './rollup-work.ts';
+import type { TakenPump } from './rollup-work.ts';
 
 /** First days of the months with stored hours that a stretch touches. */
 export async function listMonthsOver(

@@ -1,6 +1,7 @@
 import type pg from 'pg';
 import { monthStart } from '#server/db/day-text.ts';
-import { asMachine } from '#server/db/transaction.ts';
+import { type Mark, markPump } from '#server/db/rollup-marks.ts';
+import { asMachine, type Transaction } from '#server/db/transaction.ts';
 import { rollUpDay } from '#shared/domain/rollup/roll-up-day.ts';
 import type { Run } from '#shared/domain/runs/run.ts';
 import { type LocalDay, localDays } from '#shared/domain/time/local-days.ts';
@@ -9,7 +10,7 @@ import { addToCompanyDay } from './company-sums.ts';
 import { findFirstRun, listReadingsOver, listRunsOver } from './day-sources.ts';
 import { listMonthsOver } from './month-repository.ts';
 import { priceMonths } from './price-months.ts';
-import { addMark, type Mark, moveCursor, type TakenPump, takeMarks, takePump } from './rollup-work.ts';
+import { moveCursor, type TakenPump, takeMarks, takePump } from './rollup-work.ts';
 import { writeDay } from './write-day.ts';
 
 /** Days of one pump in one transaction: a backlog is worked off in small bites. */
@@ -38,7 +39,7 @@ export function rollUpPump(options: RollupOptions, pumpId: string): Promise<bool
     const now = days.slice(0, MOST_DAYS);
     for (const day of now) await rollUp(client, pump, day);
     const left = days.slice(MOST_DAYS);
-    await postpone(client, pump, left);
+    await postpone(db, pump, left);
     await moveCursor(client, pumpId, pump.highWater);
     const months = new Set(now.map(({ epochDay }) => monthStart(epochDay)));
     for (const mark of marks) {
@@ -82,10 +83,10 @@ async function findFreshStart(client: pg.PoolClient, pump: TakenPump): Promise<n
 }
 
 /** What does not fit into this bite is marked for the next one. */
-async function postpone(client: pg.PoolClient, pump: TakenPump, left: readonly LocalDay[]): Promise<void> {
+async function postpone(db: Transaction, { pumpId }: TakenPump, left: readonly LocalDay[]): Promise<void> {
   const [first, last] = [left[0], left.at(-1)];
   if (first === undefined || last === undefined) return;
-  await addMark(client, pump, { kind: 'days', from: first.from, to: last.to });
+  await markPump(db, pumpId, { kind: 'days', from: first.from, to: last.to });
 }
 
 async function rollUp(client: pg.PoolClient, pump: TakenPump, day: LocalDay): Promise<void> {

@@ -1,4 +1,5 @@
 import type pg from 'pg';
+import type { Mark } from '#server/db/rollup-marks.ts';
 
 type Database = Pick<pg.ClientBase, 'query'>;
 
@@ -14,8 +15,6 @@ export type TakenPump = {
   /** Up to where the fold has understood. */
   readonly highWater: number;
 };
-
-export type Mark = { readonly kind: 'days' | 'prices'; readonly from: number; readonly to: number };
 
 /**
  * Pumps with something to roll up, the longest waiting first: marked ones, those never rolled up, and those that were
@@ -60,19 +59,6 @@ export async function takeMarks(database: Database, { companyId, pumpId }: Taken
     [companyId, pumpId],
   );
   return rows;
-}
-
-/** Asks for a stretch of a pump's past to be worked out again. */
-export async function addMark(
-  database: Database,
-  { companyId, pumpId }: Pick<TakenPump, 'companyId' | 'pumpId'>,
-  { kind, from, to }: Mark,
-): Promise<void> {
-  await database.query(
-    `insert into rollup_marks (id, company_id, pump_id, kind, from_at, to_at)
-     values (gen_random_uuid(), $1, $2, $3, to_timestamp($4::float8 / 1000), to_timestamp($5::float8 / 1000))`,
-    [companyId, pumpId, kind, from, to],
-  );
 }
 
 /** Moves a pump's cursor, in the transaction that wrote what it stands for. */

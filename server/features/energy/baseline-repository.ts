@@ -1,6 +1,7 @@
 import { and, eq, sql } from 'drizzle-orm';
 import type { Context } from '#server/context.ts';
-import { epochMs, instantOfMs } from '#server/db/epoch-ms.ts';
+import { epochMs } from '#server/db/epoch-ms.ts';
+import { markPrices } from '#server/db/rollup-marks.ts';
 import { baselines } from '#server/db/schema/baselines.ts';
 import { pumps } from '#server/db/schema/pumps.ts';
 import type { BaselineShape } from '#shared/contract/http/baselines.ts';
@@ -42,8 +43,6 @@ export async function saveBaseline(
     })
     .returning({ version: baselines.version });
   if (written.length === 0) return false;
-  await db.execute(sql`
-    insert into rollup_marks (id, company_id, pump_id, kind, from_at, to_at)
-    values (gen_random_uuid(), ${actor.companyId}, ${pumpId}, 'prices', 'epoch'::timestamptz, ${instantOfMs(now)})`);
+  await markPrices(db, sql`p.company_id = ${actor.companyId} and p.id = ${pumpId}`, now);
   return true;
 }

@@ -2,7 +2,7 @@ import type { Context } from '#server/context.ts';
 import { recordAct } from '#server/db/record-act.ts';
 import { toBaseline } from '#server/db/stated-baselines.ts';
 import { notFound } from '#server/errors.ts';
-import { type ExpectedVersion, requireVersion } from '#server/http/etag.ts';
+import { changedMeanwhile, type ExpectedVersion, requireVersion } from '#server/http/etag.ts';
 import type { BaselineShape, PumpBaseline } from '#shared/contract/http/baselines.ts';
 import { findBaseline, hasPump, saveBaseline } from './baseline-repository.ts';
 
@@ -32,7 +32,7 @@ type Statement = {
 export async function stateBaseline(context: Context, { pumpId, baseline, ifMatch }: Statement): Promise<PumpBaseline> {
   const known = await readBaseline(context, pumpId);
   requireVersion(ifMatch, known.version);
-  if (!(await saveBaseline(context, pumpId, baseline, known.version))) requireVersion(known.version, -1);
+  if (!(await saveBaseline(context, pumpId, baseline, known.version))) throw changedMeanwhile();
   await recordAct(context, { action: 'baseline.stated', subjectKind: 'pump', subjectId: pumpId });
   return readBaseline(context, pumpId);
 }

@@ -1,6 +1,6 @@
 import type { Context } from '#server/context.ts';
 import { recordAct } from '#server/db/record-act.ts';
-import { type ExpectedVersion, requireVersion } from '#server/http/etag.ts';
+import { changedMeanwhile, type ExpectedVersion, requireVersion } from '#server/http/etag.ts';
 import type { RuleLayer, RuleScope } from '#shared/contract/http/rules.ts';
 import type { RuleSettings } from '#shared/domain/detectors/rule-settings.ts';
 import { readRules } from './read-rules.ts';
@@ -15,7 +15,7 @@ export async function setRules(context: Context, { scope, rules, ifMatch }: Chan
   requireVersion(ifMatch, version);
   const kept = withoutEmpty(rules);
   // Somebody who set the first rules of this scope a moment ago was not locked out by a row.
-  if (!(await saveRules(context, scope, kept, version))) requireVersion(-1, version);
+  if (!(await saveRules(context, scope, kept, version))) throw changedMeanwhile();
   const subjectId =
     scope.kind === 'pump' ? scope.pumpId : scope.kind === 'model' ? scope.modelId : context.actor.companyId;
   await recordAct(context, {

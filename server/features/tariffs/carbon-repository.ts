@@ -1,4 +1,4 @@
-import { eq, sql } from 'drizzle-orm';
+import { eq } from 'drizzle-orm';
 import type { Context } from '#server/context.ts';
 import { carbonChoices } from '#server/db/schema/carbon-choices.ts';
 
@@ -8,12 +8,20 @@ export async function findCarbonChoice({ db, actor }: Context) {
   return row;
 }
 
-export async function saveCarbonChoice({ db, actor }: Context, region: string | null): Promise<void> {
-  await db
+/** Chooses a grid over the version that was read; false where another came first. */
+export async function saveCarbonChoice(
+  { db, actor }: Context,
+  region: string | null,
+  version: number,
+): Promise<boolean> {
+  const written = await db
     .insert(carbonChoices)
     .values({ companyId: actor.companyId, region })
     .onConflictDoUpdate({
       target: carbonChoices.companyId,
-      set: { region, version: sql`${carbonChoices.version} + 1` },
-    });
+      set: { region, version: version + 1 },
+      setWhere: eq(carbonChoices.version, version),
+    })
+    .returning({ version: carbonChoices.version });
+  return written.length > 0;
 }

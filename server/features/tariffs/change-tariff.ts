@@ -4,9 +4,16 @@ import { conflict, notFound } from '#server/errors.ts';
 import { type ExpectedVersion, requireVersion } from '#server/http/etag.ts';
 import type { TariffRow, TariffShape } from '#shared/contract/http/tariffs.ts';
 import { getTariff } from './get-tariff.ts';
-import { markPrices, pumpsOfTariff } from './price-marks-repository.ts';
+import { markCompanyPrices, pumpsOfTariff } from './price-marks-repository.ts';
 import { requireSound } from './require-sound.ts';
-import { addTariff, deleteTariff, findTariffForUpdate, isNameTaken, saveTariff } from './tariff-repository.ts';
+import {
+  addTariff,
+  deleteTariff,
+  findTariffForUpdate,
+  isNameTaken,
+  lockTariffNames,
+  saveTariff,
+} from './tariff-repository.ts';
 import { toTariff } from './tariff-shape.ts';
 
 const taken = (name: string) => conflict(`A tariff named “${name}” is there already. Choose another name.`);
@@ -15,6 +22,7 @@ const taken = (name: string) => conflict(`A tariff named “${name}” is there 
 export async function createTariff(context: Context, shape: TariffShape): Promise<TariffRow> {
   const tariff = toTariff(shape);
   requireSound(tariff);
+  await lockTariffNames(context);
   const id = await addTariff(context, tariff);
   if (id === undefined) throw taken(tariff.name);
   await recordAct(context, { action: 'tariff.added', subjectKind: 'tariff', subjectId: id });
@@ -30,9 +38,10 @@ export async function replaceTariff(context: Context, { tariffId, ifMatch, shape
   requireVersion(ifMatch, known.version);
   const tariff = toTariff(shape);
   requireSound(tariff);
+  await lockTariffNames(context);
   if (await isNameTaken(context, tariff.name, tariffId)) throw taken(tariff.name);
   await saveTariff(context, tariffId, tariff, known.version + 1);
-  await markPrices(context, pumpsOfTariff(tariffId));
+  await markCompanyPrices(context, pumpsOfTariff(tariffId));
   await recordAct(context, { action: 'tariff.changed', subjectKind: 'tariff', subjectId: tariffId });
   return getTariff(context, tariffId);
 }

@@ -5,7 +5,7 @@ import { type ExpectedVersion, requireVersion } from '#server/http/etag.ts';
 import type { CompanyTerms, PadTerms } from '#shared/contract/http/tariffs.ts';
 import { checkTariffTerms } from '#shared/domain/energy/tariff-history.ts';
 import { findPlan, hasPad, type Plan, savePlan, type Term } from './plan-repository.ts';
-import { markPrices, pumpsOfCompanyPlan, pumpsOfPad } from './price-marks-repository.ts';
+import { markCompanyPrices, pumpsOfCompanyPlan, pumpsOfPad } from './price-marks-repository.ts';
 import { refuse } from './require-sound.ts';
 import { listTariffRows } from './tariff-read-model.ts';
 
@@ -70,7 +70,7 @@ export async function replaceCompanyTerms(context: Context, { terms, ifMatch }: 
   requireVersion(ifMatch, known?.version ?? 0);
   await requireSoundTerms(context, terms);
   await savePlan(context, known, { padId: undefined, terms, ownMeter: false, otherKwhByPeriod: [] });
-  await markPrices(context, pumpsOfCompanyPlan);
+  await markCompanyPrices(context, pumpsOfCompanyPlan);
   await recordAct(context, {
     action: 'tariff-terms.changed',
     subjectKind: 'company',
@@ -87,7 +87,7 @@ export async function replacePadTerms(context: Context, input: PadInput): Promis
   requireVersion(ifMatch, known?.version ?? 0);
   await requireSoundTerms(context, terms);
   await savePlan(context, known, { padId, terms, ownMeter, otherKwhByPeriod });
-  await markPrices(context, pumpsOfPad(padId));
+  await markCompanyPrices(context, pumpsOfPad(padId));
   await recordAct(context, { action: 'tariff-terms.changed', subjectKind: 'pad', subjectId: padId });
   return readPadTerms(context, padId);
 }

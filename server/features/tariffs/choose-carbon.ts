@@ -2,7 +2,7 @@ import type { z } from 'zod';
 import type { Context } from '#server/context.ts';
 import { recordAct } from '#server/db/record-act.ts';
 import { invalid } from '#server/errors.ts';
-import { type ExpectedVersion, requireVersion } from '#server/http/etag.ts';
+import { changedMeanwhile, type ExpectedVersion, requireVersion } from '#server/http/etag.ts';
 import type { CarbonSettings } from '#shared/contract/http/tariffs.ts';
 import { CARBON_FACTORS } from '#shared/domain/energy/carbon-factors.data.ts';
 import { findCarbonChoice, saveCarbonChoice } from './carbon-repository.ts';
@@ -22,7 +22,7 @@ export async function chooseCarbon(context: Context, { region, ifMatch }: Choice
   const known = await readCarbon(context);
   requireVersion(ifMatch, known.version);
   if (region !== null && !REGIONS.includes(region)) throw invalid('region', `is one of ${REGIONS.join(', ')}, or null`);
-  await saveCarbonChoice(context, region);
+  if (!(await saveCarbonChoice(context, region, known.version))) throw changedMeanwhile();
   const { companyId } = context.actor;
   await recordAct(context, { action: 'carbon.chosen', subjectKind: 'company', subjectId: companyId });
   return readCarbon(context);

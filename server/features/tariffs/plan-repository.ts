@@ -4,7 +4,7 @@ import { newId } from '#server/db/new-id.ts';
 import { pads } from '#server/db/schema/pads.ts';
 import { tariffPlans } from '#server/db/schema/tariff-plans.ts';
 import { tariffTerms } from '#server/db/schema/tariff-terms.ts';
-import { requireVersion } from '#server/http/etag.ts';
+import { changedMeanwhile } from '#server/http/etag.ts';
 
 export type Term = { readonly tariffId: string; readonly from: string; readonly to: string | null };
 
@@ -59,7 +59,7 @@ export async function savePlan({ db, actor }: Context, known: Plan | undefined, 
           .set({ ownMeter, otherKwhByPeriod, version: known.version + 1 })
           .where(and(eq(tariffPlans.id, planId), eq(tariffPlans.version, known.version)))
           .returning({ id: tariffPlans.id });
-  if (written.length === 0) requireVersion(known?.version ?? 0, -1);
+  if (written.length === 0) throw changedMeanwhile();
   await db.delete(tariffTerms).where(and(eq(tariffTerms.companyId, companyId), eq(tariffTerms.planId, planId)));
   if (terms.length > 0)
     await db

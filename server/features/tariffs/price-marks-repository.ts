@@ -1,6 +1,6 @@
 import { type SQL, sql } from 'drizzle-orm';
 import type { Context } from '#server/context.ts';
-import { instantOfMs } from '#server/db/epoch-ms.ts';
+import { markPrices } from '#server/db/rollup-marks.ts';
 
 /** Whose prices change: pumps of one pad, or of every pad that goes by the company's plan. */
 export const pumpsOfPad = (padId: string): SQL => sql`p.pad_id = ${padId}`;
@@ -13,10 +13,6 @@ export const pumpsOfTariff = (tariffId: string): SQL => sql`(exists (select from
   or ${pumpsOfCompanyPlan} and exists (select from tariff_plans whole join tariff_terms term on term.plan_id = whole.id
     where whole.pad_id is null and term.tariff_id = ${tariffId}))`;
 
-/** Has everything these pumps used so far priced anew, by the worker. */
-export async function markPrices({ db, actor, now }: Context, which: SQL): Promise<void> {
-  await db.execute(sql`
-    insert into rollup_marks (id, company_id, pump_id, kind, from_at, to_at)
-    select gen_random_uuid(), p.company_id, p.id, 'prices', 'epoch'::timestamptz, ${instantOfMs(now)}
-    from pumps p where p.company_id = ${actor.companyId} and p.monitored and ${which}`);
-}
+/** Has everything these pumps of the company used so far priced anew. */
+export const markCompanyPrices = ({ db, actor, now }: Context, which: SQL): Promise<void> =>
+  markPrices(db, sql`p.company_id = ${actor.companyId} and p.monitored and ${which}`, now);

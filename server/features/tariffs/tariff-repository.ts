@@ -1,8 +1,11 @@
-import { and, eq } from 'drizzle-orm';
+import { and, eq, sql } from 'drizzle-orm';
 import type { Context } from '#server/context.ts';
 import { newId } from '#server/db/new-id.ts';
 import { tariffs } from '#server/db/schema/tariffs.ts';
 import type { Tariff } from '#shared/domain/energy/tariff.ts';
+
+/** Among the advisory locks of the database: "tari" in ASCII. */
+const NAMES = 0x74617269;
 
 /** A tariff of the person's company, locked until the end of the transaction. */
 export async function findTariffForUpdate(
@@ -15,6 +18,11 @@ export async function findTariffForUpdate(
     .where(and(eq(tariffs.companyId, actor.companyId), eq(tariffs.id, tariffId)))
     .for('update');
   return row;
+}
+
+/** Lets one person at a time name tariffs of a company, until the end of the transaction: a name is there once. */
+export async function lockTariffNames({ db, actor }: Context): Promise<void> {
+  await db.execute(sql`select pg_advisory_xact_lock(${NAMES}, hashtext(${actor.companyId}))`);
 }
 
 /** Adds a tariff; undefined where one of that name is there. */

@@ -52,6 +52,19 @@ describe('a tariff', () => {
     expect((await ask('GET', '/api/tariffs')).body.items).toEqual([]);
   });
 
+  it('takes a name that another takes at the same moment from one of the two, and says so to the other', async () => {
+    for (let round = 0; round < 4; round += 1) {
+      const [one, other] = [await create(TWO_TIER), await create(TIME_OF_USE)];
+      const name = `Renamed ${crypto.randomUUID()}`;
+      const answers = await Promise.all([
+        ask('PUT', `/api/tariffs/${one.id}`, { ...one.tariff, name }, 1),
+        ask('PUT', `/api/tariffs/${other.id}`, { ...other.tariff, name }, 1),
+        ask('POST', '/api/tariffs', { ...one.tariff, name }),
+      ]);
+      expect(answers.map(({ status }) => status).filter((status) => status === 409)).toHaveLength(2);
+    }
+  });
+
   it('with a last tier that ends is refused: use above it has no price', async () => {
     const shape = presentTariff(TWO_TIER);
     const [tiers] = shape.energy.periods;
@@ -143,5 +156,12 @@ describe('the terms', () => {
     expect((await ask('PUT', '/api/carbon', { region: 'NOWHERE' }, 0)).body.issues[0].path).toBe('region');
     expect((await ask('PUT', '/api/carbon', { region: 'US' }, 0)).body).toMatchObject({ region: 'US', version: 1 });
     expect((await ask('PUT', '/api/carbon', { region: null }, 0)).status).toBe(412);
+  });
+
+  it('is chosen by one of two people who choose at once; the other is told', async () => {
+    for (let version = 1; version <= 5; version += 1) {
+      const both = await Promise.all(['US', 'AZNM'].map((region) => ask('PUT', '/api/carbon', { region }, version)));
+      expect(both.map(({ status }) => status).sort()).toEqual([200, 412]);
+    }
   });
 });
