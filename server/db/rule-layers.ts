@@ -1,4 +1,5 @@
 import { type SQL, sql } from 'drizzle-orm';
+import type { RuleScope } from '#shared/contract/http/rules.ts';
 import type { DetectorParameters } from '#shared/domain/detectors/detector-parameters.ts';
 import { type RuleSettings, resolveRules } from '#shared/domain/detectors/rule-settings.ts';
 import type { Transaction } from './transaction.ts';
@@ -24,6 +25,21 @@ export async function listRuleLayers(
     sql`select company_id as "companyId", model_id as "modelId", pump_id as "pumpId", rules from rule_settings where ${which}`,
   );
   return rows;
+}
+
+/** Where what is set for a scope stands among the layers: the company's has neither id. */
+export const layerOf = (scope: RuleScope): Pick<StoredLayer, 'modelId' | 'pumpId'> => ({
+  modelId: scope.kind === 'model' ? scope.modelId : null,
+  pumpId: scope.kind === 'pump' ? scope.pumpId : null,
+});
+
+/** Watched pumps `p` that a scope reaches: a model's by the motor that is fitted now. */
+export function isInScope(scope: RuleScope): SQL {
+  if (scope.kind === 'company') return sql`p.monitored`;
+  if (scope.kind === 'pump') return sql`p.monitored and p.id = ${scope.pumpId}`;
+  return sql`p.monitored and exists (select from motor_fittings f join motors m on m.id = f.motor_id
+    where f.pump_id = p.id and m.model_id = ${scope.modelId}
+      and f.starts_at <= now() and (f.ends_at is null or f.ends_at > now()))`;
 }
 
 const keyOf = (companyId: string, modelId: string | null, pumpId: string | null): string =>

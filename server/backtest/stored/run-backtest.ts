@@ -1,9 +1,8 @@
 import type pg from 'pg';
 import type { Logger } from 'pino';
 import { type CommissionedPump, listCommissionedPumps } from '#server/db/commissioned-pumps.ts';
-import { createRuleBook, listRuleLayers, type RuledPump, type StoredLayer } from '#server/db/rule-layers.ts';
+import { createRuleBook, layerOf, listRuleLayers, type RuledPump, type StoredLayer } from '#server/db/rule-layers.ts';
 import { openDatabase } from '#server/db/transaction.ts';
-import type { RuleScope } from '#shared/contract/http/rules.ts';
 import type { BacktestRequest } from './backtest-request.ts';
 import { foldStoredPump, WARM_UP_MS } from './fold-stored-pump.ts';
 import {
@@ -82,18 +81,13 @@ function createReport(work: BacktestWork, backtestId: string): (share: number) =
   };
 }
 
-const idsOf = (scope: RuleScope) => ({
-  modelId: scope.kind === 'model' ? scope.modelId : null,
-  pumpId: scope.kind === 'pump' ? scope.pumpId : null,
-});
-
 /** What is set, with the proposal in place of what stands at its scope. */
 function withProposed(
   layers: readonly StoredLayer[],
   companyId: string,
   { scope, rules }: BacktestRequest,
 ): StoredLayer[] {
-  const place = { companyId, ...idsOf(scope) };
+  const place = { companyId, ...layerOf(scope) };
   const others = layers.filter(({ modelId, pumpId }) => modelId !== place.modelId || pumpId !== place.pumpId);
   return [...others, { ...place, rules }];
 }

@@ -2,8 +2,8 @@ import type { Context } from '#server/context.ts';
 import type { AlarmHealth, AlarmHealthQuery } from '#shared/contract/http/alarm-health.ts';
 import { healthFigures } from '#shared/domain/alarm-health/health-figures.ts';
 import { HEALTH_TARGETS } from '#shared/domain/alarm-health/health-targets.data.ts';
-import type { LifeStory } from '#shared/domain/alarm-health/life-story.ts';
 import { readLife } from '#shared/domain/alarm-health/read-life.ts';
+import { groupBy } from '#shared/domain/grouping/group-by.ts';
 import { findCompanyBeginning, listAlarmLives, listAlarmNames, listPeopleNames } from './alarm-health-read-model.ts';
 import { healthStretch } from './health-stretch.ts';
 import { listNamedAlarms, presentFigures } from './present-alarm-health.ts';
@@ -15,7 +15,8 @@ export async function readAlarmHealth({ db, actor, now }: Context, query: AlarmH
   const stretch = healthStretch(query, { zone, beganAt, now });
   const stories = (await listAlarmLives(db, companyId, stretch.from, stretch.until)).map(readLife);
   const desk = healthFigures(stories, stretch);
-  const operators = [...groupByOperator(stories)]
+  const operators = [...groupBy(stories, ({ life }) => life.operatorId)]
+    .flatMap(([operatorId, theirs]) => (operatorId === null ? [] : [[operatorId, theirs] as const]))
     .map(([operatorId, theirs]) => ({ operatorId, figures: healthFigures(theirs, stretch) }))
     .sort((a, b) => b.figures.count - a.figures.count);
   const shown = [desk, ...operators.map(({ figures }) => figures)].flatMap(listNamedAlarms);
@@ -38,16 +39,4 @@ export async function readAlarmHealth({ db, actor, now }: Context, query: AlarmH
     })),
     serverNow: now,
   };
-}
-
-function groupByOperator(stories: readonly LifeStory[]): Map<string, LifeStory[]> {
-  const groups = new Map<string, LifeStory[]>();
-  for (const story of stories) {
-    const { operatorId } = story.life;
-    if (operatorId === null) continue;
-    const group = groups.get(operatorId);
-    if (group === undefined) groups.set(operatorId, [story]);
-    else group.push(story);
-  }
-  return groups;
 }

@@ -1,5 +1,6 @@
 import { type SQL, sql } from 'drizzle-orm';
 import { type PumpOutcome, parseOutcome } from '#server/backtest/stored/pump-outcome.ts';
+import { isInScope } from '#server/db/rule-layers.ts';
 import type { Transaction } from '#server/db/transaction.ts';
 import type { RuleScope } from '#shared/contract/http/rules.ts';
 
@@ -64,15 +65,7 @@ export async function listOutcomes(db: Transaction, backtestId: string): Promise
 
 /** Watched pumps that a scope reaches. */
 export async function listPumpsOfScope(db: Transaction, companyId: string, scope: RuleScope): Promise<string[]> {
-  const which =
-    scope.kind === 'company'
-      ? sql`true`
-      : scope.kind === 'pump'
-        ? sql`p.id = ${scope.pumpId}`
-        : sql`exists (select from motor_fittings f join motors m on m.id = f.motor_id
-            where f.pump_id = p.id and m.model_id = ${scope.modelId}
-              and f.starts_at <= now() and (f.ends_at is null or f.ends_at > now()))`;
   const { rows } = await db.execute<{ id: string }>(sql`
-    select p.id from pumps p where p.company_id = ${companyId} and p.monitored and ${which} order by p.number`);
+    select p.id from pumps p where p.company_id = ${companyId} and ${isInScope(scope)} order by p.number`);
   return rows.map(({ id }) => id);
 }

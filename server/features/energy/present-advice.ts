@@ -5,9 +5,8 @@ import { type Micros, toMinorUnits } from '#shared/domain/energy/money.ts';
 import { formatMinor } from '#shared/domain/energy/money-text.ts';
 import { ORDINARY_WEEK } from '#shared/domain/energy/plan-week.ts';
 import type { TimeOfUseFinding } from '#shared/domain/energy/time-of-use-check.ts';
+import { WEEKS_PER_MONTH } from '#shared/domain/time/mean-year.ts';
 import type { ProgramRecord } from './program-read-model.ts';
-
-const WEEKS_PER_MONTH = 365.25 / 7 / 12;
 
 const moneyText = (micros: Micros, currency: string): string =>
   formatMinor(toMinorUnits(micros, currency) ?? 0, currency);

@@ -1,14 +1,14 @@
 import { dayText, epochDayOf } from '#server/db/day-text.ts';
 import type { PadPrices } from '#server/db/tariffs-in-force.ts';
 import type { EnergyQuery, EnergySpan, PumpEnergy } from '#shared/contract/http/energy.ts';
-import { apportionMinorUnits } from '#shared/domain/energy/money.ts';
 import { formatMinor } from '#shared/domain/energy/money-text.ts';
 import { DEMAND_NAME } from '#shared/domain/energy/month-bill.ts';
 import { type DayTerm, periodName } from '#shared/domain/energy/price-days.ts';
+import { groupBy } from '#shared/domain/grouping/group-by.ts';
 import { localDay } from '#shared/domain/time/local-days.ts';
 import type { EnergyWindow } from './energy-window.ts';
-import { groupBy } from './group-by.ts';
 import { listPeriodNames, type SettledDay } from './reckon-days.ts';
+import { shareCents } from './share-cents.ts';
 import { type FigureDay, type FigureTerms, sumFigures, sumMoney } from './sum-figures.ts';
 
 type Answer = Pick<PumpEnergy, 'money' | 'currency' | 'tariffs' | 'periods' | 'totals' | 'spans'>;
@@ -46,7 +46,7 @@ function presentPeriods(days: readonly FigureDay[], names: readonly string[], sh
   const money = showsMoney ? sumMoney(days) : undefined;
   const minor =
     money &&
-    shareOut(
+    shareCents(
       parts.map(([, { micros }]) => micros),
       money,
     );
@@ -54,15 +54,6 @@ function presentPeriods(days: readonly FigureDay[], names: readonly string[], sh
     const units = minor?.[index];
     return { name, kwh, cost: units === undefined || money === undefined ? null : formatMinor(units, money.currency) };
   });
-}
-
-/** Months are settled one by one, so that the parts of several may be a cent off their sum: the largest part takes it. */
-function shareOut(micros: readonly number[], money: { readonly minorUnits: number; readonly currency: string }) {
-  const minor = apportionMinorUnits(micros, money.currency);
-  if (minor === undefined || minor.length === 0) return undefined;
-  const rest = money.minorUnits - minor.reduce((sum, units) => sum + units, 0);
-  const largest = minor.indexOf(Math.max(...minor));
-  return minor.map((units, index) => (index === largest ? units + rest : units));
 }
 
 const instantOf = (zone: string, epochDay: number | undefined): number | null =>

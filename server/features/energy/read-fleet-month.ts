@@ -1,7 +1,7 @@
 import type { Context } from '#server/context.ts';
 import { epochDayOf, previousMonth } from '#server/db/day-text.ts';
 import type { FleetEnergy } from '#shared/contract/http/energy-fleet.ts';
-import { apportionMinorUnits, toMinorUnits } from '#shared/domain/energy/money.ts';
+import { toMinorUnits } from '#shared/domain/energy/money.ts';
 import { formatMinor } from '#shared/domain/energy/money-text.ts';
 import { localDay, localDayAt } from '#shared/domain/time/local-days.ts';
 import { monthWindow } from './energy-window.ts';
@@ -15,6 +15,7 @@ import {
 } from './fleet-month-read-model.ts';
 import { spanOf } from './present-energy.ts';
 import { presentCarbon } from './reckon-savings.ts';
+import { shareCents } from './share-cents.ts';
 
 /** Figures older than this say that a pump is silent, ms. */
 const FRESH_MS = 3_600_000;
@@ -90,19 +91,11 @@ type PeriodRow = { readonly name: string; readonly kwh: number; readonly micros:
 
 /** The periods share the sum of the pumps' cents, so that they add up to it. */
 function presentPeriods(rows: readonly PeriodRow[], { currency, costMinor }: FleetMonthRow): FleetEnergy['periods'] {
-  const minor =
-    currency === null
-      ? undefined
-      : apportionMinorUnits(
-          rows.map(({ micros }) => micros),
-          currency,
-        );
-  const rest = (costMinor ?? 0) - (minor ?? []).reduce((sum, units) => sum + units, 0);
-  const largest = minor === undefined ? -1 : minor.indexOf(Math.max(...minor));
+  const micros = rows.map((row) => row.micros);
+  const minor = currency === null ? undefined : shareCents(micros, { minorUnits: costMinor ?? 0, currency });
   return rows.map(({ name, kwh }, index) => {
     const units = minor?.[index];
-    const isShown = units !== undefined && currency !== null;
-    return { name, kwh, cost: isShown ? formatMinor(index === largest ? units + rest : units, currency) : null };
+    return { name, kwh, cost: units === undefined || currency === null ? null : formatMinor(units, currency) };
   });
 }
 

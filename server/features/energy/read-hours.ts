@@ -9,9 +9,9 @@ import { marginalMicros } from '#shared/domain/energy/charge-tiers.ts';
 import { formatMicros } from '#shared/domain/energy/money-text.ts';
 import { termOn } from '#shared/domain/energy/price-days.ts';
 import { periodAt, type Tariff } from '#shared/domain/energy/tariff.ts';
+import { groupBy } from '#shared/domain/grouping/group-by.ts';
 import { findEnergyPad, findEnergyPump, listEnergyPumps } from './energy-read-model.ts';
 import { type EnergyWindow, monthWindow } from './energy-window.ts';
-import { groupBy } from './group-by.ts';
 import { seesMoney } from './read-energy.ts';
 
 const HOURS = 24;

@@ -2,8 +2,8 @@ import { epochDayOf, monthStart } from '#server/db/day-text.ts';
 import type { PadPrices } from '#server/db/tariffs-in-force.ts';
 import { apportionMinorUnits } from '#shared/domain/energy/money.ts';
 import { type DayUse, type PricedDay, periodName, priceDays, termOn } from '#shared/domain/energy/price-days.ts';
+import { groupBy } from '#shared/domain/grouping/group-by.ts';
 import type { EnergyDay } from './energy-read-model.ts';
-import { groupBy } from './group-by.ts';
 
 /** A day's price settled in cents: the days of a calendar month add up to the month to the cent. */
 export type SettledDay = PricedDay & {

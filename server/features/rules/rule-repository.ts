@@ -1,18 +1,14 @@
 import { and, eq, isNull, sql } from 'drizzle-orm';
 import type { Context } from '#server/context.ts';
 import { newId } from '#server/db/new-id.ts';
+import { isInScope, layerOf } from '#server/db/rule-layers.ts';
 import { ruleSettings } from '#server/db/schema/rule-settings.ts';
 import type { RuleScope } from '#shared/contract/http/rules.ts';
 import type { RuleSettings } from '#shared/domain/detectors/rule-settings.ts';
 
-const idsOf = (scope: RuleScope) => ({
-  modelId: scope.kind === 'model' ? scope.modelId : null,
-  pumpId: scope.kind === 'pump' ? scope.pumpId : null,
-});
-
 /** The version of what is set for a scope, locked; 0 = nothing was ever set. */
 export async function lockRules({ db, actor }: Context, scope: RuleScope): Promise<number> {
-  const { modelId, pumpId } = idsOf(scope);
+  const { modelId, pumpId } = layerOf(scope);
   const [row] = await db
     .select({ version: ruleSettings.version })
     .from(ruleSettings)
@@ -35,7 +31,7 @@ export async function saveRules(
   version: number,
 ): Promise<boolean> {
   const values = {
-    ...{ id: newId(), companyId: actor.companyId, ...idsOf(scope), rules },
+    ...{ id: newId(), companyId: actor.companyId, ...layerOf(scope), rules },
     ...{ version: version + 1, changedAt: new Date(now), changedBy: actor.userId },
   };
   const { companyId, modelId, pumpId } = ruleSettings;
@@ -56,13 +52,9 @@ const IDS_A_RING = 200;
 
 /** Tells whoever folds pumps that those of a scope have other rules now. */
 export async function ringForScope({ db, actor }: Context, scope: RuleScope): Promise<void> {
-  const { modelId, pumpId } = idsOf(scope);
   await db.execute(sql`
     select pg_notify('millrace_context', string_agg(id::text, ','))
     from (select p.id, (row_number() over (order by p.id) - 1) / ${IDS_A_RING} as part from pumps p
-      where p.company_id = ${actor.companyId} and p.monitored and (${pumpId}::uuid is null or p.id = ${pumpId}::uuid)
-        and (${modelId}::uuid is null or exists (select from motor_fittings f join motors m on m.id = f.motor_id
-          where f.pump_id = p.id and m.model_id = ${modelId}::uuid
-            and f.starts_at <= now() and (f.ends_at is null or f.ends_at > now())))) ruled
+      where p.company_id = ${actor.companyId} and ${isInScope(scope)}) ruled
     group by part`);
 }

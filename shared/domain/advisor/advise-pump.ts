@@ -3,6 +3,7 @@ import type { Micros } from '../energy/money.ts';
 import { planWeek } from '../energy/plan-week.ts';
 import { checkTimeOfUse, type TimeOfUseFinding } from '../energy/time-of-use-check.ts';
 import type { Refusal } from '../refusal/refusal.ts';
+import { WEEKS_PER_MONTH } from '../time/mean-year.ts';
 import type { AdviceRequest } from './advice-request.ts';
 import { type Advice, adviseProgram } from './advise-program.ts';
 import type { PadNeeds } from './pad-needs.ts';
@@ -23,8 +24,6 @@ export type PumpAdvice = {
   readonly savedMicrosPerMonth: Micros | undefined;
   readonly savedShare: number | undefined;
 };
-
-const WEEKS_PER_MONTH = 365.25 / 7 / 12;
 
 function findDearHours({ settings, traits, windows, curve, system, tariff }: AdviceRequest): TimeOfUseFinding[] {
   const week = planWeek(settings, traits, windows);

@@ -5,6 +5,7 @@ import { DETECTOR_CLASSES } from '../detectors/detector-classes.data.ts';
 import { toMinorUnits } from '../energy/money.ts';
 import { formatMinor } from '../energy/money-text.ts';
 import { DAY_MS } from '../time/local-time.ts';
+import { WEEKS_PER_YEAR } from '../time/mean-year.ts';
 import type { Advice, ProgramPlan } from './advise-program.ts';
 import type { KeptAdvice } from './advise-pump.ts';
 import { costlyProgramCause } from './costly-program-cause.ts';
@@ -42,8 +43,6 @@ export const COSTLY_PROGRAM = {
 
 export type CostlyJudgement = { readonly memory: CostlyMemory; readonly signal: AlarmSignal | undefined };
 
-/** A year of weeks like this one. */
-const WEEKS_PER_YEAR = 365.25 / 7;
 export const NO_COSTLY_MEMORY: CostlyMemory = { days: [], raisedAt: null };
 
 /**

@@ -4,6 +4,7 @@ import { listLocalSlices } from '../energy/local-slices.ts';
 import { type Micros, toMinorUnits } from '../energy/money.ts';
 import { ORDINARY_WEEK } from '../energy/plan-week.ts';
 import { HOUR_MS } from '../time/local-time.ts';
+import { WEEKS_PER_MONTH } from '../time/mean-year.ts';
 import type { SpeedOption } from './speed-option.ts';
 
 /** What an ordinary week of a program uses, costs and moves: inputs, primes and standby included. */
@@ -16,8 +17,6 @@ export type WeekFigures = {
   /** Water by weekday, Monday first, US gallons. */
   readonly gallonsByWeekday: readonly number[];
 };
-
-const WEEKS_PER_MONTH = 365.25 / 7 / 12;
 
 export type FigureTerms = {
   readonly speedAt: (rpm: number) => SpeedOption | undefined;

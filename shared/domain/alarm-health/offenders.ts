@@ -1,4 +1,5 @@
 import type { Detector } from '../detectors/detector.ts';
+import { groupBy } from '../grouping/group-by.ts';
 import { keyOf } from './alarm-life.ts';
 import { HEALTH_TARGETS } from './health-targets.data.ts';
 import type { LifeStory } from './life-story.ts';
@@ -35,15 +36,11 @@ export function rankOffenders(stories: readonly LifeStory[], countOf: (story: Li
  * @example findChattering(stories, 0, until) // []: none, as it should be
  */
 export function findChattering(stories: readonly LifeStory[], from: number, until: number): Offender[] {
-  const byKey = new Map<string, LifeStory & { returns: readonly number[] }>();
-  for (const story of stories) {
-    const key = keyOf(story.life);
-    const returns = [...(byKey.get(key)?.returns ?? []), ...story.returns];
-    byKey.set(key, { ...story, returns });
-  }
-  return rankOffenders([...byKey.values()], ({ returns }) =>
-    countBursts(returns.filter((at) => at >= from && at < until)),
-  );
+  const together = [...groupBy(stories, ({ life }) => keyOf(life)).values()].flatMap((own): LifeStory[] => {
+    const last = own.at(-1);
+    return last === undefined ? [] : [{ ...last, returns: own.flatMap(({ returns }) => returns) }];
+  });
+  return rankOffenders(together, ({ returns }) => countBursts(returns.filter((at) => at >= from && at < until)));
 }
 
 function countBursts(returns: readonly number[]): number {

@@ -1,12 +1,13 @@
 import type { Detector, Evidence } from '../detectors/detector.ts';
+import { DETECTOR_DEFAULTS } from '../detectors/detector-defaults.data.ts';
 import { AIR_SHARE } from '../detectors/rules/prime-causes.ts';
 import type { Sign, Signs } from './sign.ts';
 
 /** An alarm as its detector left it: the cause it named and the figures behind it. */
 export type AlarmEvidence = { readonly detector: Detector; readonly cause: string; readonly evidence: Evidence };
 
-/** Watts this far over the usual are more than a rub or an open valve takes (maths, detector `high-load`). */
-const FAR_OVER_SHARE = 0.3;
+/** Watts this far over the usual are more than a rub or an open valve takes. */
+const { farAboveShare: FAR_OVER_SHARE } = DETECTOR_DEFAULTS['high-load'];
 /** A drive this hot is hot where its model's limit is not known; five under the usual 90 °C. */
 const HOT_CELSIUS = 85;
 const HOT_DAY_CELSIUS = 32;

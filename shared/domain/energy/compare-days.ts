@@ -1,5 +1,6 @@
+import { groupBy } from '../grouping/group-by.ts';
 import { HOUR_MS } from '../time/local-time.ts';
-import { type CalendarMonth, calendarMonth } from './calendar-month.ts';
+import { calendarMonth } from './calendar-month.ts';
 import { checkTariff } from './check-tariff.ts';
 import type { HourUsage } from './hour-usage.ts';
 import type { Micros } from './money.ts';
@@ -34,18 +35,13 @@ type Stretch = { readonly term: DayTerm | undefined; readonly days: DayUse[] };
 
 /** Days of one calendar month under one tariff. */
 function listStretches(days: readonly DayUse[], terms: readonly DayTerm[]): Stretch[] {
-  const byMonth = new Map<string, Map<DayTerm | undefined, DayUse[]>>();
-  const keyOf = ({ year, month }: CalendarMonth): string => `${year} ${month}`;
-  for (const day of days) {
-    const month = keyOf(calendarMonth(day.epochDay));
-    const stretches = byMonth.get(month) ?? new Map<DayTerm | undefined, DayUse[]>();
-    byMonth.set(month, stretches);
-    const term = termOn(terms, day.epochDay);
-    const open = stretches.get(term);
-    if (open === undefined) stretches.set(term, [day]);
-    else open.push(day);
-  }
-  return [...byMonth.values()].flatMap((stretches) => [...stretches].map(([term, own]) => ({ term, days: own })));
+  const months = groupBy(days, ({ epochDay }) => {
+    const { year, month } = calendarMonth(epochDay);
+    return `${year} ${month}`;
+  });
+  return [...months.values()].flatMap((month) =>
+    [...groupBy(month, ({ epochDay }) => termOn(terms, epochDay))].map(([term, own]) => ({ term, days: own })),
+  );
 }
 
 /** With the same water held equal, only hours of which the water is known count, on both sides. */

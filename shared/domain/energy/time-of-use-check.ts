@@ -1,5 +1,6 @@
 import type { PlannedRun } from '../control/plan.ts';
 import { MINUTE_MS } from '../time/local-time.ts';
+import { WEEKS_PER_MONTH } from '../time/mean-year.ts';
 import { marginalMicros } from './charge-tiers.ts';
 import { type LocalSlice, listLocalSlices } from './local-slices.ts';
 import type { Micros } from './money.ts';
@@ -29,7 +30,6 @@ export type TimeOfUseFinding = {
 /** An hour is dear when its price is at least this share over the cheapest of its day; common practice. */
 const DEAR_SHARE = 0.1;
 const MONTHS = 12;
-const WEEKS_PER_MONTH = 365.25 / 7 / MONTHS;
 /** Any length does for the price of a first kWh. */
 const ANY_DAYS = 30;
 
