@@ -248,4 +248,24 @@ describe('an alarm’s page', () => {
     await eventually(() => page.getByRole('dialog').count()).toBe(0);
     expect(await hold.evaluate((element) => element === document.activeElement)).toBe(true);
   });
+
+  it('leaves the keyboard beside the way back when the row has left the list, and at the heading after it', async () => {
+    const { page, state } = await bench.open('/alarms', { role: 'manager' });
+    await page
+      .getByRole('button', { name: /^Hold until… Did not prime/ })
+      .first()
+      .focus();
+    await page.keyboard.press('Enter');
+    await page.getByRole('dialog').getByLabel('Why').fill('Waiting for the part');
+    await page.getByRole('dialog').getByRole('button', { name: 'Hold', exact: true }).focus();
+    await page.keyboard.press('Enter');
+    const undo = page.getByRole('button', { name: /^Undo On hold: Did not prime/ });
+    await undo.waitFor();
+    await page.waitForFunction(() => document.activeElement?.closest('[role=status]') !== null);
+    await page.keyboard.press('Tab');
+    expect(await undo.evaluate((element) => element === document.activeElement)).toBe(true);
+    await page.keyboard.press('Enter');
+    await page.waitForFunction(() => document.activeElement?.tagName === 'H1');
+    await eventually(() => state.pumps[0]?.alarm?.shelvedUntil).toBe(null);
+  });
 });

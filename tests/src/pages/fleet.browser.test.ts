@@ -244,5 +244,5 @@ it('opens a pump’s page from its row', async () => {
   await opened.page.getByRole('link', { name: /Quarry Lane 18/ }).click();
   await opened.page.waitForURL(`**/pumps/${fakeId('pump', 2)}`);
   await opened.page.getByRole('heading', { level: 1, name: /Quarry Lane 18/ }).waitFor();
-  await opened.page.waitForFunction(() => document.activeElement?.tagName === 'H1');
+  await opened.page.waitForFunction(() => /Quarry Lane 18.*rpm/.test(document.activeElement?.textContent ?? ''));
 });

@@ -37,6 +37,15 @@ it('counts down when there were too many tries', async () => {
   await page.getByText('You can try again now.').waitFor();
 });
 
+it('says where one is now: the heading of the page it leads to has the focus', async () => {
+  const { page } = await bench.open('/sign-in');
+  await page.getByLabel('E-mail address').fill('manager@larkmoor.example');
+  await page.getByLabel('Password').fill('millrace-demo');
+  await page.keyboard.press('Enter');
+  await page.waitForURL(/fleet/);
+  await page.waitForFunction(() => document.activeElement?.tagName === 'H1');
+});
+
 it('leads back to the page that was asked for, and shows a role its own first page', async () => {
   const { page, state } = await bench.open('/pumps/00000001-0000-4000-8000-000000000001?day=2026-11-30');
   await page.getByRole('heading', { name: 'Sign in to the watch desk' }).waitFor();
