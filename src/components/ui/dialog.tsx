@@ -19,7 +19,7 @@ export function Dialog({ title, onClose, children }: DialogProps) {
       onClose={onClose}
       className="m-auto max-h-[85dvh] w-[min(56rem,calc(100vw-2rem))] border border-ink bg-sheet p-0 text-ink"
     >
-      <div className="sticky top-0 flex items-center justify-between gap-4 border-b border-rule bg-sheet px-5 py-3">
+      <div className="sticky top-0 z-10 flex items-center justify-between gap-4 border-b border-rule bg-sheet px-5 py-3">
         <h2 className="text-17 font-semibold">{title}</h2>
         <Button onClick={() => dialog.current?.close()}>{t('strip.close')}</Button>
       </div>
