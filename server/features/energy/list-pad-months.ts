@@ -7,11 +7,9 @@ import { formatMinor } from '#shared/domain/energy/money-text.ts';
 import { localDayAt } from '#shared/domain/time/local-days.ts';
 import { monthWindow } from './energy-window.ts';
 import { findCompanyZone } from './fleet-month-read-model.ts';
-import { listPadMonths, type PadMonthRow } from './pad-month-read-model.ts';
+import { ENOUGH_FLOW, LEAST_GALLONS, listPadMonths, type PadMonthRow } from './pad-month-read-model.ts';
 
 const DAY_MS = 86_400_000;
-/** A figure per volume is only honest where the flow was known for this much of the time. */
-const ENOUGH_FLOW = 0.9;
 
 /** A month pad by pad. */
 export async function listPadEnergy({ db, actor, now }: Context, query: PadMonthQuery) {
@@ -53,7 +51,7 @@ function present(row: PadMonthRow): PadMonth {
     cost: currency === null || costMinor === null ? null : formatMinor(costMinor, currency),
     previousKwh: row.previousWattHours === null ? null : row.previousWattHours / 1000,
     gallons: gallons > 0 ? gallons : null,
-    kwhPerThousandGallons: isFlowKnown ? row.wattHours / gallons : null,
+    kwhPerThousandGallons: isFlowKnown && gallons >= LEAST_GALLONS ? row.wattHours / gallons : null,
     turnoversPerDay: isFlowKnown && poolGallons !== null && days > 0 ? gallons / poolGallons / days : null,
     wantedTurnoversPerDay: row.turnoversPerDay,
     savedKwh: row.savedKwh,

@@ -27,12 +27,18 @@ export type PadMonthRow = {
   readonly previousWattHours: number | null;
 };
 
+/** A figure per volume is only honest where the flow was known for this much of the time. */
+export const ENOUGH_FLOW = 0.9;
+/** What a thousand gallons take is not said before so many have moved: on a month's first morning standby alone would. */
+export const LEAST_GALLONS = 1000;
+
 /** Ascending, so that a place in the list is one row comparison; what nobody knows comes last. */
 const LAST = 1e18;
 const RANK: Readonly<Record<PadMonthQuery['sort'], SQL>> = {
   cost: sql`coalesce(-cost_minor, ${LAST}::float8)`,
   kwh: sql`-watt_hours`,
-  'per-volume': sql`coalesce(-watt_hours / nullif(gallons, 0), ${LAST}::float8)`,
+  'per-volume': sql`case when gallons >= ${LEAST_GALLONS}::float8 and flow_known_ms >= ${ENOUGH_FLOW}::float8 * on_ms
+    then -watt_hours / gallons else ${LAST}::float8 end`,
   rise: sql`coalesce(previous - watt_hours, ${LAST}::float8)`,
   saved: sql`coalesce(saved_kwh, ${LAST}::float8)`,
   coverage: sql`coalesce(covered_ms / nullif(span_ms, 0), 0)`,

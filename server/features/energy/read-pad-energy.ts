@@ -38,7 +38,7 @@ export async function readPadEnergy(context: Context, { padId, by, ...asked }: A
   const terms = { periods: listPeriodNames(days.flatMap(({ settled }) => settled ?? [])), showsMoney, knownTo: known };
   const parts = pumps.map((reckoning) => {
     const { pump, days: ownDays } = reckoning;
-    const saved = reckonSavings(reckoning, { money, region });
+    const saved = reckonSavings(reckoning, { money, region, knownTo: known });
     const ownPool = pump.purpose === 'filter' ? poolGallons : null;
     const totals = sumFigures(ownDays, { ...terms, poolGallons: ownPool });
     return { pumpId: pump.pumpId, pumpName: pump.pumpName, totals, ...saved };

@@ -44,7 +44,7 @@ export async function readPumpEnergy(context: Context, { pumpId, by, ...asked }:
     by,
     upTo: pump.rolledTo,
     ...shown,
-    ...reckonSavings(reckoning, { money, region: pump.region }),
+    ...reckonSavings(reckoning, { money, region: pump.region, knownTo: known }),
     carbon: presentCarbon(shown.totals.kwh, 'consumption', pump.region),
     gaps,
     gapCount: count,

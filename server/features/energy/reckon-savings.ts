@@ -21,10 +21,10 @@ export function presentCarbon(kwh: number, purpose: CarbonPurpose, region: strin
 
 type Money = { readonly currency: string | undefined; readonly shows: boolean };
 
-/** What a pump saved over a window, from its days and what they compare to. */
+/** What a pump saved over a window, from its days and what they compare to; readings may be known up to `knownTo`. */
 export function reckonSavings(
   { baseline, days, compared }: Pick<PumpReckoning, 'baseline' | 'days' | 'compared'>,
-  { money, region }: { readonly money: Money; readonly region: string | null },
+  { money, region, knownTo }: { readonly money: Money; readonly region: string | null; readonly knownTo: number },
 ): SavedAnswer {
   if (baseline === undefined) return { saved: null, savedMissing: 'no-baseline' };
   const savings = sumSavings(baseline, compared);
@@ -32,9 +32,23 @@ export function reckonSavings(
     const ran = days.some(({ day }) => day.onMs > 0);
     return { saved: null, savedMissing: baseline.basis.kind === 'same-volume' && ran ? 'no-water' : 'nothing-yet' };
   }
-  const span = days.reduce((sum, { day }) => sum + day.to - day.from, 0);
-  const coverage = span > 0 ? days.reduce((sum, { day }) => sum + day.coveredMs, 0) / span : 0;
+  const coverage = coverageOfDays(
+    days.map(({ day }) => day),
+    knownTo,
+  );
   return { saved: { ...presentSaved(baseline, savings, { money, region }), coverage }, savedMissing: null };
+}
+
+type CoveredDay = { readonly from: number; readonly to: number; readonly coveredMs: number };
+
+/**
+ * The share of some days that readings cover, 0 to 1. What is still to come of today is no gap in them.
+ *
+ * @example coverageOfDays([{ from: 0, to: 24, coveredMs: 6 }], 6) // 1
+ */
+export function coverageOfDays(days: readonly CoveredDay[], knownTo: number): number {
+  const span = days.reduce((sum, { from, to }) => sum + Math.max(0, Math.min(to, knownTo) - from), 0);
+  return span > 0 ? Math.min(1, days.reduce((sum, { coveredMs }) => sum + coveredMs, 0) / span) : 0;
 }
 
 function presentSaved(
