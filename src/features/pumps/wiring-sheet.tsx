@@ -46,6 +46,7 @@ export function WiringSheet({ pump }: { readonly pump: PumpDetail }) {
         ) : (
           <DataTable
             wide
+            stacked
             caption={t('pump.wiring')}
             rows={rows}
             keyOf={({ number }) => number}

@@ -1,7 +1,9 @@
 import { useState } from 'react';
 import type { RuleLayer } from '#shared/contract/http/rules.ts';
+import { DETECTOR_CLASSES } from '#shared/domain/detectors/detector-classes.data.ts';
 import type { FoldedDetector } from '#shared/domain/detectors/detector-defaults.data.ts';
 import { FOLDED_DETECTORS } from '#shared/domain/detectors/figure-limits.ts';
+import { PriorityMark } from '#src/components/ui/priority-mark.tsx';
 import { Sheet } from '#src/components/ui/sheet.tsx';
 import { ruleName, ruleSays, t } from '#src/lib/messages/rules-words.ts';
 import { countSet, type Draft, type RuleDraft } from './rule-draft.ts';
@@ -50,6 +52,7 @@ function RuleItem({ detector, layer, elsewhere, draft, onChange, readOnly }: Rul
   const [open, setOpen] = useState(false);
   const above = layer.inherited[detector];
   const isOff = draft.enabled === '' ? above?.enabled === false : draft.enabled === 'off';
+  const priority = draft.priority === '' ? (above?.priority ?? DETECTOR_CLASSES[detector].priority) : draft.priority;
   const set = countSet(draft);
   const marks = [
     isOff ? t('rules.off') : undefined,
@@ -65,6 +68,10 @@ function RuleItem({ detector, layer, elsewhere, draft, onChange, readOnly }: Rul
     >
       <summary className="cursor-pointer px-4 py-3 sm:px-5">
         <span className="text-17 font-semibold">{ruleName(detector)}</span>
+        <span className="ml-2 inline-flex items-center gap-1.5 whitespace-nowrap align-middle text-13 text-ink-2">
+          <PriorityMark kind={priority} acknowledged decorative />
+          {t(`mark.${priority}`)}
+        </span>
         <span className="ml-2 text-13 text-ink-2">{marks.length === 0 ? t('rules.usual') : marks.join(' · ')}</span>
         <span className="block text-15 text-ink-2">{ruleSays(detector)}</span>
       </summary>
