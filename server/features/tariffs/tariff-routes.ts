@@ -5,6 +5,7 @@ import { readCompanyTerms, readPadTerms, replaceCompanyTerms, replacePadTerms } 
 import { checkTariffDraft } from './check-tariff-draft.ts';
 import { chooseCarbon, readCarbon } from './choose-carbon.ts';
 import { getTariff, listTariffs } from './get-tariff.ts';
+import { listPadsWithTerms } from './list-pads-with-terms.ts';
 
 /** Tariffs, which of them holds when, and the grid's emission factors over HTTP. */
 export function mountTariffRoutes(mount: Mount): void {
@@ -20,6 +21,7 @@ export function mountTariffRoutes(mount: Mount): void {
   mount.person(tariffEndpoints.replaceCompanyTerms, (context, { body, ifMatch }) =>
     replaceCompanyTerms(context, { ...body, ifMatch }),
   );
+  mount.person(tariffEndpoints.padsWithTerms, (context) => listPadsWithTerms(context));
   mount.person(tariffEndpoints.padTerms, (context, { params }) => readPadTerms(context, params.padId));
   mount.person(tariffEndpoints.replacePadTerms, (context, { params, body, ifMatch }) =>
     replacePadTerms(context, { ...params, ...body, ifMatch }),

@@ -72,6 +72,17 @@ export const PadTermsShape = TermsShape.extend({
 export const PadTerms = PadTermsShape.extend({ version: z.number().int(), inherited: z.boolean() });
 export type PadTerms = z.infer<typeof PadTerms>;
 
+/** A pad with terms of its own: the tariff that holds there today, null before its first term. */
+export const PadWithTerms = z.object({
+  padId: Id,
+  padName: z.string(),
+  customerName: z.string().nullable(),
+  zone: z.string(),
+  tariffId: Id.nullable(),
+  terms: z.number().int(),
+});
+export type PadWithTerms = z.infer<typeof PadWithTerms>;
+
 /** The grid whose emission factors are used: a region of the list, null = none is shown. */
 export const CarbonSettings = z.object({
   region: z.string().max(20).nullable(),
@@ -156,6 +167,13 @@ export const tariffEndpoints = {
     body: TermsShape,
     response: CompanyTerms,
     ifMatch: true,
+  }),
+  padsWithTerms: defineEndpoint({
+    method: 'GET',
+    path: '/api/tariff-terms/pads',
+    summary: 'Pads with terms of their own by name, at most 500, and how many there are',
+    roles: MANAGERS,
+    response: z.object({ items: z.array(PadWithTerms), count: z.number().int() }),
   }),
   padTerms: defineEndpoint({
     method: 'GET',

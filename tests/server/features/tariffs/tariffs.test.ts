@@ -1,4 +1,5 @@
 import { beforeAll, describe, expect, it } from 'vitest';
+import type { Pools } from '#server/db/pools.ts';
 import { presentTariff, toTariff } from '#server/features/tariffs/tariff-shape.ts';
 import type { Tariff } from '#shared/domain/energy/tariff.ts';
 import { TIME_OF_USE, TWO_TIER } from '#tests/shared/domain/energy/sample-tariffs.ts';
@@ -6,13 +7,14 @@ import { makeTestCompany, type TestCompany } from '#tests/support/test-company.t
 import { openTestPools } from '#tests/support/test-pools.ts';
 import { startTestServer, type TestServer } from '#tests/support/test-server.ts';
 
+let pools: Pools;
 let server: TestServer;
 let ours: TestCompany;
 
 beforeAll(async () => {
-  const pools = await openTestPools();
+  pools = await openTestPools();
   server = await startTestServer(pools);
-  ours = await makeTestCompany(pools.machine);
+  ours = await makeTestCompany(pools.machine, { pads: 3 });
 });
 
 const ask = (method: string, path: string, body?: unknown, version?: number) =>
@@ -31,6 +33,30 @@ const create = async (tariff: Tariff) => {
   expect(answer.status).toBe(201);
   return answer.body;
 };
+
+describe('pads with terms of their own', () => {
+  it('are listed with the tariff of today, none of another company’s among them', async () => {
+    const stranger = await makeTestCompany(pools.machine);
+    const { id } = await create(TWO_TIER);
+    const next = await create(TIME_OF_USE);
+    const terms = [
+      { tariffId: id, from: '2020-01-01', to: '2990-01-01' },
+      { tariffId: next.id, from: '2990-01-01', to: null },
+    ];
+    const path = `/api/pads/${ours.padIds[2]}/tariff-terms`;
+    const put = async (given: unknown[], version: number) =>
+      (await ask('PUT', path, { terms: given, ownMeter: false, otherKwhByPeriod: [] }, version)).status;
+    expect(await put(terms, 0)).toBe(200);
+    const { body } = await ask('GET', '/api/tariff-terms/pads');
+    expect(body).toMatchObject({ count: 1, items: [{ padId: ours.padIds[2], tariffId: id, terms: 2 }] });
+    const other = await server.ask('GET', '/api/tariff-terms/pads', { as: stranger.manager });
+    expect(other.body).toEqual({ items: [], count: 0 });
+    expect((await server.ask('GET', '/api/tariff-terms/pads', { as: ours.technician })).status).toBe(403);
+    expect(await put([], 1)).toBe(200);
+    expect((await ask('GET', '/api/tariff-terms/pads')).body).toEqual({ items: [], count: 0 });
+    for (const tariffId of [id, next.id]) expect((await ask('DELETE', `/api/tariffs/${tariffId}`)).status).toBe(204);
+  });
+});
 
 describe('a tariff', () => {
   it.each([TWO_TIER, TIME_OF_USE])('goes over the wire and back without losing a millionth: $name', (tariff) => {
