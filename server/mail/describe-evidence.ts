@@ -1,4 +1,5 @@
 import type { Evidence } from '#shared/domain/detectors/detector.ts';
+import { bothDegrees } from '#shared/domain/wording/both-degrees.ts';
 import { formatDuration } from '#shared/domain/wording/format-duration.ts';
 import { formatInstant } from './format-instant.ts';
 
@@ -15,7 +16,7 @@ const UNITS: readonly Unit[] = [
   { suffix: /Rpm$/, noun: 'speed', write: (value) => `${number(value, 0)} rpm` },
   { suffix: /Watts$/, noun: 'watts', write: (value) => `${number(value)} W` },
   { suffix: /Volts$/, noun: 'voltage', write: (value) => `${number(value)} V` },
-  { suffix: /Celsius$/, noun: 'temperature', write: (value) => `${number(value, 1)} °C` },
+  { suffix: /Celsius$/, noun: 'temperature', write: bothDegrees },
   {
     suffix: /Seconds$/,
     noun: '',

@@ -2,8 +2,8 @@ import type { Detector } from '../detectors/detector.ts';
 
 /**
  * The titles of one detector's alarms: the first whose `{places}` the evidence can fill is taken, a known cause's own
- * before the detector's. A place is `{name}` for a number or word, `{name:duration}` for minutes, `{name:percent}` for
- * a share of 1, `{name#pad|pads}` for a count with its noun. They stand apart from the other words because a fleet's
+ * before the detector's. A place is `{name}` for a number or word, `{name:duration}` for minutes, `{name:temperature}`
+ * for degrees Celsius, `{name:percent}` for a share of 1, `{name#pad|pads}` for a count with its noun. They stand apart from the other words because a fleet's
  * wall needs them and nothing else.
  */
 export type DetectorTitles = {
@@ -160,7 +160,7 @@ export const ALARM_TITLES: Readonly<Record<Detector, DetectorTitles>> = {
       'low-flow': ['Flow too low: {turnovers} of {target} turnovers', 'Flow too low for this pool'],
     },
   },
-  freezing: { titles: ['{ambientCelsius} °C and standing still', 'Freezing and standing still'], causes: {} },
+  freezing: { titles: ['{ambientCelsius:temperature} and standing still', 'Freezing and standing still'], causes: {} },
   'supply-voltage': {
     titles: ['Supply {volts} V, {nominalVolts} V nominal', 'Supply voltage out of range'],
     causes: {
@@ -169,7 +169,10 @@ export const ALARM_TITLES: Readonly<Record<Detector, DetectorTitles>> = {
     },
   },
   'drive-fault': { titles: ['Drive fault {fault}', 'The drive reports a fault'], causes: {} },
-  'drive-hot': { titles: ['Drive at {driveCelsius} °C, limit {limitCelsius} °C', 'The drive runs hot'], causes: {} },
+  'drive-hot': {
+    titles: ['Drive at {driveCelsius:temperature}, limit {limitCelsius:temperature}', 'The drive runs hot'],
+    causes: {},
+  },
   silent: {
     titles: ['No word for {minutes:duration}', 'No word from the device'],
     causes: {
@@ -187,9 +190,9 @@ export const ALARM_TITLES: Readonly<Record<Detector, DetectorTitles>> = {
   'costly-program': {
     titles: ['Another program costs {saving:percent} less', 'The program could cost less'],
     causes: {
-      'dear-hours': ['Runs in dear hours: {saving:percent} could be saved'],
-      'hours-too-long': ['Moves more water than asked for: {saving:percent} could be saved'],
-      'speed-too-high': ['Runs faster than it must: {saving:percent} could be saved'],
+      'dear-hours': ['Runs in dear hours: {saving:percent} to save'],
+      'hours-too-long': ['More water than asked for: {saving:percent} to save'],
+      'speed-too-high': ['Runs faster than it must: {saving:percent} to save'],
     },
   },
 };

@@ -1,4 +1,5 @@
 import type { Evidence } from '../detectors/detector.ts';
+import { bothDegrees } from './both-degrees.ts';
 import { formatDuration } from './format-duration.ts';
 
 const PLACE = /\{(\w+)(?::(\w+)|#([^{}|]*)\|([^{}|]*))?\}/g;
@@ -10,13 +11,14 @@ const formatPlace = (value: number | string, form: string | undefined): string |
   if (typeof value === 'string') return value === '' ? undefined : value;
   if (!Number.isFinite(value)) return undefined;
   if (form === 'duration') return formatDuration(value);
+  if (form === 'temperature') return bothDegrees(value);
   if (form === 'percent') return `${Math.round(value * 100)} %`;
   return formatNumber(value);
 };
 
 /**
  * Fills the `{places}` of a sentence from an alarm's evidence; undefined when one of them has nothing to show.
- * `{name:duration}` takes minutes, `{name:percent}` a share of 1, `{name#pad has|pads have}` a count with what goes with
+ * `{name:duration}` takes minutes, `{name:temperature}` degrees Celsius, `{name:percent}` a share of 1, `{name#pad has|pads have}` a count with what goes with
  * one and with many.
  *
  * @example fillTemplate('Load down {drop:percent}', { drop: 0.41 }) // 'Load down 41 %'

@@ -24,9 +24,15 @@ const UNITS: readonly { readonly unit: RegExp; readonly write: (value: number, f
   { unit: /closedInputs$/, write: (value) => listClosed(value).join(', ') || t('alarm.now.allOpen') },
 ];
 
+/** Units that a value carries in the reader's own: `ambientCelsius` must not stand before degrees Fahrenheit. */
+const CARRIED = /(Celsius|Seconds|Minutes|Share)$/;
+
 /** `measuredRpm` as "Measured rpm": what a name without words of its own reads like. */
 const spellOut = (name: string): string => {
-  const words = name.replaceAll(/([A-Z])/g, ' $1').toLowerCase();
+  const words = name
+    .replace(CARRIED, '')
+    .replaceAll(/([A-Z])/g, ' $1')
+    .toLowerCase();
   return words.slice(0, 1).toUpperCase() + words.slice(1);
 };
 

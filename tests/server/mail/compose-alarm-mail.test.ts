@@ -132,7 +132,7 @@ describe('evidence in words', () => {
       { name: 'waited', value: '90 s' },
       { name: 'lasted', value: '1 h 35' },
       { name: 'dropped share', value: '41 %' },
-      { name: 'drive temperature', value: '41.3 °C' },
+      { name: 'drive temperature', value: '106 °F (41 °C)' },
       { name: 'code', value: 'E12' },
       { name: 'clamped', value: 'yes' },
       { name: 'edges at', value: 'Mon, Jul 14, 2025, 06:02 MST, Mon, Jul 14, 2025, 06:02 MST' },

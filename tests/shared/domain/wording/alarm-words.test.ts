@@ -33,6 +33,17 @@ describe('words of an alarm', () => {
     );
   });
 
+  it('says a temperature in both degrees, for whoever reads it', () => {
+    expect(alarmTitle('freezing', 'unknown', { ambientCelsius: 0.5 })).toBe('33 °F (0.5 °C) and standing still');
+    expect(alarmTitle('freezing', 'unknown', { ambientCelsius: -0.01 })).toBe('32 °F (0 °C) and standing still');
+  });
+
+  it('fits one line of the wall', () => {
+    expect(alarmTitle('costly-program', 'hours-too-long', { saving: 0.42 })).toBe(
+      'More water than asked for: 42 % to save',
+    );
+  });
+
   it('asks for lock-out before a lid is opened and before a wire is touched', () => {
     expect(alarmWords('failed-prime', 'air-leak', {}).cautions.join(' ')).toMatch(/Lock out/);
     expect(alarmWords('wrong-speed', 'ignores-input', {}).cautions.join(' ')).toMatch(/Test for no voltage/);

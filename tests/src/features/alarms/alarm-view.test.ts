@@ -104,7 +104,7 @@ describe('the evidence', () => {
       Watts: '412 W',
       'Watts when primed': '1,450 W',
       'Stood still before': '1 h 40',
-      'Ambient celsius': '30 °F',
+      'Air at the pad': '30 °F',
       'Load, of what is usual': '28 %',
       'Closed inputs': '1, 3',
     });
