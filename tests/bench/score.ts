@@ -42,7 +42,7 @@ function row(score: DetectorScore): string {
 const base = { seed: values.seed, from: FROM, days: Number(values.days), cadenceMs: Number(values.cadence) * 1000 };
 const startedAt = performance.now();
 const faulty = playFleet({ ...base, pumps: Number(values.pumps), each: Number(values.each) });
-const { scores, wrong, missed } = matchTruth(faulty.alarms, faulty.truth);
+const { scores, wrong, missed, mistaken } = matchTruth(faulty.alarms, faulty.truth);
 say(
   `${faulty.readings.toLocaleString('en-US')} readings of ${values.pumps} pumps over ${values.days} days, ${faulty.truth.length} faults`,
 );
@@ -61,6 +61,8 @@ say(
 if (values.list) {
   for (const alarm of wrong) say(`wrong: ${JSON.stringify(alarm)}`);
   for (const fault of missed) say(`missed: ${JSON.stringify(fault)}`);
+  for (const { fault, alarms } of mistaken)
+    say(`mistaken: ${fault.detector} ${fault.cause} ${JSON.stringify(fault)} ${JSON.stringify(alarms)}`);
 }
 if (Number(values.healthy) > 0) {
   const healthy = playFleet({

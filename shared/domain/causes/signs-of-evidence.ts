@@ -1,6 +1,6 @@
 import type { Detector, Evidence } from '../detectors/detector.ts';
 import { DETECTOR_DEFAULTS } from '../detectors/detector-defaults.data.ts';
-import { AIR_SHARE } from '../detectors/rules/prime-causes.ts';
+import { AIR_SHARE } from '../detectors/load/primed-watts.ts';
 import type { Sign, Signs } from './sign.ts';
 
 /** An alarm as its detector left it: the cause it named and the figures behind it. */

@@ -1,4 +1,3 @@
-import { GAP_INTERVALS } from '../control/create-control.ts';
 import type { PumpContext } from '../control/pump-context.ts';
 import { type Json, restoreState } from '../detectors/plain-state.ts';
 
@@ -8,6 +7,8 @@ type Memory = { commissioned: number; seconds: number; alike: number; lastMs: nu
 /** So many readings in a row, as far apart as one another, are a pace and no gaps. */
 const ALIKE_READINGS = 8;
 const ALIKE_SHARE = 0.2;
+/** Slower than recorded by this much is another pace: at three times it every second reading would be a gap. */
+const SLOWER_SHARE = 1.5;
 /** The slowest device, with some slack, ms. */
 const SLOWEST_MS = 90_000;
 
@@ -34,7 +35,7 @@ export function createReadingPace(context: PumpContext, saved: unknown): Reading
   return {
     context: intervalSeconds === context.intervalSeconds ? context : { ...context, intervalSeconds },
     read: (elapsedMs) => {
-      if (elapsedMs <= GAP_INTERVALS * intervalSeconds * 1000 || elapsedMs > SLOWEST_MS) {
+      if (elapsedMs <= SLOWER_SHARE * intervalSeconds * 1000 || elapsedMs > SLOWEST_MS) {
         memory.alike = 0;
         return false;
       }

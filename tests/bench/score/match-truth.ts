@@ -21,6 +21,8 @@ export type Scored = {
   readonly scores: ReadonlyMap<string, DetectorScore>;
   readonly wrong: readonly AlarmLine[];
   readonly missed: readonly TruthRow[];
+  /** Faults that were found and given another cause, with the alarms that gave it. */
+  readonly mistaken: readonly { readonly fault: TruthRow; readonly alarms: readonly AlarmLine[] }[];
 };
 
 /** A rule that looks back over days may speak this long after a fault was put right, and an edge falls on a reading. */
@@ -66,6 +68,7 @@ export function matchTruth(alarms: readonly AlarmLine[], truth: readonly TruthRo
     }
   }
   const missed: TruthRow[] = [];
+  const mistaken: { readonly fault: TruthRow; readonly alarms: readonly AlarmLine[] }[] = [];
   for (const row of truth) {
     const found = byRow.get(row) ?? [];
     const score = scoreOf(row.detector);
@@ -79,6 +82,7 @@ export function matchTruth(alarms: readonly AlarmLine[], truth: readonly TruthRo
     if (row.cause === null) continue;
     score.causesJudged += 1;
     if (found.some((alarm) => alarm.cause === row.cause)) score.causesRight += 1;
+    else mistaken.push({ fault: row, alarms: found });
   }
-  return { scores, wrong, missed };
+  return { scores, wrong, missed, mistaken };
 }

@@ -48,6 +48,7 @@ const FARTHEST_MINUTES = 360;
 const EDGES = 3;
 const AGREE_MINUTES = 10;
 const RIGHT_MINUTES = 15;
+const SET_MINUTES = 5;
 const SHORTEST_CUT_MINUTES = 15;
 const MOST_SUSPECT_MINUTES = 720;
 
@@ -86,13 +87,23 @@ export function createMotorClockTracker(context: PumpContext, control: Control, 
     if (late === undefined || Math.abs(late) > FARTHEST_MINUTES) return;
     if (Math.abs(late + (memory.offset ?? 0)) <= AGREE_MINUTES) memory.suspect = 0;
     noteGood(now, 0 - late);
+    // A clock that was off and is on time to the minute has been set: no second edge is needed to believe that.
+    if (Math.abs(memory.offset ?? 0) > RIGHT_MINUTES && Math.abs(late) <= SET_MINUTES) {
+      memory.late = [Math.round(late * 10) / 10];
+      learn(0 - late);
+      return;
+    }
     memory.late = [...memory.late, Math.round(late * 10) / 10].slice(-EDGES);
     const spread = Math.max(...memory.late) - Math.min(...memory.late);
     if (memory.late.length < EDGES || spread > AGREE_MINUTES) return;
     const middle = memory.late.toSorted((left, right) => left - right)[1] ?? 0;
-    memory.offset = 0 - middle;
+    learn(0 - middle);
+  }
+
+  function learn(offset: number): void {
+    memory.offset = offset;
     memory.suspect = 0;
-    control.setMotorClockOffset(memory.offset);
+    control.setMotorClockOffset(offset);
   }
 
   return {

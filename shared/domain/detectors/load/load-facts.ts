@@ -34,7 +34,12 @@ export type LoadFacts = {
   firstTryAt: number;
   /** Standard deviation of the watts over the last minutes as a share of their mean; 0 while too few. */
   raggedness: number;
-  /** What it last was in this start before there was load. */
+  /**
+   * At the fastest settled speed of this start before there was load: the speed (rpm), its watts and how ragged they
+   * were. The slower the pump, the less its watts tell of the water. 0 before.
+   */
+  triedRpm: number;
+  triedWatts: number;
   tryRaggedness: number;
   /** The same share as learnt from the band's spread; 0 while not learnt. */
   usualRaggedness: number;

@@ -9,7 +9,7 @@ import type { LoadFacts } from './load-facts.ts';
 import { restingLoad } from './load-state.ts';
 import { createPrimeTeacher } from './prime-teacher.ts';
 import { HALFWAY_SHARE, primedWattsAt, ROUGH_SHARE } from './primed-watts.ts';
-import { forgetSmoothing, raggednessOf, smoothWatts } from './smooth-watts.ts';
+import { forgetSmoothing, smoothWatts } from './smooth-watts.ts';
 import { endTry, followLately, judgeLoad, startTry, type TryLimits, unloadedShare } from './track-prime.ts';
 
 const SPEED_STEP_RPM = 20;
@@ -78,7 +78,9 @@ export function createLoadTracker(context: PumpContext, limits: TryLimits, hot: 
       state.judgedRpm = Math.round(reading.rpm);
       state.judgedWatts = Math.round(state.smoothWatts);
     }
-    if (isSettled && judgeLoad(state, reading.at, facts.ratio, facts.unloadedBelow) && state.startSeen) bump();
+    const sure = estimate.basis === 'band' || estimate.basis === 'prime';
+    const look = { at: reading.at, ratio: facts.ratio, unloadedBelow: facts.unloadedBelow, sure };
+    if (isSettled && judgeLoad(state, look) && state.startSeen) bump();
     if (isSettled) followLately(state, facts.ratio, elapsedMs);
     if (teacher.follow(reading, control, state)) bump();
     if (learnReading(state, bands, reading, control, elapsedMs, facts)) bump();
@@ -118,7 +120,9 @@ function publish(facts: LoadFacts, state: ReturnType<typeof restingLoad>): void 
   facts.dryForSeconds = state.primedOnce ? Math.max(0, state.lastUnloadedAt - state.startedAt) / 1000 : 0;
   facts.failedTries = state.failedTries;
   facts.firstTryAt = state.firstTryAt;
-  facts.raggedness = raggednessOf(state);
+  facts.raggedness = state.raggedness;
+  facts.triedRpm = state.triedRpm;
+  facts.triedWatts = state.triedWatts;
   facts.tryRaggedness = state.tryRaggedness;
   facts.stoodSeconds = state.stoodSeconds;
   facts.caught = state.caught;
@@ -144,6 +148,8 @@ function restingFacts(wattsAt: LoadFacts['wattsAt']): LoadFacts {
     failedTries: 0,
     firstTryAt: 0,
     raggedness: 0,
+    triedRpm: 0,
+    triedWatts: 0,
     tryRaggedness: 0,
     usualRaggedness: 0,
     stoodSeconds: 0,

@@ -7,6 +7,8 @@ export type PrimedWatts = { readonly watts: number; readonly basis: LoadBasis };
 
 /** Before any dry event, dry is this share of primed (common practice; no published figure). */
 export const DRY_SHARE = 0.35;
+/** Below this share of primed watts the wet end moves air; above it, water that goes nowhere (common practice). */
+export const AIR_SHARE = 0.41;
 /** Halfway between dry and primed, as a share of primed. */
 export const HALFWAY_SHARE = (1 + DRY_SHARE) / 2;
 /**

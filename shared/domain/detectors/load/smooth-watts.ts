@@ -1,37 +1,54 @@
 import { speedTolerance } from '#shared/domain/control/speed-tolerance.ts';
 import type { LoadState } from './load-state.ts';
 
-/** Watts are smoothed over this long at one speed, and their spread over four times as long, ms. */
+/** Watts are smoothed over this long at one speed, ms. */
 const MEAN_MS = 30_000;
-const SPREAD_MS = 120_000;
-/** Fewer readings than this say nothing about raggedness. */
-const LEAST_SAMPLES = 12;
+/** The watts are looked at this far apart to see how they move, ms. */
+const LOOK_MS = 20_000;
+const KEPT_MOVES = 10;
+const FEWEST_MOVES = 6;
+/** The two largest moves are left out: load that goes and comes back once is a step, and no raggedness. */
+const LEFT_OUT = 2;
+/** Mean of the smaller four fifths of the moves between independent normal values, in their standard deviations. */
+const MEAN_MOVE = 0.79;
 
 /** Takes one reading into the smoothed watts; another speed, or a gap, begins anew. */
 export function smoothWatts(state: LoadState, at: number, rpm: number, watts: number, elapsedMs: number): void {
   if (state.samples === 0 || Math.abs(rpm - state.smoothRpm) > speedTolerance(state.smoothRpm)) {
+    forgetSmoothing(state);
     state.smoothRpm = rpm;
     state.smoothWatts = watts;
-    state.variance = 0;
     state.samples = 1;
     state.smoothSince = at;
     return;
   }
-  const away = watts - state.smoothWatts;
-  const meanGain = Math.max(elapsedMs / (MEAN_MS + elapsedMs), 1 / (state.samples + 1));
-  const spreadGain = Math.max(elapsedMs / (SPREAD_MS + elapsedMs), 1 / (state.samples + 1));
-  state.smoothWatts += meanGain * away;
-  state.smoothRpm += meanGain * (rpm - state.smoothRpm);
-  state.variance += spreadGain * (away * away * (1 - meanGain) - state.variance);
+  const gain = Math.max(elapsedMs / (MEAN_MS + elapsedMs), 1 / (state.samples + 1));
+  state.smoothWatts += gain * (watts - state.smoothWatts);
+  state.smoothRpm += gain * (rpm - state.smoothRpm);
   state.samples += 1;
+  if (at - state.lookedAt >= LOOK_MS) look(state, at, watts);
 }
 
-/** Standard deviation of the watts as a share of their mean; 0 while there are too few. */
-export function raggednessOf(state: LoadState): number {
-  if (state.samples < LEAST_SAMPLES || state.smoothWatts <= 0) return 0;
-  return Math.sqrt(Math.max(0, state.variance)) / state.smoothWatts;
+function look(state: LoadState, at: number, watts: number): void {
+  if (state.lookedAt !== 0) {
+    state.moves.push(Math.round(Math.abs(watts - state.lookedWatts) * 10) / 10);
+    if (state.moves.length > KEPT_MOVES) state.moves.shift();
+  }
+  state.lookedAt = at;
+  state.lookedWatts = watts;
+  state.raggedness = raggednessOf(state);
+}
+
+/** Standard deviation of the watts as a share of their mean, steps left out; 0 while too few were seen. */
+function raggednessOf({ moves, smoothWatts: mean }: LoadState): number {
+  if (moves.length < FEWEST_MOVES || mean <= 0) return 0;
+  const smaller = moves.toSorted((left, right) => left - right).slice(0, -LEFT_OUT);
+  return smaller.reduce((sum, move) => sum + move, 0) / smaller.length / MEAN_MOVE / mean;
 }
 
 export function forgetSmoothing(state: LoadState): void {
   state.samples = 0;
+  state.lookedAt = 0;
+  state.raggedness = 0;
+  if (state.moves.length > 0) state.moves = [];
 }

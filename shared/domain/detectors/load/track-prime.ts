@@ -1,5 +1,6 @@
 import type { LoadState } from './load-state.ts';
-import { forgetSmoothing, raggednessOf } from './smooth-watts.ts';
+import { AIR_SHARE } from './primed-watts.ts';
+import { forgetSmoothing } from './smooth-watts.ts';
 
 /** Between these, s, a try counts once it lasted its prime time. */
 export type TryLimits = { readonly shortestTrySeconds: number; readonly longestTrySeconds: number };
@@ -15,6 +16,14 @@ const CLEARLY_BELOW = 0.1;
  * as much as an open one.
  */
 const CLEARLY_ABOVE = 1.18;
+/** What is left in the wet end gives load for a moment in any start, ms. */
+const FIRST_WATER_MS = 60_000;
+/** Load that came nearly, as a share of the primed watts, and watts of air after it: the water is not enough. */
+const CAUGHT_SHARE = 0.6;
+/** So long after a prime a start is still judged, ms. */
+const JUST_STARTED_MS = 900_000;
+/** Speeds within this share are one. */
+const SAME_SPEED = 0.98;
 /** A failed try is forgotten when no start follows within a day. */
 const TRY_MEMORY_MS = 86_400_000;
 
@@ -30,9 +39,13 @@ export function startTry(state: LoadState, at: number, seen: boolean): void {
   state.primedOnce = false;
   state.caught = false;
   state.brief = false;
+  state.bestShare = 0;
+  state.sure = false;
   state.primed = 2;
   state.primeSeconds = 0;
   state.lastUnloadedAt = 0;
+  state.triedRpm = 0;
+  state.triedWatts = 0;
   state.tryRaggedness = 0;
   forgetSmoothing(state);
 }
@@ -74,38 +87,69 @@ export function followLately(state: LoadState, ratio: number, elapsedMs: number)
   state.lately += (elapsedMs / (elapsedMs + LATELY_MS)) * (ratio - state.lately);
 }
 
+/** Share of the primed watts after the ramp, below which there is no load, and whether both are this speed's own. */
+export type LoadLook = {
+  readonly at: number;
+  readonly ratio: number;
+  readonly unloadedBelow: number;
+  readonly sure: boolean;
+};
+
 /** Judges one reading after the ramp; answers whether this start has just been seen to prime. */
-export function judgeLoad(state: LoadState, at: number, ratio: number, unloadedBelow: number): boolean {
+export function judgeLoad(state: LoadState, look: LoadLook): boolean {
+  const { at, ratio, unloadedBelow } = look;
   if (!(ratio >= 0)) {
     state.primed = 2;
     return false;
   }
   if (ratio < (state.primed === 0 ? unloadedBelow * CLEARLY_ABOVE : unloadedBelow)) {
-    // Load that came for a moment and went is no prime.
-    if (state.loadedSince !== 0) state.brief = at - state.loadedSince < CAUGHT_MS;
-    if (state.brief && ratio < unloadedBelow - CLEARLY_BELOW) {
-      state.caught = true;
-      state.primedOnce = false;
-    }
-    state.loadedSince = 0;
-    if (!state.primedOnce) {
-      state.lastUnloadedAt = at;
-      const raggedness = raggednessOf(state);
-      if (raggedness > 0) state.tryRaggedness = raggedness;
-    }
-    if (state.unloadedSince === 0) state.unloadedSince = at;
-    if (at - state.unloadedSince >= SETTLED_MS) state.primed = 0;
+    loseLoad(state, look);
     return false;
   }
   state.unloadedSince = 0;
   if (state.loadedSince === 0) state.loadedSince = at;
   if (at - state.loadedSince < SETTLED_MS) return false;
   state.primed = 1;
+  if (look.sure) state.sure = true;
+  if (!state.sure) state.bestShare = Math.max(state.bestShare, ratio);
   if (state.primedOnce) return false;
   state.primedOnce = true;
   state.primeSeconds = Math.max(0, (state.loadedSince - state.startedAt) / 1000);
   forgetTries(state);
   return true;
+}
+
+function loseLoad(state: LoadState, look: LoadLook): void {
+  const { at, ratio, unloadedBelow } = look;
+  // Load that came for a moment and went is no prime.
+  if (state.loadedSince !== 0) state.brief = at - state.loadedSince < CAUGHT_MS;
+  const justStarted = at - Math.max(state.startedAt, state.primeEndsAt) < JUST_STARTED_MS;
+  if (state.brief && justStarted && ratio < unloadedBelow - CLEARLY_BELOW) {
+    state.caught = true;
+    state.primedOnce = false;
+  }
+  state.loadedSince = 0;
+  if (state.unloadedSince === 0) state.unloadedSince = at;
+  if (at - state.unloadedSince >= SETTLED_MS) {
+    state.primed = 0;
+    // A model took the watts of no flow for load; what this speed usually draws tells better.
+    if (look.sure && !state.sure && justStarted) state.primedOnce = false;
+  }
+  if (!state.primedOnce) {
+    state.lastUnloadedAt = at;
+    noteTry(state, look);
+  }
+}
+
+/** Remembers what the fastest speed of a start without load looked like: nothing tells its cause better. */
+function noteTry(state: LoadState, { at, ratio }: LoadLook): void {
+  if (at - state.startedAt >= FIRST_WATER_MS) state.bestShare = Math.max(state.bestShare, ratio);
+  if (state.bestShare >= CAUGHT_SHARE && ratio < AIR_SHARE) state.caught = true;
+  const isFastest = state.smoothRpm >= state.triedRpm * SAME_SPEED;
+  if (state.raggedness > 0 && (isFastest || state.tryRaggedness === 0)) state.tryRaggedness = state.raggedness;
+  if (!isFastest) return;
+  state.triedRpm = Math.round(state.smoothRpm);
+  state.triedWatts = Math.round(state.smoothWatts);
 }
 
 function forgetTries(state: LoadState): void {

@@ -2,7 +2,7 @@ import { defineDetector, type Finding, type Spoken } from '../define-detector.ts
 import type { RuleParameters } from '../detector-parameters.ts';
 import type { Facts } from '../facts.ts';
 import { ABNORMAL, type Judgement, NORMAL, UNJUDGED } from '../judgement.ts';
-import { isNearShutOff, type PrimeCause, rankPrimeCauses } from './prime-causes.ts';
+import { isNearNoFlow, type PrimeCause, RAGGED_SHARE, rankPrimeCauses } from './prime-causes.ts';
 
 /** The cause that was found, how much spoke for it, and the start in which it was found. */
 type State = { cause: string; weight: number; startedAt: number };
@@ -12,7 +12,8 @@ type Parameters = RuleParameters<'failed-prime'>;
  * A pump that runs and carries no load, once its second try has had its time or three minutes past its prime, at
  * whatever speed; and one that gave up after its tries.
  */
-function judge(_: State, { load, stands, now, context }: Facts, parameters: Parameters): Judgement {
+function judge(_: State, facts: Facts, parameters: Parameters): Judgement {
+  const { load, stands, now, context } = facts;
   if (!load.running) {
     if (load.failedTries >= parameters.tries) return ABNORMAL;
     return stands('failed-prime') ? UNJUDGED : NORMAL;
@@ -21,6 +22,8 @@ function judge(_: State, { load, stands, now, context }: Facts, parameters: Para
   if (load.primed) return NORMAL;
   // Load lost after a good prime is `loss-of-prime`.
   if (load.primedOnce) return UNJUDGED;
+  // Load that comes this very moment is given its time.
+  if (isLoaded(facts) && !facts.stands('failed-prime')) return UNJUDGED;
   if (now >= load.primeEndsAt + parameters.pastPrimeSeconds * 1000) return ABNORMAL;
   const triedMs = now - load.startedAt;
   if (
@@ -31,6 +34,9 @@ function judge(_: State, { load, stands, now, context }: Facts, parameters: Para
   }
   return UNJUDGED;
 }
+
+const isLoaded = ({ load, reading, control }: Facts): boolean =>
+  control.rampOver && reading.watts >= load.unloadedBelow * load.primedWatts;
 
 /** How long a try without load must last to count, s: its prime time, within limits. */
 function trySeconds(primeSeconds: number, { shortestTrySeconds, longestTrySeconds }: Parameters): number {
@@ -48,27 +54,32 @@ function settleCause(state: State, { load }: Facts, ranked: readonly PrimeCause[
     state.startedAt = load.startedAt;
   }
   // Load that came after all, in the same run and with nobody's help: it had the whole lift to draw.
-  const cameByItself = load.primed === true && load.startedAt === state.startedAt && state.cause === 'air-leak';
+  const cameByItself =
+    load.primed === true &&
+    load.startedAt === state.startedAt &&
+    state.cause === 'air-leak' &&
+    load.tryRaggedness < RAGGED_SHARE;
   return cameByItself ? 'drained-back' : state.cause;
 }
 
-/** The figures of the last moment that was judged: a shaft that slows down after a try tells of nothing. */
+/** The figures of the fastest speed that this start held without load, which is where watts tell most of the water. */
 function describe(state: State, facts: Facts, _: Parameters, { raised }: Spoken): Finding {
   const { load } = facts;
-  const primedWatts = load.wattsAt(load.judgedRpm);
+  const primedWatts = load.wattsAt(load.triedRpm);
   const ranked = rankPrimeCauses(facts);
+  const noFlow = isNearNoFlow(facts);
   const from = load.firstTryAt === 0 ? load.startedAt : load.firstTryAt;
   return {
     cause: settleCause(state, facts, ranked, raised),
     ...(from === 0 ? {} : { from }),
     evidence: {
       tries: load.failedTries + (load.running ? 1 : 0),
-      rpm: load.judgedRpm,
-      watts: load.judgedWatts,
+      rpm: load.triedRpm,
+      watts: load.triedWatts,
       primedWatts: Math.round(primedWatts),
-      loadShare: primedWatts > 0 ? Math.round((load.judgedWatts / primedWatts) * 100) / 100 : null,
+      loadShare: primedWatts > 0 ? Math.round((load.triedWatts / primedWatts) * 100) / 100 : null,
       loadCameAndWent: load.caught,
-      ...(facts.context.wetEnd === undefined ? {} : { wattsOfNoFlow: isNearShutOff(facts) }),
+      ...(noFlow === undefined ? {} : { wattsOfNoFlow: noFlow }),
       knownFrom: load.basis,
       stoodMinutes: Math.round(load.stoodSeconds / 60),
       causes: ranked.map(({ cause }) => cause),

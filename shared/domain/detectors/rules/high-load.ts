@@ -100,13 +100,14 @@ function causeOf(state: State, facts: Facts): string {
   const ratio = ratioOf(facts);
   const twoSpeeds = slowRpm > 0 && fastRpm > OTHER_SPEED * slowRpm;
   if (twoSpeeds && slowRatio - 1 > FRICTION_MORE * (fastRatio - 1)) return 'rubbing';
+  const isWater = twoSpeeds && slowRatio <= fastRatio;
   const cameOn =
     state.usualAt !== 0 && state.risenAt - state.usualAt > AT_ONCE_MS && facts.load.startedAt < state.usualAt;
   const cameOverDays = facts.water.ratioYesterday > USUAL_RATIO && state.usualAt < state.risenAt - AT_ONCE_MS;
-  if (cameOn || cameOverDays) return 'rubbing';
+  if (!isWater && (cameOn || cameOverDays)) return 'rubbing';
   if (state.far) return 'to-waste';
   const most = mostWattsShare(facts.context);
-  return most !== undefined && ratio > BEYOND_CURVE * most ? 'rubbing' : 'bypass';
+  return !isWater && most !== undefined && ratio > BEYOND_CURVE * most ? 'rubbing' : 'bypass';
 }
 
 function describe(state: State, facts: Facts, _: Parameters, { raised, onset }: Spoken): Finding {

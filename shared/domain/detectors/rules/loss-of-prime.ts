@@ -3,31 +3,36 @@ import type { RuleParameters } from '../detector-parameters.ts';
 import type { Facts } from '../facts.ts';
 import { ABNORMAL, type Judgement, NORMAL, UNJUDGED } from '../judgement.ts';
 
-/** `wasDry` = dry since this alarm's condition began: water that comes back is ragged too. */
-type State = { ragged: boolean; dry: boolean; wasDry: boolean };
+/** `cause` = found while the load was gone: water that comes back is ragged too. */
+type State = { ragged: boolean; dry: boolean; cause: string };
 type Parameters = RuleParameters<'loss-of-prime'>;
 
 /** Ragged watts are air only where they are also lower than usual. */
 const RAGGED_BELOW = 0.92;
-/** Ragged watts above this share are gulps of air between water, not a wet end that has lost it. */
-const GULPS_ABOVE = 0.55;
+/** A wet end that has lost its water draws steadily, at about a third; above this, ragged watts are gulps of air. */
+const GULPS_ABOVE = 0.41;
 
 /**
  * A pump that had load in this run and holds its speed without it, or gulps air. Below 1500 rpm the watts say too
  * little about the load to judge.
  */
 function judge(state: State, facts: Facts, parameters: Parameters): Judgement {
-  const { load, control, context } = facts;
+  const { load, control, context, reading } = facts;
   if (!load.running || load.basis === 'none' || control.rpm < parameters.slowRpm || !control.rampOver) return UNJUDGED;
   // A model alone cannot tell a lost prime from a pump that differs from it; it may judge the prime, seen from zero.
   if (!load.primedOnce || (control.offExpected && !facts.stands('loss-of-prime'))) return UNJUDGED;
-  state.dry = load.primed === false;
+  // From the first reading without load on; smoothed watts take some readings to tell.
+  state.dry = load.primed === false || reading.watts < load.unloadedBelow * load.primedWatts;
   const usual = Math.max(parameters.raggedShare, parameters.raggedTimesUsual * load.usualRaggedness);
   state.ragged = load.basis === 'band' && !hasRaggedDuty(facts) && load.ratio < RAGGED_BELOW && load.raggedness > usual;
-  const gulps = state.ragged && load.ratio > GULPS_ABOVE;
-  state.wasDry = (state.dry && !gulps) || (state.wasDry && facts.stands('loss-of-prime'));
+  state.cause = causeOf(state, facts, usual);
   if (context.padState === 'drained') return UNJUDGED;
   return state.dry || state.ragged ? ABNORMAL : NORMAL;
+}
+
+function causeOf(state: State, { load, stands }: Facts, usualRaggedness: number): string {
+  if (state.dry) return load.raggedness > usualRaggedness && load.ratio > GULPS_ABOVE ? 'ragged' : 'sudden';
+  return state.ragged && !stands('loss-of-prime') ? 'ragged' : state.cause;
 }
 
 /** Spa jets and features draw air and turn valves by design. */
@@ -41,7 +46,7 @@ function hasRaggedDuty({ context, reading }: Facts): boolean {
 function describe(state: State, facts: Facts, _: Parameters, { onset }: Spoken): Finding {
   const { load, reading, now } = facts;
   return {
-    cause: state.wasDry ? 'sudden' : 'ragged',
+    cause: state.cause,
     evidence: {
       rpm: Math.round(reading.rpm),
       watts: Math.round(load.watts),
@@ -59,7 +64,7 @@ const isSlow = ({ control }: Facts, { fastRpm }: Parameters): boolean => control
 export const lossOfPrime = defineDetector<'loss-of-prime', State>({
   detector: 'loss-of-prime',
   hears: ['reading'],
-  initial: () => ({ ragged: false, dry: false, wasDry: false }),
+  initial: () => ({ ragged: false, dry: false, cause: 'sudden' }),
   judge,
   delaySeconds: (_, facts, parameters) =>
     isSlow(facts, parameters) ? parameters.slowDelaySeconds : parameters.delaySeconds,

@@ -1,31 +1,35 @@
 import type { Facts } from '../facts.ts';
-import { modelWatts } from '../load/primed-watts.ts';
+import { AIR_SHARE, modelWatts } from '../load/primed-watts.ts';
 
 /** One cause of a pump that does not prime, with what speaks for it. */
 export type PrimeCause = { readonly cause: string; readonly weight: number; readonly because: string };
 
-/** Below this share of primed watts the wet end moves air; above it, water that goes nowhere (common practice). */
-export const AIR_SHARE = 0.41;
-/** Ragged watts, as standard deviation over mean. */
-const RAGGED_SHARE = 0.11;
+/** Standard deviation of the watts over their mean from which bubbles go through. */
+export const RAGGED_SHARE = 0.11;
 /** A wet end that stood this long may have drained. */
 const LONG_STAND_SECONDS = 6 * 3600;
-/** Near the model's own watts at no flow. */
-const SHUT_OFF_SHARE = 0.1;
+/** Near the model's own share of watts at no flow. */
+const NO_FLOW_SHARE = 0.07;
+/** Without a model: a wet end that is full draws this of its usual watts even where nothing flows (common practice). */
+const FULL_SHARE = 0.57;
 
 /**
- * The causes of a failed prime, the likeliest first, by what the watts look like. The order among equals is how often
- * each is found (common practice): the readings cannot tell an open lid from a drip at a union.
+ * The causes of a failed prime, the likeliest first, by what the watts look like at the fastest speed of the start. The
+ * order among equals is how often each is found (common practice): the readings cannot tell an open lid from a drip at
+ * a union.
  *
  * @example rankPrimeCauses(facts)[0]?.cause // 'air-leak'
  */
 export function rankPrimeCauses(facts: Facts): readonly PrimeCause[] {
   const { load } = facts;
-  const primedWatts = load.wattsAt(load.judgedRpm);
-  const share = primedWatts > 0 ? load.judgedWatts / primedWatts : 0;
+  const primedWatts = load.wattsAt(load.triedRpm);
+  const share = primedWatts > 0 ? load.triedWatts / primedWatts : 0;
   const stoodLong = load.stoodSeconds >= LONG_STAND_SECONDS;
   const air = share < AIR_SHARE;
-  const ragged = Math.max(load.raggedness, load.tryRaggedness) > RAGGED_SHARE;
+  const raggedness = Math.max(load.raggedness, load.tryRaggedness);
+  const ragged = raggedness > RAGGED_SHARE;
+  // While nobody knows yet whether the watts hold still, little speaks for any cause.
+  const certainty = raggedness > 0 ? 1 : 0.5;
   const causes: readonly PrimeCause[] = [
     {
       cause: 'water-low',
@@ -40,19 +44,34 @@ export function rankPrimeCauses(facts: Facts): readonly PrimeCause[] {
     },
     {
       cause: 'valve-shut',
-      weight: !air && !ragged && isNearShutOff(facts) ? 4 : 0,
+      weight: air || ragged ? 0 : valveShutWeight(facts, share),
       because: 'steady watts of no flow',
     },
     { cause: 'blocked', weight: air ? 0.5 : 3, because: 'some load, far too little' },
   ];
-  return causes.filter(({ weight }) => weight > 0).sort((left, right) => right.weight - left.weight);
+  return causes
+    .filter(({ weight }) => weight > 0)
+    .map((one) => ({ ...one, weight: one.weight * certainty }))
+    .sort((left, right) => right.weight - left.weight);
 }
 
-/** Whether the watts are those of a full wet end that moves no water; false without a model. */
-export function isNearShutOff({ load, context }: Facts): boolean {
+function valveShutWeight(facts: Facts, share: number): number {
+  const near = isNearNoFlow(facts);
+  if (near !== undefined) return near ? 4 : 0;
+  return share >= FULL_SHARE ? 3.2 : 2;
+}
+
+/**
+ * Whether the watts are those of a full wet end that moves no water, as a share of the usual ones, which leaves the
+ * meter's own error out; undefined where no model tells its share.
+ */
+export function isNearNoFlow({ load, context }: Facts): boolean | undefined {
   const { wetEnd } = context;
-  if (wetEnd === undefined) return false;
-  const shut = wetEnd.points.filter(({ gpm }) => gpm === 0);
-  const atNoFlow = modelWatts(load.judgedRpm, { ...context, wetEnd: { ...wetEnd, points: shut } })?.watts;
-  return atNoFlow !== undefined && Math.abs(load.judgedWatts / atNoFlow - 1) <= SHUT_OFF_SHARE;
+  const usual = load.wattsAt(load.triedRpm);
+  const duty = modelWatts(load.triedRpm, context)?.watts;
+  const still = wetEnd?.points.filter(({ gpm }) => gpm === 0) ?? [];
+  if (wetEnd === undefined || still.length === 0 || duty === undefined || usual <= 0) return undefined;
+  const noFlow = modelWatts(load.triedRpm, { ...context, wetEnd: { ...wetEnd, points: still } })?.watts;
+  if (noFlow === undefined) return undefined;
+  return Math.abs(load.triedWatts / usual - noFlow / duty) <= NO_FLOW_SHARE;
 }

@@ -9,13 +9,19 @@ import { ABNORMAL, type Judgement, NORMAL, UNJUDGED } from '../judgement.ts';
 
 /**
  * Minutes by which the last start on the program missed the nearest entry's beginning; null = none seen. `startedLate`:
- * that entry had begun while the shaft stood, since `stoodSince`, ms.
+ * that entry had begun while the shaft stood, since `stoodSince`, ms. `cause` = found while nothing was due.
  */
-type State = { startMissedBy: number | null; startedLate: boolean; wasStanding: boolean; stoodSince: number };
+type State = {
+  startMissedBy: number | null;
+  startedLate: boolean;
+  wasStanding: boolean;
+  stoodSince: number;
+  cause: string;
+};
 
 const SHORT_STAND_MS = 3_600_000;
 
-function judge(state: State, facts: Facts): Judgement {
+function judge(state: State, facts: Facts, parameters: RuleParameters<'unexpected-run'>): Judgement {
   const { control, reading, stands } = facts;
   if (state.wasStanding && !control.standing && !facts.gap && reading.closedInputs === 0) noteStart(state, facts);
   if (control.standing && (!state.wasStanding || state.stoodSince === 0 || facts.gap)) state.stoodSince = facts.now;
@@ -25,6 +31,8 @@ function judge(state: State, facts: Facts): Judgement {
   if (!nothingExpected && control.due.rpm > 0) return stands('unexpected-run') ? UNJUDGED : NORMAL;
   if (obeysOpenInput(facts) || (stands('settings-changed') && facts.fitsReported())) return UNJUDGED;
   if (isNearSuspectEdge(facts) || mayBeFreezeProtection(facts)) return UNJUDGED;
+  // What other hours look like while it stands says nothing of this run.
+  if (!stands('unexpected-run')) state.cause = causeOf(state, facts, parameters);
   return ABNORMAL;
 }
 
@@ -59,13 +67,12 @@ function noteStart(state: State, { context, localMinute, now, control }: Facts):
 
 function describe(
   state: State,
-  facts: Facts,
-  parameters: RuleParameters<'unexpected-run'>,
+  { reading, now, control }: Facts,
+  _: RuleParameters<'unexpected-run'>,
   { onset }: Spoken,
 ): Finding {
-  const { reading, now, control } = facts;
   return {
-    cause: causeOf(state, facts, parameters),
+    cause: state.cause,
     evidence: {
       measuredRpm: reading.rpm,
       watts: reading.watts,
@@ -103,7 +110,7 @@ function causeOf(
 export const unexpectedRun = defineDetector<'unexpected-run', State>({
   detector: 'unexpected-run',
   hears: ['reading'],
-  initial: () => ({ startMissedBy: null, startedLate: false, wasStanding: false, stoodSince: 0 }),
+  initial: () => ({ startMissedBy: null, startedLate: false, wasStanding: false, stoodSince: 0, cause: 'unknown' }),
   judge,
   delaySeconds: (_, { reportsSource }, parameters) =>
     reportsSource ? parameters.delaySeconds : parameters.withoutSourceSeconds,

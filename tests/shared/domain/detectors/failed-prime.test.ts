@@ -59,7 +59,10 @@ describe('failed-prime', () => {
   it.each([
     ['air-leak', () => 0.35],
     ['water-low', (since: number) => (since > 60 * SECOND && since < 100 * SECOND ? 1 : 0.3)],
-    ['blocked', () => 0.55],
+    ['water-low', (since: number) => (since > 65 * SECOND && since < 110 * SECOND ? 0.75 : 0.3)],
+    ['air-leak', (since: number) => 0.4 + 0.15 * Math.sin(since / 7000)],
+    ['valve-shut', () => 0.56],
+    ['blocked', () => 0.43],
   ])('ranks %s first', (cause, load) => {
     const player = createPlayer();
     player.playUntil(3, 360, goodDay());
@@ -67,6 +70,38 @@ describe('failed-prime', () => {
     player.play(8 * MINUTE, (at) => ({ load: load(at - start) }));
 
     expect(player.standing('failed-prime')?.cause).toBe(cause);
+  });
+
+  it('believes the fastest speed of the start: a slow pump draws nearly as much dry as wet', () => {
+    const player = createPlayer();
+    player.playUntil(3, 360, goodDay());
+    const start = player.at;
+    // Prime at 3450 rpm, then 1700 rpm, where drive and bearings take most of the watts.
+    player.play(8 * MINUTE, (at) => ({ load: at - start < 180 * SECOND ? DRY : 0.55 }));
+
+    const standing = player.standing('failed-prime');
+    expect(standing?.cause).toBe('air-leak');
+    const rpm = (standing?.evidence as { rpm: number }).rpm;
+    expect(Math.abs(rpm - CONTEXT.settings.prime!.rpm)).toBeLessThan(20);
+  });
+
+  it('finds a shut valve behind a prime that a model took for load', () => {
+    const { systemK: _, ...rough } = CONTEXT;
+    const player = createPlayer(rough);
+    player.playUntil(3, 360, goodDay());
+    const start = player.at;
+    player.play(12 * MINUTE, (at) => ({ load: at - start < 180 * SECOND ? 0.68 : 0.6 }));
+
+    expect(player.spoken()).toEqual(['failed-prime']);
+  });
+
+  it('gives load that comes in the last moment its time', () => {
+    const player = createPlayer();
+    player.playUntil(0, 360, {});
+    player.play(355 * SECOND, { load: DRY });
+    player.playUntil(0, 600, goodDay());
+
+    expect(player.signals).toEqual([]);
   });
 
   it('stays silent when priming is slow but comes, after a basket was cleaned, and where a try was cut short', () => {

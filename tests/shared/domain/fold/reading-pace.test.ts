@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { CONTEXT, createPlayer, goodDay, MINUTE } from '../detectors/pump-player.ts';
+import { CONTEXT, createPlayer, goodDay, MINUTE, SECOND } from '../detectors/pump-player.ts';
 
 describe('the pace of readings', () => {
   it('is learnt where a device sends more slowly than was recorded, so that its faults are seen', () => {
@@ -9,6 +9,18 @@ describe('the pace of readings', () => {
 
     expect(player.spoken()).toEqual(['wrong-speed']);
     expect(player.fold.save().hot).toMatchObject({ pace: { seconds: 60 } });
+  });
+
+  it('is learnt at three times what was recorded, where every second reading is a moment too late', () => {
+    const player = createPlayer({ ...CONTEXT, intervalSeconds: 10 });
+    for (let pair = 0; pair < 600; pair += 1) {
+      player.play(29_980, goodDay(), 29_980);
+      player.play(30_040, goodDay(), 30_040);
+    }
+    player.play(15 * MINUTE, { closedInputs: 1, activeInput: 0, rpm: 1700, reportedSource: 'program' }, 30 * SECOND);
+
+    expect(player.spoken()).toEqual(['wrong-speed']);
+    expect(player.fold.save().hot).toMatchObject({ pace: { seconds: 30 } });
   });
 
   it('is kept over a restart, and forgotten when another interval is commissioned', () => {
