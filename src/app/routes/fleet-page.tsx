@@ -62,11 +62,13 @@ export function FleetPage() {
     <div className="px-4 pb-10 sm:px-7">
       <div className="flex flex-wrap items-baseline gap-x-9 gap-y-2 pt-5 pb-3.5">
         <PageHeading title={title} />
-        {totals === undefined ? null : <FleetTotals totals={totals} />}
+        {totals === undefined ? null : <FleetTotals totals={totals} past={!window.live} />}
+        <div data-print="never" className="lg:ml-auto">
+          <TimeTravel range={view.range} window={window} />
+        </div>
       </div>
-      <div data-print="never" className="flex flex-wrap items-center justify-between gap-x-6 gap-y-2 pb-3">
+      <div data-print="never" className="pb-3">
         <FleetFilters areas={wall.first?.areas ?? []} />
-        <TimeTravel range={view.range} window={window} />
       </div>
       {isError && wall.rows.length === 0 ? (
         <div className="border border-ink bg-sheet">

@@ -42,7 +42,8 @@ export const FleetRow = memo(function FleetRow(props: FleetRowProps) {
   const [table, setTable] = useState(false);
   const runs = useMemo(() => withSilence(strip.runs, row.silentSince), [strip.runs, row.silentSince]);
   const view = viewRow(row, format, now);
-  const then = useInstantView(row, runs, cursor, now);
+  const then = useInstantView({ row, runs, window, cursor, now });
+  const pointed = then?.pointed === true;
   const name = row.pumpName === '' ? row.padName : `${row.padName}, ${row.pumpName}`;
   return (
     <div
@@ -60,7 +61,7 @@ export const FleetRow = memo(function FleetRow(props: FleetRowProps) {
           {row.pumpName === '' ? null : <span className="ml-1.5 text-13 font-normal text-ink-2">{row.pumpName}</span>}
         </Link>
         <p
-          className={`line-clamp-2 text-13 md:line-clamp-1 ${then !== undefined ? 'text-focus' : view.mark === undefined ? 'text-ink-2' : LINE_TONE[view.mark]}`}
+          className={`line-clamp-2 text-13 md:line-clamp-1 ${pointed ? 'text-focus' : then !== undefined || view.mark === undefined ? 'text-ink-2' : LINE_TONE[view.mark]}`}
         >
           {then?.line ?? view.line}
           {isElsewhere(row, companyZone, now) ? (
@@ -81,7 +82,9 @@ export const FleetRow = memo(function FleetRow(props: FleetRowProps) {
           topRpm={Math.max(USUAL_TOP_RPM, row.settings.maxRpm)}
           zone={companyZone}
         />
-        {strip.failed ? <p className="absolute top-1 left-2 text-13 text-ink-2">{t('strip.failed')}</p> : null}
+        {strip.failed && runs === undefined ? (
+          <p className="absolute top-1 left-2 text-13 text-ink-2">{t('strip.failed')}</p>
+        ) : null}
         <CursorLine cursor={cursor} window={window} />
         <button
           type="button"
@@ -93,17 +96,12 @@ export const FleetRow = memo(function FleetRow(props: FleetRowProps) {
         </button>
       </div>
       <div className="pr-2.5 text-right md:contents">
-        <Cell
-          label={t('fleet.column.speed')}
-          unit={t('unit.rpm')}
-          value={then?.rpm ?? view.rpm}
-          then={then !== undefined}
-        />
+        <Cell label={t('fleet.column.speed')} unit={t('unit.rpm')} value={then?.rpm ?? view.rpm} pointed={pointed} />
         <Cell
           label={t('fleet.column.watts')}
           unit={t('unit.watts')}
           value={then?.watts ?? view.watts}
-          then={then !== undefined}
+          pointed={pointed}
         />
       </div>
       {table ? (
@@ -113,12 +111,12 @@ export const FleetRow = memo(function FleetRow(props: FleetRowProps) {
   );
 });
 
-type CellProps = { readonly label: string; readonly unit: string; readonly value: string; readonly then: boolean };
+type CellProps = { readonly label: string; readonly unit: string; readonly value: string; readonly pointed: boolean };
 
 /** A figure; its unit stands in the column's head, or beside it where a phone has no columns. */
-function Cell({ label, unit, value, then }: CellProps) {
+function Cell({ label, unit, value, pointed }: CellProps) {
   return (
-    <p className={`figures text-15 font-medium md:px-2.5 md:text-right md:text-17 ${then ? 'text-focus' : ''}`}>
+    <p className={`figures text-15 font-medium md:px-2.5 md:text-right md:text-17 ${pointed ? 'text-focus' : ''}`}>
       <span className="sr-only">{label} </span>
       {value}
       <span aria-hidden="true" className="ml-1 text-13 text-ink-2 md:hidden">

@@ -21,13 +21,20 @@ const TOTALS: readonly Total[] = [
   { name: 'silent', change: { filter: 'silent' } },
 ];
 
+export type FleetTotalsProps = {
+  readonly totals: FleetPage['totals'];
+  /** The wall shows a day gone by: the numbers and the marks are of now all the same, and say so. */
+  readonly past: boolean;
+};
+
 /** What the fleet does, in numbers; most of them narrow the wall to what they count. A zero is left uncoloured. */
-export function FleetTotals({ totals }: { readonly totals: FleetPage['totals'] }) {
+export function FleetTotals({ totals, past }: FleetTotalsProps) {
   const format = useFormat();
   const [search] = useSearchParams();
   const { filter } = parseFleetAddress(search);
   return (
     <ul className="flex flex-wrap items-baseline gap-x-6 gap-y-1 text-ink-2">
+      {past ? <li>{t('fleet.totals.now')}</li> : null}
       <li>
         <span className="figures mr-1.5 text-20 font-semibold text-ink">{format.number(totals.pumps)}</span>
         {t('fleet.totals.pumpsWord', { count: totals.pumps })}

@@ -130,6 +130,14 @@ describe('the address', () => {
     await eventually(() => rows(opened).count()).toBe(2);
   });
 
+  it('tells of the day it names, not of now, and says what is of now all the same', async () => {
+    const { page } = await bench.open('/fleet?day=2026-11-30', { role: 'manager' });
+    await page.getByRole('heading', { level: 1, name: 'Fleet, Mon, Nov 30' }).waitFor();
+    await page.getByText('Marks and numbers of now:').waitFor();
+    await page.getByRole('link', { name: /Quarry Lane 18/ }).waitFor();
+    await eventually(() => page.getByText('Input 1 closed, runs program speed').count()).toBe(0);
+  });
+
   it('narrows by a total and widens by the same click', async () => {
     const opened = await openWall();
     await opened.page.getByRole('link', { name: /urgent/ }).click();
