@@ -29,15 +29,19 @@ const STACK = {
 
 const isNothing = (value: ReactNode): boolean => value === undefined || value === null || value === '';
 
+type StackedValueProps = { readonly head: string; readonly figures: boolean; readonly children: ReactNode };
+
 /** A value behind its column's name, which the eye needs on a phone alone. */
-const StackedValue = ({ head, children }: { readonly head: string; readonly children: ReactNode }) => (
-  <>
-    <span aria-hidden="true" className="w-20 shrink-0 font-sans text-13 text-ink-2 sm:hidden">
-      {head}
-    </span>
-    <span>{children}</span>
-  </>
-);
+function StackedValue({ head, figures, children }: StackedValueProps) {
+  return (
+    <>
+      <span aria-hidden="true" className="w-20 shrink-0 text-13 text-ink-2 sm:hidden">
+        {head}
+      </span>
+      <span className={figures ? 'figures' : undefined}>{children}</span>
+    </>
+  );
+}
 
 /** A plain table: hairlines, figures in their own type, scrolling sideways by itself where it is too wide. */
 export function DataTable<Row>({ caption, columns, rows, keyOf, wide = false, stacked = false }: DataTableProps<Row>) {
@@ -75,12 +79,18 @@ export function DataTable<Row>({ caption, columns, rows, keyOf, wide = false, st
                     key={head}
                     className={classNames(
                       'px-2 py-1.5 align-top first:pl-0 last:pr-0',
-                      figures && 'figures whitespace-nowrap',
+                      figures && (stacked ? 'whitespace-nowrap' : 'figures whitespace-nowrap'),
                       right && 'text-right',
                       stacked && (isNothing(value) ? 'max-sm:hidden' : STACK.cell),
                     )}
                   >
-                    {stacked ? <StackedValue head={head}>{value}</StackedValue> : value}
+                    {stacked ? (
+                      <StackedValue head={head} figures={figures === true}>
+                        {value}
+                      </StackedValue>
+                    ) : (
+                      value
+                    )}
                   </td>
                 );
               })}

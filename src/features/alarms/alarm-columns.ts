@@ -23,11 +23,18 @@ export const listAlarmColumns = (): readonly AlarmColumn[] => [
   { head: t('alarms.column.pump'), value: ({ pumpName }) => pumpName },
   { head: t('alarms.column.customer'), value: ({ customerName }) => customerName },
   { head: t('alarms.column.area'), value: ({ area }) => area },
-  { head: t('alarms.column.since'), figures: true, value: ({ from, zone }, told) => whenAt(from, zone, told) },
+  {
+    head: t('alarms.column.since'),
+    figures: true,
+    value: ({ from, zone }, told) => whenAt(from, zone, told),
+    shown: ({ from, zone }, { format, now }) => format.moment(from, zone, now),
+  },
   {
     head: t('alarms.column.until'),
     figures: true,
     value: ({ returnedAt, zone }, told) => (returnedAt === null ? null : whenAt(returnedAt, zone, told)),
+    shown: ({ returnedAt, zone }, { format, now }) =>
+      returnedAt === null ? null : format.moment(returnedAt, zone, now),
   },
   { head: t('alarms.column.count'), figures: true, value: ({ count }) => count },
   { head: t('alarms.column.state'), value: (alarm, { format, now }) => describeState(alarm, format, now) },

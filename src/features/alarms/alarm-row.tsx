@@ -51,7 +51,7 @@ export function AlarmRow({ alarm, now, StripSource, selected, onSelect }: AlarmR
             {titleOf(alarm)}
           </Link>
         </h3>
-        <p>
+        <p className="leading-6">
           {alarm.pumpId === null ? (
             <span className="font-medium">{whereOf(alarm)}</span>
           ) : (
