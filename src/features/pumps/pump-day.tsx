@@ -61,7 +61,7 @@ export function PumpDay({ pump, strip: read, day, now, cursor, size, voice, idle
         name={t('pump.stripOf', { name })}
         describe={describe}
       />
-      {strip.failed ? <p className="text-p1">{t('strip.failed')}</p> : null}
+      {strip.failed && strip.runs === undefined ? <p className="text-p1">{t('strip.failed')}</p> : null}
       <InstantLine
         pump={pump}
         strip={strip}

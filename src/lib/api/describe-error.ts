@@ -1,3 +1,5 @@
+import type { LinkState } from '../live/link-state.ts';
+import { liveLink } from '../live/live-link.ts';
 import { t } from '../messages/t.ts';
 import { type ApiErrorCode, isApiError } from './api-error.ts';
 
@@ -30,12 +32,22 @@ const WORDED_AS: Readonly<Record<ApiErrorCode, Worded>> = {
   unreadable: 'unreadable',
 };
 
-/** A page built before the last update asks for a file that is no longer there. */
-const isStaleBuild = (error: unknown) => error instanceof TypeError && /import|module script/i.test(error.message);
+/** A part of the program did not come: the server is away, or the page is older than the last update and asks in vain. */
+export const isMissingCode = (error: unknown): boolean =>
+  error instanceof TypeError && /import|module script/i.test(error.message);
+
+const LOST: readonly LinkState['phase'][] = ['broken', 'offline'];
 
 /** What went wrong and what to do, for any error a page can meet. */
 export function describeError(error: unknown): ErrorWords {
-  if (isStaleBuild(error)) {
+  if (isMissingCode(error)) {
+    if (LOST.includes(liveLink.get().phase))
+      return {
+        title: t('error.unreachable'),
+        detail: t('error.unreachable.detail'),
+        requestId: undefined,
+        retryable: true,
+      };
     return { title: t('error.updated'), detail: t('error.updated.detail'), requestId: undefined, retryable: false };
   }
   if (!isApiError(error)) {

@@ -3,6 +3,7 @@ import { ERROR_CODES } from '#shared/contract/errors.ts';
 import { checkSignIn, describeSignInError } from '#src/features/session/sign-in-view.ts';
 import { ApiError } from '#src/lib/api/api-error.ts';
 import { describeError } from '#src/lib/api/describe-error.ts';
+import { liveLink } from '#src/lib/live/live-link.ts';
 
 describe('signing in', () => {
   it('asks for what is missing before it asks the server', () => {
@@ -49,4 +50,13 @@ describe('an error in words', () => {
   it('does not show what a program says to itself', () => {
     expect(describeError(new Error('undefined is not a function')).detail).not.toContain('undefined');
   });
+});
+
+it('blames no update for a page that did not come while the server was away', () => {
+  const missing = new TypeError('Failed to fetch dynamically imported module: /assets/energy-page.js');
+  liveLink.set({ phase: 'broken', heardAt: 0 });
+  expect(describeError(missing)).toMatchObject({ title: 'The server cannot be reached.', retryable: true });
+  liveLink.set({ phase: 'live', heardAt: 0 });
+  expect(describeError(missing).title).toBe('Millrace has been updated.');
+  liveLink.set({ phase: 'connecting', heardAt: undefined });
 });
