@@ -37,6 +37,10 @@ export function createLoaders(client: QueryClient) {
       await requireManager(request);
       return null;
     },
+    settings: async ({ request }: LoaderFunctionArgs) => {
+      await requireManager(request);
+      return redirect(paths.rules());
+    },
     session: async ({ request }: LoaderFunctionArgs) => {
       await requireSession(request);
       return null;

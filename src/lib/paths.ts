@@ -20,6 +20,11 @@ export const paths = {
   padEnergy: (padId: string, query: { readonly month?: string | undefined } = {}) =>
     withQuery(`/energy/pads/${encodeURIComponent(padId)}`, query),
   rules: (query: { readonly for?: string | undefined } = {}) => withQuery('/settings/rules', query),
+  settings: () => '/settings',
+  tariffs: () => '/settings/tariffs',
+  /** `new` = one that is not there yet; `from` = made from another. */
+  tariff: (tariffId: string, query: { readonly from?: string | undefined } = {}) =>
+    withQuery(`/settings/tariffs/${encodeURIComponent(tariffId)}`, query),
   myPump: (pumpId?: string) => withQuery('/my-pump', { pump: pumpId }),
   profile: () => '/profile',
 } as const;

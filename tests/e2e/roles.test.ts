@@ -65,7 +65,7 @@ describe.each([
   [
     MANAGER,
     '/fleet',
-    ['Fleet', 'Alarms', 'Energy', 'Rules'],
+    ['Fleet', 'Alarms', 'Energy', 'Settings'],
     [
       '/fleet',
       '/fleet?range=7d',

@@ -1,6 +1,7 @@
 import { useQuery } from '@tanstack/react-query';
 import { useSearchParams } from 'react-router-dom';
 import type { RuleLayers } from '#shared/contract/http/rules.ts';
+import { SettingsPages } from '#src/app/shell/settings-pages.tsx';
 import { ErrorNotice } from '#src/components/ui/error-notice.tsx';
 import { PageHeading } from '#src/components/ui/page-heading.tsx';
 import { RuleEditor } from '#src/features/rules/rule-editor.tsx';
@@ -16,6 +17,7 @@ export function RulesPage() {
   const { data, isError, error, refetch } = useQuery(ruleQueries.all());
   return (
     <div className="mx-auto flex max-w-6xl flex-col gap-4 px-4 py-5 sm:px-7">
+      <SettingsPages />
       <div>
         <PageHeading title={t('rules.page')}>{t('rules.page')}</PageHeading>
         <p className="mt-1 max-w-prose text-ink-2">{t('rules.lead')}</p>

@@ -4,18 +4,21 @@ import { paths } from '#src/lib/paths.ts';
 
 export type NavigationPage = {
   readonly to: string;
-  readonly label: Extract<MessageKey, 'shell.fleet' | 'shell.alarms' | 'shell.energy' | 'shell.rules' | 'shell.myPump'>;
+  readonly label: Extract<
+    MessageKey,
+    'shell.fleet' | 'shell.alarms' | 'shell.energy' | 'shell.settings' | 'shell.myPump'
+  >;
 };
 
 const FLEET: NavigationPage = { to: paths.fleet(), label: 'shell.fleet' };
 const ALARMS: NavigationPage = { to: paths.alarms(), label: 'shell.alarms' };
 const ENERGY: NavigationPage = { to: paths.energy(), label: 'shell.energy' };
-const RULES: NavigationPage = { to: paths.rules(), label: 'shell.rules' };
+const SETTINGS: NavigationPage = { to: paths.settings(), label: 'shell.settings' };
 const MY_PUMP: NavigationPage = { to: paths.myPump(), label: 'shell.myPump' };
 
 /** The pages each role has, the first of them where it starts. Only pages that exist are named. */
 const PAGES: Readonly<Record<Role, readonly [NavigationPage, ...NavigationPage[]]>> = {
-  manager: [FLEET, ALARMS, ENERGY, RULES],
+  manager: [FLEET, ALARMS, ENERGY, SETTINGS],
   technician: [ALARMS, FLEET],
   homeowner: [MY_PUMP],
 };

@@ -1,0 +1,58 @@
+import { useQuery } from '@tanstack/react-query';
+import { localDayAt } from '#shared/domain/time/local-days.ts';
+import { DAY_MS } from '#shared/domain/time/local-time.ts';
+import { SettingsPages } from '#src/app/shell/settings-pages.tsx';
+import { ErrorNotice } from '#src/components/ui/error-notice.tsx';
+import { PageHeading } from '#src/components/ui/page-heading.tsx';
+import { CarbonSheet } from '#src/features/tariffs/carbon-sheet.tsx';
+import { CompanyTermsSheet } from '#src/features/tariffs/company-terms-sheet.tsx';
+import { PadsSheet } from '#src/features/tariffs/pads-sheet.tsx';
+import { TariffList } from '#src/features/tariffs/tariff-list.tsx';
+import { tariffQueries } from '#src/features/tariffs/tariff-queries.ts';
+import { useSession } from '#src/hooks/use-session.ts';
+import { t } from '#src/lib/messages/tariffs-words.ts';
+import { serverNow } from '#src/lib/server-clock.ts';
+
+/** Settings › Tariffs: what energy costs, which tariff holds when and where, the grid's carbon. */
+export function TariffsPage() {
+  const list = useQuery(tariffQueries.list());
+  const terms = useQuery(tariffQueries.companyTerms());
+  const { company } = useSession();
+  const failed = list.isError ? list : terms.isError ? terms : undefined;
+  const day = localDayAt(company.zone, serverNow())?.epochDay ?? 0;
+  const today = new Date(day * DAY_MS).toISOString().slice(0, 10);
+  return (
+    <div className="mx-auto flex max-w-6xl flex-col gap-4 px-4 py-5 sm:px-7">
+      <SettingsPages />
+      <div>
+        <PageHeading title={t('tariffs.page')}>{t('tariffs.page')}</PageHeading>
+        <p className="mt-1 max-w-prose text-ink-2">{t('tariffs.lead')}</p>
+      </div>
+      {list.data !== undefined && terms.data !== undefined ? (
+        <>
+          <TariffList tariffs={list.data.items} />
+          <CompanyTermsSheet stored={terms.data} tariffs={list.data.items} today={today} />
+          <PadsSheet tariffs={list.data.items} today={today} />
+        </>
+      ) : failed !== undefined ? (
+        <div className="border border-ink bg-sheet">
+          <ErrorNotice
+            error={failed.error}
+            onRetry={() => {
+              void list.refetch();
+              void terms.refetch();
+            }}
+          />
+        </div>
+      ) : (
+        <div aria-busy="true" className="border border-ink bg-sheet p-4">
+          <p role="status" className="sr-only">
+            {t('shell.loading')}
+          </p>
+          <div aria-hidden="true" className="ruled h-96" />
+        </div>
+      )}
+      <CarbonSheet />
+    </div>
+  );
+}
