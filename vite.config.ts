@@ -21,6 +21,9 @@ const project = (name: string, include: string[], more: object = {}): Project =>
   test: { name, include, environment: 'node', ...more },
 });
 
+/** The tests of single pages in a browser, on a network of the tests' own. */
+const PAGES = 'tests/src/pages/**/*.test.ts';
+
 /** Parts of the schema library that write JSON Schema: only the server's interface description needs them. */
 const JSON_SCHEMA_WRITER =
   /[\\/]zod[\\/]v4[\\/]core[\\/](?:json-schema-processors|json-schema-generator|to-json-schema)\.js$/;
@@ -104,7 +107,9 @@ export default defineConfig({
     setupFiles: [place('./tests/support/fast-check-defaults.ts')],
     projects: [
       project('architecture', ['tests/architecture/**/*.test.ts']),
-      project('pure', ['tests/{shared,simulator,src}/**/*.test.{ts,tsx}']),
+      // They keep nothing between tests, so that files share a process: starting one cost more than most files take.
+      project('pure', ['tests/{shared,simulator,src}/**/*.test.{ts,tsx}'], { exclude: [PAGES], isolate: false }),
+      project('pages', [PAGES]),
       project('server', ['tests/server/**/*.test.ts'], { globalSetup: withPostgres }),
       project('e2e', ['tests/e2e/**/*.test.ts'], {
         globalSetup: ['./tests/e2e/share-product.ts'],
