@@ -61,7 +61,9 @@ export const typedFigure = (value: number, { size, zero, digits }: FigureForm): 
 /** A stored value with its unit. */
 export function sayFigure(value: number, form: FigureForm): string {
   const typed = typedFigure(value, form);
-  const number = new Intl.NumberFormat('en', { maximumFractionDigits: form.digits }).format(Number(typed));
+  // 4.4 °C are 39.92 °F to a program and 39.9 to a person.
+  const digits = form.unit === 'fahrenheit' ? 1 : form.digits;
+  const number = new Intl.NumberFormat('en', { maximumFractionDigits: digits }).format(Number(typed));
   return form.unit === 'd' ? t('unit.d', { count: Number(typed), number }) : t(`unit.${form.unit}`, { number });
 }
 

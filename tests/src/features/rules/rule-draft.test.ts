@@ -29,6 +29,7 @@ describe('a figure on the screen', () => {
     const margin = formOfFigure('hotMarginCelsius', 5, 'us');
     expect([sayFigure(5, margin), parseFigure('18', margin)]).toEqual(['9 °F', 10]);
     expect(sayFigure(5, formOfFigure('hotMarginCelsius', 5, 'si'))).toBe('5 °C');
+    expect(sayFigure(4.4, formOfFigure('unprotectedCelsius', 4.4, 'us'))).toBe('39.9 °F');
   });
 
   it('comes back as it was stored, for every figure there is', () => {
