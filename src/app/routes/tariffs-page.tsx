@@ -1,6 +1,4 @@
 import { useQuery } from '@tanstack/react-query';
-import { localDayAt } from '#shared/domain/time/local-days.ts';
-import { DAY_MS } from '#shared/domain/time/local-time.ts';
 import { SettingsPages } from '#src/app/shell/settings-pages.tsx';
 import { ErrorNotice } from '#src/components/ui/error-notice.tsx';
 import { PageHeading } from '#src/components/ui/page-heading.tsx';
@@ -10,8 +8,8 @@ import { PadsSheet } from '#src/features/tariffs/pads-sheet.tsx';
 import { TariffList } from '#src/features/tariffs/tariff-list.tsx';
 import { tariffQueries } from '#src/features/tariffs/tariff-queries.ts';
 import { useSession } from '#src/hooks/use-session.ts';
+import { localToday } from '#src/lib/local-today.ts';
 import { t } from '#src/lib/messages/tariffs-words.ts';
-import { serverNow } from '#src/lib/server-clock.ts';
 
 /** Settings › Tariffs: what energy costs, which tariff holds when and where, the grid's carbon. */
 export function TariffsPage() {
@@ -19,8 +17,7 @@ export function TariffsPage() {
   const terms = useQuery(tariffQueries.companyTerms());
   const { company } = useSession();
   const failed = list.isError ? list : terms.isError ? terms : undefined;
-  const day = localDayAt(company.zone, serverNow())?.epochDay ?? 0;
-  const today = new Date(day * DAY_MS).toISOString().slice(0, 10);
+  const today = localToday(company.zone);
   return (
     <div className="mx-auto flex max-w-6xl flex-col gap-4 px-4 py-5 sm:px-7">
       <SettingsPages />
@@ -30,7 +27,7 @@ export function TariffsPage() {
       </div>
       {list.data !== undefined && terms.data !== undefined ? (
         <>
-          <TariffList tariffs={list.data.items} />
+          <TariffList tariffs={list.data.items} terms={terms.data.terms} today={today} />
           <CompanyTermsSheet stored={terms.data} tariffs={list.data.items} today={today} />
           <PadsSheet tariffs={list.data.items} today={today} />
         </>

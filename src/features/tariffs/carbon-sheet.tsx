@@ -55,7 +55,7 @@ function Factor({ region, purpose }: { readonly region: string; readonly purpose
   return (
     <li>
       {found === undefined
-        ? t('carbon.unknown')
+        ? t(`${words}.unknown`)
         : t(words, { factor: number(found.kilogramsPerKwh, 3), year: String(found.year) })}
     </li>
   );

@@ -3,7 +3,7 @@ import { parseMoney } from '#shared/domain/energy/money-text.ts';
 import type { FlatDraft, PeriodDraft, ScheduleDraft, TariffDraft, TierDraft } from './tariff-draft.ts';
 
 /** What is wrong with a text that was typed, by the place that the server's faults would name. */
-export type TextFault = { readonly field: string; readonly reason: 'money' | 'negative' | 'bound' };
+export type TextFault = { readonly field: string; readonly reason: 'money' | 'empty' | 'negative' | 'bound' };
 
 export type ShapeOutcome =
   | { readonly shape: TariffShape; readonly faults: readonly [] }
@@ -19,7 +19,7 @@ function moneyOf(text: string, field: string, note: Note): string {
   const amount = plain(text)
     .replace(/^([-+]?)\./, '$10.')
     .replace(/^\+/, '');
-  if (parseMoney(amount) === undefined) note(field, 'money');
+  if (parseMoney(amount) === undefined) note(field, amount === '' ? 'empty' : 'money');
   return amount;
 }
 

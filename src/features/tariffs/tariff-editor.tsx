@@ -4,11 +4,14 @@ import { useNavigate } from 'react-router-dom';
 import type { TariffRow, TariffShape } from '#shared/contract/http/tariffs.ts';
 import { Notice } from '#src/components/ui/notice.tsx';
 import { useFormat } from '#src/hooks/use-format.ts';
+import { useSession } from '#src/hooks/use-session.ts';
 import { useSettled } from '#src/hooks/use-settled.ts';
 import { isApiError } from '#src/lib/api/api-error.ts';
 import { describeError } from '#src/lib/api/describe-error.ts';
+import { localToday } from '#src/lib/local-today.ts';
 import { t } from '#src/lib/messages/tariffs-words.ts';
 import { paths } from '#src/lib/paths.ts';
+import { placeOfFault } from './place-of-fault.ts';
 import { shapeOfDraft } from './shape-of-draft.ts';
 import { draftOf, newDraft, type TariffDraft } from './tariff-draft.ts';
 import { collectFaults, refusalsOf } from './tariff-faults.ts';
@@ -39,6 +42,8 @@ export function TariffEditor({ row, from, currency }: TariffEditorProps) {
     () => (row !== undefined ? draftOf(row.tariff) : from !== undefined ? draftOf(from) : newDraft(currency)),
     [row, from, currency],
   );
+  const { company } = useSession();
+  const terms = useQuery({ ...tariffQueries.companyTerms(), enabled: row?.isCompanys === true });
   const steps = useStepBack<TariffDraft>();
   const draft = steps.value ?? stored;
   const hasChanges = row === undefined ? steps.value !== undefined || from !== undefined : isOther(draft, stored);
@@ -68,9 +73,15 @@ export function TariffEditor({ row, from, currency }: TariffEditorProps) {
     );
   return (
     <>
-      {row === undefined || !isUsed(row) ? null : (
+      {row === undefined || !isUsed(row) || terms.isLoading ? null : (
         <div className="border border-ink bg-sheet">
-          <Notice title={t('tariff.inUse', { users: usersText(row) })}>{t('tariff.inUse.advice')}</Notice>
+          <Notice
+            title={t('tariff.inUse', {
+              users: usersText(row, { terms: terms.data?.terms ?? [], today: localToday(company.zone) }, format),
+            })}
+          >
+            {t('tariff.inUse.advice')}
+          </Notice>
         </div>
       )}
       <TariffForm
@@ -84,7 +95,7 @@ export function TariffEditor({ row, from, currency }: TariffEditorProps) {
       />
       <TariffSaveBar
         hasChanges={hasChanges}
-        faults={[...faults.values()]}
+        faults={[...faults].map(([field, fault]) => [field, placeOfFault(field, fault, draft)])}
         check={
           outcome.shape === undefined || settled !== outcome.shape || check.isFetching
             ? 'checking'

@@ -9,11 +9,14 @@ import { t } from '#src/lib/messages/tariffs-words.ts';
 import { paths } from '#src/lib/paths.ts';
 import { priceRange } from './price-range.ts';
 import { useDeleteTariff } from './use-delete-tariff.ts';
-import { usersText } from './users-text.ts';
+import { type TermsToday, usersText } from './users-text.ts';
+
+export type TariffListProps = TermsToday & { readonly tariffs: readonly TariffRow[] };
 
 /** The company's tariffs by name, with who goes by each. */
-export function TariffList({ tariffs }: { readonly tariffs: readonly TariffRow[] }) {
-  const { price } = useFormat();
+export function TariffList({ tariffs, terms, today }: TariffListProps) {
+  const format = useFormat();
+  const { price } = format;
   const remove = useDeleteTariff();
   const add = (
     <Link to={paths.tariff('new')} className={buttonClass(tariffs.length === 0 ? 'main' : 'plain')}>
@@ -50,7 +53,7 @@ export function TariffList({ tariffs }: { readonly tariffs: readonly TariffRow[]
                 </Link>
               ),
             },
-            { head: t('tariffs.col.users'), cell: usersText },
+            { head: t('tariffs.col.users'), cell: (row) => usersText(row, { terms, today }, format) },
             { head: t('tariffs.col.price'), figures: true, cell: priceOf },
             {
               head: t('tariffs.col.acts'),

@@ -3,7 +3,8 @@ import { t } from '#src/lib/messages/tariffs-words.ts';
 
 export type TariffSaveBarProps = {
   readonly hasChanges: boolean;
-  readonly faults: readonly string[];
+  /** By field. */
+  readonly faults: readonly (readonly [field: string, said: string])[];
   readonly check: 'checking' | 'checked' | { readonly failed: string };
   readonly isSaving: boolean;
   /** undefined = it cannot be asked for as it stands. */
@@ -24,8 +25,8 @@ export function TariffSaveBar({ hasChanges, faults, check, isSaving, onSave, ...
           <>
             <p className="font-semibold">{t('tariff.faults', { count: faults.length })}</p>
             <ul className="text-13">
-              {faults.slice(0, SHOWN).map((fault) => (
-                <li key={fault}>{fault}</li>
+              {faults.slice(0, SHOWN).map(([field, said]) => (
+                <li key={field}>{said}</li>
               ))}
               {faults.length > SHOWN ? <li>{t('tariff.faults.more', { count: faults.length - SHOWN })}</li> : null}
             </ul>
