@@ -5,7 +5,7 @@ export const FLEET_MESSAGES = {
   'fleet.heading.day': 'Fleet, {day}',
   'fleet.heading.days': 'Fleet, {from} to {to}',
   'fleet.totals.pumps': { one: '{count} pump', other: '{count} pumps' },
-  'fleet.totals.now': 'Marks and numbers of now:',
+  'fleet.totals.now': 'Now:',
   'fleet.totals.running': 'running',
   'fleet.totals.idle': 'idle as planned',
   'fleet.totals.urgent': 'urgent',

@@ -133,7 +133,7 @@ describe('the address', () => {
   it('tells of the day it names, not of now, and says what is of now all the same', async () => {
     const { page } = await bench.open('/fleet?day=2026-11-30', { role: 'manager' });
     await page.getByRole('heading', { level: 1, name: 'Fleet, Mon, Nov 30' }).waitFor();
-    await page.getByText('Marks and numbers of now:').waitFor();
+    await page.getByText('Now:', { exact: true }).waitFor();
     await page.getByRole('link', { name: /Quarry Lane 18/ }).waitFor();
     await eventually(() => page.getByText('Input 1 closed, runs program speed').count()).toBe(0);
   });
