@@ -24,6 +24,11 @@ const project = (name: string, include: string[], more: object = {}): Project =>
 /** The tests of single pages in a browser, on a network of the tests' own. */
 const PAGES = 'tests/src/pages/**/*.test.ts';
 
+/** The server's tests that start, end or replace programs and modules, or listen to a process: each has one of its own. */
+const APART = ['bootstrap/**/*', '*', 'fold/quarantine', 'log/*', 'backtest/backtest-command'].map(
+  (file) => `tests/server/${file}.test.ts`,
+);
+
 /** Parts of the schema library that write JSON Schema: only the server's interface description needs them. */
 const JSON_SCHEMA_WRITER =
   /[\\/]zod[\\/]v4[\\/]core[\\/](?:json-schema-processors|json-schema-generator|to-json-schema)\.js$/;
@@ -100,22 +105,20 @@ export default defineConfig({
     // Two cores: more workers only make every test slower.
     maxWorkers: 2,
     // Limits against hanging, not against slowness: a loaded machine may take long.
-    testTimeout: 60_000,
+    testTimeout: 120_000,
     hookTimeout: 120_000,
+    expect: { poll: { timeout: 30_000 } },
     // Where nobody watches, a test may fail for want of processor time; one that is wrong fails every time.
     retry: process.env.CI ? 2 : 0,
     setupFiles: [place('./tests/support/fast-check-defaults.ts')],
     projects: [
       project('architecture', ['tests/architecture/**/*.test.ts']),
-      // They keep nothing between tests, so that files share a process: starting one cost more than most files take.
+      // Where a file leaves nothing behind in its process, files share one: starting it cost more than most files take.
       project('pure', ['tests/{shared,simulator,src}/**/*.test.{ts,tsx}'], { exclude: [PAGES], isolate: false }),
-      project('pages', [PAGES]),
-      project('server', ['tests/server/**/*.test.ts'], { globalSetup: withPostgres }),
-      project('e2e', ['tests/e2e/**/*.test.ts'], {
-        globalSetup: ['./tests/e2e/share-product.ts'],
-        fileParallelism: false,
-        testTimeout: 120_000,
-      }),
+      project('pages', [PAGES], { isolate: false }),
+      project('server', ['tests/server/**/*.test.ts'], { exclude: APART, globalSetup: withPostgres, isolate: false }),
+      project('apart', APART, { globalSetup: withPostgres }),
+      project('e2e', ['tests/e2e/**/*.test.ts']),
     ],
   },
 });

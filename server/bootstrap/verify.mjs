@@ -16,7 +16,7 @@ const STEPS = /** @type {const} */ ([
   ['types', 'npm run --silent typecheck'],
   ['unused code', 'npm run --silent dead'],
   ['architecture', 'npx vitest run --project architecture'],
-  ['tests', 'npm test --silent -- --project pure --project pages --project server --project e2e'],
+  ['tests', 'npm test --silent -- --project !architecture'],
 ]);
 
 await runToTheEnd(async (life) => {

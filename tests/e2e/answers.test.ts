@@ -1,10 +1,10 @@
 import type { Browser } from 'playwright-core';
-import { afterAll, beforeAll, describe, expect, inject, it } from 'vitest';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { launchBrowser } from '#tests/support/browser.ts';
 import { getAlarmLink, waitForMail } from './caught-mail.ts';
+import { openOwnProduct } from './own-product.ts';
 import { type Desk, MANAGER, openSignedIn, TECHNICIAN } from './people.ts';
 import { failToPrime, type PlayedDevice, playDevice } from './played-device.ts';
-import { openProduct } from './product.ts';
 import { examineScreen } from './screens.ts';
 
 /** A pump that nobody simulates, on another technician's route. */
@@ -13,7 +13,7 @@ const SERIAL = 'MR-000312';
 const PRIMER = { primeSeconds: 200, programRpm: 1700 };
 const LOOKS_LONG_MS = 300_000;
 
-const product = openProduct(inject('productPlace'));
+const product = await openOwnProduct();
 let browser: Browser;
 let device: PlayedDevice;
 let manager: Desk;

@@ -1,9 +1,9 @@
 import type { Browser } from 'playwright-core';
-import { afterAll, beforeAll, describe, expect, inject, it } from 'vitest';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { launchBrowser } from '#tests/support/browser.ts';
 import { getAlarmLink, listMails, type MailWords, waitForMail } from './caught-mail.ts';
+import { openOwnProduct } from './own-product.ts';
 import { type Desk, MANAGER, openDesk, openSignedIn, signIn, TECHNICIAN } from './people.ts';
-import { openProduct } from './product.ts';
 
 /** The demo pump whose lid was not seated after the basket was cleaned: its script begins with the fleet. */
 const PAD = 'Tern Court 4';
@@ -11,7 +11,7 @@ const PAD = 'Tern Court 4';
 const RAISED_WITHIN_MS = 180_000;
 const TITLE = /Did not prime/;
 
-const product = openProduct(inject('productPlace'));
+const product = await openOwnProduct();
 let browser: Browser;
 let manager: Desk;
 let technician: Desk;
@@ -24,8 +24,6 @@ const rowOn = (desk: Desk) =>
     .filter({ has: desk.page.getByRole('link', { name: PAD }) });
 
 beforeAll(async () => {
-  await product.stop();
-  product.forget();
   [browser] = await Promise.all([launchBrowser(), product.start()]);
 }, 300_000);
 

@@ -4,15 +4,7 @@ import { join } from 'node:path';
 import { PORTS } from '#server/bootstrap/settings.mjs';
 import { findFreePort } from '#tests/support/free-port.ts';
 
-declare module 'vitest' {
-  // biome-ignore lint/style/useConsistentTypeDefinitions: only an interface can be widened from outside
-  export interface ProvidedContext {
-    /** Where the end-to-end tests run the product. */
-    productPlace: ProductPlace;
-  }
-}
-
-/** Where one product runs: its folder and its ports. Plain data, so that every test file can be handed it. */
+/** Where one product runs: its folder and its ports. */
 export type ProductPlace = {
   /** Holds the data folder, the output of the start program and its process number. */
   readonly folder: string;

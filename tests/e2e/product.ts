@@ -1,5 +1,5 @@
 import { spawn } from 'node:child_process';
-import { closeSync, existsSync, openSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
+import { closeSync, existsSync, openSync, readFileSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { listMarkedProcesses } from '#server/bootstrap/marked-processes.mjs';
@@ -18,8 +18,6 @@ export type Product = {
   readonly start: () => Promise<void>;
   /** TERM, and the end of the start program. */
   readonly stop: () => Promise<void>;
-  /** What a user would delete by a reset. */
-  readonly forget: () => void;
   readonly startPid: () => number | undefined;
   /** A child of the start program by its name: `mail catcher`, `node`, `worker`, `fleet`. */
   readonly findChildPid: (name: string) => number | undefined;
@@ -36,7 +34,7 @@ const STOPS_WITHIN_MS = 60_000;
 /** The first pumps of the demo company; the tests play others themselves. */
 const SIMULATED_PUMPS = '16';
 
-/** The product of a place. Any test file may start or stop it: what is known of it lies in the place's folder. */
+/** The product of a place: what is known of it lies in the place's folder. */
 export function openProduct({ folder, mark, ports }: ProductPlace): Product {
   const [outputFile, pidFile] = [join(folder, 'start.log'), join(folder, 'start.pid')];
   const dataFolder = join(folder, 'data');
@@ -86,7 +84,6 @@ export function openProduct({ folder, mark, ports }: ProductPlace): Product {
       const ended = await waitUntil(() => startPid() === undefined, STOPS_WITHIN_MS);
       if (!ended) throw new Error(`The product does not stop:\n${output()}`);
     },
-    forget: () => rmSync(dataFolder, { recursive: true, force: true }),
     listRemains: async () => [
       ...listMarkedProcesses(mark).map((pid) => `process ${pid}`),
       ...listProcessesIn(join(dataFolder, 'postgres', 'data')).map((pid) => `database process ${pid}`),

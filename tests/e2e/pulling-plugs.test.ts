@@ -1,5 +1,5 @@
 import type { Browser, Page } from 'playwright-core';
-import { afterAll, afterEach, beforeAll, describe, expect, inject, it } from 'vitest';
+import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest';
 import { waitUntil } from '#server/bootstrap/process-table.mjs';
 import type { AlarmPage } from '#shared/contract/http/alarms.ts';
 import type { FleetPage, ReadingSeries } from '#shared/contract/http/pumps.ts';
@@ -7,9 +7,9 @@ import type { Run } from '#shared/contract/http/runs.ts';
 import { launchBrowser } from '#tests/support/browser.ts';
 import { listMails, waitForMail } from './caught-mail.ts';
 import { killChild, takeDatabaseAway, takeMailServerAway } from './outage.ts';
+import { openOwnProduct } from './own-product.ts';
 import { type Desk, MANAGER, openSignedIn } from './people.ts';
 import { failToPrime, type PlayedDevice, playDevice } from './played-device.ts';
-import { openProduct } from './product.ts';
 import { waitUntilDrawn } from './screens.ts';
 import { HELD_TICKS, type Said, type Ticking, tick } from './ticking.ts';
 
@@ -20,7 +20,7 @@ const TICKING = { serial: 'MR-000302', pad: 'Cistern Lane 29' };
 const BACK_WITHIN_MS = 120_000;
 const DAY_MS = 86_400_000;
 
-const product = openProduct(inject('productPlace'));
+const product = await openOwnProduct();
 const devices: PlayedDevice[] = [];
 const tickings: Ticking[] = [];
 let browser: Browser;

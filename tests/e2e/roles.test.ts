@@ -1,10 +1,10 @@
 import type { Browser } from 'playwright-core';
-import { afterAll, beforeAll, describe, expect, inject, it } from 'vitest';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { launchBrowser } from '#tests/support/browser.ts';
 import { isFocusVisible, tabTo } from './keyboard.ts';
+import { openOwnProduct } from './own-product.ts';
 import { type Desk, HOMEOWNER, MANAGER, openDesk, signIn, TECHNICIAN } from './people.ts';
 import { failToPrime, type PlayedDevice, playDevice } from './played-device.ts';
-import { openProduct } from './product.ts';
 import { examineScreen, waitUntilDrawn } from './screens.ts';
 import { gatherTroubles } from './watched-page.ts';
 
@@ -14,7 +14,7 @@ const SERIAL = 'MR-000309';
 const PRIMER = { primeSeconds: 180, programRpm: 1750 };
 const LOOKS_LONG_MS = 300_000;
 
-const product = openProduct(inject('productPlace'));
+const product = await openOwnProduct();
 let browser: Browser;
 let device: PlayedDevice;
 let alarmPath: string;

@@ -1,5 +1,5 @@
 import type { Browser, Page } from 'playwright-core';
-import { afterAll, afterEach, beforeAll, expect, vi } from 'vitest';
+import { afterAll, afterEach, beforeAll, expect } from 'vitest';
 import type { Role } from '#shared/contract/primitives.ts';
 import { type FakeServer, startFakeServer } from '#tests/src/fake-api/fake-server.ts';
 import { createFakeState, type FakeState } from '#tests/src/fake-api/fake-state.ts';
@@ -35,8 +35,6 @@ export function createPageBench() {
   let client: string;
   const servers: FakeServer[] = [];
   const complaints: string[] = [];
-
-  vi.setConfig({ testTimeout: 60_000 });
 
   beforeAll(async () => {
     client = await builtClient();
