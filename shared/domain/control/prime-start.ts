@@ -9,7 +9,7 @@ type PrimeSettings = MotorSettings['prime'];
 
 /**
  * The start whose prime counts: the one seen, or the one due while the shaft stands. Where a start may have been
- * missed, it is the first reading since, as long as the shaft turns at the prime's speed. A prime that is claimed long
+ * missed, it is the first reading since, as long as the shaft turns at the prime's speed and the motor names no other source. A prime that is claimed long
  * after that start belongs to one between two readings: the breaker was off for a moment.
  */
 export function findPrimeStart(
@@ -21,7 +21,8 @@ export function findPrimeStart(
   if (prime === null) return undefined;
   const claimed = reading.reportedSource === 'prime';
   const seen = state.standing ? (state.dueSince ?? state.primeSaidSince) : state.startedAt;
-  const primes = claimed || (fitsSpeed(reading.rpm, prime.rpm) && !fitsSpeed(reading.rpm, baseRpm));
+  const mayPrime = reading.reportedSource === undefined || claimed;
+  const primes = mayPrime && (claimed || (fitsSpeed(reading.rpm, prime.rpm) && !fitsSpeed(reading.rpm, baseRpm)));
   const said = claimed ? state.primeSaidSince : null;
   const restarted = said !== null && seen !== null && said >= seen + longestPrimeMs(prime) ? said : seen;
   const since = primes ? (state.assumedSince ?? restarted) : seen;

@@ -20,7 +20,7 @@ export const DETECTOR_DEFAULTS = {
     urgentCelsius: 0,
     unprotectedCelsius: 4.4,
     // The device's sensor is not the motor's: the guard counts as missed only this far below it.
-    sensorToleranceCelsius: 0.3,
+    sensorToleranceCelsius: 1,
     deadbandCelsius: 1.1,
   },
   'energized-without-flow': { delaySeconds: 180, offDelaySeconds: 180 },

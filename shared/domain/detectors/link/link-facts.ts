@@ -21,6 +21,8 @@ export type LinkFacts = {
   resumedAt: number;
   /** The device alone began anew, while the motor ran on, at its arrival; 0 = never. */
   restartedAt: number;
+  /** When a word ended a silence through which the connection had stayed: the device was there and said nothing. */
+  connectedThroughAt: number;
   /** The last outages, oldest first. */
   outages: readonly Outage[];
   /** An outage ended with this reading. */

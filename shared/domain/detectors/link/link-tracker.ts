@@ -14,6 +14,9 @@ type LinkState = {
   bootedAt: number;
   resumedAt: number;
   restartedAt: number;
+  /** A will was heard once: then a connection that nobody gave up was there. */
+  tellsLoss: boolean;
+  connectedThroughAt: number;
   /** A new boot since the last reading. */
   bootPending: boolean;
   outages: Json[];
@@ -30,12 +33,16 @@ const restingLink = (): LinkState => ({
   bootedAt: 0,
   resumedAt: 0,
   restartedAt: 0,
+  tellsLoss: false,
+  connectedThroughAt: 0,
   bootPending: false,
   outages: [],
 });
 
 const KEPT_OUTAGES = 8;
 const LEAST_SILENCE_MS = 120_000;
+/** A broker gives a connection up after one and a half of its longest keep-alive, 300 s (MQTT 3.1.1, 3.1.2.10), ms; with some slack. */
+const GIVEN_UP_MS = 600_000;
 
 /** No word for longer than this is silence: three intervals, at least two minutes. */
 export function silenceLimitMs({ intervalSeconds }: PumpContext): number {
@@ -71,6 +78,7 @@ export function createLinkTracker(context: PumpContext, saved: unknown): LinkTra
     bootedAt: 0,
     resumedAt: 0,
     restartedAt: 0,
+    connectedThroughAt: 0,
     outages: state.outages.flatMap(parseOutage),
     outageEnded: false,
   };
@@ -82,6 +90,7 @@ export function createLinkTracker(context: PumpContext, saved: unknown): LinkTra
       if (event.kind === 'listening') state.listeningSince = event.receivedAt;
       if (event.kind === 'reading' || event.kind === 'status' || event.kind === 'settings') {
         if (event.receivedAt - state.lastWordAt > limitMs) state.heardSince = event.receivedAt;
+        noteConnected(state, event.receivedAt);
         if (!(event.kind === 'status' && event.status.state === 'lost')) {
           state.lastWordAt = Math.max(state.lastWordAt, event.receivedAt);
           // Speaks after its will, without having said that it is back: it is there.
@@ -111,12 +120,23 @@ export function createLinkTracker(context: PumpContext, saved: unknown): LinkTra
   };
 }
 
+/**
+ * Nothing was heard for so long that a broken connection would have been given up, and it was not: the device was there
+ * and had nothing to say.
+ */
+function noteConnected(state: LinkState, at: number): void {
+  const quietMs = at - Math.max(state.lastWordAt, state.listeningSince);
+  if (state.lastWordAt === 0 || quietMs < GIVEN_UP_MS || !state.tellsLoss) return;
+  if (state.connection === 'online') state.connectedThroughAt = at;
+}
+
 function hearStatus(state: LinkState, { status, receivedAt }: PumpEvent & { kind: 'status' }): void {
   if (status.state === 'lost') {
     // A take-over publishes the old will late.
     if (state.connectionId !== '' && status.connection !== state.connectionId) return;
     if (state.connection !== 'lost') state.lostAt = receivedAt;
     state.connection = 'lost';
+    state.tellsLoss = true;
     return;
   }
   const known = state.boot !== '';
@@ -139,6 +159,7 @@ function publish(facts: LinkFacts, state: LinkState): void {
   facts.bootedAt = state.bootedAt;
   facts.resumedAt = state.resumedAt;
   facts.restartedAt = state.restartedAt;
+  facts.connectedThroughAt = state.connectedThroughAt;
 }
 
 function parseOutage(value: Json): Outage[] {

@@ -25,6 +25,8 @@ export type LoadFacts = {
   primedOnce: boolean;
   /** Has load now; undefined = not judged (off, ramp, or still learning). */
   primed: boolean | undefined;
+  /** This very reading shows no load; smoothed watts, and `primed`, take some readings to tell. */
+  dry: boolean;
   /** Seconds from start to load; 0 until primed. */
   primeSeconds: number;
   /** Seconds for which this start was seen without load, the least that its prime took; 0 until primed. */

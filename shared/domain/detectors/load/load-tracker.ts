@@ -10,7 +10,7 @@ import { restingLoad } from './load-state.ts';
 import { createPrimeTeacher } from './prime-teacher.ts';
 import { HALFWAY_SHARE, primedWattsAt, ROUGH_SHARE } from './primed-watts.ts';
 import { forgetSmoothing, smoothWatts } from './smooth-watts.ts';
-import { endTry, followLately, judgeLoad, startTry, type TryLimits, unloadedShare } from './track-prime.ts';
+import { endTry, followLately, isDry, judgeLoad, startTry, type TryLimits, unloadedShare } from './track-prime.ts';
 
 const SPEED_STEP_RPM = 20;
 
@@ -81,6 +81,7 @@ export function createLoadTracker(context: PumpContext, limits: TryLimits, hot: 
     const sure = estimate.basis === 'band' || estimate.basis === 'prime';
     const look = { at: reading.at, ratio: facts.ratio, unloadedBelow: facts.unloadedBelow, sure };
     if (isSettled && judgeLoad(state, look) && state.startSeen) bump();
+    facts.dry = isDry(state, reading.watts, facts);
     if (isSettled) followLately(state, facts.ratio, elapsedMs);
     if (teacher.follow(reading, control, state)) bump();
     if (learnReading(state, bands, reading, control, elapsedMs, facts)) bump();
@@ -96,6 +97,7 @@ export function createLoadTracker(context: PumpContext, limits: TryLimits, hot: 
         if (state.running && keepLearning(state, bands)) bump();
         endTry(state, reading.at, context.settings.prime?.seconds ?? 0, limits);
         facts.ratio = Number.NaN;
+        facts.dry = false;
       }
       publish(facts, state);
     },
@@ -143,6 +145,7 @@ function restingFacts(wattsAt: LoadFacts['wattsAt']): LoadFacts {
     judgedWatts: 0,
     primedOnce: false,
     primed: undefined,
+    dry: false,
     primeSeconds: 0,
     dryForSeconds: 0,
     failedTries: 0,

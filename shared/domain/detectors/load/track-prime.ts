@@ -141,6 +141,15 @@ function loseLoad(state: LoadState, look: LoadLook): void {
   }
 }
 
+/** Whether these watts (W) alone are those of no load. */
+export function isDry(
+  { primed }: LoadState,
+  watts: number,
+  { unloadedBelow, primedWatts }: { readonly unloadedBelow: number; readonly primedWatts: number },
+): boolean {
+  return watts < unloadedBelow * primedWatts * (primed === 0 ? CLEARLY_ABOVE : 1);
+}
+
 /** Remembers what the fastest speed of a start without load looked like: nothing tells its cause better. */
 function noteTry(state: LoadState, { at, ratio }: LoadLook): void {
   if (at - state.startedAt >= FIRST_WATER_MS) state.bestShare = Math.max(state.bestShare, ratio);

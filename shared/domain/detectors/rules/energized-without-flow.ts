@@ -15,7 +15,7 @@ function judge(_: State, facts: Facts): Judgement {
   if (context.equipment.length === 0) return NORMAL;
   if (control.standing) return listEnergized(facts).length > 0 ? ABNORMAL : NORMAL;
   if (load.primed === undefined) return UNJUDGED;
-  return !load.primed && listEnergized(facts).length > 0 ? ABNORMAL : NORMAL;
+  return (load.dry || !load.primed) && listEnergized(facts).length > 0 ? ABNORMAL : NORMAL;
 }
 
 function describe(_: State, facts: Facts, __: object, { onset }: Spoken): Finding {

@@ -13,7 +13,7 @@ type Parameters = RuleParameters<'failed-prime'>;
  * whatever speed; and one that gave up after its tries.
  */
 function judge(_: State, facts: Facts, parameters: Parameters): Judgement {
-  const { load, stands, now, context } = facts;
+  const { load, stands, now, context, control } = facts;
   if (!load.running) {
     if (load.failedTries >= parameters.tries) return ABNORMAL;
     return stands('failed-prime') ? UNJUDGED : NORMAL;
@@ -23,7 +23,7 @@ function judge(_: State, facts: Facts, parameters: Parameters): Judgement {
   // Load lost after a good prime is `loss-of-prime`.
   if (load.primedOnce) return UNJUDGED;
   // Load that comes this very moment is given its time.
-  if (isLoaded(facts) && !facts.stands('failed-prime')) return UNJUDGED;
+  if (control.rampOver && !load.dry && !facts.stands('failed-prime')) return UNJUDGED;
   if (now >= load.primeEndsAt + parameters.pastPrimeSeconds * 1000) return ABNORMAL;
   const triedMs = now - load.startedAt;
   if (
@@ -34,9 +34,6 @@ function judge(_: State, facts: Facts, parameters: Parameters): Judgement {
   }
   return UNJUDGED;
 }
-
-const isLoaded = ({ load, reading, control }: Facts): boolean =>
-  control.rampOver && reading.watts >= load.unloadedBelow * load.primedWatts;
 
 /** How long a try without load must last to count, s: its prime time, within limits. */
 function trySeconds(primeSeconds: number, { shortestTrySeconds, longestTrySeconds }: Parameters): number {

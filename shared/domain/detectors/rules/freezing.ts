@@ -25,12 +25,13 @@ function judge(state: State, facts: Facts, parameters: Parameters): Judgement {
 }
 
 /**
- * Half an hour from the first reading at the guard; but not before the air is clearly below it, because the motor's
- * own sensor decides when protection starts.
+ * Half an hour from the first reading at the guard; but with protection set not before the air is clearly below it,
+ * because the motor's own sensor decides when that starts, and looks again only once an hour.
  */
 function delaySeconds(_: State, facts: Facts, parameters: Parameters): number {
   const ambient = facts.reading.ambientCelsius ?? Number.POSITIVE_INFINITY;
-  const clearly = ambient <= guardCelsius(facts, parameters) - parameters.sensorToleranceCelsius;
+  const tolerance = facts.context.settings.freeze === null ? 0 : parameters.sensorToleranceCelsius;
+  const clearly = ambient <= guardCelsius(facts, parameters) - tolerance;
   return clearly ? parameters.delaySeconds : Number.POSITIVE_INFINITY;
 }
 

@@ -17,12 +17,12 @@ const GULPS_ABOVE = 0.41;
  * little about the load to judge.
  */
 function judge(state: State, facts: Facts, parameters: Parameters): Judgement {
-  const { load, control, context, reading } = facts;
+  const { load, control, context } = facts;
   if (!load.running || load.basis === 'none' || control.rpm < parameters.slowRpm || !control.rampOver) return UNJUDGED;
   // A model alone cannot tell a lost prime from a pump that differs from it; it may judge the prime, seen from zero.
   if (!load.primedOnce || (control.offExpected && !facts.stands('loss-of-prime'))) return UNJUDGED;
-  // From the first reading without load on; smoothed watts take some readings to tell.
-  state.dry = load.primed === false || reading.watts < load.unloadedBelow * load.primedWatts;
+  // By the reading itself, so that neither the loss nor the return waits for smoothed watts.
+  state.dry = facts.stands('loss-of-prime') ? load.primed === false : load.dry;
   const usual = Math.max(parameters.raggedShare, parameters.raggedTimesUsual * load.usualRaggedness);
   state.ragged = load.basis === 'band' && !hasRaggedDuty(facts) && load.ratio < RAGGED_BELOW && load.raggedness > usual;
   state.cause = causeOf(state, facts, usual);

@@ -42,7 +42,7 @@ function describe(_: State, facts: Facts, parameters: Parameters, { raised, from
  */
 function causeOf({ link, reading }: Facts, since: number): string {
   if (link.lastWordAt > since) {
-    if (link.restartedAt > since) return 'device';
+    if (link.restartedAt > since || link.connectedThroughAt > since) return 'device';
     if (link.bootedAt > since) return 'power';
     const toldOfSilence = reading.at > since && reading.at < link.heardSince - 60_000;
     return link.resumedAt > since || toldOfSilence ? 'link' : 'unknown';

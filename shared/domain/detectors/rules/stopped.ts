@@ -6,8 +6,11 @@ import { listEnergized } from '../energized-equipment.ts';
 import type { Facts } from '../facts.ts';
 import { ABNORMAL, type Judgement, NORMAL, UNJUDGED } from '../judgement.ts';
 
-/** How long it stood while a speed was due, and when that was last so: nights in which nothing is due count for nothing. */
-type State = { stoodMs: number; stoodAt: number };
+/**
+ * How long it stood while a speed was due, and when that was last so: nights in which nothing is due count for nothing.
+ * `since` = the first of those readings, and until how much later somebody's keypad stop lasted, ms.
+ */
+type State = { stoodMs: number; stoodAt: number; since: number; keptBackMs: number };
 
 /** Readings further apart than this do not tell what was in between. */
 const SEEN_WITHIN_MS = 600_000;
@@ -18,6 +21,8 @@ function judge(state: State, facts: Facts): Judgement {
   if (!control.standing) {
     state.stoodMs = 0;
     state.stoodAt = 0;
+    state.since = 0;
+    state.keptBackMs = 0;
     return NORMAL;
   }
   const { due } = control;
@@ -27,7 +32,13 @@ function judge(state: State, facts: Facts): Judgement {
     if (control.winningInput === 0 && (isNearSuspectEdge(facts) || hasClockBeenSet(facts))) return UNJUDGED;
     if (state.stoodAt !== 0 && now - state.stoodAt <= SEEN_WITHIN_MS) state.stoodMs += now - state.stoodAt;
     state.stoodAt = now;
+    if (state.since === 0) state.since = now;
+    if (control.decision.source === 'stop') state.keptBackMs = now - state.since;
     return ABNORMAL;
+  }
+  if (!stands('stopped')) {
+    state.since = 0;
+    state.keptBackMs = 0;
   }
   // Where nothing is due a standing shaft says nothing: only one that turns ends the alarm.
   return stands('stopped') ? UNJUDGED : NORMAL;
@@ -70,9 +81,12 @@ function causeOf({ control, reading }: Facts): string {
 export const stopped = defineDetector<'stopped', State>({
   detector: 'stopped',
   hears: ['reading'],
-  initial: () => ({ stoodMs: 0, stoodAt: 0 }),
+  initial: () => ({ stoodMs: 0, stoodAt: 0, since: 0, keptBackMs: 0 }),
   judge,
-  delaySeconds: (_, { control }, parameters) =>
-    control.decision.source === 'stop' ? parameters.keypadStopSeconds : parameters.delaySeconds,
+  // A keypad stop that has ended is nobody's fault: the other causes have their time from then on.
+  delaySeconds: ({ keptBackMs }, { control }, parameters) =>
+    control.decision.source === 'stop'
+      ? parameters.keypadStopSeconds
+      : parameters.delaySeconds + Math.round(keptBackMs / 1000),
   describe,
 });

@@ -130,12 +130,19 @@ function nearestWindow(
   return nearest;
 }
 
+/**
+ * A contact that switches a few milliamperes does not weld; trippers are held by a screw and come off (common practice).
+ * So one that a dial closed and did not open has lost its off tripper, until a second tripper proves otherwise.
+ */
 function causeOf(facts: Facts, input: number, { tripper }: State): string {
   if ((tripper & (1 << (input - 1))) !== 0) return 'tripper-missing';
   const { inputs } = facts;
   const opened = nearestWindow(inputs.windows[input - 1] ?? [], inputs.onMinute[input - 1] ?? 0);
   const byHand = inputs.edgeSeen[input - 1] === true && Math.abs(opened?.missedBy ?? 0) > BY_HAND_MINUTES;
-  return byHand && !facts.stands('clock-shift') ? 'lever-left-on' : 'unknown';
+  if (facts.stands('clock-shift')) return 'unknown';
+  if (byHand) return 'lever-left-on';
+  const record = facts.context.inputs.find(({ number }) => number === input);
+  return inputs.edgeSeen[input - 1] === true && record?.clockType !== 'electronic' ? 'tripper-missing' : 'unknown';
 }
 
 /**
@@ -147,7 +154,8 @@ function hasPassedTripper(state: State, facts: Facts, input: number, { alarmAfte
   if (state.cause === 'lever-left-on') return now - state.offAt >= alarmAfterMinutes * MINUTE_MS;
   const since = inputs.closedSince[input - 1] ?? 0;
   const windows = inputs.windows[input - 1] ?? [];
-  if (state.cause !== 'unknown' || windows.length < 2) return false;
+  const known = (state.tripper & (1 << (input - 1))) !== 0 || state.cause === 'switch-welded';
+  if (known || windows.length < 2) return false;
   const passed = windows.filter((window) => {
     const closes = nextClosing(window, context.zone, localDay - 1, since);
     return closes !== undefined && now > closes + AT_TRIPPER_MINUTES * MINUTE_MS;

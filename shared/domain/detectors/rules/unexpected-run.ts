@@ -30,7 +30,8 @@ function judge(state: State, facts: Facts, parameters: RuleParameters<'unexpecte
   const nothingExpected = facts.padState === 'winterized' || facts.padState === 'drained';
   if (!nothingExpected && control.due.rpm > 0) return stands('unexpected-run') ? UNJUDGED : NORMAL;
   if (obeysOpenInput(facts) || (stands('settings-changed') && facts.fitsReported())) return UNJUDGED;
-  if (isNearSuspectEdge(facts) || mayBeFreezeProtection(facts)) return UNJUDGED;
+  if (isNearSuspectEdge(facts)) return UNJUDGED;
+  if (mayBeFreezeProtection(facts)) return stands('unexpected-run') ? UNJUDGED : NORMAL;
   // What other hours look like while it stands says nothing of this run.
   if (!stands('unexpected-run')) state.cause = causeOf(state, facts, parameters);
   return ABNORMAL;

@@ -25,12 +25,23 @@ export function wrongSpeedCause(facts: Facts, parameters: RuleParameters<'wrong-
   const followed = followedInput(facts);
   if (control.winningInput !== 0) {
     if (followed !== 0) return 'follows-lower-input';
+    if (runsOpenInput(facts)) return 'runs-input-open';
     if (reading.activeInput === 0) return 'ignores-input';
     if (settings.program.some((entry) => fitsSpeed(reading.rpm, entry.rpm))) return 'ignores-input';
   } else if (followed !== 0) return 'runs-input-open';
   if (reading.rpm >= control.due.rpm) return 'unknown-speed';
   if (isHot(facts, parameters)) return 'derating';
   return isAtPowerLimit(facts, parameters) ? 'power-limit' : 'unknown-speed';
+}
+
+/** Another input should win, and the motor runs the speed of a wired one that is open, which no program asks for. */
+function runsOpenInput({ reading, context, inputs }: Facts): boolean {
+  const { settings } = context;
+  return (
+    listClosedInputs(inputs.wired & ~reading.closedInputs).some((input) =>
+      fitsSpeed(reading.rpm, inputSpeed(settings.inputs, input)),
+    ) && !settings.program.some((entry) => fitsSpeed(reading.rpm, entry.rpm))
+  );
 }
 
 function isHot({ reading, context }: Facts, { hotMarginCelsius }: RuleParameters<'wrong-speed'>): boolean {

@@ -8,8 +8,14 @@ import { ABNORMAL, type Judgement, NORMAL, UNJUDGED } from '../judgement.ts';
 import { obeysOpenInput } from './unexpected-run.ts';
 import { followedInput, wrongSpeedCause } from './wrong-speed-cause.ts';
 
-/** Off the expected speed, and in which situation: only the same situation can show that it is cured. */
-type State = { off: boolean; situation: number; cause: string };
+/**
+ * Off the expected speed, and in which situation: only the same situation can show that it is cured. `byRpm` = how far
+ * off it is in the mean of two minutes, from the speed that was `due`.
+ */
+type State = { off: boolean; situation: number; cause: string; due: number; byRpm: number };
+
+/** One reading is noisy by some rpm: near the limit the mean is judged, ms. */
+const MEAN_MS = 120_000;
 
 const OF_PROGRAM = 50;
 const OF_OTHERS = 51;
@@ -21,8 +27,8 @@ function judge(state: State, facts: Facts, parameters: RuleParameters<'wrong-spe
   const open = obeysOpenInput(facts) && control.winningInput === 0;
   // Standing where a speed is due is `stopped`; running where none is due is `unexpected-run`.
   const others = control.standing !== control.due.rpm <= 0 && !open;
-  const allowed = speedTolerance(control.due.rpm) * (state.off ? 1 - parameters.deadbandShare : 1);
-  const off = !others && Math.abs(control.rpm - control.due.rpm) > allowed;
+  const allowed = speedTolerance(control.due.rpm) * (facts.stands('wrong-speed') ? 1 - parameters.deadbandShare : 1);
+  const off = Math.abs(meanOff(state, facts)) > allowed && !others;
   if (!off || (facts.stands('settings-changed') && facts.fitsReported())) {
     state.off = false;
     return facts.stands('wrong-speed') && (others || !isSameSituation(state, facts)) ? UNJUDGED : NORMAL;
@@ -31,6 +37,14 @@ function judge(state: State, facts: Facts, parameters: RuleParameters<'wrong-spe
   if (!facts.stands('wrong-speed'))
     state.situation = open ? OF_OPEN_INPUT + facts.reading.activeInput : situationOf(facts);
   return ABNORMAL;
+}
+
+function meanOff(state: State, { control, elapsedMs }: Facts): number {
+  const by = control.rpm - control.due.rpm;
+  const isOther = state.due !== control.due.rpm || Math.abs(by - state.byRpm) > speedTolerance(control.due.rpm);
+  state.due = control.due.rpm;
+  state.byRpm = isOther ? by : state.byRpm + (elapsedMs / (elapsedMs + MEAN_MS)) * (by - state.byRpm);
+  return state.byRpm;
 }
 
 function situationOf({ control }: Facts): number {
@@ -94,7 +108,7 @@ function describe(state: State, facts: Facts, parameters: RuleParameters<'wrong-
 export const wrongSpeed = defineDetector<'wrong-speed', State>({
   detector: 'wrong-speed',
   hears: ['reading'],
-  initial: () => ({ off: false, situation: 0, cause: 'unknown-speed' }),
+  initial: () => ({ off: false, situation: 0, cause: 'unknown-speed', due: 0, byRpm: 0 }),
   judge,
   delaySeconds,
   describe,

@@ -22,7 +22,7 @@ describe('freezing', () => {
 
   it('is for soon under the guard with protection set, then urgent at 0 °C', () => {
     const player = createPlayer();
-    player.play(40 * MINUTE, still(3.5));
+    player.play(40 * MINUTE, still(3.2));
     expect(player.standing('freezing')).toMatchObject({ priority: 'soon', evidence: { protectionSet: true } });
 
     player.play(5 * MINUTE, still(-0.2));
@@ -31,7 +31,7 @@ describe('freezing', () => {
 
   it('is a note at 4.4 °C with protection off', () => {
     const player = createPlayer(UNPROTECTED);
-    player.play(40 * MINUTE, still(3.5));
+    player.play(40 * MINUTE, still(3.2));
     expect(player.standing('freezing')).toMatchObject({ priority: 'note', alarmClass: 'note' });
   });
 

@@ -78,7 +78,7 @@ describe('stuck-input', () => {
     const causes = player.signals
       .filter(({ detector }) => detector === 'stuck-input')
       .map((signal) => 'cause' in signal && signal.cause);
-    expect(causes).toEqual(['unknown', 'tripper-missing', false]);
+    expect(causes).toEqual(['tripper-missing', false]);
 
     player.playUntil(3, 800, noFirstOff);
     expect(player.standing('stuck-input')?.cause).toBe('tripper-missing');
