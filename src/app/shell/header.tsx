@@ -25,7 +25,7 @@ export function Header() {
             <NavLink
               key={to}
               to={to}
-              className="flex min-h-11 flex-1 items-center justify-center border-b-3 border-transparent px-3.5 font-medium text-ink-2 hover:text-ink aria-[current=page]:border-ink aria-[current=page]:text-ink sm:-mb-px sm:flex-none"
+              className="flex min-h-11 flex-1 items-center justify-center border-b-3 border-transparent px-2 font-medium text-ink-2 hover:text-ink aria-[current=page]:border-ink aria-[current=page]:text-ink sm:-mb-px sm:flex-none sm:px-3.5"
             >
               {t(label)}
               {label === 'shell.alarms' ? <AlarmCount /> : null}

@@ -24,7 +24,7 @@ export function AlarmTable({ alarms, now }: AlarmTableProps) {
         const text = shown(alarm, told);
         if (value !== titleOf) return isSaid(text) ? text : '–';
         return (
-          <Link to={paths.alarm(alarm.id)} className="inline-block min-w-44 underline underline-offset-2">
+          <Link to={paths.alarm(alarm.id)} className="inline-block min-w-52 underline underline-offset-2">
             {text}
           </Link>
         );
