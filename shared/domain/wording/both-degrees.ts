@@ -1,4 +1,4 @@
-import { celsiusToFahrenheit } from '../../units/temperature.ts';
+import { celsiusToFahrenheit } from '#shared/units/temperature.ts';
 
 const write = (value: number, digits: number): string =>
   new Intl.NumberFormat('en-US', { maximumFractionDigits: digits }).format(value).replace(/^-(?=0$)/, '');
