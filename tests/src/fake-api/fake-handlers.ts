@@ -1,10 +1,7 @@
-import type { z } from 'zod';
-import { ERROR_STATUS, type ErrorCode } from '#shared/contract/errors.ts';
 import { type AlarmAct, alarmActEndpoints } from '#shared/contract/http/alarm-acts.ts';
 import { alarmHealthEndpoints } from '#shared/contract/http/alarm-health.ts';
 import { type Alarm, alarmEndpoints } from '#shared/contract/http/alarms.ts';
 import { changeEndpoints } from '#shared/contract/http/changes.ts';
-import type { Endpoint } from '#shared/contract/http/endpoint.ts';
 import { energyEndpoints } from '#shared/contract/http/energy.ts';
 import { fleetEnergyEndpoints } from '#shared/contract/http/energy-fleet.ts';
 import { programEndpoints } from '#shared/contract/http/energy-programs.ts';
@@ -15,32 +12,12 @@ import { fakeAlarmHealth } from './fake-alarm-health.ts';
 import { listFakeAlarms } from './fake-alarm-list.ts';
 import { fakeFleetEnergy, fakeHours, fakePadEnergy, fakePadMonths, fakePumpEnergy } from './fake-energy.ts';
 import { type FakePump, markOf } from './fake-fleet.ts';
+import { type FakeHandler, FakeRefusal, handle, type Input } from './fake-handler.ts';
 import { fakeId } from './fake-id.ts';
 import { fakeAdvice } from './fake-programs.ts';
 import { readingsOf } from './fake-readings.ts';
 import { broadcast, type FakeState, sessionOf, visiblePumps } from './fake-state.ts';
-
-type Input<E extends Endpoint> = {
-  readonly params: E extends { params: infer P extends z.ZodType } ? z.output<P> : Record<string, never>;
-  readonly query: E extends { query: infer Q extends z.ZodType } ? z.output<Q> : Record<string, never>;
-  readonly body: E extends { body: infer B extends z.ZodType } ? z.output<B> : undefined;
-};
-
-export class FakeRefusal extends Error {
-  readonly code: ErrorCode;
-  constructor(code: ErrorCode) {
-    super(`${ERROR_STATUS[code]} ${code}`);
-    this.code = code;
-  }
-}
-
-export type FakeHandler = { readonly endpoint: Endpoint; readonly answer: (state: FakeState, input: never) => unknown };
-
-/** Ties an answer to its endpoint: what does not fit the contract does not compile. */
-const handle = <E extends Endpoint>(
-  endpoint: E,
-  answer: (state: FakeState, input: Input<E>) => z.input<E['response']>,
-): FakeHandler => ({ endpoint, answer });
+import { FAKE_TARIFF_HANDLERS } from './fake-tariff-handlers.ts';
 
 const RANK = { urgent: 0, soon: 1, note: 2 } as const;
 
@@ -164,6 +141,7 @@ const actOn = (state: FakeState, alarmId: string, act: AlarmAct): Alarm => {
 };
 
 export const FAKE_HANDLERS: readonly FakeHandler[] = [
+  ...FAKE_TARIFF_HANDLERS,
   handle(sessionEndpoints.create, (state, { body }) => signIn(state, body.email, body.password)),
   handle(sessionEndpoints.renew, requireSession),
   handle(sessionEndpoints.read, requireSession),

@@ -5,7 +5,8 @@ import { extname, join, normalize } from 'node:path';
 import { WebSocketServer } from 'ws';
 import { ERROR_STATUS, type ErrorCode, PROBLEM_MEDIA_TYPE } from '#shared/contract/errors.ts';
 import { LIVE_PATH } from '#shared/contract/socket/frames.ts';
-import { FAKE_HANDLERS, FakeRefusal } from './fake-handlers.ts';
+import { FakeRefusal } from './fake-handler.ts';
+import { FAKE_HANDLERS } from './fake-handlers.ts';
 import type { FakeState } from './fake-state.ts';
 
 export type FakeServer = { readonly url: string; readonly close: () => Promise<void> };
@@ -67,7 +68,9 @@ async function answerApi(
     const query = endpoint.query?.safeParse(Object.fromEntries(url.searchParams));
     const body = endpoint.body?.safeParse(await readBody(request));
     if (query?.success === false || body?.success === false) return refuse(response, 'validation', 0);
-    const input = { params, query: query?.data ?? {}, body: body?.data };
+    const version = /^"(\d+)"$/.exec(request.headers['if-match'] ?? '')?.[1];
+    const ifMatch = version === undefined ? undefined : Number(version);
+    const input = { params, query: query?.data ?? {}, body: body?.data, ifMatch };
     const result = answer(state, input as never);
     response.writeHead(endpoint.status ?? 200, { 'Content-Type': 'application/json' });
     response.end(endpoint.status === 204 ? undefined : JSON.stringify(endpoint.response.parse(result)));

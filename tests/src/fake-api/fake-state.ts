@@ -6,6 +6,7 @@ import type { Role } from '#shared/contract/primitives.ts';
 import type { ServerFrame } from '#shared/contract/socket/frames.ts';
 import { createFakeFleet, type FakePump } from './fake-fleet.ts';
 import { fakeId } from './fake-id.ts';
+import { createFakeTariffs, type FakeTariffs } from './fake-tariffs.ts';
 
 /** Everything a test may turn: who is signed in, what fails, how slow answers are, what the fleet does. */
 export type FakeState = {
@@ -18,6 +19,7 @@ export type FakeState = {
   retryAfterSeconds: number;
   /** Whether anybody has said what a kWh costs. */
   energy: { money: boolean };
+  tariffs: FakeTariffs;
   /** Every call that came, as `METHOD path?query`. */
   readonly calls: string[];
   readonly sockets: Set<WebSocket>;
@@ -38,6 +40,7 @@ export function createFakeState(options: { role?: Role; size?: number; at?: numb
     failures: new Map(),
     retryAfterSeconds: 30,
     energy: { money: true },
+    tariffs: createFakeTariffs(at),
     calls: [],
     sockets: new Set(),
     cursor: 100,

@@ -24,7 +24,7 @@ export const eventually = <Value>(read: () => Value | Promise<Value>) =>
 
 /** What a browser reports of refusals that a test provokes on purpose. */
 const PROVOKED =
-  /status of (401|403|404|409|429|500|503)|ERR_INTERNET_DISCONNECTED|ERR_CONNECTION_REFUSED|WebSocket connection to/;
+  /status of (401|403|404|409|412|429|500|503)|ERR_INTERNET_DISCONNECTED|ERR_CONNECTION_REFUSED|WebSocket connection to/;
 
 /**
  * A real browser, the built client under the real Content-Security-Policy, and a network of the test's own. Whatever a
