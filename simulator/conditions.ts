@@ -9,8 +9,10 @@ export type Conditions = {
   extraStaticFeet: number;
   /** Factor on how fast the filter gets dirty. */
   dirtRate: number;
-  /** Extra friction on the shaft as a share of the load. */
+  /** What the shaft takes more than the curve says, as a share of the load. */
   rubbing: number;
+  /** Friction that a worn bearing adds, W per rpm of the shaft: its torque is the same at every speed. */
+  frictionWattsPerRpm: number;
   /** Masks over inputs, bit 0 = input 1, at the clocks' side. */
   cutWires: number;
   stuckClosed: number;
@@ -52,6 +54,7 @@ export function createConditions(): Conditions {
     extraStaticFeet: 0,
     dirtRate: 1,
     rubbing: 0,
+    frictionWattsPerRpm: 0,
     cutWires: 0,
     stuckClosed: 0,
     heldClosed: 0,

@@ -18,6 +18,11 @@ export function findLoad(pump: Pump, rpm: number): Load {
   return { rpm, gpm, wetWatts: shaftWatts(spec.wetEnd, gpm, rpm), dryWatts: dryShaftWatts(spec.wetEnd, rpm) };
 }
 
+/** Shaft power, W, with what rubs and drags beside the water. */
+export function withFriction({ conditions }: Pump, shaft: number, rpm: number): number {
+  return shaft * (1 + conditions.rubbing) + conditions.frictionWattsPerRpm * rpm;
+}
+
 /** Flow now, gpm: air in the pump costs it long before the load shows. */
 export function currentGpm(pump: Pump, at: number): number {
   const fill = waterFill(pump.water, at);

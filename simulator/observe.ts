@@ -1,7 +1,7 @@
 import type { Reading } from '#shared/contract/mqtt/readings.ts';
 import { dialMs } from './clocks/dial.ts';
 import { padCelsius } from './decide.ts';
-import { findLoad } from './load.ts';
+import { findLoad, withFriction } from './load.ts';
 import { driveRise } from './physics/drive-heat.ts';
 import { lineVolts } from './physics/line-voltage.ts';
 import { meterWatts } from './physics/meter.ts';
@@ -41,7 +41,7 @@ export function trueWatts(pump: Pump, rpm: number, at: number): number {
   const load = rpm === pump.load.rpm ? pump.load : findLoad(pump, rpm);
   const share = loadShare(unsteadyFill(pump, at));
   const shaft = load.dryWatts + (load.wetWatts - load.dryWatts) * share;
-  return lineWatts(pump.spec.drive, shaft * (1 + pump.conditions.rubbing), rpm);
+  return lineWatts(pump.spec.drive, withFriction(pump, shaft, rpm), rpm);
 }
 
 /** Air on its way through makes the load unsteady, each kind of trouble in its own manner. */

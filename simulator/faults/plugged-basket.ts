@@ -8,10 +8,10 @@ export const pluggedBasket: Fault = {
   story: 'A windy hour fills the basket: the flow falls at once.',
   hours: [3, 40],
   needs: { stretchMs: HOUR_MS },
-  also: ['too-little-water', 'loss-of-prime', 'energized-without-flow'],
+  also: ['too-little-water', 'loss-of-prime', 'failed-prime', 'energized-without-flow'],
   suits: ({ purpose, settings }) => purpose === 'filter' && settings.program.some((entry) => entry.rpm >= 1600),
   begin: (pump) => {
-    pump.conditions.valve = pump.chance.between(16, 30);
+    pump.conditions.valve = pump.chance.between(7, 13);
   },
   end: (pump) => {
     pump.conditions.valve = 1;

@@ -1,7 +1,7 @@
 import { dialMs } from '#simulator/clocks/dial.ts';
 import { readTimeClock } from '#simulator/clocks/time-clock.ts';
 import { readWeekPlan } from '#simulator/clocks/week-plan.ts';
-import { findLoad } from '#simulator/load.ts';
+import { findLoad, withFriction } from '#simulator/load.ts';
 import { dutyGpm } from '#simulator/physics/duty-point.ts';
 import { lineWatts } from '#simulator/physics/motor-drive.ts';
 import { loadShare, waterFill } from '#simulator/physics/prime.ts';
@@ -22,7 +22,7 @@ export function loadOfClean(pump: Pump, at: number): number {
   const share = loadShare(waterFill(pump.water, at));
   const shaft = pump.load.dryWatts + (pump.load.wetWatts - pump.load.dryWatts) * share;
   const clean = lineWatts(drive, shaftWatts(wetEnd, cleanGpm(pump, rpm), rpm), rpm);
-  return lineWatts(drive, shaft * (1 + pump.conditions.rubbing), rpm) / clean;
+  return lineWatts(drive, withFriction(pump, shaft, rpm), rpm) / clean;
 }
 
 /** Flow at a speed with filter, basket and valves as commissioned, gpm. */

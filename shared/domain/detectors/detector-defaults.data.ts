@@ -65,6 +65,9 @@ export const DETECTOR_DEFAULTS = {
     suddenShare: 0.2,
     noteShare: 0.3,
     alarmShare: 0.4,
+    // Where the flow cannot be told, of the watts: they fall by about half as much.
+    noteWattsShare: 0.15,
+    alarmWattsShare: 0.2,
   },
   'high-load': {
     delaySeconds: 7200,

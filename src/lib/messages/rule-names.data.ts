@@ -126,6 +126,8 @@ export const RULE_NAMES = {
   'figure.suddenShare': 'Sudden: watts under the band by',
   'figure.noteShare': 'Slow: note from',
   'figure.alarmShare': 'Slow: alarm from',
+  'figure.noteWattsShare': 'Slow, by watts alone: note from',
+  'figure.alarmWattsShare': 'Slow, by watts alone: alarm from',
   'figure.aboveShare': 'Above the band by',
   'figure.farAboveShare': 'Far above the band by',
   'figure.farAboveSeconds': 'Far above: speaks after',

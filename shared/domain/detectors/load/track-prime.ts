@@ -73,12 +73,21 @@ export function endTry(state: LoadState, at: number, primeSeconds: number, limit
 const LATELY_MS = 20 * 60_000;
 const LEAST_LATELY = 0.72;
 
+const latelyShare = ({ lately }: LoadState): number => Math.min(1, Math.max(LEAST_LATELY, lately));
+
 /**
- * The share of its usual load below which a wet end moves air: of the load it had lately, where that has fallen
- * slowly, but never under half.
+ * The share of its usual load below which a wet end moves air. While it runs, of the load it had lately, where that has
+ * fallen slowly, but never under half; a start that never had load has lost none slowly.
  */
-export function unloadedShare({ lately }: LoadState, share: number): number {
-  return share * Math.min(1, Math.max(LEAST_LATELY, lately));
+export function unloadedShare(state: LoadState, share: number): number {
+  return state.primedOnce ? share * latelyShare(state) : share;
+}
+
+/** The share that counts as no load now: one that was seen without needs clearly more, unless it has had little lately. */
+function limitShare(state: LoadState, unloadedBelow: number): number {
+  if (state.primed !== 0) return unloadedBelow;
+  const clearly = unloadedBelow * CLEARLY_ABOVE;
+  return state.primedOnce ? clearly : Math.max(unloadedBelow, clearly * latelyShare(state));
 }
 
 /** Follows the load while there is one; elapsed ms. */
@@ -102,7 +111,7 @@ export function judgeLoad(state: LoadState, look: LoadLook): boolean {
     state.primed = 2;
     return false;
   }
-  if (ratio < (state.primed === 0 ? unloadedBelow * CLEARLY_ABOVE : unloadedBelow)) {
+  if (ratio < limitShare(state, unloadedBelow)) {
     loseLoad(state, look);
     return false;
   }
@@ -143,11 +152,11 @@ function loseLoad(state: LoadState, look: LoadLook): void {
 
 /** Whether these watts (W) alone are those of no load. */
 export function isDry(
-  { primed }: LoadState,
+  state: LoadState,
   watts: number,
   { unloadedBelow, primedWatts }: { readonly unloadedBelow: number; readonly primedWatts: number },
 ): boolean {
-  return watts < unloadedBelow * primedWatts * (primed === 0 ? CLEARLY_ABOVE : 1);
+  return watts < limitShare(state, unloadedBelow) * primedWatts;
 }
 
 /** Remembers what the fastest speed of a start without load looked like: nothing tells its cause better. */

@@ -20,7 +20,8 @@ function judge(state: State, facts: Facts, parameters: Parameters): Judgement {
     return NORMAL;
   }
   const guard = guardCelsius(facts, parameters);
-  state.cold = ambientCelsius <= guard + (state.cold ? parameters.deadbandCelsius : 0);
+  // The deadband holds an alarm: readings that wander about the limit hold no wait for one.
+  state.cold = ambientCelsius <= guard + (facts.stands('freezing') ? parameters.deadbandCelsius : 0);
   return state.cold ? ABNORMAL : NORMAL;
 }
 

@@ -34,6 +34,9 @@ export function wrongSpeedCause(facts: Facts, parameters: RuleParameters<'wrong-
   return isAtPowerLimit(facts, parameters) ? 'power-limit' : 'unknown-speed';
 }
 
+/** Of the watts at the fastest commissioned speed: less than this is no power limit (common practice). */
+const LIMIT_SHARE = 0.4;
+
 /** Another input should win, and the motor runs the speed of a wired one that is open, which no program asks for. */
 function runsOpenInput({ reading, context, inputs }: Facts): boolean {
   const { settings } = context;
@@ -58,10 +61,13 @@ function isAtPowerLimit(
   parameters: RuleParameters<'wrong-speed'>,
 ): boolean {
   const { volts } = reading;
-  const { nominalVolts } = context;
+  const { nominalVolts, settings } = context;
   const { watts } = load;
   if (volts !== undefined && nominalVolts !== undefined && volts < parameters.lowVoltsShare * nominalVolts) return true;
   const usual = load.wattsAt(reading.rpm);
+  // A limit bites near the most that the motor is asked for, never at a slow speed while a fast one goes well.
+  const fastest = Math.max(settings.prime?.rpm ?? 0, ...settings.inputs.map((rpm) => rpm ?? 0), control.due.rpm);
+  if (watts < LIMIT_SHARE * load.wattsAt(fastest)) return false;
   if (usual > 0 && watts >= parameters.overloadShare * usual) return true;
   const full = load.wattsAt(control.due.rpm);
   const isLoaded = usual > 0 && watts >= parameters.limitOverUsual * usual;

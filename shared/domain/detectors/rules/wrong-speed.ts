@@ -10,10 +10,12 @@ import { followedInput, wrongSpeedCause } from './wrong-speed-cause.ts';
 
 /**
  * Off the expected speed, and in which situation: only the same situation can show that it is cured. `byRpm` = how far
- * off it is in the mean of two minutes, from the speed that was `due`.
+ * off it is in the mean of two minutes, from the speed that was `due`. `metAt` = when the situation last came, ms.
  */
-type State = { off: boolean; situation: number; cause: string; due: number; byRpm: number };
+type State = { off: boolean; situation: number; cause: string; due: number; byRpm: number; metAt: number };
 
+/** A situation that has not come again for so long will not show a cure: somebody has taken the input out of use, ms. */
+const FORGOTTEN_MS = 3 * 86_400_000;
 /** One reading is noisy by some rpm: near the limit the mean is judged, ms. */
 const MEAN_MS = 120_000;
 
@@ -31,8 +33,11 @@ function judge(state: State, facts: Facts, parameters: RuleParameters<'wrong-spe
   const off = Math.abs(meanOff(state, facts)) > allowed && !others;
   if (!off || (facts.stands('settings-changed') && facts.fitsReported())) {
     state.off = false;
-    return facts.stands('wrong-speed') && (others || !isSameSituation(state, facts)) ? UNJUDGED : NORMAL;
+    const isOther = others || !isSameSituation(state, facts);
+    if (!isOther) state.metAt = facts.now;
+    return facts.stands('wrong-speed') && isOther && facts.now - state.metAt < FORGOTTEN_MS ? UNJUDGED : NORMAL;
   }
+  state.metAt = facts.now;
   state.off = true;
   if (!facts.stands('wrong-speed'))
     state.situation = open ? OF_OPEN_INPUT + facts.reading.activeInput : situationOf(facts);
@@ -108,7 +113,7 @@ function describe(state: State, facts: Facts, parameters: RuleParameters<'wrong-
 export const wrongSpeed = defineDetector<'wrong-speed', State>({
   detector: 'wrong-speed',
   hears: ['reading'],
-  initial: () => ({ off: false, situation: 0, cause: 'unknown-speed', due: 0, byRpm: 0 }),
+  initial: () => ({ off: false, situation: 0, cause: 'unknown-speed', due: 0, byRpm: 0, metAt: 0 }),
   judge,
   delaySeconds,
   describe,

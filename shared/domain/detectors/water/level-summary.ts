@@ -80,7 +80,11 @@ function findFall(
     return { watts3Days: 0, sinceDay: 0, atOnce: 0, yesterdayWatts };
   const watts3Days = medianOf(current.map(([, watts]) => watts));
   const fall = cleanWatts - watts3Days;
-  const steps = days.map(([, watts], index) => (days[index - 1]?.[1] ?? watts) - watts);
+  // A speed that rests for days falls by what those days took together.
+  const steps = days.map(([day, watts], index) => {
+    const [dayBefore, wattsBefore] = days[index - 1] ?? [day, watts];
+    return (wattsBefore - watts) / Math.max(1, day - dayBefore);
+  });
   const low = days.findLastIndex(([, watts]) => cleanWatts - watts < 0.75 * fall);
   const sinceDay = days[low + 1]?.[0] ?? first;
   return { watts3Days, sinceDay, atOnce: fall > 0 ? Math.max(0, ...steps) / fall : 0, yesterdayWatts };

@@ -18,6 +18,9 @@ export type WaterFacts = {
   dropOfDays: number;
   /** The same by the last ten minutes. */
   dropNow: number;
+  /** Fall of the watts at this speed below those of a clean filter, by three days and by ten minutes; NaN likewise. */
+  wattsDropOfDays: number;
+  wattsDropNow: number;
   /** How much of the fall came from one day to the next at most, as a share of it. */
   dropAtOnce: number;
   /** First local day (since 1970) of those that `dropOfDays` is about. */
@@ -36,6 +39,8 @@ export const restingWater = (): WaterFacts => ({
   ratio: Number.NaN,
   dropOfDays: Number.NaN,
   dropNow: Number.NaN,
+  wattsDropOfDays: Number.NaN,
+  wattsDropNow: Number.NaN,
   dropAtOnce: 0,
   dropSinceDay: 0,
   ratioYesterday: Number.NaN,

@@ -76,6 +76,8 @@ export function createWaterTracker(context: PumpContext, hot: unknown, learnt: u
     water.ratioYesterday = water.usualWatts > 0 && yesterday > 0 ? yesterday / water.usualWatts : Number.NaN;
     water.dropOfDays = Number.NaN;
     water.dropNow = Number.NaN;
+    water.wattsDropOfDays = Number.NaN;
+    water.wattsDropNow = Number.NaN;
   }
 
   function moveTo(rpm: number, valves: number): void {
@@ -105,9 +107,11 @@ export function createWaterTracker(context: PumpContext, hot: unknown, learnt: u
   }
 
   function tellDrops(watts: number, { cleanWatts, watts3Days, atOnce, sinceDay }: LevelSummary): void {
-    if (system === undefined || level === undefined) return;
-    water.dropOfDays = system.dropAt(level.rpm, cleanWatts, watts3Days);
-    water.dropNow = system.dropAt(level.rpm, cleanWatts, watts);
+    if (level === undefined) return;
+    water.wattsDropOfDays = watts3Days > 0 ? 1 - watts3Days / cleanWatts : Number.NaN;
+    water.wattsDropNow = cleanWatts > 0 ? 1 - watts / cleanWatts : Number.NaN;
+    water.dropOfDays = system?.dropAt(level.rpm, cleanWatts, watts3Days) ?? Number.NaN;
+    water.dropNow = system?.dropAt(level.rpm, cleanWatts, watts) ?? Number.NaN;
     water.dropAtOnce = atOnce;
     water.dropSinceDay = sinceDay;
   }

@@ -148,6 +148,28 @@ describe('low-load, slow', () => {
     expect(player.standing('low-load')).toMatchObject({ cause: 'sudden' });
   });
 
+  it('goes by the watts alone where no model tells the flow', () => {
+    const { wetEnd: _, ...unknown } = COARSE;
+    const player = createPlayer(unknown);
+    player.play(
+      8 * DAY,
+      dayByDay(() => 1),
+    );
+    player.play(
+      11 * DAY,
+      dayByDay((day) => 1 - 0.02 * day),
+    );
+    expect(player.raised('low-load')[0]).toMatchObject({ alarmClass: 'note', cause: 'slow' });
+    expect(player.raised('low-load')[0]!.evidence.flowDrop).toBeNull();
+
+    player.play(
+      2 * DAY,
+      dayByDay(() => 1),
+    );
+    expect(player.standing('low-load')).toBeUndefined();
+    expect(player.spoken()).toEqual(['low-load']);
+  });
+
   it('stays silent on an ordinary filter, fouled by a few per cent a week and cleaned, and on a pump without a model', () => {
     const player = createPlayer(COARSE);
     for (let round = 0; round < 2; round += 1)
