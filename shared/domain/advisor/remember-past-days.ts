@@ -12,7 +12,11 @@ export type PastTerms = {
   readonly made: PumpAdvice;
 };
 
-/** The month (0 = January) of a local day, counted from 1970. */
+/**
+ * The month (0 = January) of a local day, counted from 1970.
+ *
+ * @example monthOfDay(20_270) // 6: the local day is 2025-07-01
+ */
 export const monthOfDay = (epochDay: number): number => new Date(epochDay * DAY_MS).getUTCMonth();
 
 /**

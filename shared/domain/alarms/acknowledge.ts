@@ -29,6 +29,8 @@ export function acknowledge(
 /**
  * Takes back one's own acknowledgement within five minutes; undefined where it cannot be taken back. The alarm waits
  * again from the moment it first did, so that undoing never buys time.
+ *
+ * @example withdrawAcknowledgement(seen, { by: whoSawIt, at: seenAt + 60_000 })?.record.state // 'unacknowledged'
  */
 export function withdrawAcknowledgement(
   record: AlarmRecord,

@@ -94,17 +94,33 @@ export type AlarmTransition = {
 /** The record after a step and the transition it made; no transition = nothing changed. */
 export type AlarmStep = { readonly record: AlarmRecord; readonly transition: AlarmTransition | undefined };
 
-/** Whether an alarm is open: at most one per pump and detector. */
+/**
+ * Whether an alarm is open: at most one per pump and detector.
+ *
+ * @example isOpen({ ...record, state: 'normal' }) // false: it is history
+ */
 export const isOpen = (record: AlarmRecord): boolean => record.state !== 'normal';
 
-/** Whether its detector's signals still concern it: open, or worked off while its condition holds. */
+/**
+ * Whether its detector's signals still concern it: open, or worked off while its condition holds.
+ *
+ * @example isWatched({ ...record, state: 'normal', done, active: true }) // true: its condition still holds
+ */
 export const isWatched = (record: AlarmRecord): boolean => isOpen(record) || (record.done !== null && record.active);
 
-/** Whether anyone should be called: neither shelved, suppressed by design nor out of service. */
+/**
+ * Whether anyone should be called: neither shelved, suppressed by design nor out of service.
+ *
+ * @example isAnnounced({ ...record, shelf }) // false
+ */
 export const isAnnounced = (record: AlarmRecord): boolean =>
   record.shelf === null && record.suppressedBy === null && record.outOfService === null;
 
-/** A step that changes the record and records it; `by` and `note` default to Millrace itself. */
+/**
+ * A step that changes the record and records it; `by` and `note` default to Millrace itself.
+ *
+ * @example makeStep(record, 'escalated', at).transition?.by // null: Millrace itself
+ */
 export function makeStep(
   record: AlarmRecord,
   kind: TransitionKind,

@@ -19,7 +19,11 @@ export function answerNothingToDo(
   return makeStep({ ...seen, answer: { ...act } }, 'nothing-to-do', act.at, act.by, act.note);
 }
 
-/** Takes one's own answer back within five minutes, with the acknowledgement that came with it; undefined otherwise. */
+/**
+ * Takes one's own answer back within five minutes, with the acknowledgement that came with it; undefined otherwise.
+ *
+ * @example withdrawAnswer(answered, { by: whoAnswered, at: answeredAt + 60_000 })?.record.answer // null
+ */
 export function withdrawAnswer(record: AlarmRecord, act: Act): AlarmStep | undefined {
   const { answer, acknowledgedAt } = record;
   if (answer === null || answer.by !== act.by || act.at - answer.at > WITHDRAW_WITHIN_MS) return undefined;

@@ -22,7 +22,11 @@ export function explanationOf({ padState, consequenceOf }: Evidence): string | u
 /** Whether a suppression by design is one of a pump's own: its pad's state or another of its alarms. */
 export const isExplanation = (suppressedBy: string | null): boolean => partsOf(suppressedBy) !== undefined;
 
-/** A suppression taken apart; undefined for one that comes from elsewhere. */
+/**
+ * A suppression taken apart; undefined for one that comes from elsewhere.
+ *
+ * @example partsOf('pad-state:winterized') // { padState: 'winterized' }
+ */
 export function partsOf(
   suppressedBy: string | null,
 ): { readonly padState: PadState } | { readonly detector: Detector } | undefined {
@@ -40,6 +44,8 @@ export type PumpStanding = { readonly padState: PadState; readonly standing: Rea
 /**
  * Ends a suppression that nothing explains any more: the alarm is then like any that has returned. Undefined while it is
  * still explained, and for one that was suppressed from elsewhere.
+ *
+ * @example endExplanation(hushed, { padState: 'open', standing: new Set() }, at)?.record.state // 'returned'
  */
 export function endExplanation(record: AlarmRecord, pump: PumpStanding, at: number): AlarmStep | undefined {
   if (!isOpen(record) || !isExplanation(record.suppressedBy) || isExplained(record.detector, pump)) return undefined;

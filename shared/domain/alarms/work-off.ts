@@ -19,7 +19,11 @@ export function workOff(
   return makeStep({ ...record, state: 'normal', shelf: null, done }, 'done', act.at, act.by, found);
 }
 
-/** Puts a note back on the list, by whoever worked it off and within five minutes; undefined otherwise. */
+/**
+ * Puts a note back on the list, by whoever worked it off and within five minutes; undefined otherwise.
+ *
+ * @example withdrawDone(workedOff, { by: whoDidIt, at: doneAt + 60_000 })?.record.done // null
+ */
 export function withdrawDone(record: AlarmRecord, act: Act): AlarmStep | undefined {
   const { done } = record;
   if (done === null || done.by !== act.by || act.at - done.at > WITHDRAW_WITHIN_MS) return undefined;

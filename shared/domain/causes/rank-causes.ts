@@ -109,5 +109,9 @@ export function rankCauses(
   };
 }
 
-/** Every cause that a closed call of this detector may name as found, in the order of the starting guess. */
+/**
+ * Every cause that a closed call of this detector may name as found, in the order of the starting guess.
+ *
+ * @example listFindings('failed-prime').includes('air-leak') // true
+ */
 export const listFindings = (detector: Detector): CauseSlug[] => CAUSE_WEIGHTS[detector].map(({ cause }) => cause);

@@ -15,6 +15,11 @@ export type Teller = {
   readonly message: Message;
 };
 
+/**
+ * What sentences about a moment are made with.
+ *
+ * @example tellerOf(context, options).message('kind.none') // the sentence of the options' language
+ */
 export function tellerOf(context: ExplainContext, options: ExplainOptions): Teller {
   return { context, options, message: messagesOf(options.messages) };
 }
@@ -23,7 +28,11 @@ export function saySpeed(rpm: number, { options }: Teller): string {
   return formatQuantity(rpm, 'speed', { system: options.system ?? 'us', locale: options.locale });
 }
 
-/** What closes an input (`time clock 1`), and what it drives (`cleaner`), where that was recorded. */
+/**
+ * What closes an input (`time clock 1`), and what it drives (`cleaner`), where that was recorded.
+ *
+ * @example sayInput(1, teller).closer // 'time clock 1'
+ */
 export function sayInput(input: number, { context, message }: Teller): { closer: string; duty: string | undefined } {
   const wired = context.inputs.find(({ number }) => number === input);
   const closer = fillMessage(message(`kind.${wired?.kind ?? 'none'}`), { input: String(input) });

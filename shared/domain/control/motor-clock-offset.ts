@@ -7,7 +7,11 @@ const DOUBT_MINUTES = 1.5;
 /** Nearer than this the clock shows what is held of it; just under the minute at which doubt begins. */
 const CERTAIN_MINUTES = 0.99;
 
-/** How far the motor's clock is ahead of wall time, minutes: as it says, else as learnt, else zero. */
+/**
+ * How far the motor's clock is ahead of wall time, minutes: as it says, else as learnt, else zero.
+ *
+ * @example motorClockOffset({ ...state, saidOffset: undefined, learntOffset: -4 }) // -4
+ */
 export function motorClockOffset(state: ControlState): number {
   return state.saidOffset ?? state.learntOffset ?? 0;
 }

@@ -37,7 +37,11 @@ export type PricedDay = {
 const QUARTER_MS = 900_000;
 const DEFAULT_NAMES = 'Period ';
 
-/** The term in force on a local day. */
+/**
+ * The term in force on a local day.
+ *
+ * @example termOn([{ id, tariff, fromDay: 20_270, toDay: undefined }], 20_269) // undefined: it holds from the day after
+ */
 export const termOn = (terms: readonly DayTerm[], epochDay: number): DayTerm | undefined =>
   terms.find(({ fromDay = -Infinity, toDay = Infinity }) => epochDay >= fromDay && epochDay < toDay);
 

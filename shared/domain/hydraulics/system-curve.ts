@@ -11,7 +11,11 @@ export const REFERENCE_SYSTEM_CURVES = {
   c: { name: 'C, 2.5-inch plumbing', staticFeet: 0, k: 0.0082 },
 } as const satisfies Record<string, SystemCurve>;
 
-/** Whether a system curve is one that water can have: finite, static head -100 to 300 ft, k above 0. */
+/**
+ * Whether a system curve is one that water can have: finite, static head -100 to 300 ft, k above 0.
+ *
+ * @example isSystemCurve({ staticFeet: 0, k: -0.01 }) // false
+ */
 export const isSystemCurve = ({ staticFeet, k }: SystemCurve): boolean =>
   Number.isFinite(staticFeet) && staticFeet >= -100 && staticFeet <= 300 && Number.isFinite(k) && k > 0;
 

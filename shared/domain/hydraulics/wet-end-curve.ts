@@ -20,11 +20,19 @@ export type WetEndCurve = {
   readonly lossSigmaWatts: number;
 };
 
-/** Speed as a share of the reference; undefined unless rpm is finite and above 0. */
+/**
+ * Speed as a share of the reference; undefined unless rpm is finite and above 0.
+ *
+ * @example speedRatio({ ...curve, referenceRpm: 3450 }, 1725) // 0.5
+ */
 export const speedRatio = (curve: WetEndCurve, rpm: number): number | undefined =>
   Number.isFinite(rpm) && rpm > 0 ? rpm / curve.referenceRpm : undefined;
 
-/** What drive and motor lose beyond the cube law, per watt of `lossWatts`: nothing at standstill and at reference. */
+/**
+ * What drive and motor lose beyond the cube law, per watt of `lossWatts`: nothing at standstill and at reference.
+ *
+ * @example lossShape(0.5) // 0.375
+ */
 export const lossShape = (ratio: number): number => ratio - ratio ** 3;
 
 /**

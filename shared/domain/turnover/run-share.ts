@@ -22,6 +22,10 @@ export function shareOfRun(run: Pick<Run, 'from' | 'to'>, from: number, to: numb
   return { from: start, to: stop, milliseconds: stop - start, share: (stop - start) / (end - run.from) };
 }
 
-/** Whether a run is one of a turning shaft that the readings saw. */
+/**
+ * Whether a run is one of a turning shaft that the readings saw.
+ *
+ * @example isTurning({ source: 'no-data', meanRpm: 1700 }) // false
+ */
 export const isTurning = (run: Pick<Run, 'source' | 'meanRpm'>): boolean =>
   run.source !== 'no-data' && run.meanRpm > STANDSTILL_RPM;

@@ -27,6 +27,11 @@ export type AreaLedger = {
   readonly take: () => AreaSignal[];
 };
 
+/**
+ * Takes down what an area's rules say, as signals.
+ *
+ * @example createAreaLedger(state).raise(cause, members, at) // one signal for all of them
+ */
 export function createAreaLedger(state: AreaState): AreaLedger {
   let signals: AreaSignal[] = [];
   const say = (type: AreaSignal['type'], alarm: AreaAlarm, at: number): void => {

@@ -34,17 +34,29 @@ export type AreaState = { readonly members: Map<string, Member>; alarms: AreaAla
 
 export const AREA_KINDS: readonly AreaKind[] = ['area-silence', 'daylight-saving', 'load-fall', 'own-link'];
 
-/** One condition of one pump, as an alarm that speaks for several keeps it. */
+/**
+ * One condition of one pump, as an alarm that speaks for several keeps it.
+ *
+ * @example openKey(pumpId, 'silent') // `${pumpId} silent`
+ */
 export const openKey = (pumpId: string, detector: Detector): string => `${pumpId} ${detector}`;
 
 export const isOfPump = (own: string, pumpId: string): boolean => own.startsWith(`${pumpId} `);
 
-/** The pumps of which something still stands, in order of joining. */
+/**
+ * The pumps of which something still stands, in order of joining.
+ *
+ * @example listOpenPumps({ open: ['a silent', 'a stopped', 'b silent'] }) // ['a', 'b']
+ */
 export const listOpenPumps = ({ open }: Pick<AreaAlarm, 'open'>): readonly string[] => [
   ...new Set(open.map((own) => own.slice(0, own.lastIndexOf(' ')))),
 ];
 
-/** The state as plain JSON. */
+/**
+ * The state as plain JSON.
+ *
+ * @example restoreAreaState(saveAreaState(state)) // as it was
+ */
 export function saveAreaState({ members, alarms }: AreaState): Json {
   return {
     members: [...members.values()].map(({ pumpId, padId, area, silentSince, fellAt, lostAt }) => [

@@ -27,7 +27,11 @@ export function listFallenTogether({ members, alarms }: AreaState, member: Membe
   return pads >= LEAST_PADS && pads >= LEAST_SHARE * padsOf(neighbours) ? fallen : [];
 }
 
-/** The list of those that still stand with whom a pump's load fell: as long as the wind blows, it grows. */
+/**
+ * The list of those that still stand with whom a pump's load fell: as long as the wind blows, it grows.
+ *
+ * @example findFallList(state, member)?.kind // 'load-fall', or undefined where nobody's load fell with it
+ */
 export const findFallList = ({ members, alarms }: AreaState, member: Member): AreaAlarm | undefined =>
   alarms.find(
     (alarm) =>

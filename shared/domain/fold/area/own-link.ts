@@ -26,7 +26,11 @@ const WEIGHED_FOR_MS = 600_000;
 const ONE_AREA_SHARE = 0.8;
 const LOST_FOR_LONG_MS = 86_400_000;
 
-/** When a member dropped as our link sees it, ms; 0 = it did not. */
+/**
+ * When a member dropped as our link sees it, ms; 0 = it did not.
+ *
+ * @example droppedAt({ ...member, lostAt: 0, silentSince: 0 }) // 0: it did not
+ */
 export const droppedAt = ({ lostAt, silentSince }: Member): number => (lostAt === 0 ? silentSince : lostAt);
 
 /**
