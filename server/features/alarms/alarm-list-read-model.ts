@@ -6,7 +6,7 @@ import type { SortKeys } from '#server/http/page-cursor.ts';
 import type { AlarmPage, AlarmsQuery } from '#shared/contract/http/alarms.ts';
 import { alarmColumns, alarmFrom, placeName } from './alarm-columns-read-model.ts';
 import type { AlarmRow } from './alarm-row.ts';
-import { isOf, speaksFor } from './whose-alarm.ts';
+import { isOf, speaksFor } from './whose-alarm-read-model.ts';
 
 type Sort = AlarmsQuery['sort'];
 

@@ -3,7 +3,7 @@ import type { Context } from '#server/context.ts';
 import { isSetAside } from '#server/db/set-aside.ts';
 import { invalid } from '#server/errors.ts';
 import type { Technicians } from '#shared/contract/http/alarm-acts.ts';
-import { isOf } from './whose-alarm.ts';
+import { isOf } from './whose-alarm-read-model.ts';
 
 /** Technicians of the company who have not left, each with the open alarms that go to them; by name. */
 export async function listTechnicianRows({ db, actor }: Context): Promise<Technicians['items']> {

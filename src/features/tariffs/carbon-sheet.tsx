@@ -51,12 +51,12 @@ export function CarbonSheet() {
 function Factor({ region, purpose }: { readonly region: string; readonly purpose: CarbonPurpose }) {
   const { number } = useFormat();
   const found = findCarbonFactor(region, purpose);
-  const words = purpose === 'consumption' ? 'carbon.use' : 'carbon.savings';
+  const isUse = purpose === 'consumption';
   return (
     <li>
       {found === undefined
-        ? t(`${words}.unknown`)
-        : t(words, { factor: number(found.kilogramsPerKwh, 3), year: String(found.year) })}
+        ? t(isUse ? 'carbon.use.unknown' : 'carbon.savings.unknown')
+        : t(isUse ? 'carbon.use' : 'carbon.savings', { factor: number(found.kilogramsPerKwh, 3), year: String(found.year) })}
     </li>
   );
 }

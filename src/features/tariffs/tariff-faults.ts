@@ -32,10 +32,11 @@ function sayFault({ field, reason, allowed }: ServerFault): string {
 function listHoles(schedule: ScheduleDraft | null, place: string, format: Format): [string, string][] {
   if (schedule === null) return [];
   return (['weekday', 'weekend'] as const).flatMap((days): [string, string][] => {
-    const [first] = listStretches(schedule[days]).filter(({ period }) => period === null);
+    const [first, ...more] = listStretches(schedule[days]).filter(({ period }) => period === null);
     if (first === undefined) return [];
     const where = `${t(`grid.title.${days}`)}, ${stretchText(first, format)}`;
-    return [[`${place}.${days}`, t('fault.hole', { where })]];
+    const said = more.length === 0 ? t('fault.hole', { where }) : t('fault.holes', { where, count: more.length });
+    return [[`${place}.${days}`, said]];
   });
 }
 

@@ -140,7 +140,7 @@ describe('giving an alarm to a technician', () => {
     const { id } = await raise();
     const { pumpId } = company.pumps[0]!;
     await pools.machine.query(
-      `update alarms set pump_id = null, pad_id = null, group_key = 'power Northside', group_kind = 'power' where id = $1`,
+      `update alarms set pump_id = null, pad_id = null, group_key = 'area-silence:Northside:0', group_kind = 'area-silence' where id = $1`,
       [id],
     );
     await pools.machine.query(

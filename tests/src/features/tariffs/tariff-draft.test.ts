@@ -146,6 +146,18 @@ describe('what keeps a tariff from being saved', () => {
     });
   });
 
+  it('says how many more stretches have none', () => {
+    const draft = priced('0.1');
+    const twice = fillArea(addPeriod(draft.energy), 'weekday', summerEvenings, 1);
+    const energy = removePeriod(
+      fillArea(twice, 'weekday', areaBetween({ month: 0, hour: 0 }, { month: 0, hour: 3 }), 1),
+      1,
+    );
+    expect(faultsOf({ ...draft, energy })['energy.weekday']).toMatch(
+      /^Monday to Friday, January, .* and 1 more stretch have/,
+    );
+  });
+
   it('says what the server found in plain words, at its field', () => {
     const draft = priced('0.1');
     const faults = faultsOf(draft, [
