@@ -2,10 +2,11 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { encodeReadings } from '#shared/contract/mqtt/encode-reading.ts';
 import type { Reading } from '#shared/domain/readings/reading.ts';
 import { instantOf } from '#shared/domain/time/instant-of.ts';
+import { queryOf, waitUntilFolded } from '#tests/support/folded-stream.ts';
 import { openRawDevice, type RawDevice, topicOf } from '#tests/support/test-broker.ts';
 import { makeTestCompany, type TestCompany } from '#tests/support/test-company.ts';
 import { createFreshDatabase } from '#tests/support/test-database.ts';
-import { querySuperuser, startTestStream, type TestStream } from '#tests/support/test-stream.ts';
+import { startTestStream, type TestStream } from '#tests/support/test-stream.ts';
 
 /*
  * The pumps of a test company run their program, 1700 rpm, from 08:00 to 18:00 by their pad's clock. The server's clock
@@ -37,15 +38,8 @@ afterAll(async () => {
   await database.drop();
 });
 
-const query = <Row extends Record<string, unknown>>(text: string, ...values: unknown[]) =>
-  querySuperuser<Row>(database.superuserUrl, text, values);
-const folded = () =>
-  expect
-    .poll(async () => {
-      await running.stream.drain();
-      return running.stream.count().fold.lagMs;
-    })
-    .toBe(0);
+const query = queryOf(() => database);
+const folded = () => waitUntilFolded(running);
 
 const running1700 = (at: number): Reading => ({
   at,

@@ -2,10 +2,11 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { encodeReadings } from '#shared/contract/mqtt/encode-reading.ts';
 import type { Reading } from '#shared/domain/readings/reading.ts';
 import { instantOf } from '#shared/domain/time/instant-of.ts';
+import { queryOf } from '#tests/support/folded-stream.ts';
 import { openRawDevice, type RawDevice, topicOf } from '#tests/support/test-broker.ts';
 import { makeTestCompany, type TestCompany } from '#tests/support/test-company.ts';
 import { createFreshDatabase } from '#tests/support/test-database.ts';
-import { querySuperuser, startTestStream, type TestStream } from '#tests/support/test-stream.ts';
+import { startTestStream, type TestStream } from '#tests/support/test-stream.ts';
 
 /* The pump of the first pad runs its program, 1700 rpm, from 08:00 to 18:00; it is yesterday noon there. */
 const NOON = instantOf('America/Los_Angeles', Math.floor(Date.now() / 86_400_000) - 1, 720) ?? 0;
@@ -31,8 +32,7 @@ afterAll(async () => {
   await database.drop();
 });
 
-const query = <Row extends Record<string, unknown>>(text: string, ...values: unknown[]) =>
-  querySuperuser<Row>(database.superuserUrl, text, values);
+const query = queryOf(() => database);
 
 /** The pump at a speed from one minute before noon to another. */
 async function play(from: number, to: number, rpm: number): Promise<void> {
