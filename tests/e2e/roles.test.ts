@@ -1,6 +1,6 @@
 import type { Browser } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { launchBrowser } from '#tests/support/browser.ts';
+import { launchBrowser, listAxeViolations } from '#tests/support/browser.ts';
 import { isFocusVisible, tabTo } from './keyboard.ts';
 import { openOwnProduct } from './own-product.ts';
 import { type Desk, HOMEOWNER, MANAGER, openDesk, signIn, TECHNICIAN } from './people.ts';
@@ -74,6 +74,8 @@ describe.each([
       '/energy',
       'pad energy',
       '/settings/rules',
+      '/settings/tariffs',
+      '/settings/tariffs/new',
       'pump',
       'alarm',
     ],
@@ -108,6 +110,35 @@ describe.each([
   );
 });
 
+describe('a manager', () => {
+  it(
+    'makes a tariff that the server finds sound, gives it from a date, and takes that back',
+    async () => {
+      const { page, troubles, close } = await openAs(MANAGER);
+      await page.goto('/settings/tariffs/new');
+      await page.getByLabel('Name', { exact: true }).fill('Tarnwick flat 2027');
+      await page.getByLabel('Price a kWh, Period 1, tier 1').fill('0.31456');
+      await page.getByText('Every hour has a price.').waitFor();
+      await page.getByRole('button', { name: 'Save', exact: true }).click();
+      await page.getByRole('heading', { level: 1, name: 'Tariff: Tarnwick flat 2027' }).waitFor();
+      await page.getByRole('link', { name: 'All tariffs' }).click();
+      const terms = page.getByRole('region', { name: 'The company’s terms' });
+      await terms.getByRole('button', { name: 'Replace from a date' }).click();
+      await terms.getByLabel('Tariff', { exact: true }).last().selectOption({ label: 'Tarnwick flat 2027' });
+      await terms.getByLabel('from', { exact: true }).last().fill('2990-01-01');
+      await page.getByRole('button', { name: 'Save', exact: true }).click();
+      await page.getByText(/^the company from .*Jan 1, 2990$/).waitFor();
+      expect(await listAxeViolations(page)).toEqual([]);
+      await page.getByRole('button', { name: 'Undo the last change of tariffs' }).click();
+      await page.getByRole('button', { name: 'Delete Tarnwick flat 2027' }).click();
+      await page.getByText('Tarnwick flat 2027 is deleted.').waitFor();
+      expect(troubles.list()).toEqual([]);
+      await close();
+    },
+    LOOKS_LONG_MS,
+  );
+});
+
 describe('a homeowner', () => {
   it('sees their own pump in plain words', async () => {
     const { page, close } = await openAs(HOMEOWNER);
@@ -120,7 +151,15 @@ describe('a homeowner', () => {
     'is told that the fleet and the alarms are not theirs',
     async () => {
       const { page, close } = await openAs(HOMEOWNER);
-      for (const path of ['/fleet', '/alarms', '/alarms/health', '/energy', padEnergyPath, alarmPath]) {
+      for (const path of [
+        '/fleet',
+        '/alarms',
+        '/alarms/health',
+        '/energy',
+        '/settings/tariffs',
+        padEnergyPath,
+        alarmPath,
+      ]) {
         await page.goto(path);
         await page.getByRole('heading', { level: 1, name: 'This page is not for your role.' }).waitFor();
         expect(await examineScreen(page)).toEqual([]);
