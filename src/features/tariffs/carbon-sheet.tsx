@@ -56,7 +56,10 @@ function Factor({ region, purpose }: { readonly region: string; readonly purpose
     <li>
       {found === undefined
         ? t(isUse ? 'carbon.use.unknown' : 'carbon.savings.unknown')
-        : t(isUse ? 'carbon.use' : 'carbon.savings', { factor: number(found.kilogramsPerKwh, 3), year: String(found.year) })}
+        : t(isUse ? 'carbon.use' : 'carbon.savings', {
+            factor: number(found.kilogramsPerKwh, 3),
+            year: String(found.year),
+          })}
     </li>
   );
 }

@@ -18,9 +18,6 @@ export type LoadFacts = {
   ratio: number;
   /** Below this ratio the wet end moves air. */
   unloadedBelow: number;
-  /** Speed and watts when the load was last judged; 0 before. */
-  judgedRpm: number;
-  judgedWatts: number;
   /** This run has carried load for twenty seconds at one time. */
   primedOnce: boolean;
   /** Has load now; undefined = not judged (off, ramp, or still learning). */

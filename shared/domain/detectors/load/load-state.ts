@@ -16,12 +16,8 @@ export type LoadState = {
   lookedAt: number;
   lookedWatts: number;
   raggedness: number;
-  smoothSince: number;
   loadedSince: number;
   unloadedSince: number;
-  /** Speed and watts when the load was last judged. */
-  judgedRpm: number;
-  judgedWatts: number;
   primedOnce: boolean;
   /** Load came for a moment and went; and it went for good. */
   brief: boolean;
@@ -64,11 +60,8 @@ export const restingLoad = (): LoadState => ({
   lookedAt: 0,
   lookedWatts: 0,
   raggedness: 0,
-  smoothSince: 0,
   loadedSince: 0,
   unloadedSince: 0,
-  judgedRpm: 0,
-  judgedWatts: 0,
   primedOnce: false,
   brief: false,
   bestShare: 0,

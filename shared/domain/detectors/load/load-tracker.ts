@@ -74,10 +74,6 @@ export function createLoadTracker(context: PumpContext, limits: TryLimits, hot: 
     facts.ratio = estimate.basis === 'none' ? Number.NaN : state.smoothWatts / estimate.watts;
     // While the shaft slows down its watts tell of the drive, not of the water: two readings at one speed are judged.
     const isSettled = control.rampOver && state.samples >= 2;
-    if (isSettled) {
-      state.judgedRpm = Math.round(reading.rpm);
-      state.judgedWatts = Math.round(state.smoothWatts);
-    }
     const sure = estimate.basis === 'band' || estimate.basis === 'prime';
     const look = { at: reading.at, ratio: facts.ratio, unloadedBelow: facts.unloadedBelow, sure };
     if (isSettled && judgeLoad(state, look) && state.startSeen) bump();
@@ -114,8 +110,6 @@ function publish(facts: LoadFacts, state: ReturnType<typeof restingLoad>): void 
   facts.startSeen = state.startSeen;
   facts.primeEndsAt = state.primeEndsAt;
   facts.watts = state.smoothWatts;
-  facts.judgedRpm = state.judgedRpm;
-  facts.judgedWatts = state.judgedWatts;
   facts.primedOnce = state.primedOnce;
   facts.primed = state.primed === 2 ? undefined : state.primed === 1;
   facts.primeSeconds = state.primeSeconds;
@@ -141,8 +135,6 @@ function restingFacts(wattsAt: LoadFacts['wattsAt']): LoadFacts {
     basis: 'none',
     ratio: Number.NaN,
     unloadedBelow: ROUGH_SHARE,
-    judgedRpm: 0,
-    judgedWatts: 0,
     primedOnce: false,
     primed: undefined,
     dry: false,

@@ -19,7 +19,6 @@ export function smoothWatts(state: LoadState, at: number, rpm: number, watts: nu
     state.smoothRpm = rpm;
     state.smoothWatts = watts;
     state.samples = 1;
-    state.smoothSince = at;
     return;
   }
   const gain = Math.max(elapsedMs / (MEAN_MS + elapsedMs), 1 / (state.samples + 1));
@@ -31,11 +30,11 @@ export function smoothWatts(state: LoadState, at: number, rpm: number, watts: nu
 
 function look(state: LoadState, at: number, watts: number): void {
   if (state.lookedAt !== 0) {
-    state.moves.push(Math.round(Math.abs(watts - state.lookedWatts) * 10) / 10);
+    state.moves.push(Math.round(Math.abs(watts - state.lookedWatts)));
     if (state.moves.length > KEPT_MOVES) state.moves.shift();
   }
   state.lookedAt = at;
-  state.lookedWatts = watts;
+  state.lookedWatts = Math.round(watts);
   state.raggedness = raggednessOf(state);
 }
 
@@ -43,7 +42,8 @@ function look(state: LoadState, at: number, watts: number): void {
 function raggednessOf({ moves, smoothWatts: mean }: LoadState): number {
   if (moves.length < FEWEST_MOVES || mean <= 0) return 0;
   const smaller = moves.toSorted((left, right) => left - right).slice(0, -LEFT_OUT);
-  return smaller.reduce((sum, move) => sum + move, 0) / smaller.length / MEAN_MOVE / mean;
+  const share = smaller.reduce((sum, move) => sum + move, 0) / smaller.length / MEAN_MOVE / mean;
+  return Math.round(share * 1000) / 1000;
 }
 
 export function forgetSmoothing(state: LoadState): void {

@@ -73,6 +73,7 @@ export function endTry(state: LoadState, at: number, primeSeconds: number, limit
 const LATELY_MS = 20 * 60_000;
 const LEAST_LATELY = 0.72;
 
+const hasHadLoad = ({ primedOnce, sure }: LoadState): boolean => primedOnce && sure;
 const latelyShare = ({ lately }: LoadState): number => Math.min(1, Math.max(LEAST_LATELY, lately));
 
 /**
@@ -80,20 +81,21 @@ const latelyShare = ({ lately }: LoadState): number => Math.min(1, Math.max(LEAS
  * fallen slowly, but never under half; a start that never had load has lost none slowly.
  */
 export function unloadedShare(state: LoadState, share: number): number {
-  return state.primedOnce ? share * latelyShare(state) : share;
+  return hasHadLoad(state) ? share * latelyShare(state) : share;
 }
 
 /** The share that counts as no load now: one that was seen without needs clearly more, unless it has had little lately. */
 function limitShare(state: LoadState, unloadedBelow: number): number {
   if (state.primed !== 0) return unloadedBelow;
   const clearly = unloadedBelow * CLEARLY_ABOVE;
-  return state.primedOnce ? clearly : Math.max(unloadedBelow, clearly * latelyShare(state));
+  return hasHadLoad(state) ? clearly : Math.max(unloadedBelow, clearly * latelyShare(state));
 }
 
 /** Follows the load while there is one; elapsed ms. */
 export function followLately(state: LoadState, ratio: number, elapsedMs: number): void {
   if (state.primed !== 1 || !(ratio > 0)) return;
-  state.lately += (elapsedMs / (elapsedMs + LATELY_MS)) * (ratio - state.lately);
+  const lately = state.lately + (elapsedMs / (elapsedMs + LATELY_MS)) * (ratio - state.lately);
+  state.lately = Math.round(lately * 10_000) / 10_000;
 }
 
 /** Share of the primed watts after the ramp, below which there is no load, and whether both are this speed's own. */
@@ -119,8 +121,10 @@ export function judgeLoad(state: LoadState, look: LoadLook): boolean {
   if (state.loadedSince === 0) state.loadedSince = at;
   if (at - state.loadedSince < SETTLED_MS) return false;
   state.primed = 1;
-  if (look.sure) state.sure = true;
-  if (!state.sure) state.bestShare = Math.max(state.bestShare, ratio);
+  if (look.sure) {
+    state.sure = true;
+    state.bestShare = 0;
+  } else if (!state.sure) state.bestShare = Math.max(state.bestShare, Math.round(ratio * 100) / 100);
   if (state.primedOnce) return false;
   state.primedOnce = true;
   state.primeSeconds = Math.max(0, (state.loadedSince - state.startedAt) / 1000);
@@ -161,7 +165,8 @@ export function isDry(
 
 /** Remembers what the fastest speed of a start without load looked like: nothing tells its cause better. */
 function noteTry(state: LoadState, { at, ratio }: LoadLook): void {
-  if (at - state.startedAt >= FIRST_WATER_MS) state.bestShare = Math.max(state.bestShare, ratio);
+  if (at - state.startedAt >= FIRST_WATER_MS)
+    state.bestShare = Math.max(state.bestShare, Math.round(ratio * 100) / 100);
   if (state.bestShare >= CAUGHT_SHARE && ratio < AIR_SHARE) state.caught = true;
   const isFastest = state.smoothRpm >= state.triedRpm * SAME_SPEED;
   if (state.raggedness > 0 && (isFastest || state.tryRaggedness === 0)) state.tryRaggedness = state.raggedness;

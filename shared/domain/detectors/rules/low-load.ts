@@ -30,7 +30,7 @@ function judge(state: State, facts: Facts, parameters: Parameters): Judgement {
   const { water, control } = facts;
   if (Number.isNaN(water.ratio)) return UNJUDGED;
   const stands = facts.stands('low-load');
-  if (!stands) state.byWatts = Number.isNaN(water.dropOfDays);
+  if (!stands) state.byWatts = Number.isNaN(water.dropOfDays) && water.wattsDropOfDays >= parameters.noteWattsShare;
   const { ofDays, noteShare } = fallOf(state, facts, parameters);
   if (state.rpm === 0 && water.ratio > AS_USUAL_RATIO && !(ofDays >= noteShare)) return NORMAL;
   const slow = isSlow(state, facts, parameters);

@@ -38,12 +38,14 @@ export function wrongSpeedCause(facts: Facts, parameters: RuleParameters<'wrong-
 const LIMIT_SHARE = 0.4;
 
 /** Another input should win, and the motor runs the speed of a wired one that is open, which no program asks for. */
-function runsOpenInput({ reading, context, inputs }: Facts): boolean {
+function runsOpenInput({ reading, control, context, inputs }: Facts): boolean {
   const { settings } = context;
   return (
+    reading.activeInput !== control.winningInput &&
     listClosedInputs(inputs.wired & ~reading.closedInputs).some((input) =>
       fitsSpeed(reading.rpm, inputSpeed(settings.inputs, input)),
-    ) && !settings.program.some((entry) => fitsSpeed(reading.rpm, entry.rpm))
+    ) &&
+    !settings.program.some((entry) => fitsSpeed(reading.rpm, entry.rpm))
   );
 }
 

@@ -34,8 +34,10 @@ function judge(state: State, facts: Facts, parameters: RuleParameters<'wrong-spe
   if (!off || (facts.stands('settings-changed') && facts.fitsReported())) {
     state.off = false;
     const isOther = others || !isSameSituation(state, facts);
-    if (!isOther) state.metAt = facts.now;
-    return facts.stands('wrong-speed') && isOther && facts.now - state.metAt < FORGOTTEN_MS ? UNJUDGED : NORMAL;
+    const stands = facts.stands('wrong-speed');
+    if (!stands) state.metAt = 0;
+    else if (!isOther) state.metAt = facts.now;
+    return stands && isOther && facts.now - state.metAt < FORGOTTEN_MS ? UNJUDGED : NORMAL;
   }
   state.metAt = facts.now;
   state.off = true;
@@ -48,7 +50,8 @@ function meanOff(state: State, { control, elapsedMs }: Facts): number {
   const by = control.rpm - control.due.rpm;
   const isOther = state.due !== control.due.rpm || Math.abs(by - state.byRpm) > speedTolerance(control.due.rpm);
   state.due = control.due.rpm;
-  state.byRpm = isOther ? by : state.byRpm + (elapsedMs / (elapsedMs + MEAN_MS)) * (by - state.byRpm);
+  const mean = isOther ? by : state.byRpm + (elapsedMs / (elapsedMs + MEAN_MS)) * (by - state.byRpm);
+  state.byRpm = Math.round(mean * 100) / 100;
   return state.byRpm;
 }
 
