@@ -35,6 +35,14 @@ describe('freezing', () => {
     expect(player.standing('freezing')).toMatchObject({ priority: 'note', alarmClass: 'note' });
   });
 
+  it('takes an evening about the guard, with one reading far below it, for no frost', () => {
+    const player = createPlayer();
+    player.play(3 * HOUR, (at) => still(at % 7 === 0 ? 3.3 : 4.7));
+    player.play(10_000, still(3.2));
+    player.play(HOUR, still(4.8));
+    expect(player.signals).toEqual([]);
+  });
+
   it('explains a pump that stands still when a speed is due', () => {
     const player = createPlayer();
     player.playUntil(0, 420, { ambientCelsius: 6 });

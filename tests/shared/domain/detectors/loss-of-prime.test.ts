@@ -23,6 +23,28 @@ describe('loss-of-prime', () => {
     expect(player.spoken()).toEqual(['loss-of-prime']);
   });
 
+  it('keeps the cause that it had while the water was gone, and says nothing of a gulp that ended in time', () => {
+    const player = learnt();
+    player.play(2 * MINUTE + 20_000, { closedInputs: 1, load: 0.36 });
+    player.play(30 * MINUTE, { closedInputs: 1 });
+    expect(player.signals).toEqual([]);
+
+    player.play(20 * MINUTE, { closedInputs: 1, load: 0.36 });
+    player.play(10 * MINUTE, { closedInputs: 1 });
+    const causes = player.signals.flatMap((signal) => ('cause' in signal ? [signal.cause] : []));
+    expect(new Set(causes)).toEqual(new Set(['sudden']));
+    expect(player.standing('loss-of-prime')).toBeUndefined();
+  });
+
+  it('is no failed prime hours after a good one, however the load comes and goes', () => {
+    const player = createPlayer();
+    player.playUntil(3, 660, goodDay());
+    const start = player.at;
+    player.play(40 * MINUTE, (at) => ({ closedInputs: 1, load: ((at - start) / 60_000) % 1 < 0.5 ? 0.35 : 1 }));
+
+    expect(player.raised('failed-prime')).toEqual([]);
+  });
+
   it('gives a slow pump ten minutes and judges none below 1500 rpm', () => {
     const player = createPlayer();
     player.playUntil(3, 500, goodDay());

@@ -39,6 +39,17 @@ describe('motor-clock', () => {
     expect(player.standing('motor-clock')).toBeUndefined();
   });
 
+  it('believes a clock that was set at its first edge on time, and speaks of no run that the old offset forbids', () => {
+    const player = createPlayer(PLAIN);
+    player.playUntil(3, 0, {});
+    player.playUntil(6, 0, { clockAhead: -80 });
+    expect(player.standing('motor-clock')).toBeDefined();
+
+    player.playUntil(6, 480, { clockAhead: 0 });
+    expect(player.standing('motor-clock')).toBeUndefined();
+    expect(player.raised('unexpected-run').filter(({ at }) => at > MONDAY + 6 * DAY)).toEqual([]);
+  });
+
   it.each([['drift', (at: number) => shows(Math.floor(((at - MONDAY) / DAY) * 8))(at)]])('names %s', (cause, scene) => {
     const player = createPlayer(PLAIN);
     player.playUntil(3, 0, scene);

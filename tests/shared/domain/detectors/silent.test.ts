@@ -30,6 +30,20 @@ describe('silent', () => {
     expect(player.spoken()).toEqual(['silent']);
   });
 
+  it('tells a device that hung from a power cut by the connection that stayed', () => {
+    const player = connected();
+    player.push({ kind: 'status', receivedAt: player.at, status: { state: 'lost', connection: 'c1' } });
+    player.push({ kind: 'status', receivedAt: player.at, status: online('b1', 'c2') });
+    player.play(HOUR, goodDay());
+    player.silence(2 * HOUR);
+    expect(player.standing('silent')?.cause).toBe('device');
+
+    player.push({ kind: 'status', receivedAt: player.at, status: online('b2', 'c3') });
+    player.play(10_000, { rpm: 0, reportedSource: 'off' });
+    player.play(20 * MINUTE, goodDay());
+    expect(player.signals.filter(({ detector }) => detector === 'silent').at(-2)).toMatchObject({ cause: 'device' });
+  });
+
   it.each([
     ['power', 'b2', { rpm: 0, reportedSource: 'off' as const }],
     ['link', 'b1', {}],

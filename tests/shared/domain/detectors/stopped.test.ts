@@ -29,6 +29,17 @@ describe('stopped', () => {
     expect(player.standing('stopped')).toMatchObject({ cause: 'keypad-stop', from: MONDAY + 480 * MINUTE });
   });
 
+  it('counts nothing of a keypad stop against what comes after it', () => {
+    const player = createPlayer();
+    player.playUntil(0, 480, goodDay());
+    player.play(100 * MINUTE, { ...DEAD, reportedSource: 'stop' });
+    player.play(19 * MINUTE, { ...DEAD, reportedSource: 'program' });
+    expect(player.signals).toEqual([]);
+
+    player.play(3 * MINUTE, { ...DEAD, reportedSource: 'program' });
+    expect(player.standing('stopped')?.cause).toBe('unknown');
+  });
+
   it('believes no keypad stop where a closed input beats it', () => {
     const player = createPlayer({ ...CONTEXT, traits: { ...CONTEXT.traits, stopBeatsInputs: false } });
     player.playUntil(0, 620, goodDay());

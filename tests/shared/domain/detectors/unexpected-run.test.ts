@@ -28,6 +28,28 @@ describe('unexpected-run', () => {
     expect(player.standing('unexpected-run')?.cause).toBe('motor-clock');
   });
 
+  it('keeps what it found while nothing was due', () => {
+    const player = createPlayer();
+    player.playUntil(1, NIGHT, goodDay());
+    player.playUntil(1, 360, { rpm: 1380, reportedSource: 'off' });
+    player.playUntil(1, 1200, goodDay());
+    player.play(30_000, { rpm: 1700, reportedSource: 'program' });
+    player.play(30 * MINUTE, { rpm: 1380, reportedSource: 'off' });
+
+    expect(player.standing('unexpected-run')?.cause).toBe('unknown');
+  });
+
+  it('takes the end of a freeze run for no run, where the motor names no source', () => {
+    const player = createPlayer();
+    const quiet = { reportedSource: undefined, activeInput: 0 };
+    player.playUntil(1, NIGHT, { ...quiet, rpm: 0 });
+    player.play(4 * HOUR + MINUTE, { ...quiet, rpm: CONTEXT.settings.freeze!.rpm });
+    player.play(10_000, { ...quiet, rpm: 751 });
+    player.play(20 * MINUTE, { ...quiet, rpm: 0 });
+
+    expect(player.raised('unexpected-run')).toEqual([]);
+  });
+
   it('names the program when the day began on time', () => {
     const player = createPlayer();
     player.playUntil(0, 1200, {});

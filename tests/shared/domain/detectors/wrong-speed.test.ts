@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { createPlayer, goodDay, HOUR, MINUTE, MONDAY } from './pump-player.ts';
+import { createPlayer, createRandom, goodDay, HOUR, MINUTE, MONDAY } from './pump-player.ts';
 
 const NOON = { closedInputs: 1 };
 
@@ -27,6 +27,7 @@ describe('wrong-speed', () => {
     ['ignores-input', { closedInputs: 1, activeInput: 0, rpm: 1700 }],
     ['runs-input-open', { closedInputs: 0, activeInput: 1, rpm: 2850 }],
     ['runs-input-open', { closedInputs: 0, activeInput: 0, rpm: 2850, reportedSource: 'program' as const }],
+    ['runs-input-open', { closedInputs: 2, activeInput: 0, rpm: 2850, reportedSource: 'program' as const }],
     ['unknown-speed', { closedInputs: 1, activeInput: 1, rpm: 2600 }],
     ['derating', { closedInputs: 1, activeInput: 1, rpm: 2600, driveCelsius: 88 }],
     ['power-limit', { closedInputs: 1, activeInput: 1, rpm: 2600, load: 1.35 }],
@@ -37,6 +38,34 @@ describe('wrong-speed', () => {
 
     expect(player.spoken()).toEqual(['wrong-speed']);
     expect(player.standing('wrong-speed')?.cause).toBe(cause);
+  });
+
+  it('judges a speed near its limit by the mean, so that noise neither raises it nor holds it back', () => {
+    const limit = 57;
+    const noise = createRandom(3);
+    const by = (rpm: number) => () => ({ closedInputs: 1, activeInput: 1, rpm: 2850 - rpm + (noise() - 0.5) * 8 });
+    const inside = createPlayer();
+    inside.playUntil(0, 600, goodDay());
+    inside.play(2 * HOUR, by(limit - 2));
+    expect(inside.signals).toEqual([]);
+
+    const outside = createPlayer();
+    outside.playUntil(0, 600, goodDay());
+    outside.play(8 * MINUTE, by(limit + 3));
+    expect(outside.spoken()).toEqual(['wrong-speed']);
+  });
+
+  it('ends when its situation has not come again for three days', () => {
+    const player = createPlayer();
+    player.playUntil(0, 600, goodDay());
+    player.play(HOUR, { closedInputs: 3, activeInput: 2, rpm: 2400 });
+    expect(player.spoken()).toEqual(['wrong-speed']);
+
+    const onlySecond = (at: number) => ({ closedInputs: (at - MONDAY) % (24 * HOUR) > 11 * HOUR ? 2 : 0 });
+    player.playUntil(2, 0, onlySecond, MINUTE);
+    expect(player.standing('wrong-speed')).toBeDefined();
+    player.playUntil(4, 0, onlySecond, MINUTE);
+    expect(player.standing('wrong-speed')).toBeUndefined();
   });
 
   it('is not cured by a situation that cannot show it', () => {
