@@ -1,4 +1,4 @@
-import { speedTolerance } from '#shared/domain/control/speed-tolerance.ts';
+import { fitsSpeed, speedTolerance } from '#shared/domain/control/speed-tolerance.ts';
 import { inputSpeed, listClosedInputs } from '#shared/domain/control/winning-input.ts';
 import { isNearSuspectEdge } from '../clocks/motor-clock-tracker.ts';
 import { defineDetector, type Finding, type Spoken } from '../define-detector.ts';
@@ -66,12 +66,17 @@ function isSameSituation({ situation }: State, facts: Facts): boolean {
   return situation === situationOf(facts);
 }
 
-/** Around a program edge either speed is right until the motor's clock is known. */
+/**
+ * Around a program edge either speed is right until the motor's clock is known; and a speed of the program is right
+ * there as well where only its edges tell of that clock, which may have moved since by less than anybody looks for.
+ */
 function isNearUnknownEdge(facts: Facts, { programEdgeMinutes }: RuleParameters<'wrong-speed'>): boolean {
-  const { control, now } = facts;
+  const { control, context, now } = facts;
   if (control.winningInput !== 0) return false;
   if (isNearSuspectEdge(facts)) return true;
-  if (control.motorClockKnown) return false;
+  const says = facts.motorClock.basis === 'says';
+  const isOfProgram = context.settings.program.some(({ rpm }) => fitsSpeed(control.rpm, rpm));
+  if (control.motorClockKnown && (says || !isOfProgram)) return false;
   const near = programEdgeMinutes * 60_000;
   const { programEdgeBefore, programEdgeAfter } = control;
   if (programEdgeBefore !== undefined && now - programEdgeBefore < near) return true;

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { createPlayer, createRandom, goodDay, HOUR, MINUTE, MONDAY } from './pump-player.ts';
+import { CONTEXT, createPlayer, createRandom, goodDay, HOUR, MINUTE, MONDAY } from './pump-player.ts';
 
 const NOON = { closedInputs: 1 };
 
@@ -53,6 +53,22 @@ describe('wrong-speed', () => {
     outside.playUntil(0, 600, goodDay());
     outside.play(8 * MINUTE, by(limit + 3));
     expect(outside.spoken()).toEqual(['wrong-speed']);
+  });
+
+  it('forgives a clock known from its edges alone that has since moved by some minutes', () => {
+    const program = [
+      { days: CONTEXT.settings.program[0]!.days, fromMinute: 360, toMinute: 720, rpm: 1700 },
+      { days: CONTEXT.settings.program[0]!.days, fromMinute: 720, toMinute: 1200, rpm: 2200 },
+    ];
+    const context = { ...CONTEXT, inputs: [], settings: { ...CONTEXT.settings, program } };
+    const player = createPlayer(context);
+    player.playUntil(3, 0, {}, MINUTE);
+    player.playUntil(4, 0, { clockAhead: -8 });
+    expect(player.signals).toEqual([]);
+
+    player.playUntil(4, 700, {});
+    player.play(60 * MINUTE, { rpm: 1700, reportedSource: 'program' });
+    expect(player.spoken()).toEqual(['wrong-speed']);
   });
 
   it('ends when its situation has not come again for three days', () => {
