@@ -41,8 +41,13 @@ function look(state: LoadState, at: number, watts: number): void {
 /** Standard deviation of the watts as a share of their mean, steps left out; 0 while too few were seen. */
 function raggednessOf({ moves, smoothWatts: mean }: LoadState): number {
   if (moves.length < FEWEST_MOVES || mean <= 0) return 0;
-  const smaller = moves.toSorted((left, right) => left - right).slice(0, -LEFT_OUT);
-  const share = smaller.reduce((sum, move) => sum + move, 0) / smaller.length / MEAN_MOVE / mean;
+  let [sum, largest, second] = [0, 0, 0];
+  for (const move of moves) {
+    sum += move;
+    if (move > largest) [largest, second] = [move, largest];
+    else if (move > second) second = move;
+  }
+  const share = (sum - largest - second) / (moves.length - LEFT_OUT) / MEAN_MOVE / mean;
   return Math.round(share * 1000) / 1000;
 }
 

@@ -29,10 +29,10 @@ const WIDEST_SUDDEN_SHARE = 0.35;
 function judge(state: State, facts: Facts, parameters: Parameters): Judgement {
   const { water, control } = facts;
   if (Number.isNaN(water.ratio)) return UNJUDGED;
+  const isDown = water.dropOfDays >= parameters.noteShare || water.wattsDropOfDays >= parameters.noteWattsShare;
+  if (state.rpm === 0 && water.ratio > AS_USUAL_RATIO && !isDown) return NORMAL;
   const stands = facts.stands('low-load');
   if (!stands) state.byWatts = Number.isNaN(water.dropOfDays) && water.wattsDropOfDays >= parameters.noteWattsShare;
-  const { ofDays, noteShare } = fallOf(state, facts, parameters);
-  if (state.rpm === 0 && water.ratio > AS_USUAL_RATIO && !(ofDays >= noteShare)) return NORMAL;
   const slow = isSlow(state, facts, parameters);
   const share = Math.min(WIDEST_SUDDEN_SHARE, Math.max(parameters.suddenShare, TIMES_SPREAD * water.usualSpread));
   const sudden = water.ratio < 1 - share * (stands ? 1 - parameters.deadbandShare : 1);
