@@ -75,7 +75,8 @@ describe('runs of a pump', () => {
   it('are planned by the motor’s own clock where that is known to be off', async () => {
     const other = await makeTestCompany(pools.machine);
     const id = other.pumps[0]!.pumpId;
-    const until = server.clock.now + 30 * HOUR_MS;
+    const now = server.clock.now;
+    const until = now + 30 * HOUR_MS;
     const listStarts = async (): Promise<number[]> => {
       const { body } = await server.ask('GET', `/api/pumps/${id}/runs?from=${start}&until=${until}`, {
         as: other.manager,
@@ -95,7 +96,10 @@ describe('runs of a pump', () => {
        select id, company_id, number, $2, now() from pumps where id = $1`,
       [id, hot],
     );
-    const late = right.map((from) => from + HOUR_MS).filter((from) => from < until);
+    // A start of less than an hour ago is still to come by a clock that is an hour late.
+    const late = [(right[0] ?? 0) - 24 * HOUR_MS, ...right]
+      .map((from) => from + HOUR_MS)
+      .filter((from) => from > now && from < until);
     expect(late.length).toBeGreaterThan(0);
     expect(await listStarts()).toEqual(late);
   });
