@@ -33,6 +33,9 @@ export async function examineScreen(page: Page): Promise<string[]> {
   }
   await page.setViewportSize({ width: NARROWEST_PX, height: 640 });
   await waitUntilDrawn(page);
+  // A chart takes its new width a moment after the window has it.
+  const fits = (limit: number): boolean => document.documentElement.scrollWidth <= limit;
+  await page.waitForFunction(fits, NARROWEST_PX, { timeout: 5000 }).catch(() => undefined);
   const widest = await page.evaluate(() => document.documentElement.scrollWidth);
   if (widest > NARROWEST_PX) faults.push(`scrolls sideways at ${NARROWEST_PX} px: ${widest} px wide`);
   await page.setViewportSize({ width: 1440, height: 1000 });
