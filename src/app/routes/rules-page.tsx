@@ -4,6 +4,7 @@ import type { RuleLayers } from '#shared/contract/http/rules.ts';
 import { SettingsPages } from '#src/app/shell/settings-pages.tsx';
 import { ErrorNotice } from '#src/components/ui/error-notice.tsx';
 import { PageHeading } from '#src/components/ui/page-heading.tsx';
+import { PendingSheet } from '#src/components/ui/pending-sheet.tsx';
 import { RuleEditor } from '#src/features/rules/rule-editor.tsx';
 import { isSameScope, ruleQueries } from '#src/features/rules/rule-queries.ts';
 import { ScopePicker } from '#src/features/rules/scope-picker.tsx';
@@ -14,7 +15,7 @@ const PUMP = 'pump:';
 
 /** Settings › Alarm rules: when each rule speaks, for the company, a motor model or a pump. */
 export function RulesPage() {
-  const { data, isError, error, refetch } = useQuery(ruleQueries.all());
+  const { data, error, refetch } = useQuery(ruleQueries.all());
   return (
     <div className="mx-auto flex max-w-6xl flex-col gap-4 px-4 py-5 sm:px-7">
       <SettingsPages />
@@ -24,17 +25,8 @@ export function RulesPage() {
       </div>
       {data !== undefined ? (
         <Loaded layers={data} />
-      ) : isError ? (
-        <div className="border border-ink bg-sheet">
-          <ErrorNotice error={error} onRetry={() => void refetch()} />
-        </div>
       ) : (
-        <div aria-busy="true" className="border border-ink bg-sheet p-4">
-          <p role="status" className="sr-only">
-            {t('shell.loading')}
-          </p>
-          <div aria-hidden="true" className="ruled h-96" />
-        </div>
+        <PendingSheet error={error ?? undefined} onRetry={() => void refetch()} />
       )}
     </div>
   );

@@ -1,8 +1,8 @@
 import { useQuery } from '@tanstack/react-query';
 import { Link, useParams, useSearchParams } from 'react-router-dom';
 import { SettingsPages } from '#src/app/shell/settings-pages.tsx';
-import { ErrorNotice } from '#src/components/ui/error-notice.tsx';
 import { PageHeading } from '#src/components/ui/page-heading.tsx';
+import { PendingSheet } from '#src/components/ui/pending-sheet.tsx';
 import { TariffEditor } from '#src/features/tariffs/tariff-editor.tsx';
 import { tariffQueries } from '#src/features/tariffs/tariff-queries.ts';
 import { useSession } from '#src/hooks/use-session.ts';
@@ -42,17 +42,8 @@ export function TariffPage() {
           from={from}
           currency={from?.currency ?? USUAL_CURRENCY}
         />
-      ) : source.isError ? (
-        <div className="border border-ink bg-sheet">
-          <ErrorNotice error={source.error} onRetry={() => void source.refetch()} />
-        </div>
       ) : (
-        <div aria-busy="true" className="border border-ink bg-sheet p-4">
-          <p role="status" className="sr-only">
-            {t('shell.loading')}
-          </p>
-          <div aria-hidden="true" className="ruled h-96" />
-        </div>
+        <PendingSheet error={source.error ?? undefined} onRetry={() => void source.refetch()} />
       )}
     </div>
   );

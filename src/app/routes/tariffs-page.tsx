@@ -1,7 +1,7 @@
 import { useQuery } from '@tanstack/react-query';
 import { SettingsPages } from '#src/app/shell/settings-pages.tsx';
-import { ErrorNotice } from '#src/components/ui/error-notice.tsx';
 import { PageHeading } from '#src/components/ui/page-heading.tsx';
+import { PendingSheet } from '#src/components/ui/pending-sheet.tsx';
 import { CarbonSheet } from '#src/features/tariffs/carbon-sheet.tsx';
 import { CompanyTermsSheet } from '#src/features/tariffs/company-terms-sheet.tsx';
 import { PadsSheet } from '#src/features/tariffs/pads-sheet.tsx';
@@ -16,7 +16,6 @@ export function TariffsPage() {
   const list = useQuery(tariffQueries.list());
   const terms = useQuery(tariffQueries.companyTerms());
   const { company } = useSession();
-  const failed = list.isError ? list : terms.isError ? terms : undefined;
   const today = localToday(company.zone);
   return (
     <div className="mx-auto flex max-w-6xl flex-col gap-4 px-4 py-5 sm:px-7">
@@ -31,23 +30,14 @@ export function TariffsPage() {
           <CompanyTermsSheet stored={terms.data} tariffs={list.data.items} today={today} />
           <PadsSheet tariffs={list.data.items} today={today} />
         </>
-      ) : failed !== undefined ? (
-        <div className="border border-ink bg-sheet">
-          <ErrorNotice
-            error={failed.error}
-            onRetry={() => {
-              void list.refetch();
-              void terms.refetch();
-            }}
-          />
-        </div>
       ) : (
-        <div aria-busy="true" className="border border-ink bg-sheet p-4">
-          <p role="status" className="sr-only">
-            {t('shell.loading')}
-          </p>
-          <div aria-hidden="true" className="ruled h-96" />
-        </div>
+        <PendingSheet
+          error={list.error ?? terms.error ?? undefined}
+          onRetry={() => {
+            void list.refetch();
+            void terms.refetch();
+          }}
+        />
       )}
       <CarbonSheet />
     </div>

@@ -2,6 +2,7 @@ import type { Control } from '#shared/domain/control/create-control.ts';
 import type { PumpContext } from '#shared/domain/control/pump-context.ts';
 import type { Facts } from '../facts.ts';
 import { type Json, restoreState, saveChanges } from '../plain-state.ts';
+import { isNearProgramEdge } from './is-near-program-edge.ts';
 import { latenessOf, type ProgramEdge, programEdges } from './program-edges.ts';
 import { type ProgramWatch, watchProgram } from './watch-program.ts';
 
@@ -148,10 +149,7 @@ function suspect(memory: Memory, { link, zoneOffsetMinutes }: Facts): void {
  *
  * @example isNearSuspectEdge(facts) // true 40 minutes after a start, the day after a cut of an hour
  */
-export function isNearSuspectEdge({ motorClock, control, now }: Facts): boolean {
-  if (motorClock.suspectMinutes === 0) return false;
-  const near = (motorClock.suspectMinutes + AGREE_MINUTES) * 60_000;
-  const { programEdgeBefore, programEdgeAfter } = control;
-  if (programEdgeBefore !== undefined && now - programEdgeBefore < near) return true;
-  return programEdgeAfter !== undefined && programEdgeAfter - now < near;
+export function isNearSuspectEdge(facts: Facts): boolean {
+  const { suspectMinutes } = facts.motorClock;
+  return suspectMinutes !== 0 && isNearProgramEdge(facts, suspectMinutes + AGREE_MINUTES);
 }

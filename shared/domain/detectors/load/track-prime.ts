@@ -84,7 +84,10 @@ export function unloadedShare(state: LoadState, share: number): number {
   return hasHadLoad(state) ? share * latelyShare(state) : share;
 }
 
-/** The share that counts as no load now: one that was seen without needs clearly more, unless it has had little lately. */
+/**
+ * The share below which there is no load now. A pump that was just seen without load must show clearly more to count as
+ * loaded; at a start that clear margin shrinks with the load it had before, so that a dirty filter is no failed prime.
+ */
 function limitShare(state: LoadState, unloadedBelow: number): number {
   if (state.primed !== 0) return unloadedBelow;
   const clearly = unloadedBelow * CLEARLY_ABOVE;
@@ -124,7 +127,7 @@ export function judgeLoad(state: LoadState, look: LoadLook): boolean {
   if (look.sure) {
     state.sure = true;
     state.bestShare = 0;
-  } else if (!state.sure) state.bestShare = Math.max(state.bestShare, Math.round(ratio * 100) / 100);
+  } else if (!state.sure) noteBest(state, ratio);
   if (state.primedOnce) return false;
   state.primedOnce = true;
   state.primeSeconds = Math.max(0, (state.loadedSince - state.startedAt) / 1000);
@@ -163,10 +166,13 @@ export function isDry(
   return watts < limitShare(state, unloadedBelow) * primedWatts;
 }
 
+function noteBest(state: LoadState, ratio: number): void {
+  state.bestShare = Math.max(state.bestShare, Math.round(ratio * 100) / 100);
+}
+
 /** Remembers what the fastest speed of a start without load looked like: nothing tells its cause better. */
 function noteTry(state: LoadState, { at, ratio }: LoadLook): void {
-  if (at - state.startedAt >= FIRST_WATER_MS)
-    state.bestShare = Math.max(state.bestShare, Math.round(ratio * 100) / 100);
+  if (at - state.startedAt >= FIRST_WATER_MS) noteBest(state, ratio);
   if (state.bestShare >= CAUGHT_SHARE && ratio < AIR_SHARE) state.caught = true;
   const isFastest = state.smoothRpm >= state.triedRpm * SAME_SPEED;
   if (state.raggedness > 0 && (isFastest || state.tryRaggedness === 0)) state.tryRaggedness = state.raggedness;

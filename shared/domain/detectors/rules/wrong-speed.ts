@@ -1,5 +1,6 @@
 import { fitsSpeed, speedTolerance } from '#shared/domain/control/speed-tolerance.ts';
 import { inputSpeed, listClosedInputs } from '#shared/domain/control/winning-input.ts';
+import { isNearProgramEdge } from '../clocks/is-near-program-edge.ts';
 import { isNearSuspectEdge } from '../clocks/motor-clock-tracker.ts';
 import { defineDetector, type Finding, type Spoken } from '../define-detector.ts';
 import type { RuleParameters } from '../detector-parameters.ts';
@@ -71,16 +72,12 @@ function isSameSituation({ situation }: State, facts: Facts): boolean {
  * there as well where only its edges tell of that clock, which may have moved since by less than anybody looks for.
  */
 function isNearUnknownEdge(facts: Facts, { programEdgeMinutes }: RuleParameters<'wrong-speed'>): boolean {
-  const { control, context, now } = facts;
+  const { control, context, motorClock } = facts;
   if (control.winningInput !== 0) return false;
   if (isNearSuspectEdge(facts)) return true;
-  const says = facts.motorClock.basis === 'says';
-  const isOfProgram = context.settings.program.some(({ rpm }) => fitsSpeed(control.rpm, rpm));
-  if (control.motorClockKnown && (says || !isOfProgram)) return false;
-  const near = programEdgeMinutes * 60_000;
-  const { programEdgeBefore, programEdgeAfter } = control;
-  if (programEdgeBefore !== undefined && now - programEdgeBefore < near) return true;
-  return programEdgeAfter !== undefined && programEdgeAfter - now < near;
+  if (!isNearProgramEdge(facts, programEdgeMinutes)) return false;
+  if (!control.motorClockKnown) return true;
+  return motorClock.basis !== 'says' && context.settings.program.some(({ rpm }) => fitsSpeed(control.rpm, rpm));
 }
 
 /** A pump that never says what commands it may be on manual or on a timed run while its inputs are open. */
