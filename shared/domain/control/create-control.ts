@@ -1,5 +1,4 @@
 import type { Reading } from '../readings/reading.ts';
-import { MINUTE_MS } from '../time/local-time.ts';
 import { type OffsetSpan, offsetSpanAt } from '../time/zone-offset.ts';
 import type { ControlAnswer } from './control-answer.ts';
 import {
@@ -31,8 +30,6 @@ export type Control = {
   push(reading: Reading): ControlAnswer;
   /** The answer after the last reading; undefined before the first. */
   answer(): ControlAnswer | undefined;
-  /** Whether the last reading lies within so many minutes of a program edge, by the motor's clock. */
-  nearProgramEdge(minutes: number): boolean;
   /** What was learnt of the motor's clock, minutes ahead of wall time; it counts where the motor says nothing itself. */
   setMotorClockOffset(minutes: number | undefined): void;
   /** The state as plain JSON, for `createControl` to go on from. */
@@ -89,12 +86,6 @@ export function createControl(context: PumpContext, saved?: unknown): Control {
   return {
     push,
     answer: () => (state.seen ? answer : undefined),
-    nearProgramEdge(minutes) {
-      const near = minutes * MINUTE_MS;
-      const { programEdgeBefore, programEdgeAfter } = answer;
-      const before = programEdgeBefore !== undefined && state.at - programEdgeBefore <= near;
-      return before || (programEdgeAfter !== undefined && programEdgeAfter - state.at <= near);
-    },
     setMotorClockOffset(minutes) {
       const learnt = minutes !== undefined && Number.isFinite(minutes) ? minutes : null;
       if (learnt === state.learntOffset) return;

@@ -1,8 +1,8 @@
 import type { Control } from '#shared/domain/control/create-control.ts';
+import { isNearProgramEdge } from '#shared/domain/control/is-near-program-edge.ts';
 import type { PumpContext } from '#shared/domain/control/pump-context.ts';
 import type { Facts } from '../facts.ts';
 import { type Json, restoreState, saveChanges } from '../plain-state.ts';
-import { isNearProgramEdge } from './is-near-program-edge.ts';
 import { latenessOf, type ProgramEdge, programEdges } from './program-edges.ts';
 import { type ProgramWatch, watchProgram } from './watch-program.ts';
 
@@ -149,7 +149,7 @@ function suspect(memory: Memory, { link, zoneOffsetMinutes }: Facts): void {
  *
  * @example isNearSuspectEdge(facts) // true 40 minutes after a start, the day after a cut of an hour
  */
-export function isNearSuspectEdge(facts: Facts): boolean {
-  const { suspectMinutes } = facts.motorClock;
-  return suspectMinutes !== 0 && isNearProgramEdge(facts, suspectMinutes + AGREE_MINUTES);
+export function isNearSuspectEdge({ motorClock, control }: Facts): boolean {
+  const { suspectMinutes } = motorClock;
+  return suspectMinutes !== 0 && isNearProgramEdge(control, suspectMinutes + AGREE_MINUTES);
 }

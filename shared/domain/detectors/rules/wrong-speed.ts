@@ -1,6 +1,6 @@
+import { isNearProgramEdge } from '#shared/domain/control/is-near-program-edge.ts';
 import { fitsSpeed, speedTolerance } from '#shared/domain/control/speed-tolerance.ts';
 import { inputSpeed, listClosedInputs } from '#shared/domain/control/winning-input.ts';
-import { isNearProgramEdge } from '../clocks/is-near-program-edge.ts';
 import { isNearSuspectEdge } from '../clocks/motor-clock-tracker.ts';
 import { defineDetector, type Finding, type Spoken } from '../define-detector.ts';
 import type { RuleParameters } from '../detector-parameters.ts';
@@ -75,7 +75,7 @@ function isNearUnknownEdge(facts: Facts, { programEdgeMinutes }: RuleParameters<
   const { control, context, motorClock } = facts;
   if (control.winningInput !== 0) return false;
   if (isNearSuspectEdge(facts)) return true;
-  if (!isNearProgramEdge(facts, programEdgeMinutes)) return false;
+  if (!isNearProgramEdge(control, programEdgeMinutes)) return false;
   if (!control.motorClockKnown) return true;
   return motorClock.basis !== 'says' && context.settings.program.some(({ rpm }) => fitsSpeed(control.rpm, rpm));
 }

@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import type { ControlAnswer } from '#shared/domain/control/control-answer.ts';
 import { type Control, createControl } from '#shared/domain/control/create-control.ts';
+import { isNearProgramEdge } from '#shared/domain/control/is-near-program-edge.ts';
 import type { Reading } from '#shared/domain/readings/reading.ts';
 import { entry, type Invented, inventedPump, reading, wall } from './invented-pump.ts';
 
@@ -281,8 +282,7 @@ describe('the motor’s own clock', () => {
       inventedPump({ settings: { program: [entry('06:00', '12:00', 1700), entry('12:00', '20:00', 1700)] } }),
     );
     const near = (text: string): boolean => {
-      control.push(reading(day(text), 1700));
-      return control.nearProgramEdge(10);
+      return isNearProgramEdge(control.push(reading(day(text), 1700)), 10);
     };
     const nears = ['05:49', '05:51', '06:09', '06:11', '12:00', '19:51', '20:10', '20:11'].map(near);
     expect(nears).toEqual([false, true, true, false, false, true, true, false]);
